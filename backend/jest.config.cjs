@@ -1,0 +1,29 @@
+/** swc turns the ESM sources into CommonJS, which is what jest runs without flags. */
+module.exports = {
+  rootDir: __dirname,
+  testEnvironment: 'node',
+  roots: ['<rootDir>/src', '<rootDir>/test'],
+  testRegex: '\\.spec\\.ts$',
+  transform: {
+    '^.+\\.(t|j|mj)s$': [
+      '@swc/jest',
+      {
+        sourceMaps: 'inline',
+        jsc: {
+          target: 'es2022',
+          parser: { syntax: 'typescript', decorators: true },
+          transform: { legacyDecorator: true, decoratorMetadata: true, useDefineForClassFields: false },
+        },
+        module: { type: 'commonjs' },
+      },
+    ],
+  },
+  moduleNameMapper: {
+    '^@mantlet/common$': '<rootDir>/../common/src/index.ts',
+    '^(\\.{1,2}/.*)\\.js$': '$1',
+  },
+  // these packages ship ESM only
+  transformIgnorePatterns: [
+    '/node_modules/(?!(@nestjs|file-type|@tokenizer|@borewit|strtok3|token-types|uint8array-extras|csv-parse)/)',
+  ],
+};

@@ -1,0 +1,21 @@
+import { z } from 'zod';
+
+/** What many contracts share: identifiers, trimmed text, and numbers that are really numbers. */
+export const idSchema = z.uuid();
+export const nameSchema = z.string().trim().min(1, 'is needed').max(200, 'is longer than 200 characters');
+export const codeSchema = z.string().trim().min(1, 'is needed').max(60, 'is longer than 60 characters');
+export const noteSchema = z.string().trim().max(2000, 'is longer than 2000 characters');
+export const positiveSchema = z.number({ error: 'must be a number' }).positive('must be above 0');
+export const nonNegativeSchema = z.number({ error: 'must be a number' }).min(0, 'must not be below 0');
+/** Money and rates travel as decimal strings, never as binary floats. */
+export const decimalSchema = z.string().regex(/^-?\d{1,12}(\.\d{1,6})?$/, 'must be an amount such as 12.50');
+export const dateSchema = z.string().regex(/^\d{4}-\d{2}-\d{2}$/, 'must be a date such as 2026-11-30');
+/** Sent back with every edit; a stale one is refused so that nobody overwrites another's change unseen. */
+export const versionSchema = z.number().int().min(1);
+
+export interface Page<T> {
+  items: T[];
+  total: number;
+  page: number;
+  pageSize: number;
+}

@@ -1,0 +1,100 @@
+import { z } from 'zod';
+import { codeSchema, idSchema, nameSchema, nonNegativeSchema, positiveSchema } from './primitives.js';
+
+const dim = positiveSchema.max(5000, 'is more than 5000 mm');
+const radius = nonNegativeSchema.max(500, 'is more than 500 mm');
+
+/** A cross-section by its dimensions in mm. Everything else (area, inertia, perimeter) is computed from these. */
+export const sectionShapeSchema = z.discriminatedUnion('kind', [
+  /** Rolled or welded doubly symmetric I or H; rootRadiusMm 0 for a plate girder (fillet welds are not counted). */
+  z.object({ kind: z.literal('i'), hMm: dim, bMm: dim, twMm: dim, tfMm: dim, rootRadiusMm: radius }),
+  /** Plate girder or asymmetric I with unequal flanges. */
+  z.object({ kind: z.literal('i-unequal'), hMm: dim, twMm: dim, topWidthMm: dim, topThicknessMm: dim, bottomWidthMm: dim, bottomThicknessMm: dim, rootRadiusMm: radius }),
+  /** flangeSlope is tan of the inner face (0 parallel flanges, 0.08 or 0.05 tapered); tfMm is at the standard's reference point. */
+  z.object({ kind: z.literal('channel'), hMm: dim, bMm: dim, twMm: dim, tfMm: dim, rootRadiusMm: radius, toeRadiusMm: radius, flangeSlope: z.number().min(0).max(0.2) }),
+  z.object({ kind: z.literal('tee'), hMm: dim, bMm: dim, twMm: dim, tfMm: dim, rootRadiusMm: radius }),
+  /** hMm is the longer leg. */
+  z.object({ kind: z.literal('angle'), hMm: dim, bMm: dim, tMm: dim, rootRadiusMm: radius, toeRadiusMm: radius }),
+  z.object({ kind: z.literal('rectangular-hollow'), hMm: dim, bMm: dim, tMm: dim, outerRadiusMm: radius, innerRadiusMm: radius }),
+  z.object({ kind: z.literal('circular-hollow'), dMm: dim, tMm: dim }),
+  /** Welded box: flanges b × tf, two webs tw with clearWidthMm between them. */
+  z.object({ kind: z.literal('box'), hMm: dim, bMm: dim, twMm: dim, tfMm: dim, clearWidthMm: dim }),
+  z.object({ kind: z.literal('flat'), hMm: dim, tMm: dim }),
+  z.object({ kind: z.literal('round'), dMm: dim }),
+]);
+export type SectionShape = z.infer<typeof sectionShapeSchema>;
+export type SectionKind = SectionShape['kind'];
+
+/** Groups that protection evidence distinguishes. */
+export const profileGroups = ['open', 'hollow-rectangular', 'hollow-circular', 'solid'] as const;
+export type ProfileGroup = (typeof profileGroups)[number];
+
+export const sectionFamilies = [
+  'IPE', 'HEAA', 'HEA', 'HEB', 'HEM', 'HEC', 'HE', 'HL', 'HD', 'HP', 'UB', 'UC', 'UBP', 'PFC', 'UPN', 'UPE',
+  'CHS', 'SHS', 'RHS', 'L', 'TUB', 'TUC', 'W', 'HSS', 'HSS-R', 'CUSTOM',
+] as const;
+export type SectionFamily = (typeof sectionFamilies)[number];
+
+/** y is the strong axis, z the weak one, as in EN 1993-1-1. For angles y and z are the axes parallel to the legs. */
+export interface SectionProperties {
+  areaMm2: number;
+  massKgPerM: number;
+  /** full outer perimeter: every steel surface */
+  perimeterMm: number;
+  iyMm4: number;
+  izMm4: number;
+  welYMm3: number;
+  welZMm3: number;
+  wplYMm3: number;
+  wplZMm3: number;
+  /** null where the shape's constant is not computed here */
+  itMm4: number | null;
+  iwMm6: number | null;
+  /** shear area for a shear force parallel to the web (EN 1993-1-1 6.2.6) */
+  shearAreaZMm2: number;
+}
+
+export const customSectionSchema = z.object({ designation: codeSchema, shape: sectionShapeSchema });
+export type CustomSection = z.infer<typeof customSectionSchema>;
+
+export interface SectionDto {
+  id: string;
+  projectId: string | null;
+  family: SectionFamily;
+  designation: string;
+  otherNames: string[];
+  standard: string;
+  shape: SectionShape;
+  properties: SectionProperties;
+}
+
+export const sectionQuerySchema = z.object({
+  search: nameSchema.optional(),
+  family: z.enum(sectionFamilies).optional(),
+  projectId: idSchema.optional(),
+  page: z.coerce.number().int().min(1).default(1),
+  pageSize: z.coerce.number().int().min(1).max(200).default(50),
+});
+export type SectionQuery = z.infer<typeof sectionQuerySchema>;
+
+/** One stretch of the outline, in mm, x to the right and y upwards, origin at the middle of the bounding box. */
+export interface OutlineSegment {
+  from: [number, number];
+  to: [number, number];
+  /** present for an arc; positive sweeps anticlockwise from `from` to `to` */
+  arc?: { centre: [number, number]; radiusMm: number; anticlockwise: boolean };
+  lengthMm: number;
+  /** receives fire */
+  heated: boolean;
+  /** carries coating or spray */
+  coated: boolean;
+}
+/** What the drawing shows and what the section factor sums: one source for both. */
+export interface SectionOutline {
+  /** closed loops: the outer one first, inner ones (hollow) after, never heated */
+  loops: OutlineSegment[][];
+  /** the enclosing box when protection is boxed, else null */
+  box: OutlineSegment[] | null;
+  widthMm: number;
+  heightMm: number;
+}

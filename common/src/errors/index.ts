@@ -1,0 +1,2 @@
+export { message, messages, sentence } from './message.js';
+export type { Message, MessageCode } from './message.js';
