@@ -1,0 +1,31 @@
+import { z } from 'zod';
+import { nameSchema } from './primitives.js';
+
+/** Roles a person may hold on a project; several at once. */
+export const roles = ['fire-engineer', 'structural-engineer', 'specifier', 'contractor', 'inspector', 'reader'] as const;
+export type Role = (typeof roles)[number];
+export const roleNames: Record<Role, string> = {
+  'fire-engineer': 'Fire engineer', 'structural-engineer': 'Structural engineer', specifier: 'Specifier',
+  contractor: 'Contractor', inspector: 'Inspector', reader: 'Reader',
+};
+/** The roles that see work in progress; the others see what is issued. */
+export const designRoles = ['fire-engineer', 'structural-engineer', 'specifier'] as const satisfies readonly Role[];
+
+export const emailSchema = z.string().trim().toLowerCase().max(254).pipe(z.email({ error: 'is not an e-mail address' }));
+export const passwordSchema = z.string().min(12, 'needs at least 12 characters').max(200);
+export const signInSchema = z.object({ email: emailSchema, password: z.string().min(1, 'is needed').max(200) });
+export type SignIn = z.infer<typeof signInSchema>;
+
+/** The first visitor of an empty installation makes the administrator's account. */
+export const setUpSchema = z.object({ name: nameSchema, email: emailSchema, password: passwordSchema });
+export type SetUp = z.infer<typeof setUpSchema>;
+export const userInputSchema = setUpSchema.extend({ administrator: z.boolean().default(false) });
+export type UserInput = z.infer<typeof userInputSchema>;
+export const userUpdateSchema = z.object({ name: nameSchema, administrator: z.boolean(), disabled: z.boolean() });
+export type UserUpdate = z.infer<typeof userUpdateSchema>;
+export const passwordChangeSchema = z.object({ current: z.string().min(1, 'is needed').max(200), next: passwordSchema });
+export type PasswordChange = z.infer<typeof passwordChangeSchema>;
+
+export interface MeDto { id: string; name: string; email: string; administrator: boolean }
+export interface SessionDto { user: MeDto | null; /** nobody has an account yet */ needsSetUp: boolean }
+export interface UserDto extends MeDto { disabled: boolean; lastSignedInAt: string | null }

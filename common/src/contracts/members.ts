@@ -1,0 +1,118 @@
+import { z } from 'zod';
+import type { AuditEntryDto } from './projects.js';
+import type { SectionDto, SectionOutline } from './sections.js';
+import type { CriticalTemperatureBasis, CriticalTemperatureWay, MemberType } from './actions.js';
+import type { MemberResultDto, VerdictKind, WorkingStepDto } from './assessment.js';
+import { verdictKinds } from './assessment.js';
+import { criticalTemperatureBasisSchema, memberTypes, steelGrades } from './actions.js';
+import { exposureSchema, protectionForms } from './fire.js';
+import { codeSchema, idSchema, nonNegativeSchema, noteSchema, positiveSchema, versionSchema } from './primitives.js';
+
+/** What the specifier decides of a member. */
+export const memberInputSchema = z.object({
+  zoneId: idSchema,
+  mark: codeSchema,
+  memberType: z.enum(memberTypes),
+  sectionId: idSchema,
+  grade: z.enum(steelGrades),
+  lengthMm: positiveSchema.max(100_000, 'is more than 100 m'),
+  quantity: z.number({ error: 'must be a whole number' }).int('must be a whole number').min(1, 'must be at least 1').max(10_000),
+  exposure: exposureSchema,
+  protectionForm: z.enum(protectionForms),
+  /** connections of secondary, unprotected steel onto this member, for coat-back */
+  coatBackConnections: z.number().int().min(0).max(1000).default(0),
+  coatBackGirthMm: nonNegativeSchema.max(10_000).default(0),
+  /** openings and connection faces not to be protected, whole member, m² */
+  deductionM2: nonNegativeSchema.max(10_000).default(0),
+  onSite: z.boolean().default(true),
+  note: noteSchema.default(''),
+});
+export type MemberInput = z.infer<typeof memberInputSchema>;
+export const memberUpdateSchema = memberInputSchema.extend({ version: versionSchema });
+export type MemberUpdate = z.infer<typeof memberUpdateSchema>;
+
+/** What the structural engineer decides of a member. */
+export const memberStructuralSchema = z.object({ basis: criticalTemperatureBasisSchema, version: versionSchema });
+export type MemberStructural = z.infer<typeof memberStructuralSchema>;
+
+export const bulkMemberSchema = z.object({
+  memberIds: z.array(idSchema).min(1).max(5000),
+  set: memberInputSchema.pick({ zoneId: true, memberType: true, grade: true, exposure: true, protectionForm: true, sectionId: true, onSite: true }).partial()
+    .refine((s) => Object.keys(s).length > 0, 'choose at least one field to set'),
+});
+export type BulkMember = z.infer<typeof bulkMemberSchema>;
+export const memberIdsSchema = z.object({ memberIds: z.array(idSchema).min(1).max(5000) });
+
+/** A signed acceptance, by the fire engineer; it holds only while the accepted value stands. */
+export const acceptanceKinds = ['assumed', 'high-temperature', 'bare'] as const;
+export const acceptanceSchema = z.object({
+  memberIds: z.array(idSchema).min(1).max(5000),
+  kind: z.enum(acceptanceKinds),
+  reason: z.string().trim().min(3, 'say why').max(1000),
+});
+export type Acceptance = z.infer<typeof acceptanceSchema>;
+export interface AcceptanceDto { kind: (typeof acceptanceKinds)[number]; valueC: number | null; reason: string; by: string; at: string; stillHolds: boolean }
+
+export const memberSortKeys = ['mark', 'level', 'zone', 'type', 'section', 'sectionFactor', 'criticalTemperature', 'thickness', 'verdict', 'quantity', 'length'] as const;
+const list = <T extends z.ZodType>(item: T) => z.preprocess((v) => (typeof v === 'string' ? v.split(',').filter(Boolean) : v), z.array(item)).optional();
+export const memberQuerySchema = z.object({
+  search: z.string().trim().max(100).optional(),
+  zoneIds: list(idSchema),
+  levelIds: list(idSchema),
+  memberTypes: list(z.enum(memberTypes)),
+  verdicts: list(z.enum(verdictKinds)),
+  productIds: list(idSchema),
+  memberIds: list(idSchema),
+  /** only members with something open */
+  open: z.enum(['true', 'false']).optional(),
+  sort: z.enum(memberSortKeys).default('mark'),
+  direction: z.enum(['asc', 'desc']).default('asc'),
+  page: z.coerce.number().int().min(1).default(1),
+  pageSize: z.coerce.number().int().min(1).max(500).default(100),
+});
+export type MemberQuery = z.infer<typeof memberQuerySchema>;
+
+export interface MemberRowDto {
+  id: string; mark: string; zoneId: string; zoneCode: string; levelCode: string; memberType: MemberType;
+  sectionId: string; section: string; grade: string; lengthMm: number; quantity: number;
+  exposure: z.infer<typeof exposureSchema>['arrangement']; protectionForm: (typeof protectionForms)[number];
+  way: CriticalTemperatureWay; verdict: VerdictKind | null;
+  sectionFactorPerM: number | null; criticalTemperatureC: number | null; assumed: boolean;
+  requiredThickness: number | null; appliedThickness: number | null; thicknessUnit: 'µm' | 'mm' | null;
+  productName: string | null; areaM2: number | null; open: boolean;
+  /** the result as a sentence */
+  sentence: string;
+  version: number;
+}
+export interface MemberDto extends MemberInput {
+  id: string; version: number;
+  basis: CriticalTemperatureBasis; basisSetBy: string | null; basisSetAt: string | null;
+  acceptances: AcceptanceDto[];
+}
+export interface ChartSeries { name: string; points: [number, number][] }
+export interface MemberChartsDto {
+  /** resistance against steel temperature, one series a limit state; effect in the same unit */
+  resistance: { limitState: string; unit: 'kN' | 'kNm'; effect: number; points: [number, number][] }[];
+  /** °C against minutes */
+  fire: [number, number][];
+  bare: [number, number][];
+  /** null where the evidence holds no thermal properties: tables and regressions say thickness, not temperature */
+  protected: [number, number][] | null;
+  periodMin: number;
+}
+export interface MemberSheetDto {
+  member: MemberDto;
+  section: SectionDto;
+  zone: { id: string; code: string; name: string; periodMin: number; curve: string };
+  level: { id: string; code: string; name: string };
+  productName: string | null;
+  result: MemberResultDto | null;
+  sentence: string;
+  areaM2: number | null;
+  outline: SectionOutline | null;
+  working: WorkingStepDto[];
+  charts: MemberChartsDto | null;
+  history: AuditEntryDto[];
+  previousId: string | null;
+  nextId: string | null;
+}

@@ -1,0 +1,24 @@
+import type { ProductKind } from './products.js';
+import type { MemberType } from './actions.js';
+
+/** What to apply, where: from the issued revision only. */
+export interface SiteItemDto {
+  mark: string; section: string; memberType: MemberType; quantity: number; lengthMm: number; faces: string;
+  productName: string; kind: ProductKind; thickness: string; wetThickness: string | null; coats: number | null; layers: string | null;
+  areaM2: string; litres: string | null;
+}
+export interface SiteMaterialDto {
+  productName: string; kind: ProductKind; areaM2: string;
+  litres: string | null; containers: number | null; kg: string | null; sheets: number | null; sheetSize: string | null; wastePercent: string | null;
+  volumeM3: string | null; bags: number | null;
+  /** null unless prices are given to the contractor */
+  money: string | null;
+}
+export interface SiteZoneDto { code: string; name: string; periodMin: number; items: SiteItemDto[]; bare: { mark: string; section: string; quantity: number }[]; materials: SiteMaterialDto[] }
+export interface SiteLevelDto { code: string; name: string; elevationM: number; zones: SiteZoneDto[]; materials: SiteMaterialDto[] }
+export interface SiteDto {
+  revision: { id: string; code: string; issuedAt: string; pdfSha256: string; pdfAvailable: boolean } | null;
+  levels: SiteLevelDto[];
+  /** bought once for the whole job: containers and sheets rounded up once per product */
+  purchase: SiteMaterialDto[];
+}
