@@ -1,0 +1,84 @@
+/** The Mantlet server as a child of a command, on a database that is migrated and, for the demo, filled. */
+import { existsSync, mkdirSync, readFileSync } from 'node:fs';
+import { Problem, isClosing, say } from './house.mjs';
+import { at, built } from './paths.mjs';
+import { ensureDatabase, remarkOn, setRemark } from './postgres.mjs';
+import { answers } from './ports.mjs';
+import { node, startProcess } from './processes.mjs';
+
+const demoMark = 'Mantlet: demo scenario loaded';
+
+/**
+ * Makes the database if need be, migrates it and loads the demo scenario the first time.
+ * @param {Awaited<ReturnType<import('./postgres.mjs').startServer>>} server
+ * @param {{ name: string, demo: boolean, stateDir: string, env?: NodeJS.ProcessEnv }} database
+ * @returns {Promise<string>} its connection URL
+ */
+export async function prepareDatabase(server, { name, demo, stateDir, env: base = process.env }) {
+  mkdirSync(stateDir, { recursive: true, mode: 0o700 });
+  const isNew = await ensureDatabase(server, name);
+  const url = server.url(name);
+  const env = { ...base, MANTLET_DATABASE_URL: url, MANTLET_STATE_DIR: stateDir };
+  if (isNew) say(`Setting up the database ${name} …`);
+  await node('Migrating the database', [built.migrate], { env });
+  if (demo && (await remarkOn(server, name)) !== demoMark) {
+    say('Loading the demo scenario …');
+    await node('Loading the demo scenario', [built.seedDemo], { env });
+    await setRemark(server, name, demoMark);
+  }
+  return url;
+}
+
+/**
+ * @param {{ databaseUrl: string, host: string, port: number, sessionSecret: string, clientDir: string, stateDir: string, env?: NodeJS.ProcessEnv }} wish
+ * @returns {NodeJS.ProcessEnv} what backend/dist/main.js reads
+ */
+export const serverEnvironment = ({ databaseUrl, host, port, sessionSecret, clientDir, stateDir, env = process.env }) => ({
+  ...env,
+  MANTLET_DATABASE_URL: databaseUrl,
+  HOST: host,
+  PORT: String(port),
+  MANTLET_SESSION_SECRET: sessionSecret,
+  MANTLET_CLIENT_DIR: clientDir,
+  MANTLET_STATE_DIR: stateDir,
+});
+
+/** Waits until the port answers. @throws {Problem} when the process ends first or a minute passes */
+export async function untilAnswering(running, port, what, host = '127.0.0.1') {
+  const reachable = host === '0.0.0.0' || host === '::' ? '127.0.0.1' : host;
+  let exit = null;
+  running.ended.then((code) => (exit = code), (error) => (exit = error.message));
+  for (let waited = 0; waited < 60_000; waited += 100) {
+    if (exit !== null) throw new Problem(`${what} ended while starting (exit code ${exit}); the lines above say why.`);
+    if (await answers(port, reachable)) return;
+    await new Promise((resolve) => setTimeout(resolve, 100));
+  }
+  throw new Problem(`${what} did not answer on port ${port} within a minute.`);
+}
+
+/** Starts the built server and waits for it. @returns {Promise<ReturnType<typeof startProcess>>} */
+export async function startApplication(wish) {
+  mkdirSync(wish.stateDir, { recursive: true, mode: 0o700 });
+  const running = startProcess(process.execPath, [built.server], { name: 'the server', env: serverEnvironment(wish) });
+  await untilAnswering(running, wish.port, 'The server', wish.host);
+  return running;
+}
+
+/** Fails the command when a process that should stay ends. */
+export async function mustStay(running, what) {
+  const code = await running.ended;
+  if (!isClosing()) throw new Problem(`${what} ended by itself (exit code ${code}); the lines above say why.`);
+}
+
+/** @returns {{ name: string, email: string, password: string, role: string }[]} */
+export function demoAccounts() {
+  const file = at('seeds/demo/accounts.json');
+  return existsSync(file) ? JSON.parse(readFileSync(file, 'utf8')) : [];
+}
+
+/** @param {ReturnType<typeof demoAccounts>} accounts @returns {string[]} a line each, in columns */
+export function accountLines(accounts) {
+  const width = (key) => Math.max(...accounts.map((one) => one[key].length));
+  const [name, email, password] = ['name', 'email', 'password'].map(width);
+  return accounts.map((one) => `  ${one.email.padEnd(email)}  ${one.password.padEnd(password)}  ${one.name.padEnd(name)}  ${one.role}`);
+}
