@@ -12,4 +12,6 @@ export * from './contracts/members.js';
 export * from './contracts/zones.js';
 export * from './contracts/projects.js';
 export * from './contracts/accounts.js';
+export * from './contracts/quantities.js';
 export * from './errors/index.js';
+export * from './units/index.js';

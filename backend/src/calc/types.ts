@@ -72,9 +72,17 @@ export interface ThicknessRequest {
   group: ProfileGroup;
   orientation: Orientation;
   periodMin: number;
-  curve: NominalCurve;
+  curve: FireCurve;
   criticalTemperatureC: number;
   sectionFactorPerM: number;
+}
+
+/** A product's assessed data as the calculation reads them. */
+export interface AssessedProduct {
+  kind: ProductKind;
+  evidence: Evidence;
+  /** nominal curves the assessment covers */
+  curves: readonly NominalCurve[];
 }
 
 export interface RequiredThickness {

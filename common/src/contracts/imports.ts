@@ -15,7 +15,7 @@ export const importFieldNames: Record<ImportField, string> = {
   quantity: 'Number off', exposure: 'Exposure', protectionForm: 'Protection form', note: 'Note',
   criticalTemperature: 'Critical temperature', utilisation: 'Utilisation in fire', reference: 'Reference',
 };
-export const lengthUnits = ['mm', 'm', 'cm', 'ft', 'ft-in', 'in'] as const;
+export const importLengthUnits = ['mm', 'm', 'cm', 'ft', 'ft-in', 'in'] as const;
 
 export const importMappingSchema = z.object({
   sheet: z.string().max(200),
@@ -23,7 +23,7 @@ export const importMappingSchema = z.object({
   headerRow: z.number().int().min(1).max(1000),
   /** field → 0-based column; a field left out is not read */
   columns: z.partialRecord(z.enum(importFields), z.number().int().min(0).max(1000)),
-  lengthUnit: z.enum(lengthUnits).default('mm'),
+  lengthUnit: z.enum(importLengthUnits).default('mm'),
   temperatureUnit: z.enum(['C', 'F']).default('C'),
   /** used where the file has no column or an empty cell */
   defaults: z.object({

@@ -65,6 +65,8 @@ export const thermalPropertiesSchema = z.object({
   stockThicknessesMm: z.array(positiveSchema.max(500)).max(40).default([]),
   maxLayers: z.number().int().min(1).max(4).default(1),
   thicknessStepMm: positiveSchema.max(50).default(1),
+  /** the assessment states that the properties hold in natural fires, cooling included */
+  coversNaturalFire: z.boolean().optional(),
 });
 export type ThermalProperties = z.infer<typeof thermalPropertiesSchema>;
 

@@ -1,0 +1,17 @@
+import { Module } from '@nestjs/common';
+import type { DynamicModule } from '@nestjs/common';
+import { TypeOrmModule } from '@nestjs/typeorm';
+import { dataSourceOptions } from './database/data-source-options.js';
+import { AuditModule } from './features/audit/audit.module.js';
+import { AuthModule } from './features/auth/auth.module.js';
+import { UsersModule } from './features/users/users.module.js';
+
+/** The features of the server, one module each. */
+export const featureModules = [AuditModule, UsersModule, AuthModule];
+
+@Module({})
+export class AppModule {
+  static forDatabase(url: string): DynamicModule {
+    return { module: AppModule, imports: [TypeOrmModule.forRoot(dataSourceOptions(url)), ...featureModules] };
+  }
+}

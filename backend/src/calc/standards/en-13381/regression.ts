@@ -1,0 +1,120 @@
+import { formatNumber, message } from '@mantlet/common';
+import type { Message, ProductKind, RegressionFit } from '@mantlet/common';
+import { defineFormula } from '../../formula.js';
+import type { Determined, RequiredThickness, ThicknessRequest } from '../../types.js';
+import { groupNames } from './coverage.js';
+
+export interface RegressionInput {
+  a0: number; a1: number; a2: number; a3: number; a4: number; a5: number; a6: number; a7: number;
+  thickness: number;
+  temperatureC: number;
+  sectionFactorPerM: number;
+}
+
+const coefficient = (n: number) => ({ symbol: `a_${n}`, meaning: 'regression coefficient of the assessment', unit: '' });
+const coefficientSymbols = {
+  a0: coefficient(0), a1: coefficient(1), a2: coefficient(2), a3: coefficient(3), a4: coefficient(4), a5: coefficient(5), a6: coefficient(6), a7: coefficient(7),
+};
+const source = { standard: 'EN 13381-8', clause: 'annex on numerical regression analysis', note: 'clause letter differs between editions', memory: true };
+
+/** Time for protected steel to reach a design temperature. */
+export const regressionTime = defineFormula<RegressionInput>({
+  label: 'Time to the design temperature by multiple linear regression',
+  source,
+  expression: 'a_0 + a_1·d_p + a_2·d_p/(A_m/V) + a_3·θ_a + a_4·d_p·θ_a + a_5·d_p·θ_a/(A_m/V) + a_6·θ_a/(A_m/V) + a_7/(A_m/V)',
+  result: { symbol: 't', meaning: 'time to the design temperature', unit: 'min' },
+  symbols: {
+    ...coefficientSymbols,
+    thickness: { symbol: 'd_p', meaning: 'thickness of protection', unit: 'unit of the evidence' },
+    temperatureC: { symbol: 'θ_a', meaning: 'design temperature of the steel', unit: '°C' },
+    sectionFactorPerM: { symbol: 'A_m/V', meaning: 'section factor', unit: '1/m' },
+  },
+  evaluate: (i) => {
+    const s = i.sectionFactorPerM;
+    return i.a0 + i.a3 * i.temperatureC + (i.a6 * i.temperatureC + i.a7) / s
+      + i.thickness * (i.a1 + i.a2 / s + i.a4 * i.temperatureC + (i.a5 * i.temperatureC) / s);
+  },
+});
+
+/** The same equation solved for the thickness; it is linear in d_p. */
+export const regressionThickness = defineFormula<Omit<RegressionInput, 'thickness'> & { periodMin: number }>({
+  label: 'Thickness from the regression, solved for d_p',
+  source,
+  expression: '(t − a_0 − a_3·θ_a − a_6·θ_a/(A_m/V) − a_7/(A_m/V))/(a_1 + a_2/(A_m/V) + a_4·θ_a + a_5·θ_a/(A_m/V))',
+  result: { symbol: 'd_p', meaning: 'thickness of protection', unit: 'unit of the evidence' },
+  symbols: {
+    ...coefficientSymbols,
+    temperatureC: regressionTime.symbols.temperatureC,
+    sectionFactorPerM: regressionTime.symbols.sectionFactorPerM,
+    periodMin: { symbol: 't', meaning: 'required period', unit: 'min' },
+  },
+  evaluate: (i) => {
+    const s = i.sectionFactorPerM;
+    return (i.periodMin - i.a0 - i.a3 * i.temperatureC - (i.a6 * i.temperatureC + i.a7) / s)
+      / (i.a1 + i.a2 / s + i.a4 * i.temperatureC + (i.a5 * i.temperatureC) / s);
+  },
+});
+
+export function coefficientsOf(fit: RegressionFit): Omit<RegressionInput, 'thickness' | 'temperatureC' | 'sectionFactorPerM'> {
+  const [a0 = 0, a1 = 0, a2 = 0, a3 = 0, a4 = 0, a5 = 0, a6 = 0, a7 = 0] = fit.coefficients;
+  return { a0, a1, a2, a3, a4, a5, a6, a7 };
+}
+
+/** Minutes that one more unit of thickness gains; must be above zero for a thickness to follow from a period. */
+export function gainPerThickness(fit: RegressionFit, sectionFactorPerM: number, temperatureC: number): number {
+  const { a1, a2, a4, a5 } = coefficientsOf(fit);
+  return a1 + a2 / sectionFactorPerM + a4 * temperatureC + (a5 * temperatureC) / sectionFactorPerM;
+}
+
+export interface RegressionPlace {
+  fit: RegressionFit;
+  sectionFactorPerM: number;
+  temperatureC: number;
+}
+
+/** The fit for a request and the values it is read with: below the tested A/V the least tested, above the tested temperature the greatest. */
+export function placeInFits(fits: readonly RegressionFit[], request: Omit<ThicknessRequest, 'periodMin' | 'curve'>): { ok: true; value: RegressionPlace } | { ok: false; reason: Message } {
+  const { group, orientation, sectionFactorPerM, criticalTemperatureC } = request;
+  const fit = fits.find((f) => f.shape === group && f.orientation === orientation);
+  if (!fit) return { ok: false, reason: message('product.outside-shape', { group: groupNames[group], orientation }) };
+  if (sectionFactorPerM > fit.maxSectionFactorPerM) {
+    return { ok: false, reason: message('product.outside-section-factor', { sectionFactorPerM, limitPerM: fit.maxSectionFactorPerM }) };
+  }
+  if (criticalTemperatureC < fit.minTemperatureC) {
+    return { ok: false, reason: message('product.outside-temperature', { temperatureC: criticalTemperatureC, limitC: fit.minTemperatureC }) };
+  }
+  const place = {
+    fit,
+    sectionFactorPerM: Math.max(sectionFactorPerM, fit.minSectionFactorPerM),
+    temperatureC: Math.min(criticalTemperatureC, fit.maxTemperatureC),
+  };
+  if (!(gainPerThickness(fit, place.sectionFactorPerM, place.temperatureC) > 0)) {
+    return { ok: false, reason: message('product.no-solution', { sectionFactorPerM: place.sectionFactorPerM, temperatureC: place.temperatureC }) };
+  }
+  return { ok: true, value: place };
+}
+
+export function fitInWords(place: RegressionPlace): string {
+  const { fit } = place;
+  return `${formatNumber(place.temperatureC)} °C, A/V ${formatNumber(place.sectionFactorPerM)}, ${groupNames[fit.shape]} section, ${fit.orientation}`;
+}
+
+/** Required thickness from the regression: never below the least tested, refused above the greatest. */
+export function thicknessFromFits(fits: readonly RegressionFit[], kind: ProductKind, request: ThicknessRequest): Determined<RequiredThickness> {
+  const found = placeInFits(fits, request);
+  if (!found.ok) return found;
+  const { fit, sectionFactorPerM, temperatureC } = found.value;
+  if (request.periodMin > fit.maxPeriodMin) {
+    return { ok: false, reason: message('product.outside-period', { periodMin: request.periodMin, limitMin: fit.maxPeriodMin }) };
+  }
+  const periodMin = Math.max(request.periodMin, fit.minPeriodMin);
+  const solved = regressionThickness.evaluate({ ...coefficientsOf(fit), periodMin, temperatureC, sectionFactorPerM });
+  if (!Number.isFinite(solved)) return { ok: false, reason: message('product.no-solution', { sectionFactorPerM, temperatureC }) };
+  const least = Math.max(solved, fit.minThickness);
+  const unit = kind === 'coating' ? 'µm' : 'mm';
+  if (least > fit.maxThickness + 1e-9) return { ok: false, reason: message('product.outside-thickness', { greatest: fit.maxThickness, unit }) };
+  // rounding up may not leave the tested range
+  const thickness = Math.min(Math.ceil(least - 1e-9), fit.maxThickness);
+  const reading = `Regression: R ${periodMin}, ${fitInWords(found.value)}${solved < fit.minThickness ? ', least tested thickness' : ''}`;
+  return { ok: true, value: { thickness, layers: kind === 'board' ? [thickness] : null, reading } };
+}

@@ -1,0 +1,21 @@
+import { HttpStatus, Injectable } from '@nestjs/common';
+import type { ExecutionContext } from '@nestjs/common';
+import { message } from '@mantlet/common';
+import { AuthGuard } from '@nestjs/passport';
+import type { Request } from 'express';
+import { Refusal } from '../../shared/refusal.js';
+
+/** Checks e-mail and password, then signs in; passport gives the session a new identifier as it does. */
+@Injectable()
+export class LocalAuthGuard extends AuthGuard('local') {
+  override async canActivate(context: ExecutionContext): Promise<boolean> {
+    await super.canActivate(context);
+    await super.logIn(context.switchToHttp().getRequest<Request>());
+    return true;
+  }
+
+  override handleRequest<T>(_error: unknown, user: T): T {
+    if (!user) throw new Refusal(HttpStatus.UNAUTHORIZED, message('account.sign-in-failed', {}));
+    return user;
+  }
+}

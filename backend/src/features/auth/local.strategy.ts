@@ -1,0 +1,18 @@
+import { Injectable } from '@nestjs/common';
+import { signInSchema } from '@mantlet/common';
+import { PassportStrategy } from '@nestjs/passport';
+import { Strategy } from 'passport-local';
+import type { Actor } from '../../shared/access.js';
+import { UsersService } from '../users/users.service.js';
+
+@Injectable()
+export class LocalStrategy extends PassportStrategy(Strategy) {
+  constructor(private readonly users: UsersService) {
+    super({ usernameField: 'email', passwordField: 'password' });
+  }
+
+  async validate(email: string, password: string): Promise<Actor | false> {
+    const input = signInSchema.safeParse({ email, password });
+    return input.success ? ((await this.users.authenticate(input.data.email, input.data.password)) ?? false) : false;
+  }
+}

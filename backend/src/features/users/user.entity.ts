@@ -1,0 +1,16 @@
+import { Column, CreateDateColumn, Entity, PrimaryGeneratedColumn } from 'typeorm';
+import { nullableTimestamp } from '../../database/columns.js';
+
+@Entity('users')
+export class User {
+  @PrimaryGeneratedColumn('uuid') id!: string;
+  @Column('text') name!: string;
+  /** lower case */
+  @Column('text', { unique: true }) email!: string;
+  /** argon2id */
+  @Column('text', { select: false }) passwordHash!: string;
+  @Column('boolean', { default: false }) administrator!: boolean;
+  @Column('boolean', { default: false }) disabled!: boolean;
+  @Column(nullableTimestamp) lastSignedInAt!: Date | null;
+  @CreateDateColumn({ type: 'timestamptz' }) createdAt!: Date;
+}

@@ -1,0 +1,30 @@
+import { Body, Controller, Get, Param, Patch, Post } from '@nestjs/common';
+import { userInputSchema, userUpdateSchema } from '@mantlet/common';
+import type { UserDto, UserInput, UserUpdate } from '@mantlet/common';
+import { AdministratorOnly, CurrentActor } from '../../shared/access.js';
+import type { Actor } from '../../shared/access.js';
+import { idParam } from '../../shared/validation.js';
+import { UsersService } from './users.service.js';
+
+@Controller('users')
+export class UsersController {
+  constructor(private readonly users: UsersService) {}
+
+  @Get()
+  @AdministratorOnly()
+  list(): Promise<UserDto[]> {
+    return this.users.list();
+  }
+
+  @Post()
+  @AdministratorOnly()
+  create(@Body({ schema: userInputSchema }) input: UserInput, @CurrentActor() actor: Actor): Promise<UserDto> {
+    return this.users.create(input, actor);
+  }
+
+  @Patch(':userId')
+  @AdministratorOnly()
+  update(@Param('userId', idParam) userId: string, @Body({ schema: userUpdateSchema }) input: UserUpdate, @CurrentActor() actor: Actor): Promise<UserDto> {
+    return this.users.update(userId, input, actor);
+  }
+}

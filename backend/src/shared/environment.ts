@@ -1,0 +1,15 @@
+/** Settings come from the environment; the start command sets them. None has a secret default. */
+function required(name: string): string {
+  const value = process.env[name];
+  if (!value) throw new Error(`${name} is not set. Use npm start, which sets it, or see DEVELOPERS.md.`);
+  return value;
+}
+
+export const databaseUrl = (): string => required('MANTLET_DATABASE_URL');
+export const sessionSecret = (): string => required('MANTLET_SESSION_SECRET');
+export const port = (): number => Number(process.env['PORT'] ?? 4700);
+export const host = (): string => process.env['HOST'] ?? '127.0.0.1';
+/** where the built client lies; unset in tests of the API alone */
+export const clientDir = (): string | undefined => process.env['MANTLET_CLIENT_DIR'];
+/** behind TLS the cookie must be secure */
+export const secureCookies = (): boolean => process.env['MANTLET_SECURE_COOKIES'] === '1';

@@ -1,0 +1,87 @@
+import 'reflect-metadata';
+import type { Role } from '@mantlet/common';
+import { defaultProjectSettings, roles } from '@mantlet/common';
+import type { NestExpressApplication } from '@nestjs/platform-express';
+import request from 'supertest';
+import { DataSource } from 'typeorm';
+import { createApp } from '../../src/create-app.js';
+import { dataSourceOptions } from '../../src/database/data-source-options.js';
+import { seedCatalogue } from '../../src/database/seed-catalogue.js';
+import { Membership } from '../../src/features/memberships/membership.entity.js';
+import { Project } from '../../src/features/projects/project.entity.js';
+import { PasswordService } from '../../src/features/users/password.service.js';
+import { User } from '../../src/features/users/user.entity.js';
+import { createTestDatabase } from './database.js';
+
+export type Agent = ReturnType<typeof request.agent>;
+const PASSWORD = 'a long test password';
+
+/** The whole server on a database of its own, spoken to over HTTP as each person would. */
+export class TestApp {
+  private counter = 0;
+  private passwordHash: string | null = null;
+
+  private constructor(
+    readonly app: NestExpressApplication,
+    readonly dataSource: DataSource,
+    private readonly dropDatabase: () => Promise<void>,
+  ) {}
+
+  static async start(options: { catalogue?: boolean } = {}): Promise<TestApp> {
+    const database = await createTestDatabase();
+    const migrating = await new DataSource(dataSourceOptions(database.url)).initialize();
+    await migrating.runMigrations();
+    if (options.catalogue) await seedCatalogue(migrating);
+    await migrating.destroy();
+    const app = await createApp({ databaseUrl: database.url, sessionSecret: 'test secret', quiet: true });
+    await app.init();
+    return new TestApp(app, app.get(DataSource), database.drop);
+  }
+
+  async stop(): Promise<void> {
+    await this.app.close();
+    await this.dropDatabase();
+  }
+
+  anonymous(): Agent {
+    return request.agent(this.app.getHttpServer());
+  }
+
+  async makeUser(name: string, options: { administrator?: boolean } = {}): Promise<User> {
+    this.passwordHash ??= await this.app.get(PasswordService).hash(PASSWORD);
+    this.counter += 1;
+    const email = `${name.toLowerCase().replace(/[^a-z]+/g, '.')}.${this.counter}@example.test`;
+    return this.dataSource.manager.save(
+      this.dataSource.manager.create(User, { name, email, passwordHash: this.passwordHash, administrator: options.administrator ?? false }),
+    );
+  }
+
+  async signIn(user: User): Promise<Agent> {
+    const agent = this.anonymous();
+    await agent.post('/api/session').send({ email: user.email, password: PASSWORD }).expect(200);
+    return agent;
+  }
+
+  async makeProject(settings = defaultProjectSettings): Promise<Project> {
+    this.counter += 1;
+    return this.dataSource.manager.save(
+      this.dataSource.manager.create(Project, { number: `T-${this.counter}`, name: `Test project ${this.counter}`, place: 'Nowhere', settings }),
+    );
+  }
+
+  async join(project: Project, user: User, ...held: Role[]): Promise<void> {
+    await this.dataSource.manager.save(this.dataSource.manager.create(Membership, { projectId: project.id, userId: user.id, roles: held }));
+  }
+
+  /** One signed-in person for each role on the project, by role. */
+  async team(project: Project): Promise<Record<Role, Agent>> {
+    const entries = await Promise.all(
+      roles.map(async (role): Promise<[Role, Agent]> => {
+        const user = await this.makeUser(`The ${role}`);
+        await this.join(project, user, role);
+        return [role, await this.signIn(user)];
+      }),
+    );
+    return Object.fromEntries(entries) as Record<Role, Agent>;
+  }
+}
