@@ -1,0 +1,74 @@
+import { App, Button, Dropdown, Radio } from 'antd';
+import { useState } from 'react';
+import { useNavigate } from 'react-router-dom';
+import type { MeDto } from '@mantlet/common';
+import { useSignOut } from '../features/session/api/session.js';
+import { PasswordDrawer } from '../features/session/components/password-drawer.js';
+import { themeChoices, useTheme } from '../ui/theme/theme-provider.js';
+import type { ThemeChoice } from '../ui/theme/theme-provider.js';
+
+const themeNames: Record<ThemeChoice, string> = { system: 'As the system', light: 'Light', dark: 'Dark' };
+
+function useLeave() {
+  const signOut = useSignOut();
+  const navigate = useNavigate();
+  const { message } = App.useApp();
+  return () => signOut.mutate(undefined, {
+    onSuccess: () => { void navigate('/sign-in'); },
+    onError: (error) => { void message.error(error.message); },
+  });
+}
+
+/** At the right of the strip: who is signed in, and what they may set for themselves. */
+export function AccountMenu({ user, roles }: { user: MeDto | null; roles: string }) {
+  const { choice, choose } = useTheme();
+  const leave = useLeave();
+  const [password, setPassword] = useState(false);
+  if (!user) return null;
+  return (
+    <>
+      <Dropdown
+        trigger={['click']} placement="bottomRight"
+        menu={{
+          selectable: true, selectedKeys: [choice],
+          items: [
+            { type: 'group', label: user.email, children: [{ key: 'password', label: 'Change password' }] },
+            { type: 'group', label: 'Ground', children: themeChoices.map((c) => ({ key: c, label: `${themeNames[c]}${c === choice ? ' (chosen)' : ''}` })) },
+            { type: 'divider' },
+            { key: 'leave', label: 'Sign out' },
+          ],
+          onClick: ({ key }) => {
+            if (key === 'leave') leave();
+            else if (key === 'password') setPassword(true);
+            else choose(key as ThemeChoice);
+          },
+        }}
+      >
+        <button type="button" className="mt-strip-who" aria-haspopup="menu" title={`${user.name}: ${roles}`}>
+          <span className="mt-strip-label">Signed in: {user.name}</span>
+          <span className="mt-strip-value"><span className="mt-ellipsis">{roles}</span><span aria-hidden="true">▾</span></span>
+        </button>
+      </Dropdown>
+      <PasswordDrawer open={password} onClose={() => setPassword(false)} />
+    </>
+  );
+}
+
+/** The same choices inside the menu drawer of small screens. */
+export function AccountMenuItems({ user, onDone }: { user: MeDto | null; onDone: () => void }) {
+  const { choice, choose } = useTheme();
+  const leave = useLeave();
+  const [password, setPassword] = useState(false);
+  if (!user) return null;
+  return (
+    <div className="mt-menu-account">
+      <div className="mt-sub">Signed in as {user.name}</div>
+      <Radio.Group aria-label="Ground" value={choice} onChange={(e) => choose(e.target.value as ThemeChoice)} options={themeChoices.map((c) => ({ value: c, label: themeNames[c] }))} className="mt-radios" />
+      <div className="mt-actions">
+        <Button onClick={() => setPassword(true)}>Change password</Button>
+        <Button onClick={() => { onDone(); leave(); }}>Sign out</Button>
+      </div>
+      <PasswordDrawer open={password} onClose={() => setPassword(false)} />
+    </div>
+  );
+}

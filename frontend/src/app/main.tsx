@@ -1,0 +1,8 @@
+import { StrictMode } from 'react';
+import { createRoot } from 'react-dom/client';
+import '../ui/styles/index.js';
+import { Providers } from './providers.js';
+
+const root = document.getElementById('root');
+if (!root) throw new Error('index.html has no #root');
+createRoot(root).render(<StrictMode><Providers /></StrictMode>);

@@ -1,0 +1,40 @@
+import { useQueryClient } from '@tanstack/react-query';
+import { useEffect, useState } from 'react';
+import { Navigate, Outlet, useLocation } from 'react-router-dom';
+import { useSession } from '../features/session/api/session.js';
+import { SessionEndedDialog } from '../features/session/components/session-ended-dialog.js';
+import { onSignedOut } from '../lib/api-client.js';
+import { sessionKey } from '../lib/query-client.js';
+import { ErrorState, LoadingState } from '../ui/states.js';
+
+/**
+ * Whoever arrives without a session signs in and comes back to the address they asked for.
+ * Whoever loses it while working signs in over the page, so that nothing typed is lost.
+ */
+export function RequireSession() {
+  const session = useSession();
+  const location = useLocation();
+  const client = useQueryClient();
+  const [ended, setEnded] = useState(false);
+  useEffect(() => {
+    onSignedOut(() => setEnded(true));
+    return () => onSignedOut(() => undefined);
+  }, []);
+  if (session.data === undefined) {
+    return session.error ? <ErrorState error={session.error} retry={() => { void session.refetch(); }} /> : <LoadingState what="Mantlet" />;
+  }
+  if (session.data.needsSetUp) return <Navigate to="/set-up" replace />;
+  const { user } = session.data;
+  if (!user) return <Navigate to={`/sign-in?to=${encodeURIComponent(location.pathname + location.search)}`} replace />;
+  return (
+    <>
+      <Outlet />
+      {ended && (
+        <SessionEndedDialog
+          user={user}
+          onBack={() => { setEnded(false); void client.invalidateQueries({ predicate: (q) => q.queryKey[0] !== sessionKey[0] }); }}
+        />
+      )}
+    </>
+  );
+}

@@ -1,0 +1,40 @@
+import { Drawer } from 'antd';
+import { useRef, useState } from 'react';
+import type { ReactNode } from 'react';
+import { Outlet, ScrollRestoration, useNavigation } from 'react-router-dom';
+import type { ProjectDto } from '@mantlet/common';
+import { useSession } from '../features/session/api/session.js';
+import { AccountMenuItems } from './account-menu.js';
+import { PageList } from './page-list.js';
+import { TitleStrip } from './title-strip.js';
+
+/** The title strip above, the list of pages at the left, the page between them and the standing caution. */
+export function Shell({ project, children }: { project?: ProjectDto; children?: ReactNode }) {
+  const user = useSession().data?.user;
+  const [menuOpen, setMenuOpen] = useState(false);
+  const main = useRef<HTMLElement>(null);
+  const going = useNavigation().state !== 'idle';
+  const administrator = user?.administrator ?? false;
+  return (
+    <div className="mt-shell">
+      <a className="mt-skip" href="#main" onClick={(event) => { event.preventDefault(); main.current?.focus(); }}>Skip to the page</a>
+      <TitleStrip project={project} user={user ?? null} onMenu={() => setMenuOpen(true)} />
+      <div className="mt-side"><PageList project={project} administrator={administrator} /></div>
+      <main id="main" className="mt-main" ref={main} tabIndex={-1} aria-busy={going}>
+        {children ?? <Outlet />}
+        {project && (
+          <p className="mt-foot">
+            Results support design by licensed engineers and do not replace it. Local codes and the authority having jurisdiction govern;
+            the period comes from the fire strategy; thickness from the product's own evidence. Nothing here certifies a product.
+          </p>
+        )}
+      </main>
+      <Drawer title="Menu" placement="right" size={300} open={menuOpen} onClose={() => setMenuOpen(false)} rootClassName="mt-menu-drawer">
+        {project && <div className="mt-menu-who"><div className="mt-sub">Project {project.number}</div><div className="mt-strong">{project.name}</div></div>}
+        <PageList project={project} administrator={administrator} onGo={() => setMenuOpen(false)} />
+        <AccountMenuItems user={user ?? null} onDone={() => setMenuOpen(false)} />
+      </Drawer>
+      <ScrollRestoration />
+    </div>
+  );
+}

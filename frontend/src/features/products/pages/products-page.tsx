@@ -1,0 +1,5 @@
+import { LoadingState } from '../../../ui/states.js';
+
+export default function Page() {
+  return <LoadingState />;
+}

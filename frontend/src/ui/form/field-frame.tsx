@@ -1,0 +1,37 @@
+import type { ReactNode } from 'react';
+
+/** "must be above 0" needs its subject; a whole sentence stands alone; what a schema says of itself is put plainly. */
+export function fieldSentence(label: string, problem: string): string {
+  if (/^Invalid input/.test(problem)) return `${label} is needed.`;
+  if (/^Invalid option/.test(problem)) return `${label}: choose one of the values offered.`;
+  const text = /^[a-z]/.test(problem) ? `${label} ${problem}` : problem;
+  return /[.!?]$/.test(text) ? text : `${text}.`;
+}
+
+export interface FieldCommon {
+  label: string;
+  /** a line below the input: what it means, where it comes from */
+  help?: ReactNode;
+  disabled?: boolean;
+  /** also shown after the label for numbers */
+  unit?: string | undefined;
+}
+
+interface FrameProps extends FieldCommon { id: string; error: string | undefined; group?: boolean; children: ReactNode }
+export const helpId = (id: string) => `${id}-help`;
+export const errorId = (id: string) => `${id}-error`;
+export const describedBy = (id: string, help: unknown, error: unknown) =>
+  [help ? helpId(id) : '', error ? errorId(id) : ''].filter(Boolean).join(' ') || undefined;
+
+/** Label, input, help and error in one block, tied together for assistive technology. */
+export function FieldFrame({ id, label, unit, help, error, group = false, children }: FrameProps) {
+  const name = <>{label}{unit ? <span className="mt-unit"> ({unit})</span> : null}</>;
+  return (
+    <div className="mt-field">
+      {group ? <span className="mt-label" id={`${id}-label`}>{name}</span> : <label className="mt-label" htmlFor={id}>{name}</label>}
+      {children}
+      {help && <p className="mt-help" id={helpId(id)}>{help}</p>}
+      {error && <p className="mt-field-error" id={errorId(id)} role="alert">{fieldSentence(label, error)}</p>}
+    </div>
+  );
+}

@@ -1,0 +1,53 @@
+import { App, ConfigProvider } from 'antd';
+import { createContext, useContext, useEffect, useLayoutEffect, useMemo, useState } from 'react';
+import type { ReactNode } from 'react';
+import { antdTheme } from './antd-theme.js';
+import { dark, light, paletteCss } from './palette.js';
+
+export const themeChoices = ['system', 'light', 'dark'] as const;
+export type ThemeChoice = (typeof themeChoices)[number];
+const storageKey = 'mantlet.theme';
+
+interface ThemeState { choice: ThemeChoice; ground: 'light' | 'dark'; choose: (choice: ThemeChoice) => void }
+const ThemeContext = createContext<ThemeState>({ choice: 'system', ground: 'light', choose: () => undefined });
+/** The chosen theme, the ground it comes to, and how to change it. Remembered on this device. */
+export const useTheme = () => useContext(ThemeContext);
+
+function remembered(): ThemeChoice {
+  try {
+    const kept = localStorage.getItem(storageKey);
+    return themeChoices.find((c) => c === kept) ?? 'system';
+  } catch {
+    return 'system'; // storage may be forbidden; the system's wish then stands
+  }
+}
+const darkWanted = () => window.matchMedia('(prefers-color-scheme: dark)');
+
+export function ThemeProvider({ children }: { children: ReactNode }) {
+  const [choice, setChoice] = useState(remembered);
+  const [systemDark, setSystemDark] = useState(() => darkWanted().matches);
+  useEffect(() => {
+    const query = darkWanted();
+    const follow = () => setSystemDark(query.matches);
+    query.addEventListener('change', follow);
+    return () => query.removeEventListener('change', follow);
+  }, []);
+  const ground = choice === 'system' ? (systemDark ? 'dark' : 'light') : choice;
+  useLayoutEffect(() => { document.documentElement.dataset['ground'] = ground; }, [ground]);
+  const state = useMemo<ThemeState>(() => ({
+    choice, ground,
+    choose: (next) => {
+      setChoice(next);
+      try { localStorage.setItem(storageKey, next); } catch { /* kept for this visit only */ }
+    },
+  }), [choice, ground]);
+  const config = useMemo(() => antdTheme(ground === 'dark' ? dark : light), [ground]);
+  return (
+    <ThemeContext value={state}>
+      <style>{paletteCss}</style>
+      <ConfigProvider theme={config} button={{ autoInsertSpace: false }} wave={{ disabled: true }}>
+        <App component={false}>{children}</App>
+      </ConfigProvider>
+    </ThemeContext>
+  );
+}
