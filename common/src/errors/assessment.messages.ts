@@ -6,4 +6,33 @@ export const assessmentMessages = {
   'section.web-filled': (p: { section: string }) =>
     `"Web filled" needs a space between two flanges, which ${p.section} does not have. Choose another exposure.`,
   'section.no-face': (_: Record<string, never>) => 'No face of the section sees fire. Name at least one, or take the member out of the schedule.',
+  'assessment.unknown-grade': (p: { grade: string }) =>
+    `Not determined: the yield strength of ${p.grade || 'a member without a grade'} is not known here. Choose a listed grade or declare the critical temperature.`,
+  'assessment.too-thick-for-grade': (p: { grade: string; thicknessMm: number; limitMm: number }) =>
+    `Not determined: ${p.grade} is ${p.thicknessMm} mm thick; the table of yield strengths ends at ${p.limitMm} mm. Declare the critical temperature.`,
+  'assessment.no-basis': (_: Record<string, never>) =>
+    'Not determined: no critical temperature, utilisation or actions given.',
+  'assessment.no-actions': (_: Record<string, never>) => 'Not determined: no actions given.',
+  'assessment.no-buckling-length': (p: { axis: 'y' | 'z' }) => `Not determined: no buckling length about ${p.axis}.`,
+  'assessment.lateral-torsional': (_: Record<string, never>) =>
+    'Not determined: a beam held laterally at points only needs a check of lateral-torsional buckling, which is not calculated here. Give its utilisation or declare its temperature.',
+  'assessment.axial-with-bending': (_: Record<string, never>) =>
+    'Not determined: axial force together with bending is not calculated here. Give the utilisation or declare the temperature; set a negligible force to exactly 0.',
+  'assessment.composite': (_: Record<string, never>) =>
+    'Not determined: a composite member is not calculated here. Give its utilisation or declare its temperature.',
+  'assessment.web-openings': (_: Record<string, never>) =>
+    'Not determined: a member with web openings needs a temperature declared by the structural engineer.',
+  'assessment.shape-not-calculated': (p: { shape: string }) =>
+    `Not determined: the resistance of ${p.shape} is not calculated here. Give its utilisation or declare its temperature.`,
+  'assessment.shape-not-classified': (p: { shape: string }) =>
+    `Not determined: ${p.shape} has no section class in Table 5.2 for this member. Declare its temperature.`,
+  'assessment.shear-buckling': (p: { slenderness: number; limit: number }) =>
+    `Not determined: the web's h/t of ${p.slenderness.toFixed(1)} is above ${p.limit.toFixed(1)}, so that it may buckle in shear, which is not calculated here. Give the utilisation or declare the temperature.`,
+  'assessment.under-strength': (p: { state: string; effect: number; resistance: number; unit: string; utilisation: number }) =>
+    `Under-strength cold: the effect in fire, ${p.effect.toFixed(1)} ${p.unit}, is above the ${p.state} resistance at 20 °C, ${p.resistance.toFixed(1)} ${p.unit} (utilisation ${p.utilisation.toFixed(2)}).`,
+  'assessment.under-strength-utilisation': (p: { utilisation: number }) =>
+    `Under-strength cold: the utilisation given, ${p.utilisation.toFixed(2)}, is above 1.`,
+  'assessment.no-system': (p: { memberType: string }) => `Not determined: no system set for ${p.memberType} in this zone`,
+  'assessment.form-mismatch': (p: { kind: string; form: string }) =>
+    `Not determined: a ${p.kind} needs the protection form "${p.form}"; change the member's form or the zone's system`,
 };

@@ -64,7 +64,7 @@ function classOfAngle(s: Of<'angle'>, e: number): SectionClass {
 /**
  * Class of a cross-section in fire under bending about y or uniform compression.
  * Tees: the stem in uniform compression whichever the loading, so that the class is never too good.
- * Solid flats and rounds are not classified by Table 5.2: refused.
+ * A solid round has no part that can buckle. A flat, alone in bending or compression, is not classified by Table 5.2: refused.
  */
 export function sectionClass(shape: SectionShape, loading: Loading, yieldStrengthMPa: number): Determined<SectionClass> {
   const e = fireEpsilonFormula.evaluate({ yieldStrengthMPa });
@@ -85,6 +85,7 @@ export function sectionClass(shape: SectionShape, loading: Loading, yieldStrengt
       const stem = (shape.hMm - shape.tfMm - shape.rootRadiusMm) / shape.twMm;
       return { ok: true, value: worst(classOf(flange, outstandLimits, e), classOf(stem, outstandLimits, e)) };
     }
-    default: return { ok: false, reason: message('assessment.shape-not-classified', { shape: shape.kind }) };
+    case 'round': return { ok: true, value: 1 };
+    case 'flat': return { ok: false, reason: message('assessment.shape-not-classified', { shape: 'a flat' }) };
   }
 }

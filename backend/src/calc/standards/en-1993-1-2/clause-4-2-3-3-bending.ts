@@ -21,10 +21,10 @@ interface BendingInput {
   kappa1: number;
   kappa2: number;
 }
-/** N·mm, laterally restrained; W_pl for class 1 and 2 (4.10), W_el for class 3 (4.14). γ_M0 = 1.0, so M_Rd = W·f_y. */
+/** N·mm, laterally restrained; W_pl for class 1 and 2, W_el for class 3. γ_M0 = 1.0, so M_Rd = W·f_y. */
 export const bendingResistanceFormula = defineFormula<BendingInput>({
   label: 'Bending resistance in fire, laterally restrained',
-  source: { standard, clause: '4.2.3.3 (4.8), (4.10); 4.2.3.4 (4.14)', note: 'never above M_Rd at 20 °C, with γ_M0 = 1.0' },
+  source: { standard, clause: '4.2.3.3(1) to (3), (7), (8) in class 1 and 2; 4.2.3.4 in class 3', note: 'never above M_Rd at 20 °C, with γ_M0 = 1.0' },
   expression: 'min(W·k_y,θ·f_y/(γ_M,fi·κ1·κ2) ; W·f_y)',
   result: { symbol: 'M_fi,t,Rd', meaning: 'design bending resistance', unit: 'N·mm' },
   symbols: {
@@ -43,7 +43,7 @@ export const bendingResistanceFormula = defineFormula<BendingInput>({
 
 export const shearResistanceFormula = defineFormula<{ shearAreaMm2: number; ky: number; yieldStrengthMPa: number; gammaMFi: number }>({
   label: 'Shear resistance in fire',
-  source: { standard, clause: '4.2.3.3(6), (4.13) with EN 1993-1-1 6.2.6', note: 'k_y,θ at the web temperature, which is the uniform one here' },
+  source: { standard, clause: '4.2.3.3(6) with EN 1993-1-1 6.2.6', note: 'k_y,θ at the web temperature, which is the uniform one here' },
   expression: 'A_v·k_y,θ·f_y/(√3·γ_M,fi)',
   result: { symbol: 'V_fi,t,Rd', meaning: 'design shear resistance', unit: 'N' },
   symbols: {
