@@ -32,7 +32,7 @@ export const assessmentMessages = {
     `Under-strength cold: the effect in fire, ${p.effect.toFixed(1)} ${p.unit}, is above the ${p.state} resistance at 20 °C, ${p.resistance.toFixed(1)} ${p.unit} (utilisation ${p.utilisation.toFixed(2)}).`,
   'assessment.under-strength-utilisation': (p: { utilisation: number }) =>
     `Under-strength cold: the utilisation given, ${p.utilisation.toFixed(2)}, is above 1.`,
-  'assessment.no-system': (p: { memberType: string }) => `Not determined: no system set for ${p.memberType} in this zone`,
+  'assessment.no-system': (p: { memberType: string }) => `Not determined: no system set for ${p.memberType} in this zone. Choose one for the zone.`,
   'assessment.form-mismatch': (p: { kind: string; form: string }) =>
-    `Not determined: a ${p.kind} needs the protection form "${p.form}"; change the member's form or the zone's system`,
+    `Not determined: a ${p.kind} needs the protection form "${p.form}"; change the member's form or the zone's system.`,
 };

@@ -25,7 +25,7 @@ function fromTables(
   const candidates = tablesFor(tables, request.group, request.orientation);
   const shortest = candidates[0];
   if (!shortest) return { ok: false, reason: message('product.outside-shape', { group: groupNames[request.group], orientation: request.orientation }) };
-  let reached: PeriodReached | null = null;
+  let reached = null as PeriodReached | null;
   let refusal: Determined<PeriodReached> | null = null;
   for (const table of candidates) {
     const place = placeInTable(table, kind, request.sectionFactorPerM, request.criticalTemperatureC, rules);
