@@ -4,10 +4,11 @@ import { TypeOrmModule } from '@nestjs/typeorm';
 import { dataSourceOptions } from './database/data-source-options.js';
 import { AuditModule } from './features/audit/audit.module.js';
 import { AuthModule } from './features/auth/auth.module.js';
+import { SectionsModule } from './features/sections/sections.module.js';
 import { UsersModule } from './features/users/users.module.js';
 
 /** The features of the server, one module each. */
-export const featureModules = [AuditModule, UsersModule, AuthModule];
+export const featureModules = [AuditModule, UsersModule, AuthModule, SectionsModule];
 
 @Module({})
 export class AppModule {

@@ -46,9 +46,12 @@ export interface ProjectListItemDto {
 export interface ProjectDto {
   id: string; number: string; name: string; place: string; currency: string; note: string; version: number;
   roles: Role[];
-  settings: ProjectSettings;
+  /** null for those who see issued work only */
+  settings: ProjectSettings | null;
+  /** the open revision, else the issued one; for those who see issued work only, the issued one */
   revision: { id: string; code: string; state: RevisionState } | null;
   issuedRevision: { id: string; code: string } | null;
+  /** of work in progress; for those who see issued work only, members as issued and the rest 0 */
   counts: { levels: number; zones: number; members: number; products: number; open: number };
 }
 

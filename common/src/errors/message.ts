@@ -2,6 +2,7 @@ import { accountMessages } from './account.messages.js';
 import { assessmentMessages } from './assessment.messages.js';
 import { intakeMessages } from './intake.messages.js';
 import { productMessages } from './product.messages.js';
+import { projectMessages } from './project.messages.js';
 import { scheduleMessages } from './schedule.messages.js';
 import { sharedMessages } from './shared.messages.js';
 
@@ -12,6 +13,7 @@ export const messages = {
   ...assessmentMessages,
   ...intakeMessages,
   ...productMessages,
+  ...projectMessages,
   ...scheduleMessages,
 } satisfies Record<string, (params: never) => string>;
 
