@@ -138,7 +138,7 @@ export function perimeterMm(loop: ContourSegment[]): number {
   return sum;
 }
 
-/** Where the thickness of a tapered channel flange is measured, from the toe: EN 10279 / DIN 1026-1. */
+/** Where the thickness of a tapered channel flange is measured, from the toe: DIN 1026-1. */
 export function taperReferenceMm(shape: Extract<SectionShape, { kind: 'channel' }>): number {
   return shape.hMm <= 300 ? shape.bMm / 2 : (shape.bMm - shape.twMm) / 2;
 }

@@ -2,8 +2,8 @@ import type { ContourSegment } from './contour.js';
 
 /**
  * Area integrals by Green's theorem: ∬ f(v) dA = ∮ u·f(v) dv round the contour, v being the ordinate (y for the strong
- * axis, x for the weak) and u the other one. Lines and arcs are integrated by Gauss–Legendre rules of enough points that
- * the result is exact to rounding: polynomials of degree 5 on a line, products of four sines on a quarter circle.
+ * axis, x for the weak) and u the other one. Lines and arcs are integrated by Gauss–Legendre rules: three points are exact
+ * for the polynomials on a line, eight give ten digits of the products of sines on a quarter circle.
  */
 export type Axis = 'y' | 'z';
 
