@@ -22,6 +22,6 @@ module.exports = {
     tsConfig: { fileName: 'tsconfig.depcruise.json' },
     doNotFollow: { path: 'node_modules' },
     exclude: { path: '(/dist/|\\.spec\\.tsx?$)' },
-    enhancedResolveOptions: { extensions: ['.ts', '.tsx', '.js'], extensionAlias: { '.js': ['.ts', '.tsx', '.js'] } },
+    enhancedResolveOptions: { extensions: ['.ts', '.tsx', '.js'] },
   },
 };
