@@ -2,13 +2,15 @@ import { Module } from '@nestjs/common';
 import type { DynamicModule } from '@nestjs/common';
 import { TypeOrmModule } from '@nestjs/typeorm';
 import { dataSourceOptions } from './database/data-source-options.js';
+import { AssessmentModule } from './features/assessment/assessment.module.js';
 import { AuditModule } from './features/audit/audit.module.js';
 import { AuthModule } from './features/auth/auth.module.js';
+import { QuantitiesModule } from './features/quantities/quantities.module.js';
 import { SectionsModule } from './features/sections/sections.module.js';
 import { UsersModule } from './features/users/users.module.js';
 
 /** The features of the server, one module each. */
-export const featureModules = [AuditModule, UsersModule, AuthModule, SectionsModule];
+export const featureModules = [AuditModule, UsersModule, AuthModule, SectionsModule, AssessmentModule, QuantitiesModule];
 
 @Module({})
 export class AppModule {

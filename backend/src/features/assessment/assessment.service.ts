@@ -1,6 +1,16 @@
 import { Injectable } from '@nestjs/common';
 import type { MemberChartsDto, MemberResultDto, SectionOutline, WorkingStepDto } from '@mantlet/common';
+import { InjectDataSource } from '@nestjs/typeorm';
+import { DataSource } from 'typeorm';
 import type { EntityManager } from 'typeorm';
+import { determineSectionOutline, explainMember } from '../../calc/index.js';
+import type { TakeoffMember } from '../../calc/index.js';
+import { notFound } from '../../shared/refusal.js';
+import { acceptanceHolds, inputHashes, resolveCases, withSteelReason } from './member-case.js';
+import type { ProjectInputs } from './project-inputs.service.js';
+import { ProjectInputsService } from './project-inputs.service.js';
+import { storeOutcomes, storeZones, storedOutcomes } from './result-store.js';
+import { assessInputs, takeoffMember, zoneHash } from './zone-outcome.js';
 
 /** What the sheet of one member shows beside its stored result. */
 export interface MemberExplanation {
@@ -10,24 +20,104 @@ export interface MemberExplanation {
   outline: SectionOutline | null;
 }
 
+/** Members and zones whose stored results do not rest on the inputs as they stand. */
+export interface StaleResults {
+  memberIds: string[];
+  zoneIds: string[];
+}
+
 /** Keeps results current with their inputs. */
 @Injectable()
 export class AssessmentService {
+  constructor(
+    @InjectDataSource() private readonly dataSource: DataSource,
+    private readonly inputs: ProjectInputsService,
+  ) {}
+
   /**
-   * Assesses anew the members of these zones (all zones where null) and their zone targets, in the caller's transaction.
-   * Call it after every change to anything that enters a result.
+   * Lets one transaction at a time write to a project's inputs and results. A transaction that writes to members, zones or systems
+   * calls this first, before it changes anything, so that two of them never wait for each other. Released at its end.
    */
-  async recompute(_manager: EntityManager, _projectId: string, _zoneIds: string[] | null): Promise<{ members: number; changed: number }> {
-    return { members: 0, changed: 0 };
+  async lockProject(manager: EntityManager, projectId: string): Promise<void> {
+    await manager.query('SELECT pg_advisory_xact_lock(hashtextextended($1, 0))', [`project ${projectId}`]);
   }
 
-  /** One member's result with its working, charts and outline, worked out from its inputs as they stand. 404 where it is not of the project. */
-  async explain(_projectId: string, _memberId: string): Promise<MemberExplanation> {
-    throw new Error('in work');
+  /**
+   * Assesses anew the members of these zones (all zones where null) and their zone targets, in the caller's transaction.
+   * Call it after every change to anything that enters a result. `changed` counts members whose result is another than before.
+   */
+  async recompute(manager: EntityManager, projectId: string, zoneIds: string[] | null): Promise<{ members: number; changed: number }> {
+    await this.lockProject(manager, projectId);
+    const inputs = await this.inputs.load(manager, projectId, zoneIds);
+    const outcome = assessInputs(inputs);
+    const changed = await storeOutcomes(manager, inputs.zones.map((zone) => zone.id), outcome.members);
+    await storeZones(manager, outcome.zones);
+    return { members: outcome.members.length, changed };
+  }
+
+  recalculate(projectId: string): Promise<{ members: number; changed: number }> {
+    return this.dataSource.transaction((manager) => this.recompute(manager, projectId, null));
+  }
+
+  /**
+   * One member's result with its working, charts and outline, worked out from its inputs as they stand; what the zone's policy applies
+   * is taken from the stored result. 404 where it is not of the project.
+   */
+  async explain(projectId: string, memberId: string): Promise<MemberExplanation> {
+    const { manager } = this.dataSource;
+    const [place] = await manager.query<{ zoneId: string }[]>('SELECT zone_id AS "zoneId" FROM members WHERE id = $1 AND project_id = $2', [memberId, projectId]);
+    if (!place) throw notFound('member');
+    const zone = await this.inputs.load(manager, projectId, [place.zoneId]);
+    const [resolved] = resolveCases({ ...zone, members: zone.members.filter((m) => m.id === memberId) });
+    if (!resolved) throw notFound('member');
+    const explained = explainMember(resolved.case);
+    const result = withSteelReason(resolved, explained.result);
+    const stored = (await storedOutcomes(manager, [place.zoneId])).get(memberId);
+    const applies = result.verdict === 'protected' && stored?.verdict === 'protected' && stored.productId === result.productId;
+    const outline = determineSectionOutline(resolved.case.shape, resolved.case.exposure, resolved.case.protectionForm);
+    return {
+      working: explained.working, charts: explained.charts, outline: outline.ok ? outline.value : null,
+      result: {
+        ...result, assumed: result.assumed && !acceptanceHolds(resolved.member.acceptances, 'assumed', result),
+        appliedThickness: applies ? stored.appliedThickness : null, layers: applies ? stored.layers : result.layers,
+      },
+    };
+  }
+
+  /** Members that carry protection by their stored results, as the takeoff counts them. */
+  async takeoffMembers(manager: EntityManager, inputs: ProjectInputs): Promise<TakeoffMember[]> {
+    const stored = await storedOutcomes(manager, inputs.zones.map((zone) => zone.id));
+    const levels = new Map(inputs.zones.map((zone) => [zone.id, zone.levelId]));
+    return inputs.members.flatMap((member) => {
+      const section = inputs.sections.get(member.sectionId);
+      const result = stored.get(member.id);
+      // a system taken away since the result was stored: the result is stale and counts for nothing
+      if (!section || !result || (result.productId !== null && !inputs.products.has(result.productId))) return [];
+      return takeoffMember(member, levels.get(member.zoneId) ?? '', section.shape, result) ?? [];
+    });
   }
 
   /** Whether every stored result was worked out from the inputs as they stand. */
-  async isCurrent(_projectId: string): Promise<boolean> {
-    throw new Error('in work');
+  async isCurrent(projectId: string): Promise<boolean> {
+    const { manager } = this.dataSource;
+    const stale = await this.stale(manager, await this.inputs.load(manager, projectId, null));
+    return stale.memberIds.length === 0 && stale.zoneIds.length === 0;
+  }
+
+  async stale(manager: EntityManager, inputs: ProjectInputs): Promise<StaleResults> {
+    const zoneIds = inputs.zones.map((zone) => zone.id);
+    const hashes = inputHashes(inputs);
+    const members = await manager.query<{ id: string; hash: string }[]>(
+      'SELECT r.member_id AS id, r.inputs_hash AS hash FROM member_results r JOIN members m ON m.id = r.member_id WHERE m.zone_id = ANY($1)', [zoneIds]);
+    const zones = await manager.query<{ id: string; hash: string }[]>('SELECT zone_id AS id, inputs_hash AS hash FROM zone_results WHERE zone_id = ANY($1)', [zoneIds]);
+    const storedMembers = new Map(members.map(({ id, hash }) => [id, hash]));
+    const storedZones = new Map(zones.map(({ id, hash }) => [id, hash]));
+    const byZone = new Map<string, string[]>(zoneIds.map((id) => [id, []]));
+    for (const member of inputs.members) byZone.get(member.zoneId)?.push(hashes.get(member.id) as string);
+    return {
+      memberIds: inputs.members.filter((m) => storedMembers.get(m.id) !== hashes.get(m.id)).map((m) => m.id),
+      // a zone without members needs no target
+      zoneIds: [...byZone].filter(([id, own]) => (own.length > 0 || storedZones.has(id)) && storedZones.get(id) !== zoneHash(own)).map(([id]) => id),
+    };
   }
 }

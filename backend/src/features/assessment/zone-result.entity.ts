@@ -8,6 +8,8 @@ import { Zone } from '../zones/zone.entity.js';
 @Entity('zone_results')
 export class ZoneResult {
   @PrimaryColumn('uuid') zoneId!: string;
+  /** over the members' own hashes: a member that left or came is seen */
+  @Column('text') inputsHash!: string;
   @Column(timestamp) assessedAt!: Date;
   @Column('integer') members!: number;
   @Column('integer') settled!: number;

@@ -1,0 +1,33 @@
+import { Controller, Get, Header, Query, StreamableFile } from '@nestjs/common';
+import { quantityQuerySchema } from '@mantlet/common';
+import type { QuantitiesDto, QuantityQuery } from '@mantlet/common';
+import { DesignTeam, Scope } from '../../shared/access.js';
+import type { ProjectScope } from '../../shared/access.js';
+import { QuantitiesService } from './quantities.service.js';
+
+@Controller('projects/:projectId')
+export class QuantitiesController {
+  constructor(private readonly quantities: QuantitiesService) {}
+
+  /** Printed lines of protection, split by two keys, and what to buy. */
+  @Get('quantities')
+  @DesignTeam()
+  split(@Scope() scope: ProjectScope, @Query({ schema: quantityQuerySchema }) query: QuantityQuery): Promise<QuantitiesDto> {
+    return this.quantities.split(scope.projectId, query);
+  }
+
+  @Get('quantities/lines.csv')
+  @DesignTeam()
+  @Header('Content-Type', 'text/csv; charset=utf-8')
+  @Header('Content-Disposition', 'attachment; filename="quantities.csv"')
+  linesCsv(@Scope() scope: ProjectScope): Promise<string> {
+    return this.quantities.linesCsv(scope.projectId);
+  }
+
+  @Get('quantities.xlsx')
+  @DesignTeam()
+  async workbook(@Scope() scope: ProjectScope, @Query({ schema: quantityQuerySchema }) query: QuantityQuery): Promise<StreamableFile> {
+    const { name, content } = await this.quantities.workbook(scope.projectId, query);
+    return new StreamableFile(content, { type: 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet', disposition: `attachment; filename="${name}"`, length: content.length });
+  }
+}
