@@ -45,7 +45,7 @@ export function AccountMenu({ user, roles }: { user: MeDto | null; roles: string
         }}
       >
         <button type="button" className="mt-strip-who" aria-haspopup="menu" title={`${user.name}: ${roles}`}>
-          <span className="mt-strip-label">Signed in: {user.name}</span>
+          <span className="mt-strip-label">{roles === user.name ? 'Signed in' : `Signed in: ${user.name}`}</span>
           <span className="mt-strip-value"><span className="mt-ellipsis">{roles}</span><span aria-hidden="true">▾</span></span>
         </button>
       </Dropdown>

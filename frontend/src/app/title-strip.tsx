@@ -1,8 +1,7 @@
 import { Link } from 'react-router-dom';
-import { roleNames, revisionStateNames } from '@mantlet/common';
+import { revisionStateNames } from '@mantlet/common';
 import type { MeDto, ProjectDto } from '@mantlet/common';
-import { joinWords } from '../lib/format.js';
-import { may } from '../lib/may.js';
+import { may, rolesInWords } from '../lib/may.js';
 import { Mark } from '../ui/mark.js';
 import { usePageInfo } from '../ui/page-info.js';
 import { AccountMenu } from './account-menu.js';
@@ -12,8 +11,9 @@ const stateOf = (project: ProjectDto) =>
     ? { word: `${project.counts.open} open`, kind: 'attention' as const }
     : project.counts.members > 0 ? { word: 'Settled', kind: 'settled' as const } : { word: 'No members yet', kind: 'neutral' as const };
 
-export const rolesInWords = (project: ProjectDto | undefined, user: MeDto | null) =>
-  project?.roles.length ? joinWords(project.roles.map((r, i) => (i ? roleNames[r].toLowerCase() : roleNames[r]))) : user?.administrator ? 'Administrator' : user?.name ?? '';
+/** On a project, one's roles there; elsewhere, whether one is the administrator. */
+const standing = (project: ProjectDto | undefined, user: MeDto | null) =>
+  project?.roles.length ? rolesInWords(project.roles) : user?.administrator ? 'Administrator' : user?.name ?? '';
 
 /** Like the title block of a drawing: what this is, which page and revision, how it stands, and who looks at it. */
 export function TitleStrip({ project, user, onMenu }: { project: ProjectDto | undefined; user: MeDto | null; onMenu: () => void }) {
@@ -30,7 +30,7 @@ export function TitleStrip({ project, user, onMenu }: { project: ProjectDto | un
         {project && <div className="mt-strip-cell mt-strip-revision"><dt>Revision</dt><dd>{revision ? `${revision.code} ${revisionStateNames[revision.state].toLowerCase()}` : 'None yet'}</dd></div>}
         {shownState && <div className="mt-strip-cell mt-strip-state"><dt>State</dt><dd className={shownState.kind === 'neutral' ? '' : `mt-${shownState.kind}`}>{shownState.word}</dd></div>}
       </dl>
-      <AccountMenu user={user} roles={rolesInWords(project, user)} />
+      <AccountMenu user={user} roles={standing(project, user)} />
       <button type="button" className="mt-strip-menu" onClick={onMenu}>Menu</button>
     </header>
   );

@@ -25,6 +25,9 @@ const asDate = (iso: string | null | undefined) => {
 export const formatDate = (iso: string | null | undefined): string => { const d = asDate(iso); return d ? date.format(d) : '–'; };
 export const formatDateTime = (iso: string | null | undefined): string => { const d = asDate(iso); return d ? dateTime.format(d) : '–'; };
 
+/** Keeps a number and its unit on one line: 550 °C, 0.62 mm. */
+export const keepUnits = (text: string): string => text.replace(/(\d) (?=(°C|µm|mm|m²|m³|kNm?|L|kg|min)(?![\p{L}\d]))/gu, '$1\u00a0');
+
 /** 1 member, 2 members. */
 export const count = (n: number, one: string, many = `${one}s`): string => `${formatNumber(n)} ${n === 1 ? one : many}`;
 

@@ -28,6 +28,10 @@ export const may = (held: readonly Role[], right: Right): boolean =>
 
 export const rolesFor = (right: Right): readonly Role[] => rights[right].roles;
 
+/** "Specifier and fire engineer" */
+export const rolesInWords = (held: readonly Role[]): string =>
+  joinWords(held.map((role, i) => (i ? roleNames[role].toLowerCase() : roleNames[role])));
+
 /** Why it is not offered: "Only the fire engineer may change levels." */
 export const whyNot = (right: Right): string =>
   sentence(message('shared.forbidden', {

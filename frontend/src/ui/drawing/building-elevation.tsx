@@ -45,14 +45,16 @@ function Zone({ box, href, hatch }: { box: ZoneBox; href: string; hatch: string 
 }
 
 function LevelMarks({ layout }: { layout: ElevationLayout }) {
-  const right = layout.plotLeft - 8;
+  // on a narrow screen the mark stands close to the wall and the dashed line is left out
+  const compact = layout.plotLeft < 100;
+  const tip = layout.plotLeft - (compact ? 9 : 49);
   return (
     <g aria-hidden="true">
       {layout.marks.map(({ level, y, labelY }) => (
         <g key={level.id}>
-          <line className="d-aid" x1={right - 36} x2={layout.plotLeft} y1={y} y2={y} strokeWidth="1" strokeDasharray="5 3" />
-          <path d={`M${right - 41} ${labelY - 9}h10l-5 8z`} fill="var(--ink)" />
-          <text className="d-sub" x={right - 46} y={labelY - 1} fontSize="11.5" textAnchor="end">{formatLevel(level.elevationM)}</text>
+          {!compact && <line className="d-aid" x1={tip} x2={layout.plotLeft} y1={y} y2={y} strokeWidth="1" strokeDasharray="5 3" />}
+          <path d={`M${tip - 5} ${labelY - 9}h10l-5 8z`} fill="var(--ink)" />
+          <text className="d-sub" x={tip - 9} y={labelY - 3.5} fontSize="11.5" textAnchor="end">{formatLevel(level.elevationM)}</text>
         </g>
       ))}
     </g>

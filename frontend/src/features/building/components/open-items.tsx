@@ -1,7 +1,7 @@
 import { Link } from 'react-router-dom';
 import { roleNames } from '@mantlet/common';
 import type { OpenItemDto, Role } from '@mantlet/common';
-import { count } from '../../../lib/format.js';
+import { keepUnits } from '../../../lib/format.js';
 import { Panel } from '../../../ui/panel.js';
 import { ScheduleTable } from '../../../ui/schedule-table.js';
 import { StatusWord } from '../../../ui/status-word.js';
@@ -20,8 +20,8 @@ export function OpenItems({ items, projectId, held }: { items: readonly OpenItem
           {
             title: 'What is open', key: 'what', render: (_, i) => (
               <div>
-                <Link className="mt-strong mt-quiet-link" to={openItemLink(projectId, i)}>{i.title}</Link>
-                <div className="mt-sub">{[i.kind === 'warning' ? 'Worth a look' : null, i.zoneLabel, i.count > 1 ? count(i.count, 'member') : null].filter(Boolean).join(' · ')}</div>
+                <Link className="mt-strong mt-quiet-link" to={openItemLink(projectId, i)}>{keepUnits(i.title)}</Link>
+                <div className="mt-sub">{[i.kind === 'warning' ? 'Worth a look' : null, i.zoneLabel].filter(Boolean).join(' · ')}</div>
               </div>
             ),
           },

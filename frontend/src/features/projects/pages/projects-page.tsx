@@ -1,9 +1,10 @@
 import { Button } from 'antd';
 import { useState } from 'react';
 import { Link, useNavigate } from 'react-router-dom';
-import { revisionStateNames, roleNames } from '@mantlet/common';
+import { revisionStateNames } from '@mantlet/common';
 import type { ProjectListItemDto } from '@mantlet/common';
 import { count, countWord, formatNumber, joinWords } from '../../../lib/format.js';
+import { rolesInWords } from '../../../lib/may.js';
 import { Page } from '../../../ui/page.js';
 import { Panel } from '../../../ui/panel.js';
 import { Quantity } from '../../../ui/quantity.js';
@@ -19,7 +20,7 @@ const notIssued = 'nothing is issued yet';
 const columns: ScheduleColumn<ProjectListItemDto>[] = [
   { title: 'Number', dataIndex: 'number', width: 110 },
   { title: 'Project', key: 'name', render: (_, p) => <><Link to={`/projects/${p.id}`} className="mt-strong">{p.name}</Link>{p.place && <div className="mt-sub">{p.place}</div>}</> },
-  { title: 'Your roles', key: 'roles', render: (_, p) => joinWords(p.roles.map((r) => roleNames[r])) || '–' },
+  { title: 'Your roles', key: 'roles', render: (_, p) => rolesInWords(p.roles) || '–' },
   { title: 'Revision', key: 'revision', width: 150, render: (_, p) => (p.revision ? `${p.revision.code} ${revisionStateNames[p.revision.state].toLowerCase()}` : 'None yet') },
   { title: 'Members', key: 'members', numeric: true, width: 96, render: (_, p) => <Quantity value={p.members} what="Members" reason={notIssued} /> },
   { title: 'Protected m²', key: 'area', foldLabel: 'Protected', numeric: true, width: 120, render: (_, p) => <Quantity value={p.protectedAreaM2} decimals={1} unit="m²" bare what="Protected area" reason={notIssued} /> },

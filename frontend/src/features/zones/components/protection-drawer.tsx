@@ -1,0 +1,53 @@
+import { useMemo } from 'react';
+import { useWatch } from 'react-hook-form';
+import { environments, memberTypeNames, memberTypes, productKindNames, zoneProtectionSchema } from '@mantlet/common';
+import type { ZoneDto } from '@mantlet/common';
+import { NumberField, RadioField, SelectField } from '../../../ui/form/fields.js';
+import { FormDrawer } from '../../../ui/form/form-drawer.js';
+import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
+import { useSaveProtection, useZoneProducts, useZones } from '../api/zones.js';
+
+const environmentHelp: Record<(typeof environments)[number], string> = {
+  C1: 'C1 very low: heated interior', C2: 'C2 low: unheated interior, rural', C3: 'C3 medium: urban, humid interior',
+  C4: 'C4 high: industrial, coastal', C5: 'C5 very high: aggressive, coastal with salt', CX: 'CX extreme: offshore',
+};
+const environmentOptions = environments.map((value) => ({ value, label: environmentHelp[value] }));
+const policyOptions = [
+  { value: 'own', label: 'Each member its own thickness' },
+  { value: 'bands', label: 'A few bands' },
+  { value: 'one', label: 'One thickness for all' },
+];
+const versionless = zoneProtectionSchema.omit({ version: true });
+
+/** What the specifier decides of a zone: environment, target policy and a system by member type. */
+export function ProtectionDrawer({ projectId, zone, onClose }: { projectId: string; zone: ZoneDto; onClose: () => void }) {
+  const zones = useZones(projectId);
+  const products = useZoneProducts(projectId);
+  const save = useSaveProtection(projectId, zone.id);
+  const values = useMemo(() => ({
+    environment: zone.environment, targetPolicy: zone.targetPolicy,
+    systems: memberTypes.map((memberType) => ({ memberType, productId: zone.systems.find((s) => s.memberType === memberType)?.productId ?? null })),
+  }), [zone]);
+  const form = useContractForm(versionless, { values });
+  useServerIssues(form, save.error);
+  const policy = useWatch({ control: form.control, name: 'targetPolicy.policy' });
+  const submit = form.handleSubmit((body) => save.mutate({ ...body, version: zone.version }, { onSuccess: onClose }));
+  const productOptions = (products.data ?? []).map((p) => ({ value: p.id, label: `${p.name} (${productKindNames[p.kind].toLowerCase()})` }));
+  return (
+    <FormDrawer
+      title={`Protection of ${zone.code} ${zone.name}`} open onClose={onClose} onSubmit={(e) => { void submit(e); }}
+      dirty={form.formState.isDirty && !save.isSuccess} saving={save.isPending} error={save.error} onReload={() => { void zones.refetch(); }}
+    >
+      <SelectField control={form.control} name="environment" label="Environment" options={environmentOptions} help="Corrosivity category of ISO 12944-2. A product must be assessed for it." />
+      <RadioField control={form.control} name="targetPolicy.policy" label="Thicknesses in the zone" options={policyOptions} help="Members of one system share a target; no member ever gets less than it needs." />
+      {policy === 'bands' && <NumberField control={form.control} name="targetPolicy.bands" label="Bands at most" min={1} max={12} decimals={0} width={120} help="Split so that the least material is used." />}
+      <fieldset>
+        <legend>System by member type</legend>
+        {products.data?.length === 0 && <p className="mt-help">The library holds no product yet. Add one under Products first.</p>}
+        {memberTypes.map((type, i) => (
+          <SelectField key={type} control={form.control} name={`systems.${i}.productId`} label={memberTypeNames[type]} options={productOptions} allowClear search placeholder="No system: stays not determined" />
+        ))}
+      </fieldset>
+    </FormDrawer>
+  );
+}

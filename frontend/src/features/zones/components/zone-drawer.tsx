@@ -1,0 +1,60 @@
+import { useWatch } from 'react-hook-form';
+import { fireCurveNames, ratingPeriods, zoneInputSchema } from '@mantlet/common';
+import type { FireCurve, LevelDto, ZoneDto, ZoneInput } from '@mantlet/common';
+import { DeleteButton } from '../../../ui/form/delete-button.js';
+import { NumberField, SelectField, TextField } from '../../../ui/form/fields.js';
+import { FormDrawer } from '../../../ui/form/form-drawer.js';
+import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
+import { useDeleteZone, useSaveZone, useZones } from '../api/zones.js';
+
+const periods = ratingPeriods.map((value) => ({ value, label: `${value} minutes` }));
+const curves = (Object.keys(fireCurveNames) as FireCurve['kind'][]).map((value) => ({ value, label: fireCurveNames[value] }));
+const limits = [{ value: 15, label: '15 min, fast' }, { value: 20, label: '20 min, medium' }, { value: 25, label: '25 min, slow' }];
+const levelName = (l: LevelDto) => `${l.code} ${l.name}`;
+
+interface ZoneDrawerProps { projectId: string; zone: ZoneDto | null; levelId: string | null; levels: readonly LevelDto[]; onClose: () => void }
+
+/** What the fire engineer decides of a zone: its period, curve and where the fire strategy says so. */
+export function ZoneDrawer({ projectId, zone, levelId, levels, onClose }: ZoneDrawerProps) {
+  const zones = useZones(projectId);
+  const save = useSaveZone(projectId, zone?.id ?? null);
+  const remove = useDeleteZone(projectId);
+  const form = useContractForm(zoneInputSchema, zone
+    ? { values: { levelId: zone.levelId, code: zone.code, name: zone.name, periodMin: zone.periodMin as ZoneInput['periodMin'], curve: zone.curve, reference: zone.reference } }
+    : { defaultValues: { ...(levelId ? { levelId } : {}), code: '', name: '', curve: { kind: 'standard' }, reference: '' } });
+  useServerIssues(form, save.error);
+  const kind = useWatch({ control: form.control, name: 'curve.kind' });
+  const submit = form.handleSubmit((body) => save.mutate(zone ? { ...body, version: zone.version } : body, { onSuccess: onClose }));
+  return (
+    <FormDrawer
+      title={zone ? `Zone ${zone.code}` : 'New zone'} open onClose={onClose} onSubmit={(e) => { void submit(e); }}
+      dirty={form.formState.isDirty && !save.isSuccess} saving={save.isPending} error={save.error ?? remove.error} onReload={() => { void zones.refetch(); }}
+      extra={zone && <DeleteButton what={`zone ${zone.code}`} consequence="Only a zone without members can be deleted." busy={remove.isPending} onDelete={() => remove.mutate(zone.id, { onSuccess: onClose })} />}
+    >
+      <div className="mt-form-row">
+        <TextField control={form.control} name="code" label="Code" autoFocus />
+        <SelectField control={form.control} name="levelId" label="Level" options={levels.map((l) => ({ value: l.id, label: levelName(l) }))} />
+      </div>
+      <TextField control={form.control} name="name" label="Name" />
+      <div className="mt-form-row">
+        <SelectField control={form.control} name="periodMin" label="Period" options={periods} placeholder="Choose" />
+        <SelectField control={form.control} name="curve.kind" label="Fire curve" options={curves} />
+      </div>
+      {kind === 'parametric' && (
+        <fieldset>
+          <legend>Parametric fire</legend>
+          <p className="mt-help">EN 1991-1-2 Annex A. A member must survive the whole fire, cooling included: it is judged on its highest steel temperature, not on the period.</p>
+          <div className="mt-form-row">
+            <NumberField control={form.control} name="curve.openingFactor" label="Opening factor O" unit="m^½" help="0.02 to 0.20" />
+            <NumberField control={form.control} name="curve.thermalAbsorptivity" label="Absorptivity b" unit="J/m²s^½K" help="100 to 2200" />
+          </div>
+          <div className="mt-form-row">
+            <NumberField control={form.control} name="curve.fireLoadTotalMjPerM2" label="Fire load on the total area" unit="MJ/m²" help="50 to 1000, related to the whole enclosure" />
+            <SelectField control={form.control} name="curve.limitTimeMin" label="Limit time" options={limits} placeholder="Choose" />
+          </div>
+        </fieldset>
+      )}
+      <TextField control={form.control} name="reference" label="Reference" rows={2} help="Where the period comes from: the fire strategy's document and clause." />
+    </FormDrawer>
+  );
+}
