@@ -21,16 +21,17 @@ function degreeOfUtilisation(basis: UtilisationBasis, design: DesignBasis, worki
 }
 
 /**
- * Where buckling may govern, (4.22) does not apply. R is homogeneous of degree 1 in (k_y, k_E) and rises with both, and
- * k_E ≤ k_y, so R(θ) ≥ k_E,θ·R(20 °C) whatever the slenderness: the temperature at which k_E is μ0 is on the safe side.
+ * Where buckling may govern, (4.22) does not apply. R is homogeneous of degree 1 in (k_y, k_E) and rises with both, so
+ * R(θ) ≥ min(k_y,θ ; k_E,θ)·R(20 °C) whatever the slenderness: the temperature at which the smaller is μ0 is on the safe side.
  */
 function stabilityBound(mu0: number): { temperatureC: number; method: string; step: WorkingStep } {
-  const temperatureC = temperatureOfKe(mu0);
+  const temperatureC = Math.min(temperatureOfKy(mu0), temperatureOfKe(mu0));
   return {
-    temperatureC, method: 'inversion of k_E, safe where buckling may govern',
+    temperatureC, method: 'inversion of the smaller of k_y and k_E, safe where buckling may govern',
     step: {
-      what: 'Critical temperature of a member that may buckle', equation: 'θ_cr: k_E,θ = μ0', inputs: [{ symbol: 'μ0', value: mu0, unit: '' }],
-      note: 'R_fi,d,θ ≥ k_E,θ·R_fi,d,0 for every slenderness; the full calculation from actions gives more', value: temperatureC, unit: '°C', source: `EN 1993-1-2:2005 4.2.3.2 with ${citation(table31Source)}`,
+      what: 'Critical temperature of a member that may buckle', equation: 'θ_cr: min(k_y,θ ; k_E,θ) = μ0', inputs: [{ symbol: 'μ0', value: mu0, unit: '' }],
+      note: 'R_fi,d,θ ≥ min(k_y,θ ; k_E,θ)·R_fi,d,0 for every slenderness; the full calculation from actions gives as much or more',
+      value: temperatureC, unit: '°C', source: `EN 1993-1-2:2005 4.2.3.2 with ${citation(table31Source)}`,
     },
   };
 }

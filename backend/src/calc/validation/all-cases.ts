@@ -1,0 +1,6 @@
+import { fireSets } from './fire.cases.js';
+import { heatingSets } from './heating.cases.js';
+import { materialSets } from './material.cases.js';
+import type { ValidationSet } from './validation-case.js';
+
+export const validationSets: ValidationSet[] = [...materialSets, ...fireSets, ...heatingSets];
