@@ -10,10 +10,11 @@ import { SectionsModule } from './features/sections/sections.module.js';
 import { LevelsModule } from './features/levels/levels.module.js';
 import { ProjectsModule } from './features/projects/projects.module.js';
 import { ZonesModule } from './features/zones/zones.module.js';
+import { ProductsModule } from './features/products/products.module.js';
 import { UsersModule } from './features/users/users.module.js';
 
 /** The features of the server, one module each. */
-export const featureModules = [AuditModule, UsersModule, AuthModule, SectionsModule, AssessmentModule, QuantitiesModule, LevelsModule, ProjectsModule, ZonesModule];
+export const featureModules = [AuditModule, UsersModule, AuthModule, SectionsModule, AssessmentModule, QuantitiesModule, LevelsModule, ProjectsModule, ZonesModule, ProductsModule];
 
 @Module({})
 export class AppModule {

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { dateSchema, decimalSchema, idSchema, nameSchema, noteSchema, nonNegativeSchema, positiveSchema, versionSchema } from './primitives.js';
 import { nominalCurves, periodSchema } from './fire.js';
+import type { Message } from '../errors/message.js';
 
 export const productKinds = ['coating', 'board', 'spray'] as const;
 export type ProductKind = (typeof productKinds)[number];
@@ -98,6 +99,12 @@ export const productSupplySchema = z.object({
 });
 export type ProductSupply = z.infer<typeof productSupplySchema>;
 
+/** 2026-02-30 and the year 0 look like days and are none. */
+function isCalendarDay(text: string): boolean {
+  const day = new Date(`${text}T00:00:00Z`);
+  return text >= '1900' && !Number.isNaN(day.getTime()) && day.toISOString().startsWith(text);
+}
+
 export const productInputSchema = z.object({
   name: nameSchema,
   maker: nameSchema,
@@ -106,7 +113,7 @@ export const productInputSchema = z.object({
   invented: z.boolean().default(false),
   evidenceReference: nameSchema,
   evidenceEdition: z.string().trim().min(1, 'is needed').max(60),
-  evidenceExpiresOn: dateSchema,
+  evidenceExpiresOn: dateSchema.refine(isCalendarDay, 'is not a day of the calendar'),
   evidenceStandard: nameSchema,
   /** curves the assessment covers */
   curves: z.array(z.enum(nominalCurves)).min(1),
@@ -117,6 +124,7 @@ export const productInputSchema = z.object({
 });
 export type ProductInput = z.infer<typeof productInputSchema>;
 export const productUpdateSchema = productInputSchema.extend({ version: versionSchema });
+export type ProductUpdate = z.infer<typeof productUpdateSchema>;
 
 export interface ProductDto extends ProductInput {
   id: string;
@@ -128,3 +136,16 @@ export interface ProductDto extends ProductInput {
 }
 export type ProductSummaryDto = Omit<ProductDto, 'evidence'> & { form: Evidence['form']; usedByZones: number };
 export const productIdSchema = idSchema;
+
+/** Sent with the file of one thickness table, as form fields: first row temperatures, first column section factors. */
+export const readTableSchema = z.object({
+  shape: z.enum(evidenceShapes),
+  orientation: z.enum(orientations),
+  periodMin: z.coerce.number().pipe(periodSchema),
+  kind: z.enum(productKinds).default('coating'),
+  /** unit of the file's thicknesses where it is not the evidence's own (µm for coatings, mm for boards and sprays) */
+  fileUnit: z.enum(['µm', 'mm']).optional(),
+});
+export type ReadTable = z.infer<typeof readTableSchema>;
+/** messages: what keeps the table from being used as it stands; empty where nothing does */
+export interface ReadTableDto { table: ThicknessTable; messages: Message[] }

@@ -55,6 +55,18 @@ export const productMessages = {
   'product.stock-outside-range': (p: { stockMm: number; leastMm: number; greatestMm: number }) =>
     `Stocked thickness ${p.stockMm} mm, in as many layers as are allowed, gives nothing between ${p.leastMm} and ${p.greatestMm} mm.`,
 
+  // said when a table or an evidence file is read
+  'product.no-file': (_: Record<string, never>) => 'No file came with the request. Choose one.',
+  'product.evidence-file-kind': (p: { file: string; kind: string }) => `${p.file} is ${p.kind}. Evidence is kept as PDF, CSV or XLSX; save it as one of these.`,
+  'product.no-evidence-file': (p: { product: string }) => `No evidence file was uploaded for ${p.product} yet.`,
+  'product.table-no-temperatures': (p: { file: string }) =>
+    `${p.file} has no row of temperatures. The first row must hold the design temperatures in °C, the first column the section factors in 1/m.`,
+  'product.table-no-rows': (p: { file: string }) => `${p.file} has no rows below its temperatures. The first column must hold the section factors in 1/m.`,
+  'product.table-cell': (p: { cell: string; text: string; wanted: string }) =>
+    p.text ? `Cell ${p.cell}: "${p.text}" is not ${p.wanted}.` : `Cell ${p.cell} is empty; it must hold ${p.wanted}.`,
+  'product.table-too-large': (p: { what: string; count: number; limit: number }) => `The table has ${p.count} ${p.what}; at most ${p.limit} are read.`,
+  'product.table-row-left-out': (p: { row: number; text: string }) => `Row ${p.row}, "${p.text}", holds no numbers and was not read.`,
+
   // quantities
   'product.supply-missing': (p: { product: string; what: string }) => `Not determined: ${p.product} has no ${p.what}.`,
   'product.no-box': (p: { mark: string }) => `Not determined: member ${p.mark} has no box sides to cut boards for.`,

@@ -1,0 +1,72 @@
+import { Body, Controller, Delete, Get, HttpCode, Param, Post, Put, StreamableFile, UploadedFile, UseInterceptors } from '@nestjs/common';
+import { productInputSchema, productUpdateSchema, readTableSchema } from '@mantlet/common';
+import type { ProductDto, ProductInput, ProductSummaryDto, ProductUpdate, ReadTable, ReadTableDto } from '@mantlet/common';
+import { FileInterceptor } from '@nestjs/platform-express';
+import { AdministratorOnly, CurrentActor, SignedIn } from '../../shared/access.js';
+import type { Actor } from '../../shared/access.js';
+import { idParam } from '../../shared/validation.js';
+import { uploadLimits } from './evidence-file.js';
+import { ProductFilesService } from './product-files.service.js';
+import { ProductsService } from './products.service.js';
+
+/** The shared library: the administrator keeps it, everybody reads it. */
+@Controller('products')
+export class SharedProductsController {
+  constructor(
+    private readonly products: ProductsService,
+    private readonly files: ProductFilesService,
+  ) {}
+
+  @Get()
+  @SignedIn()
+  list(): Promise<ProductSummaryDto[]> {
+    return this.products.list(null);
+  }
+
+  @Get(':productId')
+  @SignedIn()
+  get(@Param('productId', idParam) productId: string): Promise<ProductDto> {
+    return this.products.get(null, productId);
+  }
+
+  @Post()
+  @AdministratorOnly()
+  create(@CurrentActor() actor: Actor, @Body({ schema: productInputSchema }) input: ProductInput): Promise<ProductDto> {
+    return this.products.create({ projectId: null, actor }, input);
+  }
+
+  @Post('read-table')
+  @HttpCode(200)
+  @AdministratorOnly()
+  @UseInterceptors(FileInterceptor('file', uploadLimits))
+  readTable(@UploadedFile() file: Express.Multer.File | undefined, @Body({ schema: readTableSchema }) options: ReadTable): Promise<ReadTableDto> {
+    return this.files.readTable(file, options);
+  }
+
+  @Put(':productId')
+  @AdministratorOnly()
+  update(@CurrentActor() actor: Actor, @Param('productId', idParam) productId: string, @Body({ schema: productUpdateSchema }) input: ProductUpdate): Promise<ProductDto> {
+    return this.products.update({ projectId: null, actor }, productId, input);
+  }
+
+  @Delete(':productId')
+  @HttpCode(204)
+  @AdministratorOnly()
+  remove(@CurrentActor() actor: Actor, @Param('productId', idParam) productId: string): Promise<void> {
+    return this.products.remove({ projectId: null, actor }, productId);
+  }
+
+  /** PDF, CSV or XLSX up to 10 MB. */
+  @Put(':productId/evidence-file')
+  @AdministratorOnly()
+  @UseInterceptors(FileInterceptor('file', uploadLimits))
+  storeFile(@CurrentActor() actor: Actor, @Param('productId', idParam) productId: string, @UploadedFile() file: Express.Multer.File | undefined): Promise<ProductDto> {
+    return this.files.store({ projectId: null, actor }, productId, file);
+  }
+
+  @Get(':productId/evidence-file')
+  @SignedIn()
+  fetchFile(@Param('productId', idParam) productId: string): Promise<StreamableFile> {
+    return this.files.fetch(null, productId);
+  }
+}
