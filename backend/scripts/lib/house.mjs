@@ -1,4 +1,5 @@
 /** The frame of every command: sentences for people, and everything that was started stopped again. */
+import { readFileSync } from 'node:fs';
 
 /** Something the person at the terminal can settle; shown as its sentence, without a stack. */
 export class Problem extends Error {}
@@ -46,12 +47,22 @@ export function close(code) {
   return closing;
 }
 
+/** npm runs us through a shell: the shell's parent tells whether npm still lives. */
+function parents() {
+  try {
+    const [, name, , parent] = /^\d+ \((.*)\) (\S) (\d+)/.exec(readFileSync(`/proc/${process.ppid}/stat`, 'utf8')) ?? [];
+    return name === 'sh' ? `${process.ppid} ${parent}` : String(process.ppid);
+  } catch {
+    return 'gone';
+  }
+}
+
 /** npm may be killed without passing the signal on; its child would then hold the port and the database. */
 function closeWithNpm() {
   if (!process.env.npm_lifecycle_event) return;
-  const parent = process.ppid;
+  const atStart = parents();
   setInterval(() => {
-    if (process.ppid !== parent) void close(1);
+    if (parents() !== atStart) void close(1);
   }, 1000).unref();
 }
 
