@@ -46,21 +46,36 @@ export function tension(c: CriticalTemperatureCase, effect: number, { fy, gamma 
   };
 }
 
-/** Root of χ·k_y = share: the row of Table 3.1 by bisection, then the temperature within it. */
+/** Root of χ·k_y = share: the row of Table 3.1 by bisection, then the temperature within it by false position (Illinois). */
 function bucklingTemperature(share: number, slenderness: number, imperfection: number): number {
+  const excess = (temperatureC: number) => bucklingShare(temperatureC, slenderness, imperfection) - share;
   let low = 0;
   let high = table31Rows.length - 1;
   while (high - low > 1) {
     const middle = (low + high) >> 1;
-    if (bucklingShare(table31Rows[middle]![0], slenderness, imperfection) >= share) low = middle;
+    if (excess(table31Rows[middle]![0]) >= 0) low = middle;
     else high = middle;
   }
   let a = table31Rows[low]![0];
   let b = table31Rows[high]![0];
-  for (let i = 0; i < 40 && b - a > 1e-7; i += 1) {
-    const middle = (a + b) / 2;
-    if (bucklingShare(middle, slenderness, imperfection) >= share) a = middle;
-    else b = middle;
+  let above = excess(a);
+  let below = excess(b);
+  let side = 0;
+  for (let i = 0; i < 60 && b - a > 1e-9; i += 1) {
+    const between = (a * below - b * above) / (below - above);
+    const value = excess(between);
+    if (Math.abs(value) <= 1e-13) return between;
+    if (value > 0) {
+      a = between;
+      above = value;
+      if (side === 1) below /= 2;
+      side = 1;
+    } else {
+      b = between;
+      below = value;
+      if (side === -1) above /= 2;
+      side = -1;
+    }
   }
   return a;
 }

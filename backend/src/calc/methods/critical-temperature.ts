@@ -124,7 +124,8 @@ function calculated(c: CriticalTemperatureCase, design: MemberDesign, working: W
     return { kind: 'under-strength', governing: worst.name, utilisation: worst.utilisation, limitStates, reason, way };
   }
   const lowest = limitStates.reduce((a, b) => (b.temperatureC < a.temperatureC ? b : a));
-  const bare = Math.min(...states.map((state) => state.temperature(true)));
+  // only bending knows κ1, so only it differs for bare steel
+  const bare = states.reduce((least, s, i) => Math.min(least, s.name === 'bending' ? s.temperature(true) : limitStates[i]!.temperatureC), Infinity);
   if (working) explainStates(states, limitStates, working);
   const cap = class4 ? c.design.class4TemperatureC : Infinity;
   const capped = cap < lowest.temperatureC;

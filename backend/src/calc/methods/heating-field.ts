@@ -26,81 +26,109 @@ const RATIO = Math.log(GREATEST / LEAST) / (ROWS - 1);
 const STEP_S = 1;
 const KEEP_EVERY = 3;
 const NODE_MIN = (STEP_S * KEEP_EVERY) / 60;
+/** nodes integrated at a time when looking for a temperature: 10 min */
+const FILL_AHEAD = 200;
 export const FIELD_HORIZON_MIN = 240;
 
-function fillRow(row: Float32Array, factor: number, gas: GasHistory, convection: number, radiation: number): void {
-  const rate = (factor * STEP_S) / STEEL_DENSITY_KG_PER_M3;
-  let steelC = START_C;
-  row[0] = steelC;
-  for (let node = 1, i = 0; node < row.length; node += 1) {
-    for (let k = 0; k < KEEP_EVERY; k += 1, i += 1) {
-      const kelvin = steelC + 273;
-      const square = kelvin * kelvin;
-      const flux = convection * (gas.middleC[i]! - steelC) + radiation * (gas.middle4[i]! - square * square);
-      steelC += (rate * flux) / steelSpecificHeat(steelC);
-    }
-    row[node] = steelC;
-  }
+/** The history of one k_sh·A_m/V, integrated only as far as anybody has asked. */
+interface Row {
+  rate: number;
+  /** °C at each node; known up to and including `filled` */
+  nodesC: Float64Array;
+  filled: number;
 }
 
 class Field implements BareField {
-  private readonly rows: (Float32Array | undefined)[] = new Array<Float32Array | undefined>(ROWS);
+  private readonly rows: (Row | undefined)[] = new Array<Row | undefined>(ROWS);
   private readonly nodes = Math.round(FIELD_HORIZON_MIN / NODE_MIN) + 1;
   private readonly curve: FireCurve;
   private readonly gas: GasHistory;
+  private readonly convection: number;
+  private readonly radiation: number;
 
   constructor(kind: NominalCurve, private readonly emissivity: number) {
     this.curve = { kind };
     this.gas = gasHistory(this.curve, STEP_S, FIELD_HORIZON_MIN);
+    this.convection = convectionCoefficient(this.curve);
+    this.radiation = FIRE_EMISSIVITY * emissivity * STEFAN_BOLTZMANN_W_PER_M2K4;
   }
 
-  /** integrated when first asked for: a few members under a rare curve do not pay for the whole field */
-  private row(index: number): Float32Array {
+  private row(index: number): Row {
     let row = this.rows[index];
     if (!row) {
-      row = new Float32Array(this.nodes);
-      const radiation = FIRE_EMISSIVITY * this.emissivity * STEFAN_BOLTZMANN_W_PER_M2K4;
-      fillRow(row, LEAST * Math.exp(index * RATIO), this.gas, convectionCoefficient(this.curve), radiation);
+      const rate = (LEAST * Math.exp(index * RATIO) * STEP_S) / STEEL_DENSITY_KG_PER_M3;
+      row = { rate, nodesC: new Float64Array(this.nodes), filled: 0 };
+      row.nodesC[0] = START_C;
       this.rows[index] = row;
     }
     return row;
   }
 
-  /** the two rows about k_sh·A_m/V and the share of the second; null outside the series */
-  private between(sectionFactorPerM: number, shadowFactor: number): { low: Float32Array; high: Float32Array; share: number } | null {
+  private fill(row: Row, upTo: number): void {
+    const { middleC, middle4 } = this.gas;
+    const { rate, nodesC } = row;
+    const { convection, radiation } = this;
+    let steelC = nodesC[row.filled]!;
+    for (let node = row.filled + 1, i = row.filled * KEEP_EVERY; node <= upTo; node += 1) {
+      for (let k = 0; k < KEEP_EVERY; k += 1, i += 1) {
+        const kelvin = steelC + 273;
+        const square = kelvin * kelvin;
+        steelC += (rate * (convection * (middleC[i]! - steelC) + radiation * (middle4[i]! - square * square))) / steelSpecificHeat(steelC);
+      }
+      nodesC[node] = steelC;
+    }
+    row.filled = Math.max(row.filled, upTo);
+  }
+
+  /** position of k_sh·A_m/V among the rows; null outside them */
+  private position(sectionFactorPerM: number, shadowFactor: number): number | null {
     const factor = shadowFactor * Math.max(sectionFactorPerM, LEAST_SECTION_FACTOR_PER_M);
-    if (factor < LEAST || factor >= GREATEST) return null;
-    const position = Math.log(factor / LEAST) / RATIO;
-    const index = Math.min(Math.floor(position), ROWS - 2);
-    return { low: this.row(index), high: this.row(index + 1), share: position - index };
+    return factor < LEAST || factor >= GREATEST ? null : Math.log(factor / LEAST) / RATIO;
   }
 
   temperatureC(sectionFactorPerM: number, shadowFactor: number, minutes: number): number {
-    const b = minutes <= FIELD_HORIZON_MIN ? this.between(sectionFactorPerM, shadowFactor) : null;
-    if (!b) return unprotectedTemperature({ sectionFactorPerM, shadowFactor, curve: this.curve, emissivity: this.emissivity, minutes, stepS: STEP_S });
-    const position = minutes / NODE_MIN;
-    const node = Math.min(Math.floor(position + 1e-9), this.nodes - 2);
-    const at = (n: number) => b.low[n]! + (b.high[n]! - b.low[n]!) * b.share;
-    const before = at(node);
-    return before + (at(node + 1) - before) * (position - node);
+    const place = minutes <= FIELD_HORIZON_MIN ? this.position(sectionFactorPerM, shadowFactor) : null;
+    if (place === null) return unprotectedTemperature({ sectionFactorPerM, shadowFactor, curve: this.curve, emissivity: this.emissivity, minutes, stepS: STEP_S });
+    const index = Math.min(Math.floor(place), ROWS - 2);
+    const low = this.row(index);
+    const high = this.row(index + 1);
+    const when = minutes / NODE_MIN;
+    const node = Math.min(Math.floor(when + 1e-9), this.nodes - 2);
+    if (low.filled <= node) this.fill(low, node + 1);
+    if (high.filled <= node) this.fill(high, node + 1);
+    const before = between(low, high, node, place - index);
+    return before + (between(low, high, node + 1, place - index) - before) * (when - node);
   }
 
   minutesTo(sectionFactorPerM: number, shadowFactor: number, targetC: number): number | null {
     if (targetC <= START_C) return 0;
-    const b = this.between(sectionFactorPerM, shadowFactor);
-    if (!b) return bareMinutes({ sectionFactorPerM, shadowFactor, curve: this.curve, emissivity: this.emissivity, targetC, stepS: STEP_S });
-    const at = (n: number) => b.low[n]! + (b.high[n]! - b.low[n]!) * b.share;
-    let low = 0;
-    let high = this.nodes - 1;
-    if (at(high) < targetC) return null;
-    while (high - low > 1) {
-      const middle = (low + high) >> 1;
-      if (at(middle) < targetC) low = middle;
-      else high = middle;
+    const place = this.position(sectionFactorPerM, shadowFactor);
+    if (place === null) return bareMinutes({ sectionFactorPerM, shadowFactor, curve: this.curve, emissivity: this.emissivity, targetC, stepS: STEP_S });
+    const index = Math.min(Math.floor(place), ROWS - 2);
+    const low = this.row(index);
+    const high = this.row(index + 1);
+    const share = place - index;
+    let until = Math.min(low.filled, high.filled);
+    while (until < this.nodes - 1 && between(low, high, until, share) < targetC) {
+      until = Math.min(until + FILL_AHEAD, this.nodes - 1);
+      if (low.filled < until) this.fill(low, until);
+      if (high.filled < until) this.fill(high, until);
     }
-    const before = at(low);
-    return (low + (targetC - before) / (at(high) - before)) * NODE_MIN;
+    if (between(low, high, until, share) < targetC) return null;
+    let from = 0;
+    while (until - from > 1) {
+      const middle = (from + until) >> 1;
+      if (between(low, high, middle, share) < targetC) from = middle;
+      else until = middle;
+    }
+    const before = between(low, high, from, share);
+    return (from + (targetC - before) / (between(low, high, until, share) - before)) * NODE_MIN;
   }
+}
+
+function between(low: Row, high: Row, node: number, share: number): number {
+  const a = low.nodesC[node]!;
+  return a + (high.nodesC[node]! - a) * share;
 }
 
 const MAX_KEPT = 8;
