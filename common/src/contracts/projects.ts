@@ -53,7 +53,7 @@ export interface ProjectDto {
   /** the open revision, else the issued one; for those who see issued work only, the issued one */
   revision: { id: string; code: string; state: RevisionState } | null;
   issuedRevision: { id: string; code: string } | null;
-  /** of work in progress; for those who see issued work only, members as issued and the rest 0 */
+  /** of work in progress; for those who see issued work only, of the issued revision, in which nothing is open */
   counts: { levels: number; zones: number; members: number; products: number; open: number };
 }
 

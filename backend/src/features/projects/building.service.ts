@@ -47,8 +47,14 @@ export class BuildingService {
   }
 
   /** Members of the zones as the issued revision froze them. */
-  private async issuedMembersByZone(_projectId: string): Promise<Map<string, number>> {
-    return new Map();
+  private async issuedMembersByZone(projectId: string): Promise<Map<string, number>> {
+    const rows: { zoneId: string; members: string }[] = await this.dataSource.manager.query(
+      `SELECT m->>'zoneId' AS "zoneId", count(*) AS members
+         FROM revisions r, jsonb_array_elements(r.snapshot::jsonb->'members') m
+        WHERE r.project_id = $1 AND r.state = 'issued' GROUP BY 1`,
+      [projectId],
+    );
+    return new Map(rows.map(({ zoneId, members }) => [zoneId, Number(members)]));
   }
 }
 

@@ -70,7 +70,7 @@ export class ProjectOverviewService {
       settings: designs ? project.settings : null,
       revision: current && { id: current.id, code: current.code, state: current.state },
       issuedRevision: issued && { id: issued.id, code: issued.code },
-      counts: designs ? await this.countsOf(id) : { levels: 0, zones: 0, members: issued?.members ?? 0, products: 0, open: 0 },
+      counts: designs ? await this.countsOf(id) : await this.issuedCounts(issued),
     };
   }
 
@@ -83,6 +83,19 @@ export class ProjectOverviewService {
       products: await manager.count(Product, { where: [{ projectId }, { projectId: IsNull() }] }),
       members: tally.members, open: tally.open,
     };
+  }
+
+  /** What the issued revision froze; nothing of it is open. */
+  private async issuedCounts(issued: RevisionHead | null): Promise<ProjectDto['counts']> {
+    const rows: Omit<ProjectDto['counts'], 'members' | 'open'>[] = issued
+      ? await this.dataSource.manager.query(
+          `SELECT jsonb_array_length(s->'levels') AS levels, jsonb_array_length(s->'zones') AS zones, jsonb_array_length(s->'products') AS products
+             FROM (SELECT snapshot::jsonb AS s FROM revisions WHERE id = $1) issued`,
+          [issued.id],
+        )
+      : [];
+    const { levels, zones, products } = rows[0] ?? { levels: 0, zones: 0, products: 0 };
+    return { levels, zones, products, members: issued?.members ?? 0, open: 0 };
   }
 
   private async talliesOf(projectIds: string[]): Promise<Map<string, Tally>> {
