@@ -5,16 +5,20 @@ import { dataSourceOptions } from './database/data-source-options.js';
 import { AssessmentModule } from './features/assessment/assessment.module.js';
 import { AuditModule } from './features/audit/audit.module.js';
 import { AuthModule } from './features/auth/auth.module.js';
+import { MembersModule } from './features/members/members.module.js';
+import { ImportsModule } from './features/imports/imports.module.js';
 import { QuantitiesModule } from './features/quantities/quantities.module.js';
 import { SectionsModule } from './features/sections/sections.module.js';
 import { LevelsModule } from './features/levels/levels.module.js';
 import { ProjectsModule } from './features/projects/projects.module.js';
 import { ZonesModule } from './features/zones/zones.module.js';
 import { ProductsModule } from './features/products/products.module.js';
+import { RevisionsModule } from './features/revisions/revisions.module.js';
+import { SiteModule } from './features/site/site.module.js';
 import { UsersModule } from './features/users/users.module.js';
 
 /** The features of the server, one module each. */
-export const featureModules = [AuditModule, UsersModule, AuthModule, SectionsModule, AssessmentModule, QuantitiesModule, LevelsModule, ProjectsModule, ZonesModule, ProductsModule];
+export const featureModules = [AuditModule, UsersModule, AuthModule, SectionsModule, AssessmentModule, QuantitiesModule, LevelsModule, ProjectsModule, ZonesModule, ProductsModule  , MembersModule, RevisionsModule, SiteModule];
 
 @Module({})
 export class AppModule {

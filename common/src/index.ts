@@ -9,6 +9,7 @@ export * from './contracts/site.js';
 export * from './contracts/revisions.js';
 export * from './contracts/imports.js';
 export * from './contracts/members.js';
+export * from './contracts/member-sentence.js';
 export * from './contracts/zones.js';
 export * from './contracts/projects.js';
 export * from './contracts/accounts.js';

@@ -25,7 +25,7 @@ export const importMappingSchema = z.object({
   columns: z.partialRecord(z.enum(importFields), z.number().int().min(0).max(1000)),
   lengthUnit: z.enum(importLengthUnits).default('mm'),
   temperatureUnit: z.enum(['C', 'F']).default('C'),
-  /** used where the file has no column or an empty cell */
+  /** for new members, where the file has no column or an empty cell; a member already there keeps what it has */
   defaults: z.object({
     zoneId: idSchema.nullable().default(null),
     memberType: z.enum(memberTypes).nullable().default(null),
@@ -38,7 +38,18 @@ export type ImportMapping = z.infer<typeof importMappingSchema>;
 export const importConfirmSchema = z.object({ leaveOutWrongRows: z.boolean().default(false) });
 export type ImportConfirm = z.infer<typeof importConfirmSchema>;
 
-export interface ImportSheetDto { name: string; rows: number; headerRow: number; headers: string[]; firstRows: string[][] }
+export interface ImportSheetDto {
+  name: string;
+  /** up to the last one with content */
+  rows: number;
+  /** 1-based, as understood */
+  headerRow: number;
+  headers: string[];
+  /** what this sheet's headers were taken to mean */
+  columns: ImportMapping['columns'];
+  /** the first 20 rows as they stand, titles and headers included: [0] is row 1 */
+  firstRows: string[][];
+}
 export interface ImportDto {
   id: string; fileName: string; state: 'mapping' | 'previewed' | 'confirmed' | 'abandoned'; createdAt: string;
   sheets: ImportSheetDto[];
@@ -56,6 +67,8 @@ export interface ImportRowDto {
   changes: { field: ImportField; old: string; new: string }[];
 }
 export interface ImportPreviewDto {
+  /** what was skipped or ignored, in sentences */
+  notes: string[];
   counts: Record<ImportRowState, number>;
   rows: ImportRowDto[];
   total: number; page: number; pageSize: number;

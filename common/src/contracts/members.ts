@@ -41,6 +41,7 @@ export const bulkMemberSchema = z.object({
     .refine((s) => Object.keys(s).length > 0, 'choose at least one field to set'),
 });
 export type BulkMember = z.infer<typeof bulkMemberSchema>;
+export const memberDeleteQuerySchema = z.object({ version: z.coerce.number().int().min(1) });
 export const memberIdsSchema = z.object({ memberIds: z.array(idSchema).min(1).max(5000) });
 
 /** A signed acceptance, by the fire engineer; it holds only while the accepted value stands. */
@@ -51,6 +52,8 @@ export const acceptanceSchema = z.object({
   reason: z.string().trim().min(3, 'say why').max(1000),
 });
 export type Acceptance = z.infer<typeof acceptanceSchema>;
+export const acceptanceWithdrawalSchema = acceptanceSchema.omit({ reason: true });
+export type AcceptanceWithdrawal = z.infer<typeof acceptanceWithdrawalSchema>;
 export interface AcceptanceDto { kind: (typeof acceptanceKinds)[number]; valueC: number | null; reason: string; by: string; at: string; stillHolds: boolean }
 
 export const memberSortKeys = ['mark', 'level', 'zone', 'type', 'section', 'sectionFactor', 'criticalTemperature', 'thickness', 'verdict', 'quantity', 'length'] as const;

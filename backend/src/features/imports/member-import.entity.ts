@@ -15,6 +15,8 @@ export class MemberImport {
   /** every cell as text, per sheet; dropped when confirmed or abandoned */
   @Column('jsonb', { nullable: true, select: false }) cells!: { name: string; rows: string[][] }[] | null;
   @Column('jsonb') mapping!: ImportMapping;
+  /** what the last preview showed; confirming writes that or nothing */
+  @Column('text', { nullable: true }) previewDigest!: string | null;
   @Column('jsonb', { default: [] }) notes!: string[];
   @CreateDateColumn({ type: 'timestamptz' }) createdAt!: Date;
   @ManyToOne(() => Project, { onDelete: 'CASCADE' }) @JoinColumn({ name: 'project_id' }) project!: Relation<Project>;

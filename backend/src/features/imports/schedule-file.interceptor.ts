@@ -1,0 +1,29 @@
+import { HttpStatus, Injectable, PayloadTooLargeException } from '@nestjs/common';
+import type { CallHandler, ExecutionContext, NestInterceptor } from '@nestjs/common';
+import { message } from '@mantlet/common';
+import { FileInterceptor } from '@nestjs/platform-express';
+import type { Observable } from 'rxjs';
+import { Refusal } from '../../shared/refusal.js';
+import { fileLimits, megabytes } from './reading/limits.js';
+
+const FileReader = FileInterceptor('file', { limits: { fileSize: fileLimits.uploadBytes, files: 1, fields: 10, fieldSize: 10_000 } });
+
+/** Reads the multipart `file` into memory, and says in words where it is too large. */
+@Injectable()
+export class ScheduleFileInterceptor extends FileReader implements NestInterceptor {
+  override async intercept(context: ExecutionContext, next: CallHandler): Promise<Observable<unknown>> {
+    try {
+      return await super.intercept(context, next);
+    } catch (error) {
+      if (!(error instanceof PayloadTooLargeException)) throw error;
+      throw new Refusal(HttpStatus.PAYLOAD_TOO_LARGE, message('import.too-large', { limitMb: megabytes(fileLimits.uploadBytes) }));
+    }
+  }
+}
+
+/** Browsers send names in UTF-8; the multipart reader takes them for Latin-1. No control characters, no paths. */
+export function uploadedName(file: Express.Multer.File): string {
+  const utf8 = Buffer.from(file.originalname, 'latin1').toString('utf8');
+  const name = utf8.includes('\uFFFD') ? file.originalname : utf8;
+  return (name.replace(/[\p{Cc}\p{Surrogate}]/gu, '').split(/[\\/]/).pop() ?? '').trim().slice(-200) || 'The file';
+}

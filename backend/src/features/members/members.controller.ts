@@ -1,0 +1,98 @@
+import { Body, Controller, Delete, Get, HttpCode, HttpStatus, Param, Patch, Post, Put, Query } from '@nestjs/common';
+import {
+  acceptanceSchema, acceptanceWithdrawalSchema, bulkMemberSchema, memberDeleteQuerySchema, memberIdsSchema, memberInputSchema, memberQuerySchema,
+  memberStructuralSchema, memberUpdateSchema,
+} from '@mantlet/common';
+import type {
+  Acceptance, AcceptanceWithdrawal, BulkMember, MemberDto, MemberInput, MemberQuery, MemberRowDto, MemberSheetDto, MemberStructural, MemberUpdate, Page,
+} from '@mantlet/common';
+import { DesignTeam, Roles, Scope } from '../../shared/access.js';
+import type { ProjectScope } from '../../shared/access.js';
+import { idParam } from '../../shared/validation.js';
+import { AcceptancesService } from './acceptances.service.js';
+import { MemberListService } from './member-list.service.js';
+import { MemberSheetService } from './member-sheet.service.js';
+import { MembersService } from './members.service.js';
+
+/** Members of a project. What the specifier and the structural engineer decide are separate routes with separate fields. */
+@Controller('projects/:projectId/members')
+export class MembersController {
+  constructor(
+    private readonly members: MembersService,
+    private readonly lists: MemberListService,
+    private readonly sheets: MemberSheetService,
+  ) {}
+
+  @Get()
+  @DesignTeam()
+  list(@Scope() scope: ProjectScope, @Query({ schema: memberQuerySchema }) query: MemberQuery): Promise<Page<MemberRowDto>> {
+    return this.lists.list(scope.projectId, query);
+  }
+
+  @Get(':memberId')
+  @DesignTeam()
+  sheet(@Scope() scope: ProjectScope, @Param('memberId', idParam) memberId: string): Promise<MemberSheetDto> {
+    return this.sheets.sheet(scope.projectId, memberId);
+  }
+
+  @Post()
+  @Roles('specifier')
+  create(@Scope() scope: ProjectScope, @Body({ schema: memberInputSchema }) input: MemberInput): Promise<MemberDto> {
+    return this.members.create(scope, input);
+  }
+
+  /** All or none of them. */
+  @Post('bulk')
+  @HttpCode(HttpStatus.OK)
+  @Roles('specifier')
+  setMany(@Scope() scope: ProjectScope, @Body({ schema: bulkMemberSchema }) input: BulkMember): Promise<{ changed: number }> {
+    return this.members.setMany(scope, input);
+  }
+
+  @Post('delete')
+  @HttpCode(HttpStatus.OK)
+  @Roles('specifier')
+  removeMany(@Scope() scope: ProjectScope, @Body({ schema: memberIdsSchema }) { memberIds }: { memberIds: string[] }): Promise<{ deleted: number }> {
+    return this.members.removeMany(scope, memberIds);
+  }
+
+  @Patch(':memberId')
+  @Roles('specifier')
+  update(@Scope() scope: ProjectScope, @Param('memberId', idParam) memberId: string, @Body({ schema: memberUpdateSchema }) input: MemberUpdate): Promise<MemberDto> {
+    return this.members.update(scope, memberId, input);
+  }
+
+  @Put(':memberId/structural')
+  @Roles('structural-engineer')
+  setStructural(
+    @Scope() scope: ProjectScope, @Param('memberId', idParam) memberId: string, @Body({ schema: memberStructuralSchema }) input: MemberStructural,
+  ): Promise<MemberDto> {
+    return this.members.setStructural(scope, memberId, input);
+  }
+
+  @Delete(':memberId')
+  @HttpCode(HttpStatus.NO_CONTENT)
+  @Roles('specifier')
+  remove(@Scope() scope: ProjectScope, @Param('memberId', idParam) memberId: string, @Query({ schema: memberDeleteQuerySchema }) { version }: { version: number }): Promise<void> {
+    return this.members.remove(scope, memberId, version);
+  }
+}
+
+/** The fire engineer's signatures under assumed and high temperatures and under leaving steel bare. */
+@Controller('projects/:projectId/acceptances')
+export class AcceptancesController {
+  constructor(private readonly acceptances: AcceptancesService) {}
+
+  @Post()
+  @HttpCode(HttpStatus.OK)
+  @Roles('fire-engineer')
+  accept(@Scope() scope: ProjectScope, @Body({ schema: acceptanceSchema }) input: Acceptance): Promise<{ accepted: number }> {
+    return this.acceptances.accept(scope, input);
+  }
+
+  @Delete()
+  @Roles('fire-engineer')
+  withdraw(@Scope() scope: ProjectScope, @Body({ schema: acceptanceWithdrawalSchema }) input: AcceptanceWithdrawal): Promise<{ withdrawn: number }> {
+    return this.acceptances.withdraw(scope, input);
+  }
+}

@@ -1,0 +1,129 @@
+import { Injectable } from '@nestjs/common';
+import { message } from '@mantlet/common';
+import type { BulkMember, Exposure, MemberDto, MemberInput, MemberStructural, MemberUpdate } from '@mantlet/common';
+import { InjectDataSource } from '@nestjs/typeorm';
+import { DataSource, In } from 'typeorm';
+import type { EntityManager } from 'typeorm';
+import type { ProjectScope } from '../../shared/access.js';
+import { conflict, notFound, requireVersion } from '../../shared/refusal.js';
+import { AssessmentService } from '../assessment/assessment.service.js';
+import { AuditService } from '../audit/audit.service.js';
+import { toMemberDto } from './member-mapper.js';
+import { MemberWriterService } from './member-writer.service.js';
+import { Member } from './member.entity.js';
+
+/** Members one by one and many at once: the specifier's part, and the structural engineer's. */
+@Injectable()
+export class MembersService {
+  constructor(
+    @InjectDataSource() private readonly dataSource: DataSource,
+    private readonly writer: MemberWriterService,
+    private readonly assessment: AssessmentService,
+    private readonly audit: AuditService,
+  ) {}
+
+  /** A member of the project as its form shows it. @throws Refusal 404 */
+  async find(manager: EntityManager, projectId: string, memberId: string): Promise<MemberDto> {
+    const member = await manager.findOne(Member, {
+      where: { id: memberId, projectId }, relations: { acceptances: { acceptedBy: true }, basisSetBy: true, result: true },
+    });
+    if (!member) throw notFound('member');
+    return toMemberDto(member, (acceptance, result) => this.assessment.holds(acceptance, result));
+  }
+
+  /** A new member's critical temperature is not given until the structural engineer says. */
+  async create(scope: ProjectScope, input: MemberInput): Promise<MemberDto> {
+    return this.dataSource.transaction(async (manager) => {
+      await this.writer.lock(manager, scope.projectId);
+      await this.writer.check(manager, scope.projectId, input, null);
+      const [id] = await this.writer.insert(manager, scope, [{ ...input, exposure: tidy(input.exposure) }], 'member made');
+      await this.writer.settle(manager, scope.projectId, [input.zoneId]);
+      return this.find(manager, scope.projectId, id as string);
+    });
+  }
+
+  async update(scope: ProjectScope, memberId: string, { version, ...input }: MemberUpdate): Promise<MemberDto> {
+    return this.change(scope, memberId, version, 'member changed', async (manager) => {
+      await this.writer.check(manager, scope.projectId, input, memberId);
+      return { ...input, exposure: tidy(input.exposure) };
+    });
+  }
+
+  /** The structural engineer's alone; stored with who and when. */
+  async setStructural(scope: ProjectScope, memberId: string, { version, basis }: MemberStructural): Promise<MemberDto> {
+    return this.change(scope, memberId, version, 'critical temperature set', async () => ({ basis }));
+  }
+
+  private async change(
+    scope: ProjectScope, memberId: string, version: number, action: string,
+    decide: (manager: EntityManager) => Promise<Partial<Pick<Member, keyof MemberInput | 'basis'>>>,
+  ): Promise<MemberDto> {
+    return this.dataSource.transaction(async (manager) => {
+      await this.writer.lock(manager, scope.projectId);
+      const before = await manager.findOneBy(Member, { id: memberId, projectId: scope.projectId });
+      if (!before) throw notFound('member');
+      requireVersion('member', before, version, await this.find(manager, scope.projectId, memberId));
+      const set = await decide(manager);
+      const changed = await this.writer.update(manager, scope, [{ before, set }], action);
+      if (changed) await this.writer.settle(manager, scope.projectId, [before.zoneId, set.zoneId ?? before.zoneId]);
+      return this.find(manager, scope.projectId, memberId);
+    });
+  }
+
+  /** The same fields for all; all or none. */
+  async setMany(scope: ProjectScope, { memberIds, set }: BulkMember): Promise<{ changed: number }> {
+    return this.dataSource.transaction(async (manager) => {
+      const members = await this.lockMembers(manager, scope.projectId, memberIds);
+      await this.writer.check(manager, scope.projectId, set, null);
+      const tidied = set.exposure ? { ...set, exposure: tidy(set.exposure) } : set;
+      const changed = await this.writer.update(manager, scope, members.map((before) => ({ before, set: tidied })), 'members changed together');
+      if (changed) await this.writer.settle(manager, scope.projectId, [...members.map((m) => m.zoneId), ...(set.zoneId ? [set.zoneId] : [])]);
+      return { changed };
+    });
+  }
+
+  async remove(scope: ProjectScope, memberId: string, version: number): Promise<void> {
+    await this.dataSource.transaction(async (manager) => {
+      await this.writer.lock(manager, scope.projectId);
+      const member = await manager.findOneBy(Member, { id: memberId, projectId: scope.projectId });
+      if (!member) throw notFound('member');
+      requireVersion('member', member, version, await this.find(manager, scope.projectId, memberId));
+      await this.erase(manager, scope, [member]);
+    });
+  }
+
+  async removeMany(scope: ProjectScope, memberIds: string[]): Promise<{ deleted: number }> {
+    return this.dataSource.transaction(async (manager) => {
+      const members = await this.lockMembers(manager, scope.projectId, memberIds);
+      await this.erase(manager, scope, members);
+      return { deleted: members.length };
+    });
+  }
+
+  private async erase(manager: EntityManager, scope: ProjectScope, members: readonly Member[]): Promise<void> {
+    await manager.delete(Member, { id: In(members.map((m) => m.id)) });
+    await this.audit.record(
+      manager,
+      ...members.map((member) => ({
+        projectId: scope.projectId, actor: scope.actor, action: 'member deleted', entity: 'member', entityId: member.id, label: member.mark,
+        changes: (['memberType', 'grade', 'lengthMm', 'quantity', 'basis'] as const).map((field) => ({ field, old: member[field], new: null })),
+      })),
+    );
+    await this.writer.settle(manager, scope.projectId, members.map((m) => m.zoneId));
+  }
+
+  /** All of them, of this project, and no other writer until the end. @throws Refusal where one is missing */
+  async lockMembers(manager: EntityManager, projectId: string, memberIds: readonly string[]): Promise<Member[]> {
+    await this.writer.lock(manager, projectId);
+    const wanted = [...new Set(memberIds)];
+    const members = await manager.findBy(Member, { id: In(wanted), projectId });
+    if (members.length < wanted.length) throw conflict(message('member.some-unknown', { count: wanted.length - members.length }));
+    return members;
+  }
+}
+
+/** Named faces belong to "faces as given" alone. */
+function tidy(exposure: Exposure): Exposure {
+  const { arrangement, faces, reason } = exposure;
+  return arrangement === 'given-faces' ? { arrangement, faces: [...new Set(faces)], reason } : { arrangement, reason };
+}
