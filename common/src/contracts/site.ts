@@ -12,6 +12,8 @@ export interface SiteMaterialDto {
   thickness: string | null;
   productName: string; kind: ProductKind; areaM2: string;
   litres: string | null; containers: number | null; kg: string | null; sheets: number | null; sheetSize: string | null; wastePercent: string | null;
+  /** stock sheet used, cutting waste included */
+  sheetM2: string | null;
   volumeM3: string | null; bags: number | null;
   /** null unless prices are given to the contractor */
   money: string | null;

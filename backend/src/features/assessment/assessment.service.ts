@@ -7,7 +7,7 @@ import { determineSectionOutline, explainMember } from '../../calc/index.js';
 import type { TakeoffMember } from '../../calc/index.js';
 import { notFound } from '../../shared/refusal.js';
 import { acceptanceHolds, inputHashes, resolveCases, withSteelReason } from './member-case.js';
-import type { ProjectInputs } from './project-inputs.service.js';
+import type { InputAcceptance, ProjectInputs } from './project-inputs.service.js';
 import { ProjectInputsService } from './project-inputs.service.js';
 import { storeOutcomes, storeZones, storedOutcomes } from './result-store.js';
 import { assessInputs, takeoffMember, zoneHash } from './zone-outcome.js';
@@ -24,6 +24,12 @@ export interface MemberExplanation {
 export interface StaleResults {
   memberIds: string[];
   zoneIds: string[];
+}
+
+export interface StoredResult {
+  result: MemberResultDto;
+  areaM2: number | null;
+  inputsHash: string;
 }
 
 /** Keeps results current with their inputs. */
@@ -82,6 +88,17 @@ export class AssessmentService {
         appliedThickness: applies ? stored.appliedThickness : null, layers: applies ? stored.layers : result.layers,
       },
     };
+  }
+
+  /** Stored results by member. */
+  async storedResults(manager: EntityManager, zoneIds: string[]): Promise<Map<string, StoredResult>> {
+    const stored = await storedOutcomes(manager, zoneIds);
+    return new Map([...stored].map(([id, { memberId: _m, open: _o, inputsHash, areaM2, ...result }]) => [id, { result, areaM2, inputsHash }]));
+  }
+
+  /** Whether a signature still stands under the value it was given for. */
+  holds(acceptance: InputAcceptance, result: MemberResultDto): boolean {
+    return acceptanceHolds([acceptance], acceptance.kind, result);
   }
 
   /** Members that carry protection by their stored results, as the takeoff counts them. */

@@ -62,7 +62,9 @@ function settleZone(inputs: ProjectInputs, zoneId: string, pairs: Pair[]): ZoneO
   for (const pair of pairs) {
     const { outcome } = pair;
     if (outcome.verdict !== 'protected' || outcome.productId === null || outcome.requiredThickness === null) continue;
-    byProduct.set(outcome.productId, [...(byProduct.get(outcome.productId) ?? []), pair]);
+    const group = byProduct.get(outcome.productId);
+    if (group) group.push(pair);
+    else byProduct.set(outcome.productId, [pair]);
   }
   const targets = [...byProduct].map(([productId, group]) => applyTarget(inputs, productId, group));
   for (const { resolved, outcome } of pairs) outcome.open = isOpen(outcome, resolved.product?.expired ?? false);

@@ -1,0 +1,63 @@
+import { formatDecimal, formatNumber, productKindNames, sentence } from '@mantlet/common';
+import type { PurchaseDto, QuantityTotals, ScheduleSnapshot } from '@mantlet/common';
+import type { Content } from 'pdfmake/interfaces.js';
+import { heading, paragraph, schedule, subheading } from './layout.js';
+
+interface QuantityRow { level: string; product: string; totals: QuantityTotals }
+
+const amounts = [
+  { head: 'Pieces', width: 40, right: true, value: (r: QuantityRow) => formatNumber(r.totals.pieces) },
+  { head: 'Gross m²', width: 58, right: true, value: (r: QuantityRow) => formatDecimal(r.totals.grossM2) },
+  { head: 'Deducted m²', width: 62, right: true, value: (r: QuantityRow) => formatNumber(Number(r.totals.endLapM2) + Number(r.totals.openingM2), 2) },
+  { head: 'Coat-back m²', width: 62, right: true, value: (r: QuantityRow) => formatDecimal(r.totals.coatBackM2) },
+  { head: 'Net m²', width: 58, right: true, value: (r: QuantityRow) => formatDecimal(r.totals.netM2) },
+  { head: 'In place m³', width: 58, right: true, value: (r: QuantityRow) => formatDecimal(r.totals.volumeM3) },
+  { head: 'Litres', width: 58, right: true, value: (r: QuantityRow) => formatDecimal(r.totals.litres) },
+  { head: 'kg', width: 58, right: true, value: (r: QuantityRow) => formatDecimal(r.totals.kg) },
+  { head: 'Sheet m²', width: 58, right: true, value: (r: QuantityRow) => formatDecimal(r.totals.sheetM2) },
+];
+
+/** Quantities by floor and system; every figure is a sum of printed lines. */
+export function quantitiesSection(snapshot: ScheduleSnapshot): Content[] {
+  const { byLevelAndProduct: split } = snapshot.quantities;
+  const names = new Map(snapshot.products.map((p) => [p.id, p.name]));
+  const rows = snapshot.levels.flatMap((level) => split.cells.filter((cell) => cell.row === level.id)
+    .map((cell): QuantityRow => ({ level: `${level.code} ${level.name}`, product: names.get(cell.column) ?? '', totals: cell.totals })));
+  const perProduct = split.columns.map((column): QuantityRow => ({ level: 'All levels', product: names.get(column.key) ?? '', totals: column.totals }));
+  const columns = [{ head: 'Level', width: '*' as const, value: (r: QuantityRow) => r.level }, { head: 'System', width: 130, value: (r: QuantityRow) => r.product }, ...amounts];
+  if (rows.length === 0) return [heading('5  Quantities by floor', { pageBreak: 'before' }), paragraph('Nothing is to be protected.')];
+  return [
+    heading('5  Quantities by floor', { pageBreak: 'before' }),
+    paragraph('Areas are what is coated, sprayed or boxed, not what is heated: gross, less end laps and openings, plus coat-back, is net. Litres and kg include the loss stated with the system; sheets include cutting waste.'),
+    schedule(columns, rows, [...perProduct, { level: 'Total', product: '', totals: split.total }]),
+    ...purchaseSection(snapshot, names),
+  ];
+}
+
+interface PurchaseRow { product: string; kind: string; what: string; count: string; note: string }
+
+function purchaseRows(purchase: PurchaseDto, product: string): PurchaseRow[] {
+  const lead = { product, kind: productKindNames[purchase.kind] };
+  const missing = purchase.missing.map(sentence).join('; ');
+  if (purchase.kind === 'coating') {
+    const count = purchase.containers === null ? '–' : `${formatNumber(purchase.containers)} × ${purchase.containerL} L`;
+    return [{ ...lead, what: purchase.litres ? `${formatDecimal(purchase.litres)} L` : '–', count, note: missing }];
+  }
+  if (purchase.kind === 'spray') return [{ ...lead, what: 'Bags', count: purchase.bags === null ? '–' : `${formatNumber(purchase.bags)}${purchase.bagKg ? ` × ${purchase.bagKg} kg` : ''}`, note: missing }];
+  if (purchase.boards.length === 0) return [{ ...lead, what: '–', count: '–', note: missing }];
+  return purchase.boards.map((plan) => ({
+    ...lead, what: `${plan.thicknessMm} mm board, ${plan.sheetLengthMm} × ${plan.sheetWidthMm} mm`, count: `${formatNumber(plan.sheets)} sheets`,
+    note: [`cutting waste ${formatNumber(plan.wasteFraction * 100, 1)} %, no plan can do with fewer than ${formatNumber(plan.leastSheets)}`, missing].filter(Boolean).join('; '),
+  }));
+}
+
+function purchaseSection({ quantities }: ScheduleSnapshot, names: ReadonlyMap<string, string>): Content[] {
+  return [
+    subheading('To buy, rounded up once for the whole project'),
+    schedule([
+      { head: 'System', width: 150, value: (r) => r.product }, { head: 'Kind', width: 90, value: (r) => r.kind },
+      { head: 'Material', width: 170, value: (r) => r.what }, { head: 'Whole units', width: 90, right: true, value: (r) => r.count },
+      { head: 'Note', width: '*', value: (r) => r.note || '–' },
+    ], quantities.purchases.flatMap((p) => purchaseRows(p, names.get(p.productId) ?? ''))),
+  ];
+}
