@@ -31,7 +31,7 @@ function sameOriginOnly(request: Request, response: Response, next: NextFunction
 /** The whole application, not yet listening. Closing it closes its database connections. */
 export async function createApp(options: AppOptions): Promise<NestExpressApplication> {
   const app = await NestFactory.create<NestExpressApplication>(AppModule.forDatabase(options.databaseUrl), {
-    logger: options.quiet ? ['fatal'] : ['log', 'warn', 'error', 'fatal'],
+    logger: options.quiet ? ['fatal'] : ['warn', 'error', 'fatal'],
   });
   app.use(
     helmet({
