@@ -19,6 +19,8 @@ interface ScheduleTableProps<T> extends Omit<TableProps<T>, 'columns' | 'dataSou
   /** below 640 px each row becomes a block of named values; false keeps columns and scrolls sideways */
   fold?: boolean;
   empty?: ReactNode;
+  /** below this the table scrolls sideways instead of squeezing its columns (wider than the fold only) */
+  minWidth?: number;
 }
 
 function withSchedule<T>(column: ScheduleColumn<T>): ColumnType<T> {
@@ -34,13 +36,14 @@ function withSchedule<T>(column: ScheduleColumn<T>): ColumnType<T> {
 }
 
 /** antd's table set like a drawing schedule: hairlines, small head, sticky below the title strip, folding on a phone. */
-export function ScheduleTable<T extends object>({ caption, columns, rows, rowKey, fold = true, empty, onRow, className, ...rest }: ScheduleTableProps<T>) {
+export function ScheduleTable<T extends object>({ caption, columns, rows, rowKey, fold = true, empty, minWidth, onRow, className, ...rest }: ScheduleTableProps<T>) {
   return (
     <div className={`mt-schedule ${fold ? 'mt-schedule-fold' : ''} ${className ?? ''}`} role="region" aria-label={caption}>
       <Table<T>
         size="small"
         pagination={false}
         sticky={rest.virtual || rest.scroll?.y ? false : { offsetHeader: 54 }}
+        {...(minWidth ? { scroll: { x: minWidth } } : {})}
         columns={columns.map(withSchedule)}
         dataSource={rows as T[]}
         rowKey={rowKey}

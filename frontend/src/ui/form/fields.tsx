@@ -49,15 +49,15 @@ export function NumberField<T extends FieldValues>(props: FieldProps<T> & { min?
 
 export interface Option { value: string | number; label: ReactNode; disabled?: boolean; title?: string }
 
-export function SelectField<T extends FieldValues>(props: FieldProps<T> & { options: readonly Option[]; placeholder?: string; allowClear?: boolean; multiple?: boolean; search?: boolean }) {
+export function SelectField<T extends FieldValues>(props: FieldProps<T> & { options: readonly Option[]; placeholder?: string; allowClear?: boolean; multiple?: boolean; search?: boolean; /** free entries; the value is an array of text */ tags?: boolean }) {
   const { id, ref, value, onBlur, onChange, error, aria, status } = useField(props);
-  const { options, placeholder, allowClear = false, multiple = false, search = false, disabled } = props;
+  const { options, placeholder, allowClear = false, multiple = false, search = false, tags = false, disabled } = props;
   return (
     <FieldFrame {...frame(props)} id={id} error={error}>
       <Select
         {...aria} ref={ref} value={value ?? undefined} onBlur={onBlur} onChange={(next) => onChange(next ?? null)}
         status={status} disabled={disabled ?? false} placeholder={placeholder} allowClear={allowClear} options={options as Option[]} style={{ width: '100%' }}
-        {...(multiple ? { mode: 'multiple' as const } : {})} showSearch={search || multiple ? { optionFilterProp: 'label' } : false}
+        {...(tags ? { mode: 'tags' as const, tokenSeparators: [',', ';', ' '], suffixIcon: null, open: false } : multiple ? { mode: 'multiple' as const } : {})} showSearch={search || multiple || tags ? { optionFilterProp: 'label' } : false}
       />
     </FieldFrame>
   );

@@ -35,7 +35,7 @@ export function TargetDetail({ zone, projectId }: { zone: ZoneDto; projectId: st
     <ScheduleTable<ZoneTargetDto>
       caption={`Target protection of ${zone.code} ${zone.name}`} rows={zone.targets} rowKey={(t) => t.productId} sticky={false} className="mt-inset"
       columns={[
-        { title: 'System', key: 'system', render: (_, t) => <Link to={`/projects/${projectId}/products/${t.productId}`}>{t.productName}</Link> },
+        { title: 'System', key: 'system', width: 170, render: (_, t) => <Link to={`/projects/${projectId}/products/${t.productId}`}>{t.productName}</Link> },
         { title: 'Members', key: 'members', numeric: true, render: (_, t) => <Quantity value={t.members} /> },
         { title: 'Area m²', foldLabel: 'Area', key: 'area', numeric: true, render: (_, t) => <Quantity value={t.areaM2} decimals={1} unit="m²" bare /> },
         {

@@ -1,7 +1,8 @@
 import { Button } from 'antd';
+import type { ReactNode } from 'react';
 import { Link } from 'react-router-dom';
 import { fireCurveNames, memberTypeNames } from '@mantlet/common';
-import type { LevelDto, TargetPolicy, ZoneDto } from '@mantlet/common';
+import type { LevelDto, TargetPolicy, ZoneDto, ZoneTargetDto } from '@mantlet/common';
 import { formatLevel, formatNumber, joinWords } from '../../../lib/format.js';
 import { Quantity } from '../../../ui/quantity.js';
 import { ScheduleTable } from '../../../ui/schedule-table.js';
@@ -21,33 +22,45 @@ export function treeRows(levels: readonly LevelDto[], zones: readonly ZoneDto[])
   ]);
 }
 
-/** "Beam, secondary beam: Harbour coat" — one line a product. */
-function systemLines(zone: ZoneDto): { product: string; types: string }[] {
-  const byProduct = new Map<string, string[]>();
-  for (const s of zone.systems) byProduct.set(s.productName, [...(byProduct.get(s.productName) ?? []), memberTypeNames[s.memberType]]);
-  return [...byProduct].map(([product, types]) => ({ product, types: joinWords(types.map((t, i) => (i ? t.toLowerCase() : t))) }));
+interface SystemLine { productId: string; product: string; types: string; target: ZoneTargetDto | undefined }
+/** One line a product, so that the materials beside it stand on the product's own line. */
+export function systemLines(zone: ZoneDto): SystemLine[] {
+  const lines = new Map<string, { product: string; types: string[] }>();
+  for (const s of zone.systems) {
+    const line = lines.get(s.productId) ?? { product: s.productName, types: [] };
+    line.types.push(memberTypeNames[s.memberType].toLowerCase());
+    lines.set(s.productId, line);
+  }
+  return [...lines].map(([productId, { product, types }]) => ({ productId, product, types: joinWords(types), target: zone.targets.find((t) => t.productId === productId) }));
 }
 
 function Systems({ zone }: { zone: ZoneDto }) {
   const lines = systemLines(zone);
   if (lines.length === 0) return <StatusWord kind="attention">No system yet</StatusWord>;
-  return <>{lines.map((l) => <div key={l.product}>{l.product}<div className="mt-sub">{l.types}</div></div>)}</>;
+  return <>{lines.map((l) => <div key={l.productId} className="mt-line" title={`${l.product}: ${l.types}`}>{l.product}</div>)}</>;
 }
 
-/** What a policy would take, one line a unit of material; bold where chosen. */
+/** What a policy would take of each product; bold where chosen. */
 function Materials({ zone, policy }: { zone: ZoneDto; policy: TargetPolicy['policy'] }) {
   const chosen = zone.targetPolicy.policy === policy;
-  const lines = zone.targets.flatMap((t) => t.policies.filter((p) => p.policy === policy).map((p) => ({ id: t.productId, product: t.productName, ...p })));
-  if (lines.length === 0) return <span aria-hidden="true">–</span>;
   return (
     <div className={chosen ? 'mt-strong' : 'mt-sub'}>
-      {lines.map((l) => <div key={l.id}><Quantity value={l.material} unit={l.materialUnit} decimals={l.materialUnit === 'm³' ? 2 : 0} what={l.product} /></div>)}
+      {systemLines(zone).map(({ productId, product, target }) => {
+        const material = target?.policies.find((p) => p.policy === policy);
+        return (
+          <div key={productId} className="mt-line">
+            <Quantity value={material?.material} unit={material?.materialUnit ?? ''} decimals={material?.materialUnit === 'm³' ? 2 : 0} what={product} reason={target ? 'not determined' : 'no member needs it'} />
+          </div>
+        );
+      })}
       {chosen && <span className="mt-sr">chosen</span>}
     </div>
   );
 }
 
-const zoneOnly = (render: (zone: ZoneDto) => React.ReactNode) => (_: unknown, row: ZoneRow) => (row.kind === 'zone' ? render(row.zone) : null);
+/** the columns before the last, which a level's name runs across */
+const zoneColumns = 9;
+const zoneOnly = (render: (zone: ZoneDto) => ReactNode) => (_: unknown, row: ZoneRow) => (row.kind === 'zone' ? render(row.zone) : null);
 
 function useColumns(actions: ZoneTreeActions, projectId: string): ScheduleColumn<ZoneRow>[] {
   const may = useMay();
@@ -55,26 +68,28 @@ function useColumns(actions: ZoneTreeActions, projectId: string): ScheduleColumn
   const specifier = may('edit-protection');
   const columns: ScheduleColumn<ZoneRow>[] = [
     {
-      title: 'Level and zone', key: 'name', foldLabel: '',
+      title: 'Level and zone', key: 'name', foldLabel: '', width: 172, className: 'mt-fold-head',
+      onCell: (row) => (row.kind === 'level' ? { colSpan: zoneColumns } : {}),
       render: (_, row) => row.kind === 'level'
         ? <span>{row.level.code} {row.level.name} <span className="mt-unit">{formatLevel(row.level.elevationM)} m, {formatNumber(row.level.heightM, 2)} m high</span></span>
         : <div className="mt-tree-1"><Link to={`/projects/${projectId}/members?zoneIds=${row.zone.id}`}>{row.zone.code} {row.zone.name}</Link></div>,
     },
-    { title: 'Period', key: 'period', render: zoneOnly((z) => <><span className="mt-strong">R {z.periodMin}</span><div className="mt-sub">{fireCurveNames[z.curve.kind]}</div></>) },
-    { title: 'Environment', key: 'environment', render: zoneOnly((z) => z.environment) },
+    { title: 'Period', key: 'period', width: 112, render: zoneOnly((z) => <><span className="mt-strong">R {z.periodMin}</span><div className="mt-sub">{fireCurveNames[z.curve.kind]}</div></>) },
+    { title: 'Environment', key: 'environment', width: 90, render: zoneOnly((z) => z.environment) },
     { title: 'Systems', key: 'systems', render: zoneOnly((z) => <Systems zone={z} />) },
-    { title: 'Target', key: 'target', render: zoneOnly((z) => targetPolicyName(z.targetPolicy)) },
-    { title: 'Each its own', key: 'own', numeric: true, render: zoneOnly((z) => <Materials zone={z} policy="own" />) },
-    { title: 'Bands', key: 'bands', numeric: true, render: zoneOnly((z) => <Materials zone={z} policy="bands" />) },
-    { title: 'One for all', key: 'one', numeric: true, render: zoneOnly((z) => <Materials zone={z} policy="one" />) },
+    { title: 'Target', key: 'target', width: 84, className: 'mt-fold-hide', render: zoneOnly((z) => targetPolicyName(z.targetPolicy)) },
+    { title: 'Each its own', key: 'own', numeric: true, width: 84, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="own" />) },
+    { title: 'Bands', key: 'bands', numeric: true, width: 84, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="bands" />) },
+    { title: 'One for all', key: 'one', numeric: true, width: 84, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="one" />) },
     {
-      title: 'Members', key: 'members', numeric: true,
+      title: 'Members', key: 'members', numeric: true, width: 76,
       render: zoneOnly((z) => <><Quantity value={z.members} what="Members" />{z.open > 0 && <div className="mt-attention">{z.open} open</div>}</>),
     },
   ];
+  for (const column of columns.slice(1)) column.onCell = (row) => (row.kind === 'level' ? { colSpan: 0 } : {});
   if (fire || specifier) {
     columns.push({
-      title: <span className="mt-sr">Change</span>, key: 'change', foldLabel: '', className: 'mt-noprint', align: 'right',
+      title: <span className="mt-sr">Change</span>, key: 'change', foldLabel: '', className: 'mt-noprint', align: 'right', width: fire && specifier ? 166 : fire ? 150 : 110,
       render: (_, row) => row.kind === 'level'
         ? fire && <span className="mt-row-actions"><Button size="small" onClick={() => actions.editLevel(row.level)} aria-label={`Edit level ${row.level.code}`}>Edit</Button><Button size="small" onClick={() => actions.addZone(row.level)} aria-label={`Add a zone on ${row.level.code}`}>Add zone</Button></span>
         : <span className="mt-row-actions">
@@ -94,7 +109,7 @@ export function ZoneTree({ rows, projectId, openZones, onOpenZones, actions, mar
   const columns = useColumns(actions, projectId);
   return (
     <ScheduleTable<ZoneRow>
-      caption="Levels and zones" columns={columns} rows={rows} rowKey={keyOf} className="mt-zones"
+      caption="Levels and zones" minWidth={1120} columns={columns} rows={rows} rowKey={keyOf} className="mt-zones"
       rowClassName={(row) => (row.kind === 'level' ? 'mt-row-group' : row.zone.id === marked ? 'mt-row-marked' : '')}
       onRow={(row) => ({ id: `row-${keyOf(row)}` })}
       expandable={{

@@ -44,19 +44,19 @@ function Editor({ editing, project, levels, zones, onClose }: { editing: Editing
   return zone ? <ProtectionDrawer projectId={project.id} zone={zone} onClose={onClose} /> : null;
 }
 
-function Content({ project, levels, zones }: { project: ProjectDto; levels: LevelDto[]; zones: ZoneDto[] }) {
+interface ContentProps { project: ProjectDto; levels: LevelDto[]; zones: ZoneDto[]; editing: Editing; setEditing: (editing: Editing) => void }
+
+function Content({ project, levels, zones, editing, setEditing }: ContentProps) {
   const may = useMay();
   const [params] = useSearchParams();
   const asked = params.get('zone');
   const [openZones, setOpenZones] = useState<string[]>(asked ? [asked] : []);
-  const [editing, setEditing] = useState<Editing>(null);
   useEffect(() => { if (asked) document.getElementById(`row-${asked}`)?.scrollIntoView({ block: 'center' }); }, [asked]);
-  const addLevel = <Button type={levels.length ? 'default' : 'primary'} onClick={() => setEditing({ what: 'level', id: null })}>Add level</Button>;
   return (
     <>
-      <Panel flush label="Levels and zones" actions={may('edit-levels') && levels.length > 0 ? addLevel : null}>
+      <Panel flush label="Levels and zones">
         {levels.length === 0 ? (
-          <EmptyState title="Begin with the levels" action={may('edit-levels') ? addLevel : null}>
+          <EmptyState title="Begin with the levels" action={may('edit-levels') ? <Button type="primary" onClick={() => setEditing({ what: 'level', id: null })}>Add the first level</Button> : null}>
             {may('edit-levels') ? 'From the lowest up: a code, a name, the height above the datum. Then add the zones on each.' : whyNot('edit-levels')}
           </EmptyState>
         ) : (
@@ -80,11 +80,14 @@ function Content({ project, levels, zones }: { project: ProjectDto; levels: Leve
 function Zones({ project }: { project: ProjectDto }) {
   const levels = useLevels(project.id);
   const zones = useZones(project.id);
+  const may = useMay();
+  const [editing, setEditing] = useState<Editing>(null);
+  const addLevel = may('edit-levels') && levels.data?.length ? <Button onClick={() => setEditing({ what: 'level', id: null })}>Add level</Button> : null;
   const words = levels.data && zones.data ? zonesWords(levels.data, zones.data) : { heading: 'Zones', sub: undefined };
   return (
-    <Page title="Zones" projectName={project.name} heading={words.heading} sub={words.sub}>
+    <Page title="Zones" projectName={project.name} heading={words.heading} sub={words.sub} actions={addLevel}>
       <QueryState query={levels} what="the levels">
-        {(l) => <QueryState query={zones} what="the zones">{(z) => <Content key={project.id} project={project} levels={l} zones={z} />}</QueryState>}
+        {(l) => <QueryState query={zones} what="the zones">{(z) => <Content key={project.id} project={project} levels={l} zones={z} editing={editing} setEditing={setEditing} />}</QueryState>}
       </QueryState>
     </Page>
   );

@@ -1,0 +1,32 @@
+import { keepPreviousData, queryOptions, useQuery } from '@tanstack/react-query';
+import type { AuditEntryDto, DesignBasisUpdate, MembershipDto, MembershipInput, Page, ProjectDto, ProjectUpdate, Role, TakeoffSettingsUpdate } from '@mantlet/common';
+import { api } from '../../../lib/api-client.js';
+import { projectKey } from '../../../lib/query-client.js';
+import { useProjectMutation } from '../../projects/api/projects.js';
+
+const at = (projectId: string) => `/projects/${projectId}`;
+
+export const membershipsQuery = (projectId: string) =>
+  queryOptions({ queryKey: projectKey(projectId, 'memberships'), queryFn: ({ signal }) => api.get<MembershipDto[]>(`${at(projectId)}/memberships`, undefined, signal) });
+export const useMemberships = (projectId: string) => useQuery(membershipsQuery(projectId));
+export const useAddMembership = (projectId: string) =>
+  useProjectMutation<MembershipInput, MembershipDto>(projectId, (body) => api.post(`${at(projectId)}/memberships`, body));
+export const useSetRoles = (projectId: string) =>
+  useProjectMutation<{ userId: string; roles: Role[] }>(projectId, ({ userId, roles }) => api.put(`${at(projectId)}/memberships/${userId}`, { roles }));
+export const useRemoveMembership = (projectId: string) =>
+  useProjectMutation<string>(projectId, (userId) => api.delete(`${at(projectId)}/memberships/${userId}`));
+
+export const useUpdateProject = (projectId: string) => useProjectMutation<ProjectUpdate, ProjectDto>(projectId, (body) => api.patch(at(projectId), body));
+export const useSaveDesignBasis = (projectId: string) =>
+  useProjectMutation<DesignBasisUpdate, ProjectDto>(projectId, (body) => api.put(`${at(projectId)}/design-basis`, body));
+export const useSaveTakeoff = (projectId: string) =>
+  useProjectMutation<TakeoffSettingsUpdate, ProjectDto>(projectId, (body) => api.put(`${at(projectId)}/takeoff-settings`, body));
+
+export interface AuditFilter { search: string; page: number }
+export const auditPageSize = 50;
+export const auditQuery = (projectId: string, { search, page }: AuditFilter) =>
+  queryOptions({
+    queryKey: projectKey(projectId, 'audit', search, page), placeholderData: keepPreviousData,
+    queryFn: ({ signal }) => api.get<Page<AuditEntryDto>>(`${at(projectId)}/audit`, { search, page, pageSize: auditPageSize }, signal),
+  });
+export const useAudit = (projectId: string, filter: AuditFilter) => useQuery(auditQuery(projectId, filter));

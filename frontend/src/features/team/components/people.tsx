@@ -1,0 +1,75 @@
+import { App, Button } from 'antd';
+import { useState } from 'react';
+import { membershipInputSchema, roleNames, roles } from '@mantlet/common';
+import type { MembershipDto } from '@mantlet/common';
+import { rolesInWords, whyNot } from '../../../lib/may.js';
+import { DeleteButton } from '../../../ui/form/delete-button.js';
+import { CheckListField, TextField } from '../../../ui/form/fields.js';
+import { FormDrawer } from '../../../ui/form/form-drawer.js';
+import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
+import { Panel } from '../../../ui/panel.js';
+import { ScheduleTable } from '../../../ui/schedule-table.js';
+import { QueryState } from '../../../ui/states.js';
+import { useMay } from '../../projects/project-context.js';
+import { useAddMembership, useMemberships, useRemoveMembership, useSetRoles } from '../api/team.js';
+
+const roleOptions = roles.map((value) => ({ value, label: roleNames[value] }));
+const roleHelp = 'Contractors, inspectors and readers see issued work only. Whoever prepares a schedule cannot check it.';
+
+function AddPerson({ projectId, onClose }: { projectId: string; onClose: () => void }) {
+  const add = useAddMembership(projectId);
+  const form = useContractForm(membershipInputSchema, { defaultValues: { email: '', roles: [] } });
+  useServerIssues(form, add.error);
+  const submit = form.handleSubmit((body) => add.mutate(body, { onSuccess: onClose }));
+  return (
+    <FormDrawer title="Add a person" open onClose={onClose} onSubmit={(e) => { void submit(e); }} dirty={form.formState.isDirty && !add.isSuccess} saving={add.isPending} error={add.error} saveText="Add to the team" size={440}>
+      <TextField control={form.control} name="email" label="E-mail" type="email" help="Of an account that exists already; the administrator makes accounts." autoFocus />
+      <CheckListField control={form.control} name="roles" label="Roles" options={roleOptions} help={roleHelp} />
+    </FormDrawer>
+  );
+}
+
+const rolesSchema = membershipInputSchema.pick({ roles: true });
+function EditPerson({ projectId, person, onClose }: { projectId: string; person: MembershipDto; onClose: () => void }) {
+  const set = useSetRoles(projectId);
+  const remove = useRemoveMembership(projectId);
+  const { message } = App.useApp();
+  const form = useContractForm(rolesSchema, { defaultValues: { roles: person.roles } });
+  const submit = form.handleSubmit((body) => set.mutate({ userId: person.userId, ...body }, { onSuccess: onClose }));
+  const takeOff = () => remove.mutate(person.userId, { onSuccess: () => { void message.success(`${person.name} is no longer on the team.`); onClose(); } });
+  return (
+    <FormDrawer
+      title={person.name} open onClose={onClose} onSubmit={(e) => { void submit(e); }} dirty={form.formState.isDirty && !set.isSuccess} saving={set.isPending} error={set.error ?? remove.error} size={440}
+      extra={<DeleteButton what={`${person.name} from the team`} consequence="What they did stays in the audit trail and on issued revisions." busy={remove.isPending} onDelete={takeOff} />}
+    >
+      <p className="mt-sub">{person.email}</p>
+      <CheckListField control={form.control} name="roles" label="Roles" options={roleOptions} help={roleHelp} />
+    </FormDrawer>
+  );
+}
+
+/** Who is on the project, and as what. */
+export function People({ projectId }: { projectId: string }) {
+  const people = useMemberships(projectId);
+  const edit = useMay()('edit-team');
+  const [adding, setAdding] = useState(false);
+  const [editing, setEditing] = useState<MembershipDto | null>(null);
+  return (
+    <Panel flush title="People" sub={edit ? undefined : whyNot('edit-team')} actions={edit && <Button onClick={() => setAdding(true)}>Add a person</Button>}>
+      <QueryState query={people} what="the team">
+        {(rows) => (
+          <ScheduleTable
+            caption="People on the project" rows={rows} rowKey={(p) => p.userId} sticky={false}
+            columns={[
+              { title: 'Name', key: 'name', render: (_, p) => <><span className="mt-strong">{p.name}</span><div className="mt-sub">{p.email}</div></> },
+              { title: 'Roles', key: 'roles', render: (_, p) => rolesInWords(p.roles) },
+              ...(edit ? [{ title: <span className="mt-sr">Change</span>, key: 'edit', align: 'right' as const, width: 100, render: (_: unknown, p: MembershipDto) => <Button size="small" onClick={() => setEditing(p)} aria-label={`Roles of ${p.name}`}>Roles</Button> }] : []),
+            ]}
+          />
+        )}
+      </QueryState>
+      {adding && <AddPerson projectId={projectId} onClose={() => setAdding(false)} />}
+      {editing && <EditPerson projectId={projectId} person={editing} onClose={() => setEditing(null)} />}
+    </Panel>
+  );
+}
