@@ -15,6 +15,7 @@ export { requiredThickness } from './methods/required-thickness.js';
 export { periodReached } from './methods/as-built.js';
 export type { AsBuiltRequest, PeriodReached } from './methods/as-built.js';
 export { assessMember, formRefusal, orientationOf } from './methods/assess.js';
+export type { BareOutcome, BareSolver, Solvers } from './methods/assess.js';
 export { assessMembers } from './methods/assess-members.js';
 export { explainMember } from './methods/explain-member.js';
 export type { ExplainedMember } from './methods/explain-member.js';

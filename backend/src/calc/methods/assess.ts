@@ -4,6 +4,7 @@ import { profileGroup, sectionFactor } from '../sections/index.js';
 import { verdictOfReason } from '../standards/en-13381/coverage.js';
 import type { CriticalTemperature, Determined, MemberCase, SectionFactor } from '../types.js';
 import { criticalTemperature } from './critical-temperature.js';
+import { bareField } from './heating-field.js';
 import { bareMinutes, unprotectedTemperature } from './heating.js';
 import type { UnprotectedHeating } from './heating.js';
 import { requiredThickness } from './required-thickness.js';
@@ -44,10 +45,29 @@ export interface BareOutcome {
 }
 export type BareSolver = (heating: UnprotectedHeating, periodMin: number, limitC: number) => BareOutcome;
 
-const solveBareAlone: BareSolver = (heating, periodMin, limitC) => ({
-  temperatureC: unprotectedTemperature({ ...heating, minutes: periodMin }),
-  minutes: bareMinutes({ ...heating, targetC: limitC }),
-});
+/** The two laborious parts of an assessment, so that many members can share work and a yardstick can do without. */
+export interface Solvers {
+  bare: BareSolver;
+  thickness: typeof requiredThickness;
+}
+
+/** Nearer than this to the limit the member is integrated itself; the field is read to within a quarter of it. */
+const nearLimitK = 2;
+
+/**
+ * Bare steel under a nominal curve is read from the field of histories, within 0.5 K. Where that is too near the limit to tell bare
+ * from protected, and in natural fires, the member is integrated by (4.25) in steps of 5 s.
+ */
+export const solveBare: BareSolver = (heating, periodMin, limitC) => {
+  const integrated = () => unprotectedTemperature({ ...heating, minutes: periodMin });
+  if (heating.curve.kind === 'parametric') return { temperatureC: integrated(), minutes: bareMinutes({ ...heating, targetC: limitC }) };
+  const field = bareField(heating.curve.kind, heating.emissivity);
+  const read = field.temperatureC(heating.sectionFactorPerM, heating.shadowFactor, periodMin);
+  return {
+    temperatureC: Math.abs(read - limitC) < nearLimitK ? integrated() : read,
+    minutes: field.minutesTo(heating.sectionFactorPerM, heating.shadowFactor, limitC),
+  };
+};
 
 export function emptyResult(c: MemberCase): MemberResultDto {
   return {
@@ -103,7 +123,7 @@ export function prepare(c: MemberCase): Prepared {
 }
 
 /** Settles the verdict once the bare steel is known. Needs a critical temperature and a section factor in the result. */
-export function conclude(c: MemberCase, { result, own }: Prepared, bare: BareOutcome): MemberResultDto {
+export function conclude(c: MemberCase, { result, own }: Prepared, bare: BareOutcome, thickness: Solvers['thickness']): MemberResultDto {
   result.bareTemperatureC = bare.temperatureC;
   result.bareMinutes = bare.minutes;
   if (bare.temperatureC <= (result.bareCriticalTemperatureC as number)) {
@@ -121,7 +141,7 @@ export function conclude(c: MemberCase, { result, own }: Prepared, bare: BareOut
     result.reason = mismatch;
     return result;
   }
-  const required = requiredThickness(product, {
+  const required = thickness(product, {
     group: profileGroup(c.shape), orientation: orientationOf(c.memberType), periodMin: c.periodMin, curve: c.curve,
     criticalTemperatureC: result.criticalTemperatureC as number, sectionFactorPerM: (own as SectionFactor).sectionFactorPerM,
   }, c.readingRules);
@@ -137,14 +157,16 @@ export function conclude(c: MemberCase, { result, own }: Prepared, bare: BareOut
   return result;
 }
 
+const alone: Solvers = { bare: solveBare, thickness: requiredThickness };
+
 /**
  * One member from its section to its verdict: section factor, critical temperature, bare steel, required thickness. A product's expiry
  * does not change the verdict; whoever prepares the schedule is stopped by it. appliedThickness is left to the zone's policy.
  * Never throws for what a user can enter: what cannot be justified is null with its reason.
  */
-export function assessMember(c: MemberCase, solveBare: BareSolver = solveBareAlone): MemberResultDto {
+export function assessMember(c: MemberCase, solvers: Solvers = alone): MemberResultDto {
   const prepared = prepare(c);
   const { result, heating } = prepared;
   if (!heating) return result;
-  return conclude(c, prepared, solveBare(heating, c.periodMin, result.bareCriticalTemperatureC as number));
+  return conclude(c, prepared, solvers.bare(heating, c.periodMin, result.bareCriticalTemperatureC as number), solvers.thickness);
 }

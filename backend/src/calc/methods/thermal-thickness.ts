@@ -1,10 +1,12 @@
-import { formatNumber, message } from '@mantlet/common';
+import { message } from '@mantlet/common';
 import type { FireCurve, Message, ProductKind, ThermalProperties } from '@mantlet/common';
 import { formNames } from '../standards/en-13381/coverage.js';
 import { stacksOf } from '../standards/en-13381/stacks.js';
 import type { Determined, RequiredThickness, ThicknessRequest } from '../types.js';
-import { protectedMinutes, protectedTemperature } from './heating.js';
-import { leastIndex } from './least-index.js';
+import type { Stack } from '../standards/en-13381/stacks.js';
+import { protectedTemperature } from './heating.js';
+import { thermalRun } from './thermal-run.js';
+import type { ThermalRun } from './thermal-run.js';
 
 export interface ThermalPlace {
   properties: ThermalProperties;
@@ -37,13 +39,48 @@ export function heatingOf(place: ThermalPlace, curve: FireCurve, thicknessMm: nu
   return { conductivityWPerMK, densityKgPerM3, specificHeatJPerKgK, moisturePercent, thicknessMm, sectionFactorPerM: place.sectionFactorPerM, curve };
 }
 
-/** Whether steel under this thickness stays at or below the design temperature, through the period or, in a natural fire, to its end. */
-export function holds(place: ThermalPlace, curve: FireCurve, periodMin: number, thicknessMm: number): boolean {
-  const heating = heatingOf(place, curve, thicknessMm);
-  if (curve.kind === 'parametric') return protectedTemperature({ ...heating, minutes: periodMin }) <= place.temperatureC;
-  // stops as soon as the steel is too hot, which is soon for a thickness that is far from enough
-  const minutes = protectedMinutes({ ...heating, targetC: place.temperatureC, limitMin: periodMin });
-  return minutes === null || minutes >= periodMin;
+/** Runs one thickness; a natural fire is judged on its peak. */
+function run(place: ThermalPlace, curve: FireCurve, periodMin: number, thicknessMm: number): ThermalRun {
+  if (curve.kind !== 'parametric') return thermalRun(place.properties, place.sectionFactorPerM, curve, periodMin, thicknessMm, place.temperatureC);
+  return { steelC: protectedTemperature({ ...heatingOf(place, curve, thicknessMm), minutes: periodMin }), shareOfPeriod: 1 };
+}
+
+/**
+ * Where the thickness that just holds lies, judged from one that was run: time gained grows a little slower than thickness, and
+ * steel temperature falls about as its three-quarter power. Only the number of runs depends on this, never the answer.
+ */
+function predicted(thicknessMm: number, { steelC, shareOfPeriod }: ThermalRun, limitC: number): number {
+  if (shareOfPeriod < 1) return thicknessMm * (1 / Math.max(shareOfPeriod, 0.05)) ** 1.1;
+  return thicknessMm * ((steelC - 20) / (limitC - 20)) ** 1.4;
+}
+
+function indexNear(stacks: readonly Stack[], thicknessMm: number): number {
+  let low = 0;
+  let high = stacks.length;
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if ((stacks[middle] as Stack).thicknessMm < thicknessMm) low = middle + 1;
+    else high = middle;
+  }
+  return low;
+}
+
+/**
+ * Index of the least thickness that holds the design temperature; stacks.length where none does. Steel under more thickness is never
+ * hotter, so the answer is the one place where holding begins; the bracket about it is closed by running its two neighbours.
+ */
+export function leastThatHolds(stacks: readonly Stack[], place: ThermalPlace, curve: FireCurve, periodMin: number, guess: number): number {
+  let fails = -1;
+  let holds = stacks.length;
+  let at = Math.min(Math.max(guess, 0), stacks.length - 1);
+  while (holds - fails > 1) {
+    const { thicknessMm } = stacks[at] as Stack;
+    const end = run(place, curve, periodMin, thicknessMm);
+    if (end.steelC <= place.temperatureC) holds = at;
+    else fails = at;
+    at = Math.min(Math.max(indexNear(stacks, predicted(thicknessMm, end, place.temperatureC)), fails + 1), holds - 1);
+  }
+  return holds;
 }
 
 /** Where earlier searches of the same data ended: a nearby case starts there. Only the number of steps depends on it, never the answer. */
@@ -68,12 +105,12 @@ export function thicknessFromThermal(properties: ThermalProperties, kind: Produc
   let known = guesses.get(properties);
   if (!known) guesses.set(properties, (known = new Map()));
   const key = guessKey(place, curve, periodMin);
-  const index = leastIndex(stacks.length, (i) => holds(place, curve, periodMin, (stacks[i] as { thicknessMm: number }).thicknessMm), known.get(key));
+  const index = leastThatHolds(stacks, place, curve, periodMin, known.get(key) ?? stacks.length >> 1);
   if (known.size > 20_000) known.clear();
   known.set(key, index);
   const stack = stacks[index];
   if (!stack) return { ok: false, reason: message('product.outside-thickness', { greatest: greatest.thicknessMm, unit: 'mm' }) };
   const layers = stack.layers && stack.layers.length > 1 ? ` in layers of ${stack.layers.join(' + ')} mm` : '';
-  const reading = `Thermal properties, (4.27): R ${periodMin}, ${formatNumber(place.temperatureC)} °C, A/V ${formatNumber(place.sectionFactorPerM)}${layers}`;
+  const reading = `Thermal properties, (4.27): R ${periodMin}, ${Math.round(place.temperatureC)} °C, A/V ${Math.round(place.sectionFactorPerM)}${layers}`;
   return { ok: true, value: { thickness: stack.thicknessMm, layers: stack.layers, reading } };
 }

@@ -1,4 +1,4 @@
-import { formatNumber, message } from '@mantlet/common';
+import { message } from '@mantlet/common';
 import type { Message, ProductKind, RegressionFit } from '@mantlet/common';
 import { defineFormula } from '../../formula.js';
 import type { Determined, RequiredThickness, ThicknessRequest } from '../../types.js';
@@ -96,7 +96,7 @@ export function placeInFits(fits: readonly RegressionFit[], request: Omit<Thickn
 
 export function fitInWords(place: RegressionPlace): string {
   const { fit } = place;
-  return `${formatNumber(place.temperatureC)} °C, A/V ${formatNumber(place.sectionFactorPerM)}, ${groupNames[fit.shape]} section, ${fit.orientation}`;
+  return `${Math.round(place.temperatureC)} °C, A/V ${Math.round(place.sectionFactorPerM)}, ${groupNames[fit.shape]} section, ${fit.orientation}`;
 }
 
 /** Required thickness from the regression: never below the least tested, refused above the greatest. */
