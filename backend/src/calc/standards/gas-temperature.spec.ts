@@ -38,6 +38,11 @@ describe('parametric fires (EN 1991-1-2 Annex A)', () => {
     expect(noK.maxGasC).toBeCloseTo(20 + 1325 * (1 - 0.324 * Math.exp(-0.2 * 0.0675) - 0.204 * Math.exp(-1.7 * 0.0675) - 0.472 * Math.exp(-19 * 0.0675)), 6);
   });
 
+  it('never lets k near zero or below put the fire out', () => {
+    expect(1 + ((0.2 - 0.04) / 0.04) * ((50 - 75) / 75) * ((1160 - 100) / 1160)).toBeLessThan(0); // k as printed
+    expect(parametricFire(parametric(0.2, 100, 50)).maxGasC).toBeGreaterThan(700);
+  });
+
   it('peaks at t_max, cools steadily and is over when it says', () => {
     fc.assert(fc.property(
       fc.double({ min: 0.02, max: 0.2, noNaN: true }), fc.double({ min: 100, max: 2200, noNaN: true }), fc.double({ min: 50, max: 1000, noNaN: true }),

@@ -45,10 +45,16 @@ interface LimitFactorInput {
   openingFactor: number;
   thermalAbsorptivity: number;
 }
+/**
+ * Within the standard's own limits for O, q and b its k falls to zero and below (O = 0.2, q = 50, b = 100 gives −0.22), which
+ * would be a fire that never starts. The project does not take k below this: hotter than the print, so on the safe side.
+ */
+const LEAST_K = 0.1;
+
 export const fuelControlledTimeFactorFormula = defineFormula<LimitFactorInput>({
   label: 'Time factor of a fuel-controlled fire',
-  source: { standard, clause: 'Annex A (A.8) to (A.10)' },
-  expression: 'k·(O_lim/b)²/(0.04/1160)², O_lim = 0.1·10⁻³·q_t,d/t_lim, k = 1 + (O − 0.04)/0.04·(q_t,d − 75)/75·(1160 − b)/1160 where O > 0.04, q_t,d < 75 and b < 1160, else 1',
+  source: { standard, clause: 'Annex A (A.8) to (A.10)', note: 'the print has no lower limit of k, which falls to zero and below within its limits; 0.1 is this project’s, on the safe side' },
+  expression: 'k·(O_lim/b)²/(0.04/1160)², O_lim = 0.1·10⁻³·q_t,d/t_lim, k = 1 + (O − 0.04)/0.04·(q_t,d − 75)/75·(1160 − b)/1160 but not below 0.1, where O > 0.04, q_t,d < 75 and b < 1160, else 1',
   result: { symbol: 'Γ_lim', meaning: 'time factor in the heating phase', unit: '' },
   symbols: {
     fireLoadMjPerM2: { symbol: 'q_t,d', meaning: 'design fire load on the total enclosure area', unit: 'MJ/m²' },
@@ -57,7 +63,7 @@ export const fuelControlledTimeFactorFormula = defineFormula<LimitFactorInput>({
     thermalAbsorptivity: { symbol: 'b', meaning: 'thermal absorptivity of the enclosure', unit: 'J/m²s^½K' },
   },
   evaluate: ({ fireLoadMjPerM2: q, limitTimeH, openingFactor: o, thermalAbsorptivity: b }) => {
-    const k = o > 0.04 && q < 75 && b < 1160 ? 1 + ((o - 0.04) / 0.04) * ((q - 75) / 75) * ((1160 - b) / 1160) : 1;
+    const k = o > 0.04 && q < 75 && b < 1160 ? Math.max(LEAST_K, 1 + ((o - 0.04) / 0.04) * ((q - 75) / 75) * ((1160 - b) / 1160)) : 1;
     return k * timeFactorFormula.evaluate({ openingFactor: (0.1e-3 * q) / limitTimeH, thermalAbsorptivity: b });
   },
 });
