@@ -18,7 +18,7 @@ import { SiteModule } from './features/site/site.module.js';
 import { UsersModule } from './features/users/users.module.js';
 
 /** The features of the server, one module each. */
-export const featureModules = [AuditModule, UsersModule, AuthModule, SectionsModule, AssessmentModule, QuantitiesModule, LevelsModule, ProjectsModule, ZonesModule, ProductsModule  , MembersModule, RevisionsModule, SiteModule];
+export const featureModules = [AuditModule, UsersModule, AuthModule, SectionsModule, AssessmentModule, QuantitiesModule, LevelsModule, ProjectsModule, ZonesModule, ProductsModule, MembersModule, ImportsModule, RevisionsModule, SiteModule];
 
 @Module({})
 export class AppModule {
