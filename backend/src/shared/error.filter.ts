@@ -17,8 +17,8 @@ function fromDatabase(error: QueryFailedError): { status: HttpStatus; body: Erro
   }
   if (code === '23503') return { status: HttpStatus.CONFLICT, body: body(message('shared.in-use', { what: 'entry', by: 'something else in the project' })) };
   if (code === '23514') return { status: HttpStatus.UNPROCESSABLE_ENTITY, body: body(message('shared.invalid', { where: 'Input', problem: 'a value is outside what is possible' })) };
-  // text that PostgreSQL cannot hold: NUL bytes, or numbers beyond their type
-  if (code === '22021' || code === '22P05' || code === '22003') {
+  // text that PostgreSQL cannot hold: NUL bytes, half of a surrogate pair in jsonb, or numbers beyond their type
+  if (code === '22021' || code === '22P02' || code === '22P05' || code === '22003') {
     return { status: HttpStatus.BAD_REQUEST, body: body(message('shared.invalid', { where: 'Input', problem: 'holds a character or number that cannot be stored' })) };
   }
   return null;

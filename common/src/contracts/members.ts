@@ -37,7 +37,8 @@ export type MemberStructural = z.infer<typeof memberStructuralSchema>;
 
 export const bulkMemberSchema = z.object({
   memberIds: z.array(idSchema).min(1).max(5000),
-  set: memberInputSchema.pick({ zoneId: true, memberType: true, grade: true, exposure: true, protectionForm: true, sectionId: true, onSite: true }).partial()
+  // onSite without its default: what is not sent must stay as it is
+  set: memberInputSchema.pick({ zoneId: true, memberType: true, grade: true, exposure: true, protectionForm: true, sectionId: true }).extend({ onSite: z.boolean() }).partial()
     .refine((s) => Object.keys(s).length > 0, 'choose at least one field to set'),
 });
 export type BulkMember = z.infer<typeof bulkMemberSchema>;
