@@ -57,7 +57,7 @@ describe('zones', () => {
     const productId = await makeProduct();
     const zone = await makeZone({ periodMin: 30 });
     const section = await build.section(app, project);
-    const beam = await build.beam(app, { id: zone.id, projectId: project.id } as never, section, 'B1');
+    const beam = await build.beam(app, { id: zone.id, projectId: project.id }, section, 'B1');
     const required = async (): Promise<number | null> => (await app.dataSource.manager.findOneByOrFail(MemberResult, { memberId: beam.id })).requiredThickness;
     const set = await team.specifier.put(at(`/${zone.id}/protection`)).send(protect(zone, [{ memberType: 'beam', productId }])).expect(200);
     expect(set.body).toMatchObject({ version: 2, members: 1, settled: 1, open: 0, systems: [{ memberType: 'beam', productId, productName: 'Test coating', productKind: 'coating' }] });
@@ -125,7 +125,7 @@ describe('zones', () => {
     const zone = await makeZone();
     const productId = await makeProduct({ evidenceExpiresOn: '2020-01-31' });
     const section = await build.section(app, project);
-    await build.beam(app, { id: zone.id, projectId: project.id } as never, section, 'B1');
+    await build.beam(app, { id: zone.id, projectId: project.id }, section, 'B1');
     await team.specifier.put(at(`/${zone.id}/protection`)).send(protect(zone, [{ memberType: 'beam', productId }])).expect(200);
     const building = await team.specifier.get(`/api/projects/${project.id}/building`).expect(200);
     const blockers = (building.body.openItems as { role: string; kind: string; title: string }[]).filter((item) => item.kind === 'blocker');
@@ -135,7 +135,7 @@ describe('zones', () => {
   it('are deleted only when no member is in them', async () => {
     const zone = await makeZone();
     const section = await build.section(app, project);
-    await build.beam(app, { id: zone.id, projectId: project.id } as never, section, 'B1');
+    await build.beam(app, { id: zone.id, projectId: project.id }, section, 'B1');
     const refused = await team['fire-engineer'].delete(at(`/${zone.id}`)).expect(409);
     expect(refused.body.message).toBe('Zone Z1 still holds 1 member. Move them to another zone or delete them first.');
     const empty = await makeZone({ code: 'Z2' });

@@ -28,7 +28,7 @@ export const build = {
   },
 
   /** a beam with a declared critical temperature of 550 °C */
-  beam: (app: TestApp, zone: Zone, section: Section, mark: string): Promise<Member> =>
+  beam: (app: TestApp, zone: Pick<Zone, 'id' | 'projectId'>, section: Section, mark: string): Promise<Member> =>
     app.dataSource.manager.save(
       app.dataSource.manager.create(Member, {
         projectId: zone.projectId, zoneId: zone.id, mark, memberType: 'beam', sectionId: section.id, grade: 'S355', lengthMm: 6000, quantity: 1,

@@ -5,6 +5,7 @@ import type { EntityManager } from 'typeorm';
 import { Repository } from 'typeorm';
 import type { QueryDeepPartialEntity } from 'typeorm';
 import type { Actor } from '../../shared/access.js';
+import { canonicalJson } from '../../shared/canonical-json.js';
 import { AuditEntry } from './audit-entry.entity.js';
 
 export interface Change {
@@ -23,10 +24,10 @@ export interface Recorded {
   why?: string | null;
 }
 
-/** The fields that differ, compared by value. */
+/** The fields that differ, compared by value: the order in which the database returns the keys of an object says nothing. */
 export function changesBetween<T extends object>(before: Partial<T>, after: Partial<T>, fields: readonly (keyof T & string)[]): Change[] {
   return fields
-    .filter((field) => JSON.stringify(before[field] ?? null) !== JSON.stringify(after[field] ?? null))
+    .filter((field) => canonicalJson(before[field]) !== canonicalJson(after[field]))
     .map((field) => ({ field, old: before[field] ?? null, new: after[field] ?? null }));
 }
 

@@ -43,10 +43,11 @@ export class MembershipsService {
   }
 
   /** In the transaction that makes the project. */
-  async begin(manager: EntityManager, { projectId, actor, roles }: ProjectScope): Promise<void> {
+  async begin(manager: EntityManager, { projectId, actor, roles }: ProjectScope): Promise<ProjectScope> {
     if (!isLead(roles)) throw unprocessable(message('project.take-a-leading-role', {}), [{ path: 'roles', message: 'holds neither fire engineer nor specifier' }]);
     const membership = await manager.save(manager.create(Membership, { projectId, userId: actor.id, roles: inOrder(roles) }));
     await this.record(manager, { projectId, actor, roles }, 'joined the team', actor, [], membership.roles);
+    return { projectId, actor, roles: membership.roles };
   }
 
   /** Brings somebody who has an account onto the team. */

@@ -1,6 +1,5 @@
-import { message, thicknessTableSchema } from '@mantlet/common';
+import { message, sentence } from '@mantlet/common';
 import type { Message, ReadTable, ReadTableDto, ThicknessTable } from '@mantlet/common';
-import { sentence } from '@mantlet/common';
 import { checkEvidence } from '../../calc/index.js';
 import { unprocessable } from '../../shared/refusal.js';
 import type { Issue } from '../../shared/refusal.js';
@@ -34,7 +33,7 @@ export function readThicknessTable(file: string, grid: CellGrid, options: ReadTa
     thickness: rows.map((row) => columns.map((column) => reader.thickness(row, column, scale))),
   };
   if (reader.issues.length) throw unprocessable(reader.faults[0] as Message, reader.issues.slice(0, 50));
-  return { table: thicknessTableSchema.parse(table), messages: [...checkEvidence({ form: 'table', tables: [table] }, options.kind), ...reader.notes] };
+  return { table, messages: [...checkEvidence({ form: 'table', tables: [table] }, options.kind), ...reader.notes] };
 }
 
 function requireCount(what: string, found: number, limit: number): void {
@@ -91,7 +90,7 @@ class TableReader {
 
   thickness(row: number, column: number, scale: number): number | null {
     if (emptyCell.test(this.cells[row]?.[column] ?? '')) return null;
-    const value = this.number(row, column, 'a thickness above 0', (v) => v > 0 && v * scale <= 100_000);
+    const value = this.number(row, column, 'a thickness above 0', (v) => v * scale > 0 && v * scale <= 100_000);
     // 0.62 mm is 620 µm, not 620.0000000000001
     return Number((value * scale).toPrecision(12));
   }

@@ -35,8 +35,7 @@ export class ProjectsService {
       const project = await manager.save(manager.create(Project, { ...input, settings: defaultProjectSettings }));
       const scope: ProjectScope = { projectId: project.id, roles, actor };
       await this.record(manager, scope, 'project made', project, changesBetween<ProjectInput>({}, input, titleFields));
-      await this.memberships.begin(manager, scope);
-      return scope;
+      return this.memberships.begin(manager, scope);
     });
   }
 
