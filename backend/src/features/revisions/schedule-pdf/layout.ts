@@ -11,8 +11,8 @@ export const scheduleLayout: CustomTableLayout = {
   },
   vLineWidth: () => 0,
   hLineColor: () => '#000000',
-  paddingLeft: () => 3,
-  paddingRight: () => 3,
+  paddingLeft: () => 4,
+  paddingRight: () => 4,
   paddingTop: () => 2,
   paddingBottom: () => 2,
 };
@@ -31,7 +31,30 @@ export interface Column<T> {
   value: (row: T) => string;
 }
 
-const cell = (text: string, right: boolean | undefined, style: string): TableCell => ({ text, style, alignment: right ? 'right' : 'left' });
+type Inline = string | { text: string; sub?: { offset: string; fontSize: number }; wordBreak?: 'break-all' };
+
+function pieces(text: string, pattern: RegExp, replace: (found: RegExpMatchArray) => Inline[]): Inline[] {
+  const out: Inline[] = [];
+  let at = 0;
+  for (const found of text.matchAll(pattern)) {
+    if (found.index > at) out.push(text.slice(at, found.index));
+    out.push(...replace(found));
+    at = found.index + found[0].length;
+  }
+  if (at < text.length) out.push(text.slice(at));
+  return out;
+}
+
+/** large enough to be read on paper */
+const subscript = { offset: '12%', fontSize: 6 };
+
+/** Symbols as printed: θ_cr with cr below the line. For words of this document's own. */
+export const symbols = (text: string): Inline[] => pieces(text, /(\p{L})_(\p{L}[\p{L}\d]*(?:,\p{L}+)*|\d)/gu, ([, letter = '', below = '']) => [letter, { text: below, sub: subscript }]);
+/** What people or digests put in may have words longer than its column; those are broken anywhere. */
+export const breakable = (text: string): string | Inline[] =>
+  /\S{25,}/.test(text) ? pieces(text, /\S{25,}/g, ([word]) => [{ text: word, wordBreak: 'break-all' }]) : text;
+
+const cell = (text: string, right: boolean | undefined, style: string): TableCell => ({ text: style === 'head' ? symbols(text) : breakable(text), style, alignment: right ? 'right' : 'left' });
 
 /** A schedule whose head is repeated on every page and whose rows are never split. `totals` rows stand out in weight. */
 export function schedule<T>(columns: readonly Column<T>[], rows: readonly T[], totals: readonly T[] = []): Content {
@@ -53,14 +76,14 @@ export function schedule<T>(columns: readonly Column<T>[], rows: readonly T[], t
 export function facts(pairs: readonly (readonly [label: string, value: string])[]): Content {
   const half = Math.ceil(pairs.length / 2);
   const rows = Array.from({ length: half }, (_, i): TableCell[] => [pairs[i], pairs[half + i]].flatMap((pair): TableCell[] => [
-    { text: pair?.[0] ?? '', style: 'label' }, { text: pair?.[1] ?? '', style: 'cell' },
+    { text: symbols(pair?.[0] ?? ''), style: 'label' }, { text: breakable(pair?.[1] ?? ''), style: 'cell' },
   ]));
   return { layout: scheduleLayout, margin: [0, 2, 0, 8], table: { widths: [120, '*', 120, '*'], dontBreakRows: true, body: rows.length > 0 ? rows : [['', '', '', '']] } };
 }
 
 export const heading = (text: string, options: { pageBreak?: 'before' } = {}): Content => ({ text, style: 'heading', headlineLevel: 1, tocItem: true, ...options });
-export const subheading = (text: string): Content => ({ text, style: 'subheading', headlineLevel: 2 });
-export const paragraph = (text: string): Content => ({ text, style: 'paragraph' });
+export const subheading = (text: string): Content => ({ text: breakable(text), style: 'subheading', headlineLevel: 2 });
+export const paragraph = (text: string): Content => ({ text: symbols(text), style: 'paragraph' });
 /** 2026-12-01, in UTC: the same wherever it is printed */
 export const day = (iso: string): string => iso.slice(0, 10);
 

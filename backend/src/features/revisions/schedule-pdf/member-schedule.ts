@@ -6,7 +6,9 @@ import { zonesByLevel } from './zones-and-systems.js';
 
 const exposureInWords = ({ exposure, protectionForm }: SnapshotMember): string => {
   const faces = exposure.arrangement === 'given-faces' ? `Faces: ${(exposure.faces ?? []).join(', ')}` : exposureNames[exposure.arrangement];
-  return protectionForm === 'boxed' ? `${faces}; boxed` : faces;
+  // one line where it can be: a slab on top is what three sides mean
+  const short = exposure.arrangement === 'three-sides' ? 'Three sides' : faces;
+  return protectionForm === 'boxed' ? `${short}, boxed` : short;
 };
 
 /** Where the critical temperature comes from: the way, what governs, its reference, and signatures under it. */
@@ -49,21 +51,21 @@ export function memberSchedule(snapshot: ScheduleSnapshot): Content[] {
   const byZone = new Map<string, SnapshotMember[]>(snapshot.zones.map((zone) => [zone.id, []]));
   for (const m of snapshot.members) byZone.get(m.zoneId)?.push(m);
   const columns = [
-    { head: 'Mark', width: 52, value: (m: SnapshotMember) => m.mark },
-    { head: 'Type', width: 50, value: (m: SnapshotMember) => memberTypeNames[m.memberType] },
-    { head: 'Section, grade', width: 84, value: (m: SnapshotMember) => `${m.section}, ${m.grade}` },
+    { head: 'Mark', width: 46, value: (m: SnapshotMember) => m.mark },
+    { head: 'Type', width: 44, value: (m: SnapshotMember) => memberTypeNames[m.memberType] },
+    { head: 'Section, grade', width: 90, value: (m: SnapshotMember) => `${m.section}, ${m.grade}` },
     { head: 'No.', width: 20, right: true, value: (m: SnapshotMember) => formatNumber(m.quantity) },
     { head: 'Length', width: 42, right: true, value: (m: SnapshotMember) => formatLength(m.lengthMm) },
-    { head: 'Exposure', width: 78, value: exposureInWords },
-    { head: 'A/V 1/m', width: 28, right: true, value: (m: SnapshotMember) => formatNumber(m.result?.sectionFactorPerM) },
+    { head: 'Exposure', width: 72, value: exposureInWords },
+    { head: 'A/V', width: 24, right: true, value: (m: SnapshotMember) => formatNumber(m.result?.sectionFactorPerM) },
     { head: 'θ_cr', width: 34, right: true, value: (m: SnapshotMember) => formatLimitTemperature(m.result?.criticalTemperatureC) },
     { head: 'θ_cr comes from', width: '*' as const, value: provenance },
     { head: 'Apply', width: 44, right: true, value: applied },
-    { head: 'Verdict', width: 132, value: (m: SnapshotMember) => verdict(m, names) },
+    { head: 'Verdict', width: 124, value: (m: SnapshotMember) => verdict(m, names) },
   ];
   return [
     heading('4  Member schedule', { pageBreak: 'before' }),
-    paragraph('By level and zone. A/V is shown to 1 1/m and read unrounded; θ_cr is rounded down, thickness up. Board and spray in mm; coatings as dry film in mm. "Apply" is what the zone\'s policy gives the member: never less than it needs.'),
+    paragraph('By level and zone. Three sides: the slab covers the top. A/V in 1/m, shown to 1 1/m and read unrounded; θ_cr is rounded down, thickness up. Board and spray in mm; coatings as dry film in mm. "Apply" is what the zone\'s policy gives the member: never less than it needs.'),
     ...zonesByLevel(snapshot).flatMap(({ level, zones }) => zones.flatMap((zone): Content[] => {
       const members = byZone.get(zone.id) ?? [];
       const title = subheading(`Level ${level.code} ${level.name} · Zone ${zone.code} ${zone.name} · ${formatPeriod(zone.periodMin)}`);

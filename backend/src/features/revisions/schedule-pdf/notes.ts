@@ -14,19 +14,21 @@ const cautions = [
   'Not covered unless a temperature was declared by hand: web openings and corrugated webs, cold-formed steel, cast or wrought iron, stainless steel and aluminium, concrete-filled sections, composite members.',
 ];
 
+/** On the title sheet, where it is read first. */
+export const cautionsList: Content = { ol: cautions.map((text) => ({ text, style: 'paragraph' })) };
+
 const itemTable = (items: readonly OpenItemDto[]): Content => schedule([
   { head: 'Zone', width: 140, value: (i) => i.zoneLabel ?? '–' },
   { head: 'What', width: '*', value: (i) => i.title },
   { head: 'To be settled by', width: 110, value: (i) => roleNames[i.role] },
 ], items);
 
-/** What stands open or unsigned, and what everybody who reads the schedule must know. */
+/** What stands open or unsigned, and what the signs mean. */
 export function notesSection({ blockers, warnings }: ScheduleSnapshot): Content[] {
   return [
-    heading('6  Notes and cautions'),
+    heading('6  Notes'),
     ...(blockers.length > 0 ? [subheading('Not settled: the schedule cannot be issued with these'), itemTable(blockers)] : []),
     ...(warnings.length > 0 ? [subheading('Noted when the schedule was frozen'), itemTable(warnings)] : []),
-    { unbreakable: true, stack: [subheading('Cautions'), { ol: cautions.map((text) => ({ text, style: 'paragraph' })) }] },
-    paragraph('A/V section factor · θ_cr critical temperature · R fire resistance period in minutes · DFT dry film thickness · environments by ISO 12944-2.'),
+    paragraph('A/V section factor · θ_cr critical temperature · R fire resistance period in minutes · DFT dry film thickness · WFT wet film thickness · environments by ISO 12944-2 · dates by ISO 8601, UTC.'),
   ];
 }

@@ -1,5 +1,5 @@
-import { formatDecimal, formatNumber, productKindNames, sentence } from '@mantlet/common';
-import type { PurchaseDto, QuantityTotals, ScheduleSnapshot } from '@mantlet/common';
+import { formatDecimal, formatFilmThickness, formatNumber, formatThickness, memberTypeNames, productKindNames, sentence } from '@mantlet/common';
+import type { PurchaseDto, QuantityLineDto, QuantityTotals, ScheduleSnapshot } from '@mantlet/common';
 import type { Content } from 'pdfmake/interfaces.js';
 import { heading, paragraph, schedule, subheading } from './layout.js';
 
@@ -31,6 +31,34 @@ export function quantitiesSection(snapshot: ScheduleSnapshot): Content[] {
     paragraph('Areas are what is coated, sprayed or boxed, not what is heated: gross, less end laps and openings, plus coat-back, is net. Litres and kg include the loss stated with the system; sheets include cutting waste.'),
     schedule(columns, rows, [...perProduct, { level: 'Total', product: '', totals: split.total }]),
     ...purchaseSection(snapshot, names),
+    ...applicationSection(snapshot, names),
+  ];
+}
+
+function thicknessOf(line: QuantityLineDto): string {
+  const layers = line.layers && line.layers.length > 1 ? ` (${line.layers.join(' + ')})` : '';
+  return line.kind === 'coating' ? `DFT ${formatFilmThickness(line.thickness)}` : formatThickness(line.thickness, line.thicknessUnit) + layers;
+}
+
+/** What the applicator works from: zone by zone, one row for each thickness. */
+function applicationSection(snapshot: ScheduleSnapshot, names: ReadonlyMap<string, string>): Content[] {
+  const zones = new Map(snapshot.zones.map((zone) => [zone.id, `${zone.code} ${zone.name}`]));
+  const levels = new Map(snapshot.levels.map((level) => [level.id, level.code]));
+  return [
+    subheading('Application by zone, system and thickness'),
+    schedule<QuantityLineDto>([
+      { head: 'Level', width: 40, value: (l) => levels.get(l.levelId) ?? '' },
+      { head: 'Zone', width: '*', value: (l) => zones.get(l.zoneId) ?? '' },
+      { head: 'System', width: 100, value: (l) => names.get(l.productId) ?? '' },
+      { head: 'Members', width: 84, value: (l) => `${memberTypeNames[l.memberType]}${l.profile === 'hollow' ? ', hollow' : ''}` },
+      { head: 'Applied', width: 44, value: (l) => (l.onSite ? 'on site' : 'off site') },
+      { head: 'Thickness', width: 82, right: true, value: thicknessOf },
+      { head: 'WFT in all', width: 50, right: true, value: (l) => formatFilmThickness(l.wetFilmUm === null ? null : Number(l.wetFilmUm)) },
+      { head: 'Coats', width: 28, right: true, value: (l) => formatNumber(l.coats) },
+      { head: 'Pieces', width: 32, right: true, value: (l) => formatNumber(l.pieces) },
+      { head: 'Net m²', width: 48, right: true, value: (l) => formatDecimal(l.netM2) },
+      { head: 'Litres', width: 44, right: true, value: (l) => formatDecimal(l.litres) },
+    ], snapshot.quantities.lines),
   ];
 }
 

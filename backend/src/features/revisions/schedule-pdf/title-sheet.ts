@@ -1,13 +1,14 @@
 import { formatNumber, revisionStateNames } from '@mantlet/common';
 import type { SignatureDto } from '@mantlet/common';
 import type { Content, TableCell } from 'pdfmake/interfaces.js';
-import { blockLayout, day } from './layout.js';
+import { blockLayout, breakable, day } from './layout.js';
+import { cautionsList } from './notes.js';
 import type { SchedulePdfInput } from './types.js';
 
-const box = (label: string, value: string): TableCell => ({ stack: [{ text: label, style: 'label' }, { text: value || '–', style: 'cell', margin: [0, 2, 0, 0] }] });
+const box = (label: string, value: string): TableCell => ({ stack: [{ text: label, style: 'label' }, { text: breakable(value || '–'), style: 'cell', margin: [0, 2, 0, 0] }] });
 
 function signed(label: string, by: SignatureDto | null): TableCell[] {
-  return [{ text: label, style: 'label' }, { text: by?.name ?? 'not yet', style: 'cell' }, { text: by ? day(by.at) : '–', style: 'cell' }];
+  return [{ text: label, style: 'label' }, { text: breakable(by?.name ?? 'not yet'), style: 'cell' }, { text: by ? day(by.at) : '–', style: 'cell' }];
 }
 
 const members = (n: number): string => `${formatNumber(n)} ${n === 1 ? 'member' : 'members'}`;
@@ -57,6 +58,12 @@ export function titleSheet(input: SchedulePdfInput): Content[] {
     }]),
     ...(invented ? [{ text: 'Products marked "invented for demonstration", and their data, do not exist. Nothing here may be built from.', style: 'total', margin: [0, 0, 0, 6] as [number, number, number, number] }] : []),
     { text: `Inputs and results as they stood on ${day(snapshot.takenAt)}, ${snapshot.takenAt.slice(11, 16)} UTC.${snapshotSha256 ? ` SHA-256 of the frozen record: ${snapshotSha256}` : ''}`, style: 'paragraph' },
-    { toc: { title: { text: 'Contents', style: 'subheading' }, textMargin: [0, 0, 0, 1], numberStyle: 'cell', textStyle: 'cell' } },
+    {
+      columns: [
+        { width: 230, toc: { title: { text: 'Contents', style: 'subheading' }, textMargin: [0, 0, 0, 1], numberStyle: 'cell', textStyle: 'cell' } },
+        { width: '*', stack: [{ text: 'Cautions', style: 'subheading' }, cautionsList] },
+      ],
+      columnGap: 30, margin: [0, 8, 0, 0],
+    },
   ];
 }

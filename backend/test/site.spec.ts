@@ -1,0 +1,83 @@
+import { Decimal } from '@mantlet/common';
+import type { SiteDto } from '@mantlet/common';
+import { Project } from '../src/features/projects/project.entity.js';
+import { TestApp } from './support/app.js';
+import { makeScheduleProject } from './support/schedule-project.js';
+import type { ScheduleProject } from './support/schedule-project.js';
+
+// rendering the PDF takes its time on a slow machine
+jest.setTimeout(60_000);
+describe('site', () => {
+  let app: TestApp;
+  let p: ScheduleProject;
+  let site: SiteDto;
+  beforeAll(async () => {
+    app = await TestApp.start();
+    p = await makeScheduleProject(app);
+  });
+  afterAll(() => app.stop());
+
+  const view = async (role: 'contractor' | 'specifier' | 'reader' = 'contractor'): Promise<SiteDto> => (await p.team[role].get(p.url('site')).expect(200)).body;
+
+  it('is empty until a revision is issued', async () => {
+    const { body: draft } = await p.team.specifier.post(p.url('revisions')).send({ code: 'P01' }).expect(201);
+    await p.team.specifier.post(p.url(`revisions/${draft.id}/prepare`)).expect(200);
+    expect(await view()).toMatchObject({ revision: null, levels: [], purchase: [] });
+    await p.checker.post(p.url(`revisions/${draft.id}/check`)).expect(200);
+    expect((await view('specifier')).revision).toBeNull();
+    await p.checker.post(p.url(`revisions/${draft.id}/issue`)).expect(200);
+    site = await view();
+    expect(site.revision).toMatchObject({ id: draft.id, code: 'P01', pdfAvailable: true });
+  });
+
+  it('says floor by floor what to apply, how thick and how much', () => {
+    expect(site.levels.map((l) => [l.code, l.zones.map((z) => z.code)])).toEqual([['L0', ['Z01']], ['L1', ['Z02']]]);
+    const hall = site.levels[0]!.zones[0]!;
+    expect(hall.items.map((i) => i.mark)).toEqual(['B0-001', 'B0-002', 'C0-001', 'C0-002']);
+    const beam = hall.items[0]!;
+    expect(beam).toMatchObject({ section: 'IPE 300', quantity: 4, faces: 'Three sides, slab on top', productName: 'Testcoat', kind: 'coating' });
+    expect(beam.thickness).toMatch(/^[\d,]+ µm$/);
+    expect(beam.wetThickness).toMatch(/^[\d,]+ µm$/);
+    expect(beam.coats).toBeGreaterThan(0);
+    expect(hall.items[2]!.thickness).toMatch(/^\d+ mm/);
+    expect(site.levels[1]!.zones[0]!.bare).toEqual([{ mark: 'B1-003', section: 'HE 300 B', memberType: 'beam', quantity: 1 }]);
+  });
+
+  it('adds up: members to zones, zones to levels, levels to what is bought', () => {
+    const sum = (values: (string | null)[]): Decimal => values.reduce((total, v) => total.plus(v ?? 0), new Decimal(0));
+    for (const level of site.levels) {
+      for (const kind of ['coating', 'board', 'spray'] as const) {
+        const ofLevel = sum(level.materials.filter((m) => m.kind === kind).map((m) => m.areaM2));
+        expect(sum(level.zones.flatMap((z) => z.materials.filter((m) => m.kind === kind).map((m) => m.areaM2))).toFixed(2)).toBe(ofLevel.toFixed(2));
+        const items = sum(level.zones.flatMap((z) => z.items.filter((i) => i.kind === kind).map((i) => i.areaM2)));
+        // members are printed to 0.01 m² each
+        expect(items.minus(ofLevel).abs().toNumber()).toBeLessThanOrEqual(0.03);
+      }
+    }
+    const litres = sum(site.levels.flatMap((l) => l.materials.map((m) => m.litres)));
+    const coating = site.purchase.find((m) => m.kind === 'coating')!;
+    expect(litres.toFixed(2)).toBe(coating.litres);
+    expect(coating.containers).toBe(litres.div(20).ceil().toNumber());
+    for (const board of site.purchase.filter((m) => m.kind === 'board')) expect(board.sheets).toBeGreaterThan(0);
+    expect(site.purchase.find((m) => m.kind === 'spray')!.bags).toBeGreaterThan(0);
+  });
+
+  it('keeps prices from the contractor until they are given', async () => {
+    const money = (s: SiteDto): (string | null)[] => [...s.purchase, ...s.levels.flatMap((l) => [...l.materials, ...l.zones.flatMap((z) => z.materials)])].map((m) => m.money);
+    expect(site.prices).toBe(false);
+    expect(money(site).every((m) => m === null)).toBe(true);
+    expect(money(await view('specifier')).some((m) => m !== null)).toBe(true);
+    const { manager } = app.dataSource;
+    const project = await manager.findOneByOrFail(Project, { id: p.project.id });
+    await manager.save(Object.assign(project, { settings: { ...project.settings, contractorSeesPrices: true } }));
+    const given = await view();
+    expect(given.prices).toBe(true);
+    expect(money(given).some((m) => m !== null)).toBe(true);
+  });
+
+  it('is for the team alone', async () => {
+    const outsider = await app.signIn(await app.makeUser('Outsider'));
+    await outsider.get(p.url('site')).expect(404);
+    await app.anonymous().get(p.url('site')).expect(401);
+  });
+});
