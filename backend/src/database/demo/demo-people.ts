@@ -1,0 +1,56 @@
+import type { INestApplicationContext } from '@nestjs/common';
+import type { Role } from '@mantlet/common';
+import type { Actor, ProjectScope } from '../../shared/access.js';
+import { MembershipsService } from '../../features/memberships/memberships.service.js';
+import { UsersService } from '../../features/users/users.service.js';
+import type { DemoAccount, Scenario } from './demo-data.js';
+
+export type TeamKey = keyof Scenario['team'];
+const rolesOfTeam: Record<TeamKey, Role[]> = {
+  fireEngineer: ['fire-engineer'], structuralEngineer: ['structural-engineer'], specifier: ['specifier'], checker: ['specifier'], contractor: ['contractor'],
+};
+
+export interface DemoPeople {
+  administrator: Actor;
+  /** each as they act on the project */
+  as: (key: TeamKey, projectId: string) => ProjectScope;
+}
+
+/** Makes the accounts that are missing: the administrator first, as on any new installation. */
+export async function makePeople(app: INestApplicationContext, scenario: Scenario, accounts: readonly DemoAccount[]): Promise<DemoPeople> {
+  const users = app.get(UsersService, { strict: false });
+  const standing = await users.list();
+  const strangers = standing.filter((user) => !accounts.some((account) => account.email === user.email));
+  if (strangers.length) throw new Error(`The demo is loaded into an installation of its own; this one has accounts that are not the demo's, such as ${strangers[0]?.email}.`);
+  const first = accountOf(accounts, scenario.administrator);
+  if (await users.isEmpty()) await users.setUp({ name: first.name, email: first.email, password: first.password });
+  const all = await users.list();
+  const office = all.find((user) => user.email === scenario.administrator);
+  if (!office) throw new Error(`The demo's administrator ${scenario.administrator} has no account.`);
+  const administrator: Actor = office;
+  for (const { name, email, password } of accounts) {
+    if (!all.some((user) => user.email === email)) await users.create({ name, email, password, administrator: false }, administrator);
+  }
+  const actors = new Map<string, Actor>((await users.list()).map(({ id, name, email, administrator: holds }) => [email, { id, name, email, administrator: holds }]));
+  const as = (key: TeamKey, projectId: string): ProjectScope => {
+    const actor = actors.get(scenario.team[key]);
+    if (!actor) throw new Error(`${scenario.team[key]} is on the demo's team and has no account.`);
+    return { projectId, roles: rolesOfTeam[key], actor };
+  };
+  return { administrator, as };
+}
+
+/** The fire engineer, who began the project, brings in the others. */
+export async function makeTeam(app: INestApplicationContext, scenario: Scenario, people: DemoPeople, projectId: string): Promise<void> {
+  const memberships = app.get(MembershipsService, { strict: false });
+  const there = new Set((await memberships.list(projectId)).map((one) => one.email));
+  for (const [key, email] of Object.entries(scenario.team) as [TeamKey, string][]) {
+    if (!there.has(email)) await memberships.add(people.as('fireEngineer', projectId), { email, roles: rolesOfTeam[key] });
+  }
+}
+
+function accountOf(accounts: readonly DemoAccount[], email: string): DemoAccount {
+  const account = accounts.find((one) => one.email === email);
+  if (!account) throw new Error(`seeds/demo/accounts.json has no account for ${email}.`);
+  return account;
+}
