@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { nonNegativeSchema, positiveSchema } from './primitives.js';
+import { nonNegativeSchema, numberSchema, positiveSchema } from './primitives.js';
 
 /** Imposed-load categories of EN 1990 Table A1.1, and the climatic actions. */
 export const actionCategories = ['A', 'B', 'C', 'D', 'E', 'F', 'G', 'H', 'snow-below-1000', 'snow-above-1000', 'wind'] as const;
@@ -9,7 +9,7 @@ export const actionCategoryNames: Record<ActionCategory, string> = {
   G: 'G traffic above 30 kN', H: 'H roof', 'snow-below-1000': 'Snow, to 1000 m', 'snow-above-1000': 'Snow, above 1000 m', wind: 'Wind',
 };
 
-const force = z.number({ error: 'must be a number' }).min(-1e6).max(1e6);
+const force = numberSchema.min(-1e6).max(1e6);
 /** Characteristic effects of one action on the member. Compression positive. */
 export const effectsSchema = z.object({
   axialKn: force.default(0),

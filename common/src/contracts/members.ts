@@ -16,7 +16,7 @@ export const memberInputSchema = z.object({
   sectionId: idSchema,
   grade: z.enum(steelGrades),
   lengthMm: positiveSchema.max(100_000, 'is more than 100 m'),
-  quantity: z.number({ error: 'must be a whole number' }).int('must be a whole number').min(1, 'must be at least 1').max(10_000),
+  quantity: z.number({ error: 'must be a whole number' }).int('must be a whole number').min(1, 'must be at least 1').max(10_000, 'must be at most 10000'),
   exposure: exposureSchema,
   protectionForm: z.enum(protectionForms),
   /** connections of secondary, unprotected steel onto this member, for coat-back */

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import type { Role } from './accounts.js';
 import { emailSchema, roles } from './accounts.js';
-import { codeSchema, idSchema, nameSchema, noteSchema, versionSchema } from './primitives.js';
+import { codeSchema, idSchema, nameSchema, noteSchema, numberSchema, versionSchema } from './primitives.js';
 import { designBasisSchema } from './actions.js';
 import { projectSettingsSchema } from './settings.js';
 import type { ProjectSettings, TargetPolicy } from './settings.js';
@@ -87,8 +87,8 @@ export const levelInputSchema = z.object({
   code: codeSchema,
   name: nameSchema,
   /** top of structural floor, metres above the project's datum */
-  elevationM: z.number({ error: 'must be a number' }).min(-200).max(1000),
-  heightM: z.number({ error: 'must be a number' }).positive('must be above 0').max(100),
+  elevationM: numberSchema.min(-200).max(1000),
+  heightM: numberSchema.positive('must be above 0').max(100),
 });
 export type LevelInput = z.infer<typeof levelInputSchema>;
 export const levelUpdateSchema = levelInputSchema.extend({ version: versionSchema });

@@ -1,6 +1,10 @@
 import '@testing-library/jest-dom/vitest';
-import { cleanup } from '@testing-library/react';
+import { cleanup, configure } from '@testing-library/react';
 import { afterEach, vi } from 'vitest';
+
+// slow shared machines: a test fails on what it sees, not on the clock
+configure({ asyncUtilTimeout: 15_000 });
+vi.setConfig({ testTimeout: 90_000 });
 
 /** What antd asks of a browser and jsdom does not have. */
 window.matchMedia ??= (query: string) => ({

@@ -58,6 +58,13 @@ function seriesWish(series: Series, { x, y }: ChartFrame): ChartLabel | null {
   return { text: series.name, fontSize: 12, className: series.textClassName ?? 'd-sub', places: series.side === 'below' ? [...below, ...above] : [...above, ...below] };
 }
 
+/** The same subscripts as in the page's text, inside a drawing. */
+function SvgSymbol({ text, size }: { text: string; size: number }) {
+  const found = /^(.*?)_(\S+)(.*)$/.exec(text);
+  if (!found) return text;
+  return <>{found[1]}<tspan dy={size * 0.24} fontSize={size * 0.74}>{found[2]}</tspan><tspan dy={-size * 0.24}>{found[3]}</tspan></>;
+}
+
 function Axes({ frame, xAxis, yAxis }: { frame: ChartFrame; xAxis: Axis; yAxis: Axis }) {
   const { x, y, plot } = frame;
   const [right, bottom] = [plot.x + plot.width, plot.y + plot.height];
@@ -134,7 +141,7 @@ export function LineChart(props: LineChartProps) {
         <g aria-hidden="true">
           {wishes.map((wish, i) => {
             const place = places[i];
-            return place && <text key={wish.text + i} className={`d-label ${wish.className ?? ''}`} x={place.x} y={place.y} fontSize={wish.fontSize} fontWeight={wish.weight ?? 400} textAnchor={place.anchor}>{wish.text}</text>;
+            return place && <text key={wish.text + i} className={`d-label ${wish.className ?? ''}`} x={place.x} y={place.y} fontSize={wish.fontSize} fontWeight={wish.weight ?? 400} textAnchor={place.anchor}><SvgSymbol text={wish.text} size={wish.fontSize} /></text>;
           })}
         </g>
         <g

@@ -1,9 +1,15 @@
 import type { ReactNode } from 'react';
 
+const bounds = { '<=': 'at most', '>=': 'at least', '<': 'below', '>': 'above' } as const;
+
 /** "must be above 0" needs its subject; a whole sentence stands alone; what a schema says of itself is put plainly. */
 export function fieldSentence(label: string, problem: string): string {
   if (/^Invalid input/.test(problem)) return `${label} is needed.`;
   if (/^Invalid option/.test(problem)) return `${label}: choose one of the values offered.`;
+  const limit = /^Too (?:big|small): expected number to be (<=|>=|<|>)\s?(-?[\d.]+)/.exec(problem);
+  if (limit) return `${label} must be ${bounds[limit[1] as keyof typeof bounds]} ${limit[2]}.`;
+  const length = /^Too (big|small): expected string to have [<>]=?\s?(\d+)/.exec(problem);
+  if (length) return `${label} is ${length[1] === 'big' ? 'longer' : 'shorter'} than ${length[2]} characters.`;
   const text = /^[a-z]/.test(problem) ? `${label} ${problem}` : problem;
   return /[.!?]$/.test(text) ? text : `${text}.`;
 }

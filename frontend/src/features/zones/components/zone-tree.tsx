@@ -78,7 +78,7 @@ function useColumns(actions: ZoneTreeActions, projectId: string): ScheduleColumn
     { title: 'Environment', key: 'environment', width: 90, render: zoneOnly((z) => z.environment) },
     { title: 'Systems', key: 'systems', render: zoneOnly((z) => <Systems zone={z} />) },
     { title: 'Target', key: 'target', width: 84, className: 'mt-fold-hide', render: zoneOnly((z) => targetPolicyName(z.targetPolicy)) },
-    { title: 'Each its own', key: 'own', numeric: true, width: 84, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="own" />) },
+    { title: 'Each its own', key: 'own', numeric: true, width: 96, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="own" />) },
     { title: 'Bands', key: 'bands', numeric: true, width: 84, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="bands" />) },
     { title: 'One for all', key: 'one', numeric: true, width: 84, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="one" />) },
     {
