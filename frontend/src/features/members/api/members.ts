@@ -1,0 +1,36 @@
+import { keepPreviousData, queryOptions, useQuery } from '@tanstack/react-query';
+import type { Acceptance, AcceptanceDto, BulkMember, MemberInput, MemberQuery, MemberRowDto, MemberSheetDto, MemberStructural, MemberUpdate, Page } from '@mantlet/common';
+import { api } from '../../../lib/api-client.js';
+import { projectKey } from '../../../lib/query-client.js';
+import { useProjectMutation } from '../../projects/api/projects.js';
+
+const at = (projectId: string) => `/projects/${projectId}/members`;
+
+export const membersQuery = (projectId: string, query: Partial<MemberQuery>) =>
+  queryOptions({
+    queryKey: projectKey(projectId, 'members', query),
+    queryFn: ({ signal }) => api.get<Page<MemberRowDto>>(at(projectId), query, signal),
+    // the rows stay on screen while the next page or order is fetched
+    placeholderData: keepPreviousData,
+  });
+export const useMembers = (projectId: string, query: Partial<MemberQuery>) => useQuery(membersQuery(projectId, query));
+
+export const memberQuery = (projectId: string, memberId: string) =>
+  queryOptions({ queryKey: projectKey(projectId, 'member', memberId), queryFn: ({ signal }) => api.get<MemberSheetDto>(`${at(projectId)}/${memberId}`, undefined, signal) });
+export const useMember = (projectId: string, memberId: string) => useQuery(memberQuery(projectId, memberId));
+
+export interface SavedMember { id: string }
+export const useCreateMember = (projectId: string) => useProjectMutation<MemberInput, SavedMember>(projectId, (body) => api.post(at(projectId), body));
+export const useUpdateMember = (projectId: string, memberId: string) =>
+  useProjectMutation<MemberUpdate>(projectId, (body) => api.patch(`${at(projectId)}/${memberId}`, body));
+export const useSetStructural = (projectId: string, memberId: string) =>
+  useProjectMutation<MemberStructural>(projectId, (body) => api.put(`${at(projectId)}/${memberId}/structural`, body));
+export const useBulkMembers = (projectId: string) =>
+  useProjectMutation<BulkMember, { changed: number }>(projectId, (body) => api.post(`${at(projectId)}/bulk`, body));
+export const useDeleteMembers = (projectId: string) =>
+  useProjectMutation<string[], { deleted: number }>(projectId, (memberIds) => api.post(`${at(projectId)}/delete`, { memberIds }));
+
+export const useAccept = (projectId: string) =>
+  useProjectMutation<Acceptance, { accepted: number }>(projectId, (body) => api.post(`/projects/${projectId}/acceptances`, body));
+export const useWithdrawAcceptance = (projectId: string) =>
+  useProjectMutation<{ memberIds: string[]; kind: AcceptanceDto['kind'] }>(projectId, (body) => api.delete(`/projects/${projectId}/acceptances`, body));

@@ -1,0 +1,74 @@
+import { Button } from 'antd';
+import type { ReactNode } from 'react';
+import type { AcceptanceDto, MemberSheetDto } from '@mantlet/common';
+import { exposureNames, formatArea, formatLimitTemperature, formatMinutes, formatSectionFactor, formatTemperature, formatThickness, memberTypeNames, wayNames } from '@mantlet/common';
+import { count, formatDate, formatNumber } from '../../../lib/format.js';
+import { Panel } from '../../../ui/panel.js';
+import { StatusWord } from '../../../ui/status-word.js';
+import { useMay } from '../../projects/project-context.js';
+import { useWithdrawAcceptance } from '../api/members.js';
+import { FailedSave } from '../../../ui/form/failed-save.js';
+import { acceptanceNames } from '../member-words.js';
+
+const missing = 'not determined';
+const orMissing = (text: string) => (text === '–' ? missing : text);
+
+/** Unprotected under a slab, κ1 is another than protected: the temperature it must hold is then said as well. */
+function bareWords(result: MemberSheetDto['result']): string {
+  if (result?.bareMinutes == null) return 'its temperature is not reached within 240 min, or not determined';
+  const { bareCriticalTemperatureC: bare, criticalTemperatureC: critical } = result;
+  const apart = bare !== null && bare !== critical ? `, then at ${formatLimitTemperature(bare)} (κ1 of an unprotected beam)` : '';
+  return `${formatMinutes(Math.floor(result.bareMinutes))}${apart}`;
+}
+
+function facts(sheet: MemberSheetDto): [string, ReactNode][] {
+  const { member, section, result, areaM2, productName } = sheet;
+  const girth = (value: number | null | undefined) => (value == null ? missing : `${formatNumber(value)} mm`);
+  return [
+    ['Type', memberTypeNames[member.memberType]],
+    ['Section', `${section.designation}, ${member.grade}, ${formatNumber(section.properties.massKgPerM, 1)} kg/m`],
+    ['Length', `${formatNumber(member.lengthMm)} mm, ${member.quantity} off`],
+    ['Exposure', `${exposureNames[member.exposure.arrangement]}${member.exposure.faces?.length ? ` (${member.exposure.faces.join(', ')})` : ''}${member.exposure.reason ? `: ${member.exposure.reason}` : ''}`],
+    ['Protection', `${productName ?? 'No system set for its type in this zone'}, ${member.protectionForm === 'boxed' ? 'boxed' : 'following the profile'}, ${member.onSite ? 'on site' : 'in the shop'}`],
+    ['Section factor', orMissing(formatSectionFactor(result?.sectionFactorPerM)).replace('1/m', 'm⁻¹')],
+    ['Heated girth', girth(result?.heatedPerimeterMm)],
+    ['Coated girth', girth(result?.coatedGirthMm)],
+    ['Area to protect', orMissing(formatArea(areaM2))],
+    ['How the temperature comes about', `${wayNames[member.basis.way]}${result?.method ? `: ${result.method}` : ''}`],
+    ['Utilisation in fire', result?.utilisation == null ? 'not calculated' : formatNumber(result.utilisation, 2)],
+    ['Bare steel at the end', orMissing(formatTemperature(result?.bareTemperatureC))],
+    ['Bare steel holds', bareWords(result)],
+    ['Needs', result?.requiredThickness == null ? missing : formatThickness(result.requiredThickness, result.thicknessUnit ?? 'mm')],
+    ['Gets with its zone', result?.appliedThickness == null ? missing : `${formatThickness(result.appliedThickness, result.thicknessUnit ?? 'mm')}${result.layers ? ` in layers of ${result.layers.join(' + ')} mm` : ''}`],
+    ['Read in the evidence at', result?.evidenceReading ?? missing],
+    ...(member.coatBackConnections > 0 ? [['Coat-back', `${count(member.coatBackConnections, 'connection')}, girth ${formatNumber(member.coatBackGirthMm)} mm`] as [string, ReactNode]] : []),
+    ...(member.deductionM2 > 0 ? [['Deduction', formatArea(member.deductionM2, 2)] as [string, ReactNode]] : []),
+    ...(member.note ? [['Note', member.note] as [string, ReactNode]] : []),
+  ];
+}
+
+export function MemberFacts({ sheet }: { sheet: MemberSheetDto }) {
+  return <Panel title="Facts"><dl className="mt-facts">{facts(sheet).map(([name, value]) => <div key={name} style={{ display: 'contents' }}><dt>{name}</dt><dd>{value}</dd></div>)}</dl></Panel>;
+}
+
+/** Who accepted what, and whether it still holds. */
+export function Acceptances({ projectId, memberId, acceptances }: { projectId: string; memberId: string; acceptances: readonly AcceptanceDto[] }) {
+  const may = useMay();
+  const withdraw = useWithdrawAcceptance(projectId);
+  if (acceptances.length === 0) return null;
+  return (
+    <Panel title="Accepted">
+      <FailedSave error={withdraw.error} />
+      <ul className="mt-history">
+        {acceptances.map((a) => (
+          <li key={`${a.kind} ${a.at}`}>
+            <StatusWord kind={a.stillHolds ? 'settled' : 'attention'}>{acceptanceNames[a.kind]}{a.valueC === null ? '' : `, ${formatTemperature(a.valueC)}`}: {a.stillHolds ? 'holds' : 'lapsed, the value has changed'}</StatusWord>
+            <span>{a.reason}</span>
+            <span className="mt-sub">{a.by}, {formatDate(a.at)}</span>
+            {may('accept-temperatures') && <div><Button size="small" loading={withdraw.isPending} onClick={() => withdraw.mutate({ memberIds: [memberId], kind: a.kind })}>Withdraw the acceptance</Button></div>}
+          </li>
+        ))}
+      </ul>
+    </Panel>
+  );
+}

@@ -1,0 +1,51 @@
+import { acceptanceKinds, acceptanceSchema, defaultDesignBasis } from '@mantlet/common';
+import type { Acceptance } from '@mantlet/common';
+import { count, joinWords } from '../../../lib/format.js';
+import { RadioField, TextField } from '../../../ui/form/fields.js';
+import { FormDrawer } from '../../../ui/form/form-drawer.js';
+import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
+import { useCurrentProject } from '../../projects/project-context.js';
+import { useWatch } from 'react-hook-form';
+import { useAccept } from '../api/members.js';
+import { acceptable } from './acceptance.js';
+import type { Acceptable, AcceptanceKind } from './acceptance.js';
+
+const formSchema = acceptanceSchema.omit({ memberIds: true });
+
+const named = (members: readonly Acceptable[]) => (members.length > 6 ? `${members.slice(0, 6).map((m) => m.mark).join(', ')} and ${members.length - 6} more` : joinWords(members.map((m) => m.mark)));
+
+interface AcceptanceDrawerProps { members: readonly Acceptable[]; onClose: () => void; onAccepted: (n: number) => void }
+
+/** The fire engineer's signed acceptance, with its reason. It lapses by itself when the accepted value changes. */
+export function AcceptanceDrawer({ members, onClose, onAccepted }: AcceptanceDrawerProps) {
+  const project = useCurrentProject();
+  const accept = useAccept(project.id);
+  const aboveC = (project.settings?.designBasis ?? defaultDesignBasis).secondSignatureAboveC;
+  const by = acceptable(members, aboveC);
+  const words: Record<AcceptanceKind, string> = { assumed: 'An assumed critical temperature', 'high-temperature': `A critical temperature above ${aboveC} °C`, bare: 'Staying bare' };
+  const first = acceptanceKinds.find((kind) => by[kind].length > 0);
+  const form = useContractForm(formSchema, { defaultValues: { ...(first && { kind: first }), reason: '' } });
+  useServerIssues(form, accept.error);
+  const kind = useWatch({ control: form.control, name: 'kind' }) as AcceptanceKind | undefined;
+  const chosen = kind ? by[kind] : [];
+  const send = (body: Omit<Acceptance, 'memberIds'>) => accept.mutate({ ...body, memberIds: by[body.kind].map((m) => m.id) }, { onSuccess: ({ accepted }) => onAccepted(accepted) });
+  const save = form.handleSubmit(send);
+  const options = acceptanceKinds.map((value) => ({ value, label: `${words[value]}: ${by[value].length === 0 ? 'none chosen' : count(by[value].length, 'member')}`, disabled: by[value].length === 0 }));
+  if (!first) {
+    return (
+      <FormDrawer title="Accept" open onClose={onClose} onSubmit={(e) => { e.preventDefault(); onClose(); }} dirty={false} saving={false} saveText="Close">
+        <p>Nothing here needs an acceptance: none of {count(members.length, 'chosen member')} rests on an assumed temperature, has a critical temperature above {aboveC} °C, or may stay bare.</p>
+      </FormDrawer>
+    );
+  }
+  return (
+    <FormDrawer
+      title="Accept" open onClose={onClose} onSubmit={(e) => { void save(e); }} dirty={form.formState.isDirty && !accept.isSuccess} saving={accept.isPending} error={accept.error}
+      saveText={`Accept for ${count(chosen.length, 'member')}`}
+    >
+      <RadioField control={form.control} name="kind" label="What you accept" options={options} help="Your name and the date go with it. It holds only while the accepted value stands." />
+      {chosen.length > 0 && <p className="mt-sub">{named(chosen)}</p>}
+      <TextField control={form.control} name="reason" label="Reason" rows={4} help="Printed with the schedule." />
+    </FormDrawer>
+  );
+}

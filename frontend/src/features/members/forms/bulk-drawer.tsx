@@ -1,0 +1,50 @@
+import { Checkbox } from 'antd';
+import { useWatch } from 'react-hook-form';
+import type { BulkMember } from '@mantlet/common';
+import { count } from '../../../lib/format.js';
+import { SelectField } from '../../../ui/form/fields.js';
+import { FormDrawer } from '../../../ui/form/form-drawer.js';
+import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
+import { useBulkMembers } from '../api/members.js';
+import { bulkFormSchema, emptyBulk } from './bulk-form.js';
+import { ExposureFields } from './exposure-fields.js';
+import { formOptions, gradeOptions, placeOptions, typeOptions, useZoneOptions } from './member-fields.js';
+import { SectionField } from './section-field.js';
+
+interface BulkDrawerProps { projectId: string; memberIds: readonly string[]; onClose: () => void; onChanged: (changed: number) => void }
+const kept = { allowClear: true, placeholder: 'Keep as it is' };
+
+/** Sets the same values on many members at once; a field left empty changes nothing. */
+export function BulkDrawer({ projectId, memberIds, onClose, onChanged }: BulkDrawerProps) {
+  const bulk = useBulkMembers(projectId);
+  const zones = useZoneOptions(projectId);
+  const form = useContractForm(bulkFormSchema, { defaultValues: emptyBulk });
+  useServerIssues(form, bulk.error);
+  const { control } = form;
+  const exposure = useWatch({ control, name: 'exposure' });
+  const send = (set: BulkMember['set']) => bulk.mutate({ memberIds: [...memberIds], set }, { onSuccess: ({ changed }) => onChanged(changed) });
+  const save = form.handleSubmit(send);
+  return (
+    <FormDrawer
+      title={`Set values on ${count(memberIds.length, 'member')}`} open onClose={onClose} onSubmit={(e) => { void save(e); }} dirty={form.formState.isDirty && !bulk.isSuccess}
+      saving={bulk.isPending} error={bulk.error} saveText={`Set on ${count(memberIds.length, 'member')}`}
+    >
+      <p className="mt-sub">Choose only what shall change. Results are worked out again when you save.</p>
+      <SelectField control={control} name="zoneId" label="Zone" options={zones} search {...kept} />
+      <div className="mt-form-row">
+        <SelectField control={control} name="memberType" label="Type" options={typeOptions} {...kept} />
+        <SelectField control={control} name="grade" label="Steel grade" options={gradeOptions} {...kept} />
+      </div>
+      <SectionField control={control} projectId={projectId} current={null} clearable help="Left empty, every member keeps its own section." />
+      <div className="mt-form-row">
+        <SelectField control={control} name="protectionForm" label="Protection form" options={formOptions} {...kept} />
+        <SelectField control={control} name="onSite" label="Protected" options={placeOptions} {...kept} />
+      </div>
+      <fieldset>
+        <legend>Exposure</legend>
+        <Checkbox checked={exposure !== null} onChange={(e) => form.setValue('exposure', e.target.checked ? { arrangement: 'four-sides', reason: '' } : null, { shouldDirty: true })}>Set the exposure</Checkbox>
+        {exposure !== null && <ExposureFields control={control} name="exposure" />}
+      </fieldset>
+    </FormDrawer>
+  );
+}

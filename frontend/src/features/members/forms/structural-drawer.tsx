@@ -1,0 +1,83 @@
+import { useWatch } from 'react-hook-form';
+import { defaultDesignBasis, memberTypeNames, wayNames } from '@mantlet/common';
+import type { CriticalTemperatureWay, MemberDto, MemberStructural, MemberType } from '@mantlet/common';
+import { CheckField, NumberField, RadioField, SelectField, TextField } from '../../../ui/form/fields.js';
+import { FormDrawer } from '../../../ui/form/form-drawer.js';
+import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
+import { useCurrentProject } from '../../projects/project-context.js';
+import { useSetStructural } from '../api/members.js';
+import { ActionFields } from './action-fields.js';
+import type { StructuralForm } from './action-fields.js';
+import { structuralFormSchema, structuralValues } from './structural-form.js';
+import type { StructuralValues } from './structural-form.js';
+
+const ways = (['calculated', 'utilisation', 'ambient-utilisation', 'declared', 'assumed', 'none'] as const satisfies readonly CriticalTemperatureWay[]).map((value) => ({ value, label: wayNames[value] }));
+const bucklingRules = [
+  { value: 'given', label: 'As given' },
+  { value: 'braced-intermediate', label: 'Braced column, between storeys: half the storey height' },
+  { value: 'braced-top', label: 'Braced column, top storey: 0.7 of its height' },
+];
+const design = 'basis.design';
+
+function CalculatedFields({ form }: { form: StructuralForm }) {
+  const { control } = form;
+  return (
+    <>
+      <ActionFields form={form} />
+      <fieldset>
+        <legend>Buckling</legend>
+        <div className="mt-form-row">
+          <NumberField control={control} name={`${design}.bucklingLengthYMm`} label="System length, axis y" unit="mm" min={0} help="Between restraints against buckling about the strong axis." />
+          <NumberField control={control} name={`${design}.bucklingLengthZMm`} label="System length, axis z" unit="mm" min={0} help="The same about the weak axis." />
+        </div>
+        <SelectField control={control} name={`${design}.bucklingRule`} label="Buckling length in fire" options={bucklingRules} help="EN 1993-1-2 4.2.3.2(5). The reductions hold only for continuous columns of a braced frame whose storeys are fire compartments: choosing one confirms that." />
+      </fieldset>
+      <fieldset>
+        <legend>Beams</legend>
+        <RadioField control={control} name={`${design}.lateralRestraint`} label="Compression flange" options={[{ value: 'continuous', label: 'Held along its length' }, { value: 'at-points', label: 'Held at points only' }]} help="Held at points, lateral-torsional buckling would have to be checked: that is not calculated here, and is said as such." />
+        <CheckField control={control} name={`${design}.continuousBeam`} label="The moment is over a support of a continuous beam" help="κ2 = 0.85, EN 1993-1-2 4.2.3.3(8)." />
+        <CheckField control={control} name={`${design}.composite`} label="Composite with the slab" help="Not calculated here: give its utilisation or declare its temperature." />
+        <CheckField control={control} name={`${design}.webOpenings`} label="Has web openings" help="Not calculated here: needs a declared temperature." />
+      </fieldset>
+    </>
+  );
+}
+
+function WayFields({ form, memberType }: { form: StructuralForm; memberType: MemberType }) {
+  const { control } = form;
+  const basis = useCurrentProject().settings?.designBasis ?? defaultDesignBasis;
+  const way = useWatch({ control, name: 'basis.way' });
+  const reference = <TextField control={control} name="basis.reference" label="Reference" help="Where the value comes from: calculation, sheet, date." />;
+  switch (way) {
+    case 'declared': return <><NumberField control={control} name="basis.temperatureC" label="Critical temperature" unit="°C" help={`100 to 1200 °C. Above ${basis.secondSignatureAboveC} °C the fire engineer is asked to accept it.`} />{reference}</>;
+    case 'utilisation': return <><NumberField control={control} name="basis.mu0" label="Degree of utilisation μ0" min={0} help="Effect in fire over the resistance at the start of the fire: E fi,d / R fi,d,0. EN 1993-1-2 4.2.4(3)." />{reference}</>;
+    case 'ambient-utilisation':
+      return (
+        <>
+          <NumberField control={control} name="basis.utilisation" label="Utilisation cold" min={0} help="E d / R d of the ambient design; multiplied by η fi." />
+          <NumberField control={control} name="basis.etaFi" label="Reduction factor η fi" min={0} max={1} help={`Left empty, the project's ${basis.etaFi} is used. EN 1993-1-2 2.4.2.`} />
+          {reference}
+        </>
+      );
+    case 'calculated': return <><CalculatedFields form={form} />{reference}</>;
+    case 'assumed': return <p className="mt-sub">The project assumes {basis.assumedTemperatureC[memberType]} °C for a {memberTypeNames[memberType].toLowerCase()}. It is shown as assumed, and blocks the schedule until the fire engineer accepts it.</p>;
+    case 'none': return <p className="mt-sub">Nothing is given: the member's result is not determined.</p>;
+  }
+}
+
+interface StructuralDrawerProps { projectId: string; member: MemberDto; onClose: () => void; onReload: () => void }
+
+/** How the critical temperature of a member comes about: the structural engineer's alone, kept with name, date and reference. */
+export function StructuralDrawer({ projectId, member, onClose, onReload }: StructuralDrawerProps) {
+  const save = useSetStructural(projectId, member.id);
+  const form = useContractForm<StructuralValues, MemberStructural>(structuralFormSchema, { values: structuralValues(member.basis, member.version) });
+  useServerIssues(form, save.error);
+  const submit = form.handleSubmit((body) => save.mutate({ ...body, version: member.version }, { onSuccess: onClose }));
+  const reload = () => { save.reset(); onReload(); };
+  return (
+    <FormDrawer title={`Critical temperature of ${member.mark}`} open onClose={onClose} onSubmit={(e) => { void submit(e); }} dirty={form.formState.isDirty && !save.isSuccess} saving={save.isPending} error={save.error} onReload={reload} size={680}>
+      <SelectField control={form.control} name="basis.way" label="How it comes about" options={ways} />
+      <WayFields form={form} memberType={member.memberType} />
+    </FormDrawer>
+  );
+}

@@ -1,0 +1,44 @@
+import type { z } from 'zod';
+import { memberStructuralSchema } from '@mantlet/common';
+import type { ActionCategory, Actions, CriticalTemperatureBasis, CriticalTemperatureWay, Effects, MemberDesign, MemberStructural } from '@mantlet/common';
+
+/**
+ * All five ways side by side, so that trying another way loses nothing that was typed in the first.
+ * The contract's schema keeps the fields of the chosen way and drops the rest.
+ */
+export interface StructuralValues {
+  version: number;
+  basis: {
+    way: CriticalTemperatureWay;
+    temperatureC: number | null;
+    mu0: number | null;
+    utilisation: number | null;
+    etaFi: number | null;
+    reference: string;
+    design: Omit<MemberDesign, 'actions'> & { actions: ActionsValues };
+  };
+}
+export type VariableEffects = Effects & { category: ActionCategory };
+export interface ActionsValues { given: Actions['given']; permanent: Effects; leading: VariableEffects | null; accompanying: VariableEffects[]; effect: Effects }
+
+export const structuralFormSchema = memberStructuralSchema as unknown as z.ZodType<MemberStructural, StructuralValues>;
+export const noEffects: Effects = { axialKn: 0, momentYKnm: 0, shearZKn: 0 };
+
+function actionsValues(actions: Actions | null): ActionsValues {
+  const blank: ActionsValues = { given: 'characteristic', permanent: noEffects, leading: null, accompanying: [], effect: noEffects };
+  return { ...blank, ...actions };
+}
+
+export function structuralValues(basis: CriticalTemperatureBasis, version: number): StructuralValues {
+  const design = basis.way === 'calculated' ? basis.design : null;
+  return {
+    version,
+    basis: {
+      temperatureC: null, mu0: null, utilisation: null, etaFi: null, reference: '', ...basis,
+      design: {
+        bucklingLengthYMm: null, bucklingLengthZMm: null, bucklingRule: 'given', lateralRestraint: 'continuous', continuousBeam: false, composite: false, webOpenings: false,
+        ...design, actions: actionsValues(design?.actions ?? null),
+      },
+    },
+  };
+}

@@ -1,0 +1,44 @@
+import { memberQuerySchema } from '@mantlet/common';
+import type { MemberQuery } from '@mantlet/common';
+
+/** What the list shows, as it stands in the address: without defaults. */
+export type MemberFilter = Partial<MemberQuery>;
+export const defaultPageSize = 100;
+
+const fields = memberQuerySchema.shape;
+type Key = keyof typeof fields;
+const keys = Object.keys(fields) as Key[];
+const plain: Partial<Record<Key, unknown>> = { sort: 'mark', direction: 'asc', page: 1, pageSize: defaultPageSize };
+/** The parts that narrow the list, not those that order or page it. */
+export const narrowingKeys = ['search', 'zoneIds', 'levelIds', 'memberTypes', 'verdicts', 'productIds', 'memberIds', 'open'] as const satisfies readonly Key[];
+
+const isEmpty = (value: unknown) => value === undefined || value === null || value === '' || (Array.isArray(value) && value.length === 0);
+
+/** Reads the address key by key, so that one wrong value costs that value and not the whole filter. */
+export function filterOfAddress(params: URLSearchParams): MemberFilter {
+  const filter: Record<string, unknown> = {};
+  for (const key of keys) {
+    const text = params.get(key);
+    if (text === null || text === '') continue;
+    const parsed = fields[key].safeParse(text);
+    if (parsed.success && !isEmpty(parsed.data)) filter[key] = parsed.data;
+  }
+  return filter as MemberFilter;
+}
+
+/** Writes the filter into an address; defaults and what is empty are left out. Other parameters stay. */
+export function addressOfFilter(filter: MemberFilter, others: URLSearchParams = new URLSearchParams()): URLSearchParams {
+  const params = new URLSearchParams(others);
+  for (const key of keys) {
+    const value = filter[key];
+    if (isEmpty(value) || value === plain[key]) params.delete(key);
+    else params.set(key, Array.isArray(value) ? value.join(',') : String(value));
+  }
+  return params;
+}
+
+export const isNarrowed = (filter: MemberFilter): boolean => narrowingKeys.some((key) => !isEmpty(filter[key]) && filter[key] !== 'false');
+/** Another filter begins at its first page. */
+export const changed = (filter: MemberFilter, change: MemberFilter): MemberFilter => ({ ...filter, page: 1, ...change });
+export const cleared = ({ sort, direction, pageSize }: MemberFilter): MemberFilter =>
+  ({ ...(sort && { sort }), ...(direction && { direction }), ...(pageSize && { pageSize }) });
