@@ -3,7 +3,7 @@ import fc from 'fast-check';
 import { stacksOf } from '../standards/en-13381/stacks.js';
 import { protectedTemperature } from './heating.js';
 import { heatingOf, leastThatHolds } from './thermal-thickness.js';
-import { thermalRun } from './thermal-run.js';
+import { thermalRuns } from './thermal-run.js';
 
 const base: ThermalProperties = {
   conductivityWPerMK: 0.2, densityKgPerM3: 800, specificHeatJPerKgK: 1700, moisturePercent: 0, minThicknessMm: 5, maxThicknessMm: 80, maxSectionFactorPerM: 400,
@@ -26,13 +26,16 @@ describe('thermal run', () => {
       const p = { ...base, conductivityWPerMK: c.conductivity, densityKgPerM3: c.density, moisturePercent: c.moisture };
       const curve = { kind: c.curve };
       const place = { properties: p, sectionFactorPerM: c.factor, temperatureC: 550 };
-      const steelC = protectedTemperature({ ...heatingOf(place, curve, c.thickness), minutes: c.period });
-      const whole = thermalRun(p, c.factor, curve, c.period, c.thickness, 2000);
-      expect(Math.abs(whole.steelC - steelC)).toBeLessThan(1e-9);
-      expect(whole.shareOfPeriod).toBe(1);
-      const stopped = thermalRun(p, c.factor, curve, c.period, c.thickness, 550);
-      expect(stopped.steelC > 550).toBe(steelC > 550);
-      expect(stopped.shareOfPeriod < 1).toBe(steelC > 550);
+      const thicknesses: [number, number] = [c.thickness, c.thickness * 1.3];
+      const steel = thicknesses.map((t) => protectedTemperature({ ...heatingOf(place, curve, t), minutes: c.period }));
+      thermalRuns(p, c.factor, curve, c.period, thicknesses, 2000).forEach((run, i) => {
+        expect(Math.abs(run.steelC - (steel[i] ?? 0))).toBeLessThan(1e-9);
+        expect(run.shareOfPeriod).toBe(1);
+      });
+      const [thinner, thicker] = thermalRuns(p, c.factor, curve, c.period, thicknesses, 550);
+      expect(thicker.steelC > 550).toBe((steel[1] ?? 0) > 550);
+      expect(thicker.shareOfPeriod < 1).toBe(thicker.steelC > 550);
+      if (thicker.steelC <= 550) expect(thinner.steelC > 550).toBe((steel[0] ?? 0) > 550);
     }), { numRuns: 120 });
   });
 

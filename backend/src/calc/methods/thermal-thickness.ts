@@ -5,7 +5,7 @@ import { stacksOf } from '../standards/en-13381/stacks.js';
 import type { Determined, RequiredThickness, ThicknessRequest } from '../types.js';
 import type { Stack } from '../standards/en-13381/stacks.js';
 import { protectedTemperature } from './heating.js';
-import { thermalRun } from './thermal-run.js';
+import { thermalRuns } from './thermal-run.js';
 import type { ThermalRun } from './thermal-run.js';
 
 export interface ThermalPlace {
@@ -39,10 +39,11 @@ export function heatingOf(place: ThermalPlace, curve: FireCurve, thicknessMm: nu
   return { conductivityWPerMK, densityKgPerM3, specificHeatJPerKgK, moisturePercent, thicknessMm, sectionFactorPerM: place.sectionFactorPerM, curve };
 }
 
-/** Runs one thickness; a natural fire is judged on its peak. */
-function run(place: ThermalPlace, curve: FireCurve, periodMin: number, thicknessMm: number): ThermalRun {
-  if (curve.kind !== 'parametric') return thermalRun(place.properties, place.sectionFactorPerM, curve, periodMin, thicknessMm, place.temperatureC);
-  return { steelC: protectedTemperature({ ...heatingOf(place, curve, thicknessMm), minutes: periodMin }), shareOfPeriod: 1 };
+/** Runs two thicknesses; a natural fire is judged on its peak. */
+function runBoth(place: ThermalPlace, curve: FireCurve, periodMin: number, thicknessesMm: readonly [number, number]): [ThermalRun, ThermalRun] {
+  if (curve.kind !== 'parametric') return thermalRuns(place.properties, place.sectionFactorPerM, curve, periodMin, thicknessesMm, place.temperatureC);
+  const peak = (thicknessMm: number): ThermalRun => ({ steelC: protectedTemperature({ ...heatingOf(place, curve, thicknessMm), minutes: periodMin }), shareOfPeriod: 1 });
+  return [peak(thicknessesMm[0]), peak(thicknessesMm[1])];
 }
 
 /**
@@ -67,27 +68,50 @@ function indexNear(stacks: readonly Stack[], thicknessMm: number): number {
 
 /**
  * Index of the least thickness that holds the design temperature; stacks.length where none does. Steel under more thickness is never
- * hotter, so the answer is the one place where holding begins; the bracket about it is closed by running its two neighbours.
+ * hotter, so the answer is the one place where holding begins: a thickness that holds beside one that fails. Both are run together.
  */
 export function leastThatHolds(stacks: readonly Stack[], place: ThermalPlace, curve: FireCurve, periodMin: number, guess: number): number {
+  const limitC = place.temperatureC;
   let fails = -1;
   let holds = stacks.length;
   let at = Math.min(Math.max(guess, 0), stacks.length - 1);
   while (holds - fails > 1) {
-    const { thicknessMm } = stacks[at] as Stack;
-    const end = run(place, curve, periodMin, thicknessMm);
-    if (end.steelC <= place.temperatureC) holds = at;
-    else fails = at;
-    at = Math.min(Math.max(indexNear(stacks, predicted(thicknessMm, end, place.temperatureC)), fails + 1), holds - 1);
+    const below = Math.max(at - 1, 0);
+    const thinnerMm = (stacks[below] as Stack).thicknessMm;
+    const thickerMm = (stacks[at] as Stack).thicknessMm;
+    const [thinner, thicker] = runBoth(place, curve, periodMin, [thinnerMm, thickerMm]);
+    let next: number;
+    if (thicker.steelC > limitC) {
+      fails = at;
+      next = predicted(thickerMm, thicker, limitC);
+    } else {
+      holds = thinner.steelC <= limitC ? below : at;
+      if (thinner.steelC > limitC) fails = Math.max(fails, below);
+      next = predicted(thinnerMm, thinner, limitC);
+    }
+    at = Math.min(Math.max(indexNear(stacks, next), fails + 1), holds - 1);
   }
   return holds;
 }
 
-/** Where earlier searches of the same data ended: a nearby case starts there. Only the number of steps depends on it, never the answer. */
-const guesses = new WeakMap<ThermalProperties, Map<number, number>>();
+/** An earlier answer near this case; only the number of runs depends on what is remembered, never the answer. */
+interface Remembered {
+  thicknessMm: number;
+  sectionFactorPerM: number;
+  temperatureC: number;
+}
+const remembered = new WeakMap<ThermalProperties, Map<number, Remembered>>();
+const mostRemembered = 20_000;
 
-function guessKey(place: ThermalPlace, curve: FireCurve, periodMin: number): number {
-  return (Math.round(Math.log(place.sectionFactorPerM) * 12) * 64 + Math.round(place.temperatureC / 20)) * 512 + periodMin + curve.kind.length / 32;
+function neighbourhood(place: ThermalPlace, curve: FireCurve, periodMin: number): number {
+  return (Math.round(Math.log(place.sectionFactorPerM) * 8) * 64 + Math.round(place.temperatureC / 30)) * 512 + periodMin + curve.kind.length / 32;
+}
+
+/** The earlier answer carried over: thickness grows a little slower than A/V, and falls with the temperature allowed. */
+function guessed(near: Remembered | undefined, place: ThermalPlace, stacks: readonly Stack[]): number {
+  if (!near) return stacks.length >> 1;
+  const factor = (place.sectionFactorPerM / near.sectionFactorPerM) ** 0.8;
+  return indexNear(stacks, near.thicknessMm * factor * ((near.temperatureC - 20) / (place.temperatureC - 20)) ** 1.4);
 }
 
 /** Least stocked thickness, stack of layers or step of a spray that holds the design temperature by EN 1993-1-2 (4.27). */
@@ -102,14 +126,14 @@ export function thicknessFromThermal(properties: ThermalProperties, kind: Produc
   const greatest = stacks[stacks.length - 1];
   if (!greatest) return { ok: false, reason: message('product.no-stock', {}) };
   const place = found.value;
-  let known = guesses.get(properties);
-  if (!known) guesses.set(properties, (known = new Map()));
-  const key = guessKey(place, curve, periodMin);
-  const index = leastThatHolds(stacks, place, curve, periodMin, known.get(key) ?? stacks.length >> 1);
-  if (known.size > 20_000) known.clear();
-  known.set(key, index);
+  let known = remembered.get(properties);
+  if (!known) remembered.set(properties, (known = new Map()));
+  const key = neighbourhood(place, curve, periodMin);
+  const index = leastThatHolds(stacks, place, curve, periodMin, guessed(known.get(key), place, stacks));
+  if (known.size > mostRemembered) known.clear();
   const stack = stacks[index];
   if (!stack) return { ok: false, reason: message('product.outside-thickness', { greatest: greatest.thicknessMm, unit: 'mm' }) };
+  known.set(key, { thicknessMm: stack.thicknessMm, sectionFactorPerM: place.sectionFactorPerM, temperatureC: place.temperatureC });
   const layers = stack.layers && stack.layers.length > 1 ? ` in layers of ${stack.layers.join(' + ')} mm` : '';
   const reading = `Thermal properties, (4.27): R ${periodMin}, ${Math.round(place.temperatureC)} °C, A/V ${Math.round(place.sectionFactorPerM)}${layers}`;
   return { ok: true, value: { thickness: stack.thicknessMm, layers: stack.layers, reading } };

@@ -1,7 +1,7 @@
 import { message } from '@mantlet/common';
 import type { Message, RegressionFit } from '@mantlet/common';
 import { groupNames } from './coverage.js';
-import { coefficientsOf, gainPerThickness, regressionThickness } from './regression.js';
+import { gainPerThickness, solvedThickness } from './regression.js';
 
 export function turnedRange(where: string, what: string, least: number, greatest: number): Message[] {
   return least <= greatest ? [] : [message('product.range-turned', { where, what, least, greatest })];
@@ -24,7 +24,7 @@ type Triple = [sectionFactorPerM: number, temperatureC: number, periodMin: numbe
 /** The thickness a fit asks for, held within the tested range as a reading would; null where it gives none. */
 function held(fit: RegressionFit, [sectionFactorPerM, temperatureC, periodMin]: Triple): number | null {
   if (!(gainPerThickness(fit, sectionFactorPerM, temperatureC) > 0)) return null;
-  const d = regressionThickness.evaluate({ ...coefficientsOf(fit), periodMin, temperatureC, sectionFactorPerM });
+  const d = solvedThickness(fit, sectionFactorPerM, temperatureC, periodMin);
   return Math.min(Math.max(d, fit.minThickness), fit.maxThickness);
 }
 

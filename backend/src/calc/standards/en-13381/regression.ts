@@ -17,6 +17,16 @@ const coefficientSymbols = {
 };
 const source = { standard: 'EN 13381-8', clause: 'annex on numerical regression analysis', note: 'clause letter differs between editions', memory: true };
 
+/** Minutes at no thickness: the terms without d_p. */
+function constantMinutes(a0: number, a3: number, a6: number, a7: number, temperatureC: number, sectionFactorPerM: number): number {
+  return a0 + a3 * temperatureC + (a6 * temperatureC + a7) / sectionFactorPerM;
+}
+
+/** Minutes that one more unit of thickness gains: the terms with d_p. */
+function gainMinutes(a1: number, a2: number, a4: number, a5: number, temperatureC: number, sectionFactorPerM: number): number {
+  return a1 + a4 * temperatureC + (a2 + a5 * temperatureC) / sectionFactorPerM;
+}
+
 /** Time for protected steel to reach a design temperature. */
 export const regressionTime = defineFormula<RegressionInput>({
   label: 'Time to the design temperature by multiple linear regression',
@@ -29,11 +39,9 @@ export const regressionTime = defineFormula<RegressionInput>({
     temperatureC: { symbol: 'θ_a', meaning: 'design temperature of the steel', unit: '°C' },
     sectionFactorPerM: { symbol: 'A_m/V', meaning: 'section factor', unit: '1/m' },
   },
-  evaluate: (i) => {
-    const s = i.sectionFactorPerM;
-    return i.a0 + i.a3 * i.temperatureC + (i.a6 * i.temperatureC + i.a7) / s
-      + i.thickness * (i.a1 + i.a2 / s + i.a4 * i.temperatureC + (i.a5 * i.temperatureC) / s);
-  },
+  evaluate: (i) =>
+    constantMinutes(i.a0, i.a3, i.a6, i.a7, i.temperatureC, i.sectionFactorPerM)
+    + i.thickness * gainMinutes(i.a1, i.a2, i.a4, i.a5, i.temperatureC, i.sectionFactorPerM),
 });
 
 /** The same equation solved for the thickness; it is linear in d_p. */
@@ -48,11 +56,9 @@ export const regressionThickness = defineFormula<Omit<RegressionInput, 'thicknes
     sectionFactorPerM: regressionTime.symbols.sectionFactorPerM,
     periodMin: { symbol: 't', meaning: 'required period', unit: 'min' },
   },
-  evaluate: (i) => {
-    const s = i.sectionFactorPerM;
-    return (i.periodMin - i.a0 - i.a3 * i.temperatureC - (i.a6 * i.temperatureC + i.a7) / s)
-      / (i.a1 + i.a2 / s + i.a4 * i.temperatureC + (i.a5 * i.temperatureC) / s);
-  },
+  evaluate: (i) =>
+    (i.periodMin - constantMinutes(i.a0, i.a3, i.a6, i.a7, i.temperatureC, i.sectionFactorPerM))
+    / gainMinutes(i.a1, i.a2, i.a4, i.a5, i.temperatureC, i.sectionFactorPerM),
 });
 
 export function coefficientsOf(fit: RegressionFit): Omit<RegressionInput, 'thickness' | 'temperatureC' | 'sectionFactorPerM'> {
@@ -60,10 +66,18 @@ export function coefficientsOf(fit: RegressionFit): Omit<RegressionInput, 'thick
   return { a0, a1, a2, a3, a4, a5, a6, a7 };
 }
 
+const storedCoefficient = (fit: RegressionFit, n: number): number => fit.coefficients[n] as number;
+
 /** Minutes that one more unit of thickness gains; must be above zero for a thickness to follow from a period. */
 export function gainPerThickness(fit: RegressionFit, sectionFactorPerM: number, temperatureC: number): number {
-  const { a1, a2, a4, a5 } = coefficientsOf(fit);
-  return a1 + a2 / sectionFactorPerM + a4 * temperatureC + (a5 * temperatureC) / sectionFactorPerM;
+  const a = (n: number): number => storedCoefficient(fit, n);
+  return gainMinutes(a(1), a(2), a(4), a(5), temperatureC, sectionFactorPerM);
+}
+
+/** What `regressionThickness` evaluates, for a fit as it is stored. */
+export function solvedThickness(fit: RegressionFit, sectionFactorPerM: number, temperatureC: number, periodMin: number): number {
+  const a = (n: number): number => storedCoefficient(fit, n);
+  return (periodMin - constantMinutes(a(0), a(3), a(6), a(7), temperatureC, sectionFactorPerM)) / gainPerThickness(fit, sectionFactorPerM, temperatureC);
 }
 
 export interface RegressionPlace {
@@ -108,7 +122,7 @@ export function thicknessFromFits(fits: readonly RegressionFit[], kind: ProductK
     return { ok: false, reason: message('product.outside-period', { periodMin: request.periodMin, limitMin: fit.maxPeriodMin }) };
   }
   const periodMin = Math.max(request.periodMin, fit.minPeriodMin);
-  const solved = regressionThickness.evaluate({ ...coefficientsOf(fit), periodMin, temperatureC, sectionFactorPerM });
+  const solved = solvedThickness(fit, sectionFactorPerM, temperatureC, periodMin);
   if (!Number.isFinite(solved)) return { ok: false, reason: message('product.no-solution', { sectionFactorPerM, temperatureC }) };
   const least = Math.max(solved, fit.minThickness);
   const unit = kind === 'coating' ? 'µm' : 'mm';
