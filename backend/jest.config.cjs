@@ -3,6 +3,8 @@ module.exports = {
   rootDir: __dirname,
   testEnvironment: 'node',
   roots: ['<rootDir>/src', '<rootDir>/test'],
+  // the machine may be busy: a wait of this length means that something hangs, not that it is slow
+  testTimeout: 120_000,
   testRegex: '\\.spec\\.ts$',
   transform: {
     '^.+\\.(t|j|mj)s$': [
