@@ -38,6 +38,10 @@ export interface PolicyMaterialDto {
   /** litres of coating (practical), m² of board sheet, m³ of spray */
   material: number | null;
   materialUnit: 'L' | 'm²' | 'm³';
+  /** protected area under the policy, m²: board girths grow with thickness */
+  areaM2?: number;
+  /** material in place, thickness × area, m³: what the bands keep least */
+  volumeM3?: number;
 }
 /** The target protection level of one zone and system. */
 export interface ZoneTargetDto {
