@@ -10,7 +10,7 @@ import type { PdfSignatures, SchedulePdfInput } from './schedule-pdf/types.js';
 
 const workerFile = new URL('../../worker/schedule-pdf.worker.js', import.meta.url);
 /** longer than any schedule takes; a worker that hangs is ended */
-const LIMIT_MS = 120_000;
+const LIMIT_MS = 300_000;
 
 export type WorkerAnswer = { pdf: Uint8Array } | { error: string };
 

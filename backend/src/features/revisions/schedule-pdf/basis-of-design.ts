@@ -1,7 +1,7 @@
 import { actionCategories, actionCategoryNames, formatNumber, memberTypeNames, memberTypes } from '@mantlet/common';
 import type { ScheduleSnapshot } from '@mantlet/common';
 import type { Content } from 'pdfmake/interfaces.js';
-import { facts, heading, paragraph, schedule, subheading } from './layout.js';
+import { facts, heading, paragraph, schedule } from './layout.js';
 
 const readingWords = {
   linear: 'linear between two rows', 'next-row-up': 'the next row up', 'next-below': 'the tabulated temperature at or below',
@@ -17,7 +17,7 @@ export function basisOfDesign({ settings }: ScheduleSnapshot): Content[] {
     facts([
       ['Partial factor γ_M,fi', String(b.gammaMFi)],
       ['γ_G, γ_Q (for η_fi)', `${b.gammaG}, ${b.gammaQ}`],
-      ['ψ_fi of the leading action', b.psiFi === 'psi1' ? 'ψ_1' : 'ψ_2'],
+      ['ψ_fi of the leading action', b.psiFi === 'psi1' ? 'ψ1' : 'ψ2'],
       ['η_fi where not worked out', String(b.etaFi)],
       ['Temperature from utilisation', b.utilisationMethod === 'equation-4.22' ? 'EN 1993-1-2 equation (4.22)' : 'inversion of k_y, Table 3.1'],
       ['Class 4 sections', `${b.class4TemperatureC} °C`],
@@ -30,15 +30,15 @@ export function basisOfDesign({ settings }: ScheduleSnapshot): Content[] {
     ]),
     {
       columns: [
-        [subheading('Combination factors'), schedule([
+        [schedule([
           { head: 'Category', width: '*', value: (r) => r.name },
           { head: 'ψ_1', width: 40, right: true, value: (r) => formatNumber(r.psi1, 2) },
           { head: 'ψ_2', width: 40, right: true, value: (r) => formatNumber(r.psi2, 2) },
-        ], actionCategories.map(category))],
-        [subheading('Assumed critical temperatures, where one was accepted'), schedule([
+        ], actionCategories.map(category), { title: 'Combination factors' })],
+        [schedule([
           { head: 'Member type', width: '*', value: (r) => memberTypeNames[r] },
           { head: '°C', width: 40, right: true, value: (r) => String(b.assumedTemperatureC[r] ?? '–') },
-        ], [...memberTypes])],
+        ], [...memberTypes], { title: 'Assumed critical temperatures, where one was accepted' })],
       ],
       columnGap: 24,
     },

@@ -51,11 +51,6 @@ export function schedulePdfDefinition(input: SchedulePdfInput): TDocumentDefinit
     ...(issued ? {} : { watermark: { text: `${revisionStateNames[signatures.state].toUpperCase()}, NOT ISSUED`, color: '#000000', opacity: 0.08, bold: true, fontSize: 60 } }),
     header: (_page, _pages, size) => runningHead(input, size.width - 2 * PAGE_MARGIN_PT),
     footer: (page, pages) => runningFoot(page, pages),
-    // a zone's name never stays behind at the foot of a page
-    pageBreakBefore: (node, query) => {
-      if (node.headlineLevel === undefined) return false;
-      return query.getFollowingNodesOnPage().length === 0;
-    },
     content: [
       ...titleSheet(input), ...basisOfDesign(snapshot), ...zonesSection(snapshot), ...systemsSection(snapshot), ...memberSchedule(snapshot),
       ...quantitiesSection(snapshot), ...notesSection(snapshot),

@@ -41,7 +41,7 @@ function verdict(m: SnapshotMember, names: ReadonlyMap<string, string>): string 
 
 function applied({ result }: SnapshotMember): string {
   if (result?.verdict !== 'protected' || result.appliedThickness === null || result.thicknessUnit === null) return '–';
-  const layers = result.layers && result.layers.length > 1 ? ` (${result.layers.join(' + ')})` : '';
+  const layers = result.layers && result.layers.length > 1 ? `\n(${result.layers.join(' + ')})` : '';
   return formatThickness(result.appliedThickness, result.thicknessUnit) + layers;
 }
 
@@ -68,8 +68,8 @@ export function memberSchedule(snapshot: ScheduleSnapshot): Content[] {
     paragraph('By level and zone. Three sides: the slab covers the top. A/V in 1/m, shown to 1 1/m and read unrounded; θ_cr is rounded down, thickness up. Board and spray in mm; coatings as dry film in mm. "Apply" is what the zone\'s policy gives the member: never less than it needs.'),
     ...zonesByLevel(snapshot).flatMap(({ level, zones }) => zones.flatMap((zone): Content[] => {
       const members = byZone.get(zone.id) ?? [];
-      const title = subheading(`Level ${level.code} ${level.name} · Zone ${zone.code} ${zone.name} · ${formatPeriod(zone.periodMin)}`);
-      return members.length === 0 ? [title, paragraph('No members.')] : [title, schedule(columns, members)];
+      const title = `Level ${level.code} ${level.name} · Zone ${zone.code} ${zone.name} · ${formatPeriod(zone.periodMin)}`;
+      return members.length === 0 ? [subheading(title), paragraph('No members.')] : [schedule(columns, members, { title })];
     })),
   ];
 }

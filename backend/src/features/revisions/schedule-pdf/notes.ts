@@ -1,7 +1,7 @@
 import { roleNames } from '@mantlet/common';
 import type { OpenItemDto, ScheduleSnapshot } from '@mantlet/common';
 import type { Content } from 'pdfmake/interfaces.js';
-import { heading, paragraph, schedule, subheading } from './layout.js';
+import { heading, paragraph, schedule } from './layout.js';
 
 const cautions = [
   'These results support design by licensed engineers and do not replace it.',
@@ -17,18 +17,23 @@ const cautions = [
 /** On the title sheet, where it is read first. */
 export const cautionsList: Content = { ol: cautions.map((text) => ({ text, style: 'paragraph' })) };
 
-const itemTable = (items: readonly OpenItemDto[]): Content => schedule([
+const itemTable = (title: string, items: readonly OpenItemDto[]): Content => schedule([
   { head: 'Zone', width: 140, value: (i) => i.zoneLabel ?? '–' },
   { head: 'What', width: '*', value: (i) => i.title },
   { head: 'To be settled by', width: 110, value: (i) => roleNames[i.role] },
-], items);
+], items, { title });
 
 /** What stands open or unsigned, and what the signs mean. */
 export function notesSection({ blockers, warnings }: ScheduleSnapshot): Content[] {
   return [
-    heading('6  Notes'),
-    ...(blockers.length > 0 ? [subheading('Not settled: the schedule cannot be issued with these'), itemTable(blockers)] : []),
-    ...(warnings.length > 0 ? [subheading('Noted when the schedule was frozen'), itemTable(warnings)] : []),
-    paragraph('A/V section factor · θ_cr critical temperature · R fire resistance period in minutes · DFT dry film thickness · WFT wet film thickness · environments by ISO 12944-2 · dates by ISO 8601, UTC.'),
+    {
+      unbreakable: true,
+      stack: [
+        heading('6  Notes'),
+        paragraph('A/V section factor · θ_cr critical temperature · R fire resistance period in minutes · DFT dry film thickness · WFT wet film thickness · environments by ISO 12944-2 · dates by ISO 8601, UTC.'),
+      ],
+    },
+    ...(blockers.length > 0 ? [itemTable('Not settled: the schedule cannot be issued with these', blockers)] : []),
+    ...(warnings.length > 0 ? [itemTable('Noted when the schedule was frozen', warnings)] : []),
   ];
 }

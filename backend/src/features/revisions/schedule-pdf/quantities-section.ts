@@ -1,7 +1,7 @@
 import { formatDecimal, formatFilmThickness, formatNumber, formatThickness, memberTypeNames, productKindNames, sentence } from '@mantlet/common';
 import type { PurchaseDto, QuantityLineDto, QuantityTotals, ScheduleSnapshot } from '@mantlet/common';
 import type { Content } from 'pdfmake/interfaces.js';
-import { heading, paragraph, schedule, subheading } from './layout.js';
+import { heading, paragraph, schedule } from './layout.js';
 
 interface QuantityRow { level: string; product: string; totals: QuantityTotals }
 
@@ -29,7 +29,7 @@ export function quantitiesSection(snapshot: ScheduleSnapshot): Content[] {
   return [
     heading('5  Quantities by floor', { pageBreak: 'before' }),
     paragraph('Areas are what is coated, sprayed or boxed, not what is heated: gross, less end laps and openings, plus coat-back, is net. Litres and kg include the loss stated with the system; sheets include cutting waste.'),
-    schedule(columns, rows, [...perProduct, { level: 'Total', product: '', totals: split.total }]),
+    schedule(columns, rows, { totals: [...perProduct, { level: 'Total', product: '', totals: split.total }] }),
     ...purchaseSection(snapshot, names),
     ...applicationSection(snapshot, names),
   ];
@@ -45,7 +45,6 @@ function applicationSection(snapshot: ScheduleSnapshot, names: ReadonlyMap<strin
   const zones = new Map(snapshot.zones.map((zone) => [zone.id, `${zone.code} ${zone.name}`]));
   const levels = new Map(snapshot.levels.map((level) => [level.id, level.code]));
   return [
-    subheading('Application by zone, system and thickness'),
     schedule<QuantityLineDto>([
       { head: 'Level', width: 40, value: (l) => levels.get(l.levelId) ?? '' },
       { head: 'Zone', width: '*', value: (l) => zones.get(l.zoneId) ?? '' },
@@ -58,7 +57,7 @@ function applicationSection(snapshot: ScheduleSnapshot, names: ReadonlyMap<strin
       { head: 'Pieces', width: 32, right: true, value: (l) => formatNumber(l.pieces) },
       { head: 'Net m²', width: 48, right: true, value: (l) => formatDecimal(l.netM2) },
       { head: 'Litres', width: 44, right: true, value: (l) => formatDecimal(l.litres) },
-    ], snapshot.quantities.lines),
+    ], snapshot.quantities.lines, { title: 'Application by zone, system and thickness' }),
   ];
 }
 
@@ -81,11 +80,10 @@ function purchaseRows(purchase: PurchaseDto, product: string): PurchaseRow[] {
 
 function purchaseSection({ quantities }: ScheduleSnapshot, names: ReadonlyMap<string, string>): Content[] {
   return [
-    subheading('To buy, rounded up once for the whole project'),
     schedule([
       { head: 'System', width: 150, value: (r) => r.product }, { head: 'Kind', width: 90, value: (r) => r.kind },
       { head: 'Material', width: 170, value: (r) => r.what }, { head: 'Whole units', width: 90, right: true, value: (r) => r.count },
       { head: 'Note', width: '*', value: (r) => r.note || '–' },
-    ], quantities.purchases.flatMap((p) => purchaseRows(p, names.get(p.productId) ?? ''))),
+    ], quantities.purchases.flatMap((p) => purchaseRows(p, names.get(p.productId) ?? '')), { title: 'To buy, rounded up once for the whole project' }),
   ];
 }

@@ -34,7 +34,6 @@ export function zonesSection(snapshot: ScheduleSnapshot): Content[] {
       { head: 'Thickness policy', width: 90, value: (z) => policyInWords(z.targetPolicy) },
       { head: 'Reference', width: 90, value: (z) => z.reference || '–' },
     ], snapshot.zones),
-    subheading('Target protection level of each zone and system'),
     schedule([
       { head: 'Zone', width: 110, value: ({ zone }) => `${zone.code} ${zone.name}` },
       { head: 'System', width: '*', value: ({ target }) => target.productName },
@@ -44,7 +43,7 @@ export function zonesSection(snapshot: ScheduleSnapshot): Content[] {
       { head: 'Lowest θ_cr', width: 54, right: true, value: ({ target }) => formatLimitTemperature(target.lowestCriticalTemperatureC) },
       { head: 'Highest A/V, 1/m', width: 66, right: true, value: ({ target }) => formatNumber(target.highestSectionFactorPerM) },
       { head: 'Thickness applied', width: 150, value: ({ zone, target }) => appliedInWords(zone, target) },
-    ], targets),
+    ], targets, { title: 'Target protection level of each zone and system' }),
   ];
 }
 
@@ -71,20 +70,18 @@ function supplyFacts({ kind, supply }: SnapshotProduct): [string, string][] {
 
 export function systemsSection({ products }: ScheduleSnapshot): Content[] {
   if (products.length === 0) return [heading('3  Systems and their evidence'), paragraph('No system is set.')];
-  return [
-    heading('3  Systems and their evidence'),
-    ...products.flatMap((p): Content[] => [{
-      unbreakable: true,
-      stack: [
-        subheading(`${p.name}${p.invented ? ' (invented for demonstration)' : ''}`),
-        facts([
-          ['Kind', productKindNames[p.kind]], ['Maker', p.maker],
-          ['Evidence', p.evidenceReference], ['Edition', p.evidenceEdition], ['Valid until', p.evidenceExpiresOn], ['Assessed to', p.evidenceStandard],
-          ['Form of the data', formWords[p.evidenceForm]], ['Fires covered', p.curves.map((c) => fireCurveNames[c]).join(', ')],
-          ['Environments', p.environments.join(', ') || 'not stated'], ...supplyFacts(p),
-          ['SHA-256 of the data used', p.evidenceSha256], ['SHA-256 of the report', p.evidenceFileSha256 ?? 'no report is stored'],
-        ]),
-      ],
-    }]),
-  ];
+  return products.map((p, i): Content => ({
+    unbreakable: true,
+    stack: [
+      ...(i === 0 ? [heading('3  Systems and their evidence')] : []),
+      subheading(`${p.name}${p.invented ? ' (invented for demonstration)' : ''}`),
+      facts([
+        ['Kind', productKindNames[p.kind]], ['Maker', p.maker],
+        ['Evidence', p.evidenceReference], ['Edition', p.evidenceEdition], ['Valid until', p.evidenceExpiresOn], ['Assessed to', p.evidenceStandard],
+        ['Form of the data', formWords[p.evidenceForm]], ['Fires covered', p.curves.map((c) => fireCurveNames[c]).join(', ')],
+        ['Environments', p.environments.join(', ') || 'not stated'], ...supplyFacts(p),
+        ['SHA-256 of the data used', p.evidenceSha256], ['SHA-256 of the report', p.evidenceFileSha256 ?? 'no report is stored'],
+      ]),
+    ],
+  }));
 }
