@@ -3,7 +3,6 @@ import type { AuditEntryDto, AuditQuery, Page } from '@mantlet/common';
 import { InjectRepository } from '@nestjs/typeorm';
 import type { EntityManager } from 'typeorm';
 import { Repository } from 'typeorm';
-import type { QueryDeepPartialEntity } from 'typeorm';
 import type { Actor } from '../../shared/access.js';
 import { canonicalJson } from '../../shared/canonical-json.js';
 import { AuditEntry } from './audit-entry.entity.js';
@@ -31,6 +30,12 @@ export function changesBetween<T extends object>(before: Partial<T>, after: Part
     .map((field) => ({ field, old: before[field] ?? null, new: after[field] ?? null }));
 }
 
+/** a schedule of thousands of rows leaves as many entries: one statement for thousands, in their order */
+const insertStatement = `INSERT INTO audit_entries (project_id, user_id, user_name, action, entity, entity_id, label, changes, why)
+  SELECT project_id, user_id, user_name, action, entity, entity_id, label, changes, why
+  FROM ROWS FROM (jsonb_to_recordset($1::jsonb) AS (project_id uuid, user_id uuid, user_name text, action text, entity text, entity_id uuid, label text, changes jsonb, why text))
+  WITH ORDINALITY AS r(project_id, user_id, user_name, action, entity, entity_id, label, changes, why, place) ORDER BY r.place`;
+
 @Injectable()
 export class AuditService {
   constructor(@InjectRepository(AuditEntry) private readonly entries: Repository<AuditEntry>) {}
@@ -38,10 +43,10 @@ export class AuditService {
   /** Writes in the caller's transaction, so that a change and its trace stand or fall together. */
   async record(manager: EntityManager, ...recorded: Recorded[]): Promise<void> {
     const rows = recorded.map((entry) => ({
-      projectId: entry.projectId, userId: entry.actor.id, userName: entry.actor.name, action: entry.action, entity: entry.entity,
-      entityId: entry.entityId, label: entry.label, changes: entry.changes ?? [], why: entry.why ?? null,
+      project_id: entry.projectId, user_id: entry.actor.id, user_name: entry.actor.name, action: entry.action, entity: entry.entity,
+      entity_id: entry.entityId, label: entry.label, changes: entry.changes ?? [], why: entry.why ?? null,
     }));
-    for (let at = 0; at < rows.length; at += 1000) await manager.insert(AuditEntry, rows.slice(at, at + 1000) as QueryDeepPartialEntity<AuditEntry>[]);
+    for (let at = 0; at < rows.length; at += 2000) await manager.query(insertStatement, [JSON.stringify(rows.slice(at, at + 2000))]);
   }
 
   async list(projectId: string, query: AuditQuery): Promise<Page<AuditEntryDto>> {

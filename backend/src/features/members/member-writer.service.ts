@@ -3,7 +3,7 @@ import { Injectable } from '@nestjs/common';
 import { message } from '@mantlet/common';
 import type { CriticalTemperatureBasis, MemberInput } from '@mantlet/common';
 import { In } from 'typeorm';
-import type { EntityManager, QueryDeepPartialEntity } from 'typeorm';
+import type { EntityManager } from 'typeorm';
 import type { ProjectScope } from '../../shared/access.js';
 import { conflict, unprocessable } from '../../shared/refusal.js';
 import { AssessmentService } from '../assessment/assessment.service.js';
@@ -63,11 +63,11 @@ export class MemberWriterService {
   /** Adds members, all with the given action in the trail; their zones are assessed by `settle`. @returns their ids in the order given */
   async insert(manager: EntityManager, scope: ProjectScope, members: readonly NewMember[], action: string): Promise<string[]> {
     const now = new Date();
-    const rows = members.map((member) => ({
-      ...member, id: randomUUID(), projectId: scope.projectId, basis: member.basis ?? { way: 'none' as const },
-      ...(member.basis ? { basisSetById: scope.actor.id, basisSetAt: now } : {}),
-    }));
-    for (let at = 0; at < rows.length; at += 1000) await manager.insert(Member, rows.slice(at, at + 1000) as QueryDeepPartialEntity<Member>[]);
+    const rows = members.map((member) => ({ ...member, id: randomUUID(), basis: member.basis ?? { way: 'none' as const } }));
+    for (let at = 0; at < rows.length; at += 2000) {
+      const columns = rows.slice(at, at + 2000).map((row) => columnsOf(row, row.basis.way === 'none' ? { by: null, at: null } : { by: scope.actor.id, at: now }));
+      await manager.query(insertStatement, [JSON.stringify(columns), scope.projectId]);
+    }
     const names = await this.names(manager, rows);
     await this.audit.record(manager, ...rows.map((row) => recorded(scope, action, row.id, row.mark, changesBetween<Audited>({}, audited(row, names), auditedFields))));
     return rows.map((row) => row.id);
@@ -112,7 +112,7 @@ function recorded(scope: ProjectScope, action: string, entityId: string, label: 
   return { projectId: scope.projectId, actor: scope.actor, action, entity: 'member', entityId, label, changes };
 }
 
-function columnsOf(member: Member, set: { by: string | null; at: Date | null }): Record<string, unknown> {
+function columnsOf(member: MemberInput & { id: string; basis: CriticalTemperatureBasis }, set: { by: string | null; at: Date | null }): Record<string, unknown> {
   return {
     id: member.id, mark: member.mark, zone_id: member.zoneId, section_id: member.sectionId, member_type: member.memberType, grade: member.grade,
     length_mm: member.lengthMm, quantity: member.quantity, exposure: member.exposure, protection_form: member.protectionForm,
@@ -126,7 +126,9 @@ const columnTypes: Record<string, string> = {
   protection_form: 'text', coat_back_connections: 'int', coat_back_girth_mm: 'float8', deduction_m2: 'float8', on_site: 'bool', note: 'text',
   basis: 'jsonb', basis_set_by_id: 'uuid', basis_set_at: 'timestamptz',
 };
-/** thousands of rows in one statement; a bulk edit or a re-uploaded schedule is one */
-const updateStatement = `UPDATE members m SET ${Object.keys(columnTypes).map((c) => `${c} = r.${c}`).join(', ')}, version = m.version + 1
-  FROM jsonb_to_recordset($1::jsonb) AS r(id uuid, ${Object.entries(columnTypes).map(([c, t]) => `${c} ${t}`).join(', ')})
+const columnNames = Object.keys(columnTypes);
+const recordset = `jsonb_to_recordset($1::jsonb) AS r(id uuid, ${Object.entries(columnTypes).map(([c, t]) => `${c} ${t}`).join(', ')})`;
+/** thousands of rows in one statement: an imported schedule or a bulk edit is one */
+const insertStatement = `INSERT INTO members (id, project_id, version, ${columnNames.join(', ')}) SELECT r.id, $2::uuid, 1, ${columnNames.map((c) => `r.${c}`).join(', ')} FROM ${recordset}`;
+const updateStatement = `UPDATE members m SET ${columnNames.map((c) => `${c} = r.${c}`).join(', ')}, version = m.version + 1 FROM ${recordset}
   WHERE m.id = r.id AND m.project_id = $2`;
