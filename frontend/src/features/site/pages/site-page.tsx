@@ -1,5 +1,99 @@
-import { LoadingState } from '../../../ui/states.js';
+import { Button, Select } from 'antd';
+import { useEffect, useId } from 'react';
+import { Link, useLocation, useSearchParams } from 'react-router-dom';
+import type { ProjectDto, SiteDto, SiteLevelDto } from '@mantlet/common';
+import { formatDate } from '../../../lib/format.js';
+import { Page } from '../../../ui/page.js';
+import { Panel } from '../../../ui/panel.js';
+import { EmptyState, QueryState } from '../../../ui/states.js';
+import { useCurrentProject, useMay } from '../../projects/project-context.js';
+import { pdfUrl } from '../../schedule/api/revisions.js';
+import { useSite } from '../api/site.js';
+import { Materials } from '../components/materials.js';
+import { ZoneWork } from '../components/zone-work.js';
+import { levelName, shownLevels, siteHeading } from '../site-words.js';
+import '../site.css';
 
-export default function Page() {
-  return <LoadingState />;
+function Level({ level, site }: { level: SiteLevelDto; site: SiteDto }) {
+  return (
+    <section className="mt-panel mt-site-level" id={`level-${level.id}`} aria-labelledby={`level-${level.id}-name`}>
+      <h2 id={`level-${level.id}-name`}>{levelName(level)}</h2>
+      {level.materials.length > 0 && <Materials materials={level.materials} caption={`Materials for ${level.code}`} currency={site.project?.currency ?? ''} prices={site.prices} />}
+      {level.zones.map((zone) => <ZoneWork key={zone.id} zone={zone} />)}
+    </section>
+  );
+}
+
+/** A floor to read, and the jumps to its zones. */
+function Finder({ site, shown }: { site: SiteDto; shown: readonly SiteLevelDto[] }) {
+  const [, setParams] = useSearchParams();
+  const id = useId();
+  const one = shown.length === 1 && site.levels.length > 1 ? shown[0]?.id ?? '' : '';
+  return (
+    <nav className="mt-site-finder mt-noprint" aria-label="Floors and zones">
+      <div className="mt-field">
+        <label className="mt-label" htmlFor={id}>Floor</label>
+        <Select
+          id={id} value={one} size="large" style={{ minWidth: 240 }} onChange={(level: string) => setParams(level ? { level } : {}, { replace: true })}
+          options={[{ value: '', label: 'All floors' }, ...site.levels.map((l) => ({ value: l.id, label: levelName(l) }))]}
+        />
+      </div>
+      <ul>{shown.flatMap((l) => l.zones).map((z) => <li key={z.id}><a href={`#zone-${z.id}`}>{z.code} {z.name}</a></li>)}</ul>
+    </nav>
+  );
+}
+
+function Issued({ site, project }: { site: SiteDto; project: ProjectDto }) {
+  const [params] = useSearchParams();
+  const { hash } = useLocation();
+  const shown = shownLevels(site.levels, params.get('level'));
+  useEffect(() => { if (hash) document.getElementById(hash.slice(1))?.scrollIntoView(); }, [hash]);
+  return (
+    <>
+      <Finder site={site} shown={shown} />
+      {shown.length === site.levels.length && site.purchase.length > 0 && (
+        <Panel title="To buy for the whole job" sub="Containers, bags and sheets are rounded up once for each product.">
+          <Materials materials={site.purchase} caption="To buy for the whole job" currency={site.project?.currency ?? project.currency} prices={site.prices} />
+        </Panel>
+      )}
+      {shown.map((level) => <Level key={level.id} level={level} site={site} />)}
+      <p className="mt-sub">
+        Thickness is of the protection alone, primer deducted. The product’s own instructions govern surface, primer, conditions and curing; ask the specifier before applying anything that differs from this revision.
+        {' '}Thicknesses rest on {site.revision?.code}; a later revision replaces it.
+      </p>
+    </>
+  );
+}
+
+function Nothing({ projectId }: { projectId: string }) {
+  const design = useMay()('see-design');
+  return (
+    <Panel label="Site">
+      <EmptyState title="Nothing has been issued yet" action={design ? <Link to={`/projects/${projectId}/schedule`}><Button type="primary">Go to the schedule</Button></Link> : null}>
+        {design ? 'The site reads issued revisions only. Prepare, check and issue the schedule; it then stands here floor by floor.' : 'Nothing is to be applied before a specifier issues the schedule. What to apply where then stands here, floor by floor.'}
+      </EmptyState>
+    </Panel>
+  );
+}
+
+/** The contractor's view: what to apply where, how thick and how much, from the issued revision only. */
+export default function SitePage() {
+  const project = useCurrentProject();
+  const query = useSite(project.id);
+  const site = query.data;
+  const revision = site?.revision;
+  return (
+    <Page
+      title="Site" projectName={project.name} heading={site ? siteHeading(site) : 'Site'}
+      sub={revision && site?.project ? <>{site.project.number} {site.project.name}{site.project.place && `, ${site.project.place}`}. Issued {formatDate(revision.issuedAt)}. <span title={revision.pdfSha256}>PDF {revision.pdfSha256.slice(0, 12)}…</span></> : undefined}
+      state={revision ? { word: 'Issued', kind: 'settled' } : site ? { word: 'Not issued', kind: 'neutral' } : undefined}
+      actions={revision ? <>
+        <Button onClick={() => window.print()}>Print</Button>
+        {revision.pdfAvailable && <Button href={pdfUrl(project.id, revision.id, true)} download>Specification PDF</Button>}
+        <Link className="mt-noprint" to={`/projects/${project.id}/schedule/${revision.id}`}>About {revision.code}</Link>
+      </> : null}
+    >
+      <QueryState query={query} what="the issued schedule">{(data) => (data.revision ? <Issued site={data} project={project} /> : <Nothing projectId={project.id} />)}</QueryState>
+    </Page>
+  );
 }
