@@ -25,7 +25,7 @@ export function antdTheme(p: Palette): ThemeConfig {
       colorLink: p.ink, colorLinkHover: p.ink2, colorLinkActive: p.ink, linkDecoration: 'underline', linkHoverDecoration: 'underline',
       colorText: p.ink, colorTextBase: p.ink, colorTextSecondary: p.ink2, colorTextTertiary: p.ink2, colorTextQuaternary: p.ink3,
       colorTextPlaceholder: p.ink2, colorTextDisabled: p.ink2, colorTextHeading: p.ink, colorTextLabel: p.ink2, colorTextDescription: p.ink2,
-      colorTextLightSolid: p.sheet, colorIcon: p.ink2, colorIconHover: p.ink,
+      colorTextLightSolid: p.sheet, colorWhite: p.sheet, colorIcon: p.ink2, colorIconHover: p.ink,
       colorBgBase: p.sheet, colorBgContainer: p.sheet, colorBgElevated: p.sheet, colorBgLayout: p.paper, colorBgSpotlight: p.ink,
       colorBgContainerDisabled: p.line2, colorBgTextHover: p.hover, colorBgTextActive: p.line2, colorBgMask: 'rgba(10, 14, 14, 0.45)',
       colorFill: p.line, colorFillSecondary: p.line2, colorFillTertiary: p.hover, colorFillQuaternary: p.hover,
