@@ -42,7 +42,12 @@ export class ImportEvaluationService {
     const read = readRows(sheet.rows, { mapping, places: { zones, levels }, section: resolver.find, suggestSections: resolver.suggest });
     const members = await manager.findBy(Member, { projectId });
     const byMark = new Map(members.map((member) => [member.mark, member]));
-    const namer = { zone: nameOf(new Map(zones.map((z) => [z.id, z.code]))), section: await this.sectionNames(manager, members, read.rows.flatMap((r) => r.draft.sectionId ?? [])) };
+    const levelCodes = new Map(levels.map((level) => [level.id, level.code]));
+    const namer = {
+      zone: nameOf(new Map(zones.map((z) => [z.id, z.code]))),
+      levelOf: nameOf(new Map(zones.map((z) => [z.id, levelCodes.get(z.levelId) ?? '']))),
+      section: await this.sectionNames(manager, members, read.rows.flatMap((r) => r.draft.sectionId ?? [])),
+    };
     const rows = read.rows.map((row) => compareRow(row, byMark.get(row.mark) ?? null, mapping.defaults, namer));
     return { rows, notes: [...ignored, ...read.notes], counts: count(rows), digest: digestOf(rows), standing: new Map(members.map((m) => [m.id, m])) };
   }

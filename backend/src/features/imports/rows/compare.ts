@@ -24,6 +24,8 @@ export interface ComparedRow {
 }
 export interface Namer {
   zone: (id: string) => string;
+  /** the code of the level that a zone lies on */
+  levelOf: (zoneId: string) => string;
   section: (id: string) => string;
 }
 
@@ -31,12 +33,22 @@ export interface Namer {
 export function compareRow(row: ReadRow, standing: StandingMember | null, defaults: ImportMapping['defaults'], namer: Namer): ComparedRow {
   const target = standing ? updated(standing, row) : fresh(row, defaults);
   const missing = standing ? [] : missingFields(row, target);
-  const problems = [...row.problems, ...missing.map((field) => ({ field, reason: message('import.row-needed', { field: importFieldNames[field] }) }))];
+  const problems = [...row.problems.filter((problem) => !isAnswered(problem, standing, defaults, namer)), ...missing.map((field) => ({ field, reason: message('import.row-needed', { field: importFieldNames[field] }) }))];
   const base = { row: row.row, mark: row.mark, values: row.values, problems, standing, basis: row.draft.basis ?? null };
   if (problems.length) return { ...base, state: 'wrong', changes: [], target: null };
   if (!standing) return { ...base, state: 'new', changes: [], target: target as Writable };
   const changes = changesOf(standing, target as Writable, row.draft.basis, namer);
   return { ...base, state: changes.length ? 'changed' : 'unchanged', changes, target: target as Writable };
+}
+
+/**
+ * What a row alone leaves unclear, the member that is there, or the value for all rows, may answer: which of a level's zones,
+ * which faces see fire.
+ */
+function isAnswered({ reason }: RowProblem, standing: StandingMember | null, defaults: ImportMapping['defaults'], namer: Namer): boolean {
+  const zoneId = standing ? standing.zoneId : defaults.zoneId;
+  if (reason.code === 'import.row-zone-unclear') return zoneId !== null && namer.levelOf(zoneId) === (reason.params as { level: string }).level;
+  return reason.code === 'import.row-faces' && standing?.exposure.arrangement === 'given-faces';
 }
 
 function fresh(row: ReadRow, defaults: ImportMapping['defaults']): Partial<Writable> {
