@@ -15,6 +15,13 @@ const columns = [
   ['evidenceReading', 'evidence_reading', 'text'], ['areaM2', 'area_m2', 'double precision'], ['open', 'open', 'boolean'],
 ] as const satisfies readonly (readonly [keyof MemberOutcome, string, string])[];
 
+const outcomeColumns = columns.filter(([property]) => property !== 'inputsHash');
+
+function equal(a: unknown, b: unknown): boolean {
+  if (a === b) return true;
+  return typeof a === 'object' && typeof b === 'object' && a !== null && b !== null && canonicalJson(a) === canonicalJson(b);
+}
+
 const selected = columns.map(([property, column]) => `r.${column} AS "${property}"`).join(', ');
 /** how many rows go into one statement */
 const CHUNK = 5000;
@@ -32,7 +39,7 @@ export async function storeOutcomes(manager: EntityManager, zoneIds: string[], o
   let changed = 0;
   const different = outcomes.filter((outcome) => {
     const before = stored.get(outcome.memberId);
-    const same = before !== undefined && canonicalJson({ ...before, inputsHash: '' }) === canonicalJson({ ...outcome, inputsHash: '' });
+    const same = before !== undefined && outcomeColumns.every(([property]) => equal(before[property], outcome[property]));
     if (!same) changed += 1;
     return !same || before.inputsHash !== outcome.inputsHash;
   });
