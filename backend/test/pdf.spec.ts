@@ -46,7 +46,8 @@ describe('the schedule as PDF', () => {
   it('is a marked preview for the design team while in draft', async () => {
     const { text } = await fetchPdf(p.team['fire-engineer']);
     expect(text).toContain('It is not issued: do not build from it.');
-    expect(text).toMatch(/Revision P01\s+·\s+Draft/);
+    const pages = text.split('\f').filter((page) => page.trim());
+    for (const page of pages) expect(page).toMatch(/Revision P01\s+·\s+Draft, not issued/);
     await p.team.contractor.get(p.url(`revisions/${id}/pdf`)).expect(404);
   });
 

@@ -11,15 +11,18 @@ import { systemsSection, zonesSection } from './zones-and-systems.js';
 
 const rule = (width: number): Content => ({ canvas: [{ type: 'line', x1: 0, y1: 0, x2: width, y2: 0, lineWidth: 0.5 }], margin: [0, 2, 0, 0] });
 
+const isIssued = ({ signatures }: SchedulePdfInput): boolean => signatures.state === 'issued' || signatures.state === 'superseded';
+
 function runningHead(input: SchedulePdfInput, width: number): Content {
   const { project, revision } = input.snapshot;
+  const state = revisionStateNames[input.signatures.state] + (isIssued(input) ? '' : ', not issued');
   return {
     margin: [PAGE_MARGIN_PT, 18, PAGE_MARGIN_PT, 0],
     stack: [{
       columns: [
         { text: `${project.number}  ${project.name}`, style: 'running', bold: true },
         { text: 'Fire protection schedule', style: 'running', alignment: 'center' },
-        { text: `Revision ${revision.code}  ·  ${revisionStateNames[input.signatures.state]}`, style: 'running', bold: true, alignment: 'right' },
+        { text: `Revision ${revision.code}  ·  ${state}`, style: 'running', bold: true, alignment: 'right' },
       ],
     }, rule(width)],
   };
@@ -39,7 +42,6 @@ function runningFoot(page: number, pages: number): Content {
 export function schedulePdfDefinition(input: SchedulePdfInput): TDocumentDefinitions {
   const { snapshot, signatures } = input;
   const { project, revision } = snapshot;
-  const issued = signatures.state === 'issued' || signatures.state === 'superseded';
   return {
     pageSize: 'A4',
     pageOrientation: 'landscape',
@@ -48,7 +50,7 @@ export function schedulePdfDefinition(input: SchedulePdfInput): TDocumentDefinit
     language: 'en-GB',
     defaultStyle: { font: 'IBMPlexSans', fontSize: 8.5, lineHeight: 1.1 },
     styles,
-    ...(issued ? {} : { watermark: { text: `${revisionStateNames[signatures.state].toUpperCase()}, NOT ISSUED`, color: '#000000', opacity: 0.08, bold: true, fontSize: 60 } }),
+    ...(isIssued(input) ? {} : { watermark: { text: `${revisionStateNames[signatures.state].toUpperCase()}, NOT ISSUED`, color: '#000000', opacity: 0.08, bold: true, fontSize: 60 } }),
     header: (_page, _pages, size) => runningHead(input, size.width - 2 * PAGE_MARGIN_PT),
     footer: (page, pages) => runningFoot(page, pages),
     content: [
