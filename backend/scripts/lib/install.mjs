@@ -1,4 +1,5 @@
 /** What must be on the machine: Node, the npm packages of the lock file, programs from Debian. */
+import { createHash } from 'node:crypto';
 import { existsSync, mkdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 import { Problem, onClose, say } from './house.mjs';
@@ -33,12 +34,17 @@ export function packagesMissing(lockFile, noteFile) {
 }
 
 export async function ensurePackages() {
+  const digest = createHash('sha256').update(readFileSync(at('package-lock.json'))).digest('hex');
+  // what npm ci chose to leave out of this very lock file is not missing, so its own finish is noted as well
+  const noteOfDigest = at('node_modules/.mantlet-installed');
+  if (existsSync(noteOfDigest) && readFileSync(noteOfDigest, 'utf8') === digest) return;
   const why = packagesMissing(at('package-lock.json'), at('node_modules/.package-lock.json'));
   if (why === null) return;
   say(`Installing the npm packages (${why}); this takes a minute or two …`);
   // development packages too, whatever NODE_ENV says: the build needs the compiler
   const code = await show('npm', ['ci', '--no-audit', '--no-fund', '--include=dev'], { cwd: root });
   if (code !== 0) throw new Problem('npm ci failed; the lines above say why. Settle that and run the command again.');
+  writeFileSync(noteOfDigest, digest);
 }
 
 /**
