@@ -50,12 +50,11 @@ describe('placeLabels', () => {
     const x = linearScale([0, 10], [0, 300]);
     const y = linearScale([0, 10], [200, 0]);
     const lines = boxesAlong([[0, 5], [10, 5]], x, y);
-    const [place] = placeLabels([wish('on the line', 290, 100)], bounds, lines);
-    expect(place).toBeNull();
     const [other] = placeLabels([{ text: 'near it', fontSize: 12, places: [{ x: 290, y: 100, anchor: 'end' }] }], bounds, lines);
     const box = labelBox('near it', 12, other!);
     expect(lines.some((l) => overlap(l, box))).toBe(false);
     expect(box.x + box.width).toBeLessThanOrEqual(300);
+    expect(placeLabels([wish('no room at the edge', 290, 100)], bounds, lines)).toEqual([null]);
   });
 });
 

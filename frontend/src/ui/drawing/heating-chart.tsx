@@ -54,7 +54,7 @@ export function HeatingChart(props: HeatingChartProps) {
     const wishes: ChartLabel[] = [{ text: `R ${charts.periodMin}`, fontSize: 12.5, weight: 600, places: [{ x: px + 6, y: foot - 12, anchor: 'start' }, { x: px - 6, y: foot - 12, anchor: 'end' }] }];
     if (criticalC !== null) {
       const text = `θ_cr ${formatLimitTemperature(criticalC)}`;
-      wishes.push({ text, fontSize: 12, weight: 500, className: 'd-attention', places: [{ x: right - 4, y: y(criticalC) + 15, anchor: 'end' }, { x: right - 4, y: y(criticalC) - 6, anchor: 'end' }, { x: plot.x + 6, y: y(criticalC) - 6, anchor: 'start' }] });
+      wishes.push({ text, fontSize: 12, weight: 500, className: 'd-attention', places: [{ x: right - 4, y: y(criticalC) + 15, anchor: 'end' }, { x: right - 4, y: y(criticalC) - 6, anchor: 'end' }, { x: px - 8, y: y(criticalC) - 6, anchor: 'end' }, { x: px - 8, y: y(criticalC) + 15, anchor: 'end' }, { x: plot.x + 6, y: y(criticalC) - 6, anchor: 'start' }] });
     }
     const lines = [{ x: px - 1, y: plot.y, width: 2, height: plot.height }, ...(criticalC === null ? [] : [{ x: plot.x, y: y(criticalC) - 1, width: plot.width, height: 2 }])];
     return { wishes, lines };

@@ -26,10 +26,12 @@ export const overlap = (a: Box, b: Box): boolean =>
 const inside = (box: Box, bounds: Box): boolean =>
   box.x >= bounds.x - 1e-6 && box.y >= bounds.y - 1e-6 && box.x + box.width <= bounds.x + bounds.width + 1e-6 && box.y + box.height <= bounds.y + bounds.height + 1e-6;
 
+/** How far a label moves to keep off a line. */
+const nearPx = 18;
 /** The place asked for and, where that is taken, others ever further above and below it. */
-function* candidates(wish: LabelWish, bounds: Box): Generator<Place> {
+function* candidates(wish: LabelWish, reach: number): Generator<Place> {
   yield* wish.places;
-  for (let away = 1; away * 6 < bounds.height; away += 1) {
+  for (let away = 1; away * 6 <= reach; away += 1) {
     for (const place of wish.places) {
       yield { ...place, y: place.y - away * 6 };
       yield { ...place, y: place.y + away * 6 };
@@ -38,20 +40,20 @@ function* candidates(wish: LabelWish, bounds: Box): Generator<Place> {
 }
 
 /**
- * Places every label inside the bounds so that none covers another. Lines are avoided where there is room;
- * a label that fits nowhere is null, and the legend in words still names its line.
+ * Places every label inside the bounds so that none covers another. Lines are avoided where there is room near by:
+ * better across a line, which the label's halo parts, than far from what it names. A label that fits nowhere is null, and the legend in words still names its line.
  */
 export function placeLabels(wishes: readonly LabelWish[], bounds: Box, lines: readonly Box[] = []): (Place | null)[] {
   const taken: Box[] = [];
   return wishes.map((wish) => {
-    const free = (others: readonly Box[]) => {
-      for (const place of candidates(wish, bounds)) {
+    const free = (others: readonly Box[], reach: number) => {
+      for (const place of candidates(wish, reach)) {
         const box = labelBox(wish.text, wish.fontSize, place);
         if (inside(box, bounds) && !others.some((other) => overlap(box, other))) return place;
       }
       return null;
     };
-    const place = free([...taken, ...lines]) ?? free(taken);
+    const place = free([...taken, ...lines], nearPx) ?? free(taken, bounds.height);
     if (place) taken.push(labelBox(wish.text, wish.fontSize, place));
     return place;
   });

@@ -4,6 +4,7 @@ import { formatNumber } from '../../lib/format.js';
 import { HatchPattern } from '../hatch.js';
 import { layoutThicknessMap, stepCell, thinLabels } from './thickness-map-layout.js';
 import type { MapCell, MapLayout, ThicknessMapData } from './thickness-map-layout.js';
+import './charts.css';
 import './thickness-map.css';
 import { useElementWidth } from './use-element-width.js';
 

@@ -25,15 +25,15 @@ export function memberColumns(projectId: string, filter: MemberFilter, search: s
     sortOrder: (filter.sort ?? 'mark') === key ? (filter.direction === 'desc' ? ('descend' as const) : ('ascend' as const)) : null,
   });
   return [
-    { ...sorted('mark'), title: 'Mark', width: 116, render: (_, r) => <Link className="mt-strong" to={`/projects/${projectId}/members/${r.id}`} state={{ list: search }}>{r.mark}</Link> },
-    { ...sorted('level'), title: 'Level', width: 74, render: (_, r) => r.levelCode },
-    { ...sorted('zone'), title: 'Zone', width: 74, render: (_, r) => r.zoneCode },
-    { ...sorted('type'), title: 'Type', width: 124, render: (_, r) => memberTypeNames[r.memberType] },
-    { ...sorted('section'), title: 'Section', width: 164, render: (_, r) => <>{r.section} <span className="mt-sub">{r.grade}</span></> },
-    { ...sorted('length'), title: 'Length, m', foldLabel: 'Length, m', numeric: true, width: 96, render: (_, r) => <Quantity value={r.lengthMm / 1000} decimals={3} unit="m" bare what="Length" /> },
-    { ...sorted('quantity'), title: 'No.', foldLabel: 'Number off', numeric: true, width: 64, render: (_, r) => r.quantity },
-    { ...sorted('sectionFactor'), title: <>A/V, m<sup>−1</sup></>, foldLabel: 'A/V, 1/m', numeric: true, width: 92, render: (_, r) => <Quantity value={r.sectionFactorPerM} unit="1/m" bare what="Section factor" reason={whyNone(r)} /> },
-    { ...sorted('criticalTemperature'), title: <>θ<sub>cr</sub>, °C</>, foldLabel: 'Critical temperature, °C', numeric: true, width: 92, render: (_, r) => <CriticalTemperature row={r} /> },
+    { ...sorted('mark'), title: 'Mark', width: 112, render: (_, r) => <Link className="mt-strong" to={`/projects/${projectId}/members/${r.id}`} state={{ list: search }}>{r.mark}</Link> },
+    { ...sorted('level'), title: 'Level', width: 72, render: (_, r) => r.levelCode },
+    { ...sorted('zone'), title: 'Zone', width: 68, render: (_, r) => r.zoneCode },
+    { ...sorted('type'), title: 'Type', width: 112, render: (_, r) => memberTypeNames[r.memberType] },
+    { ...sorted('section'), title: 'Section', width: 172, render: (_, r) => <>{r.section} <span className="mt-sub">{r.grade}</span></> },
+    { ...sorted('length'), title: 'Length, m', foldLabel: 'Length, m', numeric: true, width: 90, render: (_, r) => <Quantity value={r.lengthMm / 1000} decimals={3} unit="m" bare what="Length" /> },
+    { ...sorted('quantity'), title: 'No.', foldLabel: 'Number off', numeric: true, width: 58, render: (_, r) => r.quantity },
+    { ...sorted('sectionFactor'), title: <>A/V, m<sup>−1</sup></>, foldLabel: 'A/V, 1/m', numeric: true, width: 84, render: (_, r) => <Quantity value={r.sectionFactorPerM} unit="1/m" bare what="Section factor" reason={whyNone(r)} /> },
+    { ...sorted('criticalTemperature'), title: <>θ<sub>cr</sub>, °C</>, foldLabel: 'Critical temperature, °C', numeric: true, width: 82, render: (_, r) => <CriticalTemperature row={r} /> },
     { ...sorted('verdict'), title: 'Result', render: (_, r) => <StatusWord kind={rowState(r)}>{r.sentence}</StatusWord> },
   ];
 }

@@ -52,7 +52,7 @@ export function MemberFilters({ projectId, filter, onChange }: MemberFiltersProp
   const levels = useLevels(projectId).data ?? [];
   const set = (change: MemberFilter) => onChange(changed(filter, change));
   return (
-    <search className="mt-filters mt-noprint" aria-label="Narrow the list of members">
+    <div role="search" className="mt-filters mt-noprint" aria-label="Narrow the list of members">
       <Search value={filter.search ?? ''} onChange={(search) => set({ search })} />
       <Many label="Zone" value={filter.zoneIds} onChange={(zoneIds) => set({ zoneIds })} options={zones.map((z) => ({ value: z.id, label: `${z.code} ${z.name}` }))} />
       <Many label="Level" value={filter.levelIds} onChange={(levelIds) => set({ levelIds })} options={levels.map((l) => ({ value: l.id, label: `${l.code} ${l.name}` }))} />
@@ -63,6 +63,6 @@ export function MemberFilters({ projectId, filter, onChange }: MemberFiltersProp
         {filter.memberIds && <Button size="small" onClick={() => set({ memberIds: undefined })}>{count(filter.memberIds.length, 'chosen member')}: show all</Button>}
         {isNarrowed(filter) && <Button size="small" type="link" onClick={() => onChange(cleared(filter))}>Clear all</Button>}
       </div>
-    </search>
+    </div>
   );
 }

@@ -19,8 +19,8 @@ function EffectFields({ control, name }: { control: StructuralControl; name: str
   return (
     <div className="mt-form-row">
       <NumberField control={control} name={at('axialKn')} label="Axial force N" unit="kN" help="Compression positive, tension negative." />
-      <NumberField control={control} name={at('momentYKnm')} label="Moment M y" unit="kNm" help="Greatest, about the strong axis." />
-      <NumberField control={control} name={at('shearZKn')} label="Shear V z" unit="kN" help="Greatest, parallel to the web." />
+      <NumberField control={control} name={at('momentYKnm')} label="Moment My" unit="kNm" help="Greatest, about the strong axis." />
+      <NumberField control={control} name={at('shearZKn')} label="Shear Vz" unit="kN" help="Greatest, parallel to the web." />
     </div>
   );
 }

@@ -36,7 +36,7 @@ export function CustomSectionDrawer({ projectId, open, onClose, onMade }: Custom
       // the drawer's form lies inside another one in the tree of components: its submit must not reach that one
       onSubmit={(event) => { event.stopPropagation(); void save(event); }}
     >
-      <TextField control={form.control} name="designation" label="Name" help="As it will stand in the schedule, such as PG 800x300x15x25." autoFocus />
+      <TextField control={form.control} name="designation" label="Name" help="As it will stand in the schedule, such as PG 800x300x15x25." />
       <FieldFrame id={kindId} label="Shape" error={undefined}>
         <Select id={kindId} value={typed.kind} options={kinds} onChange={(kind) => { form.setValue('shape', shapeOfKind(kind, typed) as never, { shouldDirty: true }); form.clearErrors('shape'); }} />
       </FieldFrame>

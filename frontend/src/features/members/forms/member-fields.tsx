@@ -30,7 +30,7 @@ export function MemberFields({ form, projectId, section, setSection }: { form: M
   return (
     <>
       <div className="mt-form-row">
-        <TextField control={control} name="mark" label="Mark" help="Names one member, or identical ones." autoFocus />
+        <TextField control={control} name="mark" label="Mark" help="Names one member, or identical ones." />
         <NumberField control={control} name="quantity" label="Number off" min={1} decimals={0} />
       </div>
       <SelectField control={control} name="zoneId" label="Zone" options={zones} search help="Gives the member its period and fire." />

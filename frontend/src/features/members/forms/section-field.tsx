@@ -34,6 +34,8 @@ interface SectionFieldProps<T extends { sectionId?: string | null }> {
 export function SectionField<T extends { sectionId?: string | null }>({ control, projectId, current, onChosen, clearable = false, help }: SectionFieldProps<T>) {
   const id = useId();
   const { field, fieldState } = useController({ control, name: 'sectionId' as never });
+  // taken apart here: the field's ref is a callback for the input, the rest are plain values
+  const { ref, value, onBlur, onChange } = field;
   const [typed, setTyped] = useState('');
   const search = usePaused(typed.trim());
   const found = useSections(projectId, search, search.length > 0);
@@ -45,12 +47,12 @@ export function SectionField<T extends { sectionId?: string | null }>({ control,
   return (
     <FieldFrame id={id} label="Section" help={words} error={error}>
       <Select
-        id={id} ref={field.ref} value={(field.value as string | null | undefined) ?? undefined} onBlur={field.onBlur} style={{ width: '100%' }} allowClear={clearable}
+        id={id} ref={ref} value={(value as string | null | undefined) ?? undefined} onBlur={onBlur} style={{ width: '100%' }} allowClear={clearable}
         aria-describedby={describedBy(id, words, error)} status={error ? 'error' : ''} placeholder="Search sections" notFoundContent={none} loading={found.isFetching}
         showSearch={{ filterOption: false, onSearch: setTyped, searchValue: typed }}
         options={known.map((s) => ({ value: s.id, label: sectionLabel(s) }))}
         onChange={(next?: string) => {
-          field.onChange(next ?? null);
+          onChange(next ?? null);
           setTyped('');
           const section = known.find((s) => s.id === next);
           if (section) onChosen?.(section);
