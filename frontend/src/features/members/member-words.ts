@@ -34,3 +34,11 @@ export function sheetSub({ member, section, zone, level }: MemberSheetDto): stri
 }
 
 export const changedWords = (n: number): string => (n === 0 ? 'Nothing was different' : `${count(n, 'member')} changed`);
+
+/** Why a member with a result still counts as open, as far as its row tells; null where the result itself says it. */
+export function openReason(row: Pick<MemberRowDto, 'open' | 'verdict' | 'assumed' | 'criticalTemperatureC'>, secondSignatureAboveC: number): string | null {
+  if (!row.open || (row.verdict !== 'protected' && row.verdict !== 'bare')) return null;
+  if (row.assumed) return 'Rests on an assumed temperature that nobody accepted';
+  if (row.criticalTemperatureC !== null && row.criticalTemperatureC > secondSignatureAboveC) return `Above ${secondSignatureAboveC} °C, not accepted yet`;
+  return row.verdict === 'bare' ? 'Staying bare is not accepted yet' : 'Something is open: see its zone and product';
+}

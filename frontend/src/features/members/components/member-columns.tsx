@@ -5,7 +5,7 @@ import { Quantity } from '../../../ui/quantity.js';
 import type { ScheduleColumn } from '../../../ui/schedule-table.js';
 import { StatusWord } from '../../../ui/status-word.js';
 import type { MemberFilter } from '../member-filter.js';
-import { rowState } from '../member-words.js';
+import { openReason, rowState } from '../member-words.js';
 
 const whyNone = (row: MemberRowDto) => (row.verdict === null ? 'not assessed yet' : row.sentence);
 
@@ -18,8 +18,13 @@ function CriticalTemperature({ row }: { row: MemberRowDto }) {
   );
 }
 
+function Result({ row, aboveC }: { row: MemberRowDto; aboveC: number }) {
+  const why = openReason(row, aboveC);
+  return <StatusWord kind={rowState(row)}>{row.sentence}{why && <span className="mt-small mt-why">{why}</span>}</StatusWord>;
+}
+
 /** The schedule of members. Keys of sortable columns are the server's sort keys; the sorter's state comes from the address. */
-export function memberColumns(projectId: string, filter: MemberFilter, search: string): ScheduleColumn<MemberRowDto>[] {
+export function memberColumns(projectId: string, filter: MemberFilter, search: string, secondSignatureAboveC: number): ScheduleColumn<MemberRowDto>[] {
   const sorted = (key: NonNullable<MemberFilter['sort']>) => ({
     key, sorter: true, showSorterTooltip: false,
     sortOrder: (filter.sort ?? 'mark') === key ? (filter.direction === 'desc' ? ('descend' as const) : ('ascend' as const)) : null,
@@ -34,6 +39,6 @@ export function memberColumns(projectId: string, filter: MemberFilter, search: s
     { ...sorted('quantity'), title: 'No.', foldLabel: 'Number off', numeric: true, width: 58, render: (_, r) => r.quantity },
     { ...sorted('sectionFactor'), title: <>A/V, m<sup>−1</sup></>, foldLabel: 'A/V, 1/m', numeric: true, width: 84, render: (_, r) => <Quantity value={r.sectionFactorPerM} unit="1/m" bare what="Section factor" reason={whyNone(r)} /> },
     { ...sorted('criticalTemperature'), title: <>θ<sub>cr</sub>, °C</>, foldLabel: 'Critical temperature, °C', numeric: true, width: 82, render: (_, r) => <CriticalTemperature row={r} /> },
-    { ...sorted('verdict'), title: 'Result', render: (_, r) => <StatusWord kind={rowState(r)}>{r.sentence}</StatusWord> },
+    { ...sorted('verdict'), title: 'Result', render: (_, r) => <Result row={r} aboveC={secondSignatureAboveC} /> },
   ];
 }

@@ -2,11 +2,12 @@ import { Button, Pagination } from 'antd';
 import { useState } from 'react';
 import type { ReactNode } from 'react';
 import { useQueryClient } from '@tanstack/react-query';
+import { defaultDesignBasis } from '@mantlet/common';
 import type { MemberQuery, MemberRowDto, Page } from '@mantlet/common';
 import { formatNumber } from '../../../lib/format.js';
 import { ScheduleTable } from '../../../ui/schedule-table.js';
 import { EmptyState } from '../../../ui/states.js';
-import { useMay } from '../../projects/project-context.js';
+import { useCurrentProject, useMay } from '../../projects/project-context.js';
 import { membersQuery } from '../api/members.js';
 import { addressOfFilter, cleared, defaultPageSize, isNarrowed } from '../member-filter.js';
 import type { MemberFilter } from '../member-filter.js';
@@ -19,6 +20,7 @@ const gatherSize = 500;
 /** One page of the schedule, ordered and paged by the server. Choosing reaches over pages. */
 export function MemberList({ projectId, page, stale, filter, setFilter, firstStep }: MemberListProps) {
   const client = useQueryClient();
+  const aboveC = (useCurrentProject().settings?.designBasis ?? defaultDesignBasis).secondSignatureAboveC;
   const may = useMay();
   const [chosen, setChosen] = useState<readonly MemberRowDto[]>([]);
   const mayChoose = may('edit-members') || may('accept-temperatures');
@@ -42,7 +44,7 @@ export function MemberList({ projectId, page, stale, filter, setFilter, firstSte
       <ChoiceBar projectId={projectId} chosen={current} found={page.total} clear={() => setChosen([])} chooseAll={chooseAll} />
       <div className="mt-members" aria-busy={stale}>
         <ScheduleTable<MemberRowDto>
-          caption="Members" rows={page.items} rowKey={(r) => r.id} columns={memberColumns(projectId, filter, addressOfFilter(filter).toString())} loading={stale} empty={empty} tableLayout="fixed"
+          caption="Members" rows={page.items} rowKey={(r) => r.id} columns={memberColumns(projectId, filter, addressOfFilter(filter).toString(), aboveC)} loading={stale} empty={empty} tableLayout="fixed"
           scroll={{ x: 1080 }}
           {...(mayChoose && {
             rowSelection: {
