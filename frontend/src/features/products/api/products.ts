@@ -28,16 +28,14 @@ export const useUpdateProduct = (library: Library, productId: string) => useProd
 export const useStoreEvidenceFile = (library: Library, productId: string) =>
   useProductMutation((file: File) => api.upload<ProductDto>(`${at(library)}/${productId}/evidence-file`, file, {}, 'PUT'));
 
-/** Nothing is refetched before the page is left: what was deleted is no longer there to be asked for. */
+/** The page is left before the product is forgotten: what was deleted is no longer there to be asked for. */
 export function useDeleteProduct(library: Library, productId: string) {
   const client = useQueryClient();
-  return useMutation({
+  const remove = useMutation({
     mutationFn: () => api.delete(`${at(library)}/${productId}`),
-    onSuccess: () => {
-      client.removeQueries({ queryKey: keyOf(library, 'one', productId) });
-      return client.invalidateQueries({ predicate: (query) => !query.queryKey.includes(productId) });
-    },
+    onSuccess: () => client.invalidateQueries({ predicate: (query) => !query.queryKey.includes(productId) }),
   });
+  return { ...remove, forget: () => client.removeQueries({ queryKey: keyOf(library, 'one', productId) }) };
 }
 
 /** Reads one thickness table from a sheet; nothing is stored. */

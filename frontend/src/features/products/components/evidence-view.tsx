@@ -102,13 +102,11 @@ function ThermalView({ properties: p, kind }: { properties: ThermalProperties; k
           <dt>Natural fires</dt><dd>{p.coversNaturalFire ? 'Covered, cooling included' : 'Not covered'}</dd>
         </dl>
         {byTemperature.length > 0 && (
-          <ScheduleTable
-            caption="Conductivity by temperature" rows={byTemperature} rowKey={(r) => String(r.temperatureC)} sticky={false} fold={false}
-            columns={[
-              { title: 'Temperature °C', key: 't', numeric: true, render: (_, r) => formatNumber(r.temperatureC) },
-              { title: 'Conductivity W/mK', key: 'l', numeric: true, render: (_, r) => formatNumber(r.value, 3) },
-            ]}
-          />
+          <table className="mt-small-table">
+            <caption className="mt-sr">Conductivity by temperature</caption>
+            <thead><tr><th scope="col">Temperature °C</th><th scope="col">Conductivity W/mK</th></tr></thead>
+            <tbody>{byTemperature.map((r) => <tr key={r.temperatureC}><td>{formatNumber(r.temperatureC)}</td><td>{formatNumber(r.value, 3)}</td></tr>)}</tbody>
+          </table>
         )}
       </Panel>
       <Panel title="Range of the properties" sub="Outside the box the product gives no thickness; nothing is extrapolated.">

@@ -1,3 +1,4 @@
+import '../../../ui/drawing/charts.css';
 import { linearScale, niceTicks } from '../../../ui/drawing/chart-scale.js';
 
 const frame = { width: 420, height: 250, left: 46, right: 16, top: 20, bottom: 40 };

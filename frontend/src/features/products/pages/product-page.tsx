@@ -26,7 +26,7 @@ function Actions({ product, library, at, onEdit }: { product: ProductDto; librar
   const go = useNavigate();
   const remove = useDeleteProduct(library, product.id);
   const onDelete = () => remove.mutate(undefined, {
-    onSuccess: () => { void go(at); },
+    onSuccess: () => { void Promise.resolve(go(at)).then(remove.forget); },
     onError: (error) => { modal.error({ title: 'Not deleted', content: error instanceof ApiError ? error.message : 'Something went wrong in this page; try again.', icon: null }); },
   });
   return (

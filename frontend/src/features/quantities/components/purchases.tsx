@@ -1,4 +1,4 @@
-import { sentence } from '@mantlet/common';
+import { sentence, sumDecimals } from '@mantlet/common';
 import type { CuttingPlanDto, PurchaseDto, QuantitiesDto } from '@mantlet/common';
 import { count, formatNumber } from '../../../lib/format.js';
 import { Quantity } from '../../../ui/quantity.js';
@@ -8,26 +8,30 @@ import { ScheduleTable } from '../../../ui/schedule-table.js';
 export interface OrderLine { key: string; product: string; delivery: string; what: string; net: { value: string | null; unit: string; decimals: number }; detail: string; reason: string }
 
 const sheetWords = (plan: CuttingPlanDto) =>
-  `${plan.sheetLengthMm} × ${plan.sheetWidthMm} mm, ${formatNumber(plan.wasteFraction * 100, 1)} % waste${plan.sheets > plan.leastSheets ? `; no plan does with fewer than ${plan.leastSheets}` : '; no plan does with fewer'}`;
+  `${plan.sheetLengthMm} × ${plan.sheetWidthMm} mm, ${formatNumber(plan.wasteFraction * 100, 1)} % waste${plan.sheets > plan.leastSheets ? `; at least ${plan.leastSheets} by area` : ''}`;
 
-export function orderLines(purchases: readonly PurchaseDto[], names: Readonly<Record<string, string>>): OrderLine[] {
-  return purchases.flatMap((p): OrderLine[] => {
-    const base = { product: names[p.productId] ?? 'Product', delivery: p.levelId === null ? 'Whole project' : names[p.levelId] ?? 'Level', reason: p.missing.map(sentence).join(' ') };
-    const key = `${p.productId} ${p.levelId ?? ''}`;
-    if (p.kind === 'board' && p.boards.length > 0) {
-      return p.boards.map((plan) => ({
-        ...base, key: `${key} ${plan.thicknessMm}`, what: `${count(plan.sheets, 'sheet')} of ${plan.thicknessMm} mm`, net: { value: plan.sheetM2.toFixed(2), unit: 'm²', decimals: 2 }, detail: sheetWords(plan),
-      }));
-    }
-    if (p.kind === 'coating') return [{ ...base, key, what: p.containers === null ? '' : count(p.containers, 'container'), net: { value: p.litres, unit: 'L', decimals: 2 }, detail: p.containerL === null ? '' : `${p.containerL} L each` }];
-    if (p.kind === 'spray') return [{ ...base, key, what: p.bags === null ? '' : count(p.bags, 'bag'), net: { value: null, unit: '', decimals: 0 }, detail: p.bagKg === null ? '' : `${p.bagKg} kg each` }];
-    return [{ ...base, key, what: '', net: { value: null, unit: '', decimals: 0 }, detail: '' }];
-  });
+type Order = Pick<OrderLine, 'what' | 'net' | 'detail'>;
+/** Spray is bought by the bag; its net is the volume of the printed lines of that product and delivery. */
+function ordersOf(p: PurchaseDto, lines: QuantitiesDto['lines']): Order[] {
+  if (p.kind === 'board' && p.boards.length > 0) {
+    return p.boards.map((plan) => ({ what: `${count(plan.sheets, 'sheet')} of ${plan.thicknessMm} mm`, net: { value: plan.sheetM2.toFixed(2), unit: 'm²', decimals: 2 }, detail: sheetWords(plan) }));
+  }
+  if (p.kind === 'coating') return [{ what: p.containers === null ? '' : count(p.containers, 'container'), net: { value: p.litres, unit: 'L', decimals: 2 }, detail: p.containerL === null ? '' : `${p.containerL} L each` }];
+  const own = lines.filter((line) => line.productId === p.productId && (p.levelId === null || line.levelId === p.levelId));
+  const net = { value: sumDecimals(own.map((line) => line.volumeM3)).toFixed(4), unit: 'm³', decimals: 2 };
+  return [{ what: p.bags === null ? '' : count(p.bags, 'bag'), net, detail: p.bagKg === null ? '' : `${p.bagKg} kg each` }];
+}
+
+export function orderLines({ purchases, lines, names }: Pick<QuantitiesDto, 'purchases' | 'lines' | 'names'>): OrderLine[] {
+  return purchases.flatMap((p) => ordersOf(p, lines).map((order): OrderLine => ({
+    ...order, key: `${p.productId} ${p.levelId ?? ''} ${order.what}`, product: names[p.productId] ?? 'Product',
+    delivery: p.levelId === null ? 'Whole project' : names[p.levelId] ?? 'Level', reason: p.missing.map(sentence).join(' '),
+  })));
 }
 
 /** What to order: whole containers, bags and sheets, rounded up once for each product and delivery. */
 export function Purchases({ data }: { data: QuantitiesDto }) {
-  const lines = orderLines(data.purchases, data.names);
+  const lines = orderLines(data);
   const byLevel = data.purchases.some((p) => p.levelId !== null);
   return (
     <ScheduleTable<OrderLine>

@@ -4,7 +4,7 @@ import { count, formatNumber } from '../../../lib/format.js';
 import { groupItems } from '../site-words.js';
 import type { ApplyGroup } from '../site-words.js';
 
-function Item({ item }: { item: SiteItemDto }) {
+function Item({ item, litres }: { item: SiteItemDto; litres: boolean }) {
   return (
     <tr>
       <th scope="row">{item.mark}</th>
@@ -14,13 +14,14 @@ function Item({ item }: { item: SiteItemDto }) {
       <td>{item.faces}</td>
       <td className="mt-num" data-unit="m long">{formatNumber(item.lengthMm / 1000, 2)}</td>
       <td className="mt-num" data-unit="m²">{formatNumber(item.areaM2, 2)}</td>
-      <td className="mt-num" data-unit="L">{item.litres === null ? '' : formatNumber(item.litres, 1)}</td>
+      {litres && <td className="mt-num" data-unit="L">{item.litres === null ? '' : formatNumber(item.litres, 1)}</td>}
     </tr>
   );
 }
 
 /** One product at one thickness, and every member that gets it. An own table: its head repeats on every printed page. */
 function Group({ group, zone }: { group: ApplyGroup; zone: SiteZoneDto }) {
+  const litres = group.items.some((i) => i.kind === 'coating');
   return (
     <section className="mt-site-group" aria-label={`${group.how} of ${group.productName} in ${zone.code}`}>
       <header>
@@ -30,9 +31,9 @@ function Group({ group, zone }: { group: ApplyGroup; zone: SiteZoneDto }) {
       <table className="mt-site-table">
         <caption className="mt-sr">{group.how} of {group.productName}, zone {zone.code} {zone.name}</caption>
         <thead>
-          <tr><th scope="col">Mark</th><th scope="col" className="mt-num">No.</th><th scope="col">Section</th><th scope="col">Member</th><th scope="col">Sides to protect</th><th scope="col" className="mt-num">Length m</th><th scope="col" className="mt-num">Area m²</th><th scope="col" className="mt-num">Litres</th></tr>
+          <tr><th scope="col">Mark</th><th scope="col" className="mt-num">No.</th><th scope="col">Section</th><th scope="col">Member</th><th scope="col">Sides to protect</th><th scope="col" className="mt-num">Length m</th><th scope="col" className="mt-num">Area m²</th>{litres && <th scope="col" className="mt-num">Litres</th>}</tr>
         </thead>
-        <tbody>{group.items.map((item) => <Item key={item.mark} item={item} />)}</tbody>
+        <tbody>{group.items.map((item) => <Item key={item.mark} item={item} litres={litres} />)}</tbody>
       </table>
     </section>
   );
