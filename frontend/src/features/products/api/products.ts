@@ -33,7 +33,10 @@ export function useDeleteProduct(library: Library, productId: string) {
   const client = useQueryClient();
   const remove = useMutation({
     mutationFn: () => api.delete(`${at(library)}/${productId}`),
-    onSuccess: () => client.invalidateQueries({ predicate: (query) => !query.queryKey.includes(productId) }),
+    onSuccess: () => {
+      client.setQueryData(productsQuery(library).queryKey, (list) => list?.filter((p) => p.id !== productId));
+      return client.invalidateQueries({ predicate: (query) => !query.queryKey.includes(productId) });
+    },
   });
   return { ...remove, forget: () => client.removeQueries({ queryKey: keyOf(library, 'one', productId) }) };
 }
