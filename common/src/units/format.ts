@@ -12,12 +12,14 @@ function fixed(decimals: number): Intl.NumberFormat {
 
 /** What stands where there is no number. */
 export const noValue = '–';
+/** Thousands are set apart by a narrow space that does not break (ISO 80000-1 7.3.1): a comma would read as a decimal mark to many. */
+export const thousandsMark = '\u202f';
 
 /** A number with a fixed count of decimals and grouped thousands; a dash where there is none, never NaN. */
 export function formatNumber(value: number | null | undefined, decimals = 0): string {
   if (value == null || !Number.isFinite(value)) return noValue;
   const text = fixed(decimals).format(value);
-  return /^-[0.,]+$/.test(text) ? text.slice(1) : text;
+  return (/^-[0.,]+$/.test(text) ? text.slice(1) : text).replaceAll(',', thousandsMark);
 }
 
 function withUnit(value: number | null | undefined, decimals: number, unit: string): string {

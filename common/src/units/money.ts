@@ -1,4 +1,5 @@
 import { Decimal } from 'decimal.js';
+import { thousandsMark } from './format.js';
 
 /** Decimal arithmetic for money and printed quantities: what is printed adds up to the last digit. */
 export { Decimal };
@@ -51,7 +52,7 @@ export function formatMoney(amount: DecimalLike | null | undefined, currency: st
   const text = roundMoney(amount, places).toFixed(places);
   const negative = text.startsWith('-');
   const [whole = '0', fraction] = text.replace('-', '').split('.');
-  const grouped = whole.replace(/\B(?=(\d{3})+$)/g, ',');
+  const grouped = whole.replace(/\B(?=(\d{3})+$)/g, thousandsMark);
   return `${currency} ${negative ? '-' : ''}${grouped}${fraction ? `.${fraction}` : ''}`.trim();
 }
 
@@ -59,5 +60,5 @@ export function formatMoney(amount: DecimalLike | null | undefined, currency: st
 export function formatDecimal(value: string | null | undefined): string {
   if (value == null) return '–';
   const [whole = '0', fraction] = value.split('.');
-  return whole.replace(/\B(?=(\d{3})+$)/g, ',') + (fraction ? `.${fraction}` : '');
+  return whole.replace(/\B(?=(\d{3})+$)/g, thousandsMark) + (fraction ? `.${fraction}` : '');
 }

@@ -3,9 +3,9 @@ import { count, formatLevel, formatNumber, joinWords, keepUnits } from './format
 
 describe('formatting', () => {
   it('sets numbers with fixed decimals and a thin space', () => {
-    expect(formatNumber(12345.678, 1)).toBe('12\u2009345.7');
+    expect(formatNumber(12345.678, 1)).toBe('12\u202f345.7');
     expect(formatNumber(-4.5, 1)).toBe('\u22124.5');
-    expect(formatNumber('1234567.10', 2)).toBe('1\u2009234\u2009567.10');
+    expect(formatNumber('1234567.10', 2)).toBe('1\u202f234\u202f567.10');
   });
   it('never turns a missing number into zero', () => {
     expect(formatNumber(null)).toBe('–');

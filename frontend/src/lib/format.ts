@@ -1,15 +1,8 @@
-const formats = new Map<string, Intl.NumberFormat>();
-/** A number with exactly these decimals, thousands set apart by a thin space. What is null is a dash. */
+import { formatNumber as formatPlain } from '@mantlet/common';
+
+/** A number with exactly these decimals, as everywhere in the product; text that holds a number is read as one. What is null is a dash. */
 export function formatNumber(value: number | string | null | undefined, decimals = 0): string {
-  const number = typeof value === 'string' ? Number(value) : value;
-  if (number == null || !Number.isFinite(number)) return '–';
-  const key = String(decimals);
-  let format = formats.get(key);
-  if (!format) {
-    format = new Intl.NumberFormat('en', { minimumFractionDigits: decimals, maximumFractionDigits: decimals });
-    formats.set(key, format);
-  }
-  return format.format(number).replaceAll(',', '\u2009').replace('-', '\u2212');
+  return formatPlain(typeof value === 'string' ? Number(value) : value, decimals).replace('-', '\u2212');
 }
 
 /** A level mark as drawings write it: metres with three decimals and a sign. */

@@ -27,7 +27,7 @@ describe('workingLine', () => {
 });
 
 describe('figures', () => {
-  it.each([[0.5371366, '0.5371'], [1471023.99, '1\u2009471\u2009024'], [355, '355'], [168.638, '168.6'], [0, '0'], [-12.5, '\u221212.5'], [0.00012, '0.00012']])('%d is %s', (value, text) => {
+  it.each([[0.5371366, '0.5371'], [1471023.99, '1\u202f471\u202f024'], [355, '355'], [168.638, '168.6'], [0, '0'], [-12.5, '\u221212.5'], [0.00012, '0.00012']])('%d is %s', (value, text) => {
     expect(figure(value)).toBe(text);
   });
   it('reads forces in the unit people use, and no value as none', () => {

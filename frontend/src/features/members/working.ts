@@ -14,7 +14,7 @@ export function figure(value: number | string): string {
   return grouped(trimmed).replace('-', '\u2212');
 }
 /** Thousands apart from five figures up. */
-const grouped = (text: string) => text.replace(/^(-?)(\d{5,})/, (_, sign: string, whole: string) => sign + whole.replace(/\B(?=(\d{3})+$)/g, '\u2009'));
+const grouped = (text: string) => text.replace(/^(-?)(\d{5,})/, (_, sign: string, whole: string) => sign + whole.replace(/\B(?=(\d{3})+$)/g, '\u202f'));
 
 const scaled: Record<string, { unit: string; by: number; above: number }> = { 'N·mm': { unit: 'kNm', by: 1e6, above: 1e5 }, N: { unit: 'kN', by: 1e3, above: 1e3 } };
 /** A result in the unit people read it in: 522 213 518 N·mm is 522.2 kNm. */
