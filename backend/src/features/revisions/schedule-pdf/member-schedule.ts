@@ -14,10 +14,13 @@ const exposureInWords = ({ exposure, protectionForm }: SnapshotMember): string =
 /** Where the critical temperature comes from: the way, what governs, its reference, and signatures under it. */
 export function provenance(m: SnapshotMember): string {
   const { result, basis } = m;
-  const parts: string[] = [wayNames[basis.way]];
+  const calculated = basis.way === 'calculated';
+  const parts: string[] = [calculated ? 'Calculated' : wayNames[basis.way]];
   if (result?.governing) parts[0] += `, ${result.governing}`;
   if (result?.utilisation != null) parts[0] += ` ${formatNumber(result.utilisation, 2)}`;
-  if (result?.method && basis.way !== 'declared' && basis.way !== 'assumed') parts.push(result.method);
+  // what every calculated member shares stands once, above the table
+  const unusual = calculated ? result?.method !== 'limit states of EN 1993-1-2' : basis.way !== 'declared' && basis.way !== 'assumed';
+  if (result?.method && unusual) parts.push(result.method);
   if ('reference' in basis) parts.push(basis.reference);
   const accepted = m.acceptances.find((a) => a.stillHolds && a.kind === 'assumed');
   if (accepted) parts.push(`accepted by ${accepted.by}, ${day(accepted.at)}: ${accepted.reason}`);
@@ -31,7 +34,8 @@ function verdict(m: SnapshotMember, names: ReadonlyMap<string, string>): string 
   const { result } = m;
   const said = memberSentence({
     verdict: result?.verdict ?? null, reason: result?.reason ?? null, requiredThickness: result?.requiredThickness ?? null,
-    appliedThickness: result?.appliedThickness ?? null, thicknessUnit: result?.thicknessUnit ?? null,
+    // what the zone's policy gives stands in a column of its own
+    appliedThickness: result?.requiredThickness ?? null, thicknessUnit: result?.thicknessUnit ?? null,
     productName: (result?.productId && names.get(result.productId)) || null,
   });
   if (result?.verdict !== 'bare') return said;
@@ -53,19 +57,19 @@ export function memberSchedule(snapshot: ScheduleSnapshot): Content[] {
   const columns = [
     { head: 'Mark', width: 46, value: (m: SnapshotMember) => m.mark },
     { head: 'Type', width: 44, value: (m: SnapshotMember) => memberTypeNames[m.memberType] },
-    { head: 'Section, grade', width: 90, value: (m: SnapshotMember) => `${m.section}, ${m.grade}` },
+    { head: 'Section, grade', width: 88, value: (m: SnapshotMember) => `${m.section}, ${m.grade}` },
     { head: 'No.', width: 20, right: true, value: (m: SnapshotMember) => formatNumber(m.quantity) },
     { head: 'Length', width: 42, right: true, value: (m: SnapshotMember) => formatLength(m.lengthMm) },
-    { head: 'Exposure', width: 72, value: exposureInWords },
+    { head: 'Exposure', width: 62, value: exposureInWords },
     { head: 'A/V', width: 24, right: true, value: (m: SnapshotMember) => formatNumber(m.result?.sectionFactorPerM) },
     { head: 'θ_cr', width: 34, right: true, value: (m: SnapshotMember) => formatLimitTemperature(m.result?.criticalTemperatureC) },
     { head: 'θ_cr comes from', width: '*' as const, value: provenance },
     { head: 'Apply', width: 44, right: true, value: applied },
-    { head: 'Verdict', width: 124, value: (m: SnapshotMember) => verdict(m, names) },
+    { head: 'Verdict', width: 104, value: (m: SnapshotMember) => verdict(m, names) },
   ];
   return [
     heading('4  Member schedule', { pageBreak: 'before' }),
-    paragraph('By level and zone. Three sides: the slab covers the top. A/V in 1/m, shown to 1 1/m and read unrounded; θ_cr is rounded down, thickness up. Board and spray in mm; coatings as dry film in mm. "Apply" is what the zone\'s policy gives the member: never less than it needs.'),
+    paragraph('By level and zone. Three sides: the slab covers the top. A/V in 1/m, shown to 1 1/m and read unrounded; θ_cr is rounded down, thickness up. "Calculated": the limit states of EN 1993-1-2, the governing one with its degree of utilisation at the start of the fire. Board and spray in mm; coatings as dry film in mm. "Apply" is what the zone\'s policy gives the member: never less than it needs.'),
     ...zonesByLevel(snapshot).flatMap(({ level, zones }) => zones.flatMap((zone): Content[] => {
       const members = byZone.get(zone.id) ?? [];
       const title = `Level ${level.code} ${level.name} · Zone ${zone.code} ${zone.name} · ${formatPeriod(zone.periodMin)}`;

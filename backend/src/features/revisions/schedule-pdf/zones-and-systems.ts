@@ -1,4 +1,4 @@
-import { fireCurveNames, formatLimitTemperature, formatNumber, formatPeriod, formatThickness, memberTypeNames, productKindNames } from '@mantlet/common';
+import { fireCurveNames, formatLimitTemperature, formatNumber, formatPeriod, formatThickness, memberTypeNames, memberTypes, productKindNames } from '@mantlet/common';
 import type { ScheduleSnapshot, SnapshotProduct, SnapshotZone, TargetPolicy } from '@mantlet/common';
 import type { Content } from 'pdfmake/interfaces.js';
 import { facts, heading, paragraph, schedule, subheading } from './layout.js';
@@ -18,6 +18,16 @@ function curveInWords({ curve }: SnapshotZone): string {
   return `Parametric: O ${curve.openingFactor}, b ${curve.thermalAbsorptivity}, q_t,d ${curve.fireLoadTotalMjPerM2} MJ/m², t_lim ${curve.limitTimeMin} min`;
 }
 
+/** One system for all is said once; where they differ, each with what it is for. */
+function systemsInWords({ systems }: SnapshotZone, names: ReadonlyMap<string, string>): string {
+  const byProduct = new Map<string, string[]>();
+  for (const { productId, memberType } of systems) {
+    byProduct.set(productId, [...(byProduct.get(productId) ?? []), memberTypeNames[memberType].toLowerCase()]);
+  }
+  if (byProduct.size === 1 && systems.length === memberTypes.length) return `${names.get(systems[0]?.productId ?? '') ?? ''} throughout`;
+  return [...byProduct].map(([productId, types]) => `${names.get(productId) ?? ''}: ${types.join(', ')}`).join('; ') || 'none';
+}
+
 export function zonesSection(snapshot: ScheduleSnapshot): Content[] {
   const levels = new Map(snapshot.levels.map((level) => [level.id, level]));
   const names = new Map(snapshot.products.map((p) => [p.id, p.name]));
@@ -30,7 +40,7 @@ export function zonesSection(snapshot: ScheduleSnapshot): Content[] {
       { head: 'Period', width: 38, value: (z) => formatPeriod(z.periodMin) },
       { head: 'Fire', width: 90, value: curveInWords },
       { head: 'Environment', width: 54, value: (z) => z.environment },
-      { head: 'Systems', width: '*', value: (z) => z.systems.map((s) => `${memberTypeNames[s.memberType]}: ${names.get(s.productId) ?? ''}`).join('; ') || 'none' },
+      { head: 'Systems', width: '*', value: (z) => systemsInWords(z, names) },
       { head: 'Thickness policy', width: 90, value: (z) => policyInWords(z.targetPolicy) },
       { head: 'Reference', width: 90, value: (z) => z.reference || '–' },
     ], snapshot.zones),
