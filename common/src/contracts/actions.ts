@@ -50,13 +50,15 @@ export type MemberDesign = z.infer<typeof memberDesignSchema>;
 
 const temperature = z.number({ error: 'must be a temperature in °C' }).min(100, 'is below 100 °C').max(1200, 'is above 1200 °C');
 const reference = z.string().trim().min(1, 'say where the value comes from').max(500);
+/** of a beam: lateral-torsional or shear buckling may govern. Absent: held against both. Columns and bracing always count as able to buckle. */
+const mayBuckle = z.boolean().optional();
 /** The five ways a critical temperature may enter. Each is stored with who, when and its reference. */
 export const criticalTemperatureBasisSchema = z.discriminatedUnion('way', [
   z.object({ way: z.literal('declared'), temperatureC: temperature, reference }),
   /** degree of utilisation μ0 = E_fi,d / R_fi,d,0 */
-  z.object({ way: z.literal('utilisation'), mu0: positiveSchema.max(10), reference }),
+  z.object({ way: z.literal('utilisation'), mu0: positiveSchema.max(10), mayBuckle, reference }),
   /** ambient utilisation E_d / R_d, times η_fi (the project's unless given here) */
-  z.object({ way: z.literal('ambient-utilisation'), utilisation: positiveSchema.max(10), etaFi: positiveSchema.max(1).nullable().default(null), reference }),
+  z.object({ way: z.literal('ambient-utilisation'), utilisation: positiveSchema.max(10), etaFi: positiveSchema.max(1).nullable().default(null), mayBuckle, reference }),
   z.object({ way: z.literal('calculated'), design: memberDesignSchema, reference }),
   /** the project's default for the member's type: assumed until accepted */
   z.object({ way: z.literal('assumed') }),

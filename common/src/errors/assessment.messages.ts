@@ -15,9 +15,9 @@ export const assessmentMessages = {
   'assessment.no-actions': (_: Record<string, never>) => 'Not determined: no actions given.',
   'assessment.no-buckling-length': (p: { axis: 'y' | 'z' }) => `Not determined: no buckling length about ${p.axis}.`,
   'assessment.lateral-torsional': (_: Record<string, never>) =>
-    'Not determined: a beam held laterally at points only needs a check of lateral-torsional buckling, which is not calculated here. Give its utilisation or declare its temperature.',
+    'Not determined: a beam held laterally at points only needs a check of lateral-torsional buckling, which is not calculated here. Give its utilisation in fire, marked as able to buckle, or declare its temperature.',
   'assessment.axial-with-bending': (_: Record<string, never>) =>
-    'Not determined: axial force together with bending is not calculated here. Give the utilisation or declare the temperature; set a negligible force to exactly 0.',
+    'Not determined: axial force together with bending is not calculated here. Give the utilisation in fire (of a beam: marked as able to buckle) or declare the temperature; set a negligible force to exactly 0.',
   'assessment.composite': (_: Record<string, never>) =>
     'Not determined: a composite member is not calculated here. Give its utilisation or declare its temperature.',
   'assessment.web-openings': (_: Record<string, never>) =>
@@ -27,11 +27,17 @@ export const assessmentMessages = {
   'assessment.shape-not-classified': (p: { shape: string }) =>
     `Not determined: ${p.shape} has no section class in Table 5.2 for this member. Declare its temperature.`,
   'assessment.shear-buckling': (p: { slenderness: number; limit: number }) =>
-    `Not determined: the web's h/t of ${p.slenderness.toFixed(1)} is above ${p.limit.toFixed(1)}, so that it may buckle in shear, which is not calculated here. Give the utilisation or declare the temperature.`,
+    `Not determined: the web's h/t of ${p.slenderness.toFixed(1)} is above ${p.limit.toFixed(1)}, so that it may buckle in shear, which is not calculated here. Give its utilisation in fire, marked as able to buckle, or declare its temperature.`,
   'assessment.under-strength': (p: { state: string; effect: number; resistance: number; unit: string; utilisation: number }) =>
     `Under-strength cold: the effect in fire, ${p.effect.toFixed(1)} ${p.unit}, is above the ${p.state} resistance at 20 °C, ${p.resistance.toFixed(1)} ${p.unit} (utilisation ${p.utilisation.toFixed(2)}).`,
   'assessment.under-strength-utilisation': (p: { utilisation: number }) =>
     `Under-strength cold: the utilisation given, ${p.utilisation.toFixed(2)}, is above 1.`,
+  'assessment.braced-rule-for-columns': (_: Record<string, never>) =>
+    'Not determined: half the storey height, and 0.7 of it at the top, are buckling lengths of braced continuous columns (EN 1993-1-2 4.2.3.2(5)); this member is not a column. Take the buckling length as given.',
+  'assessment.cold-utilisation-buckling': (_: Record<string, never>) =>
+    'Not determined: a cold utilisation does not say how a beam that may buckle sideways fares in fire, where a lower curve holds. Give its utilisation in fire or declare its temperature.',
+  'assessment.cold-utilisation-too-high': (p: { utilisation: number; share: number }) =>
+    `Not determined: η_fi times the cold utilisation is ${p.utilisation.toFixed(2)}, but by the rules for fire as little as ${p.share.toFixed(2)} of the cold resistance may be there at 20 °C. Give the utilisation in fire, the actions, or declare the temperature.`,
   'assessment.no-system': (p: { memberType: string }) => `Not determined: no system set for ${p.memberType} in this zone. Choose one for the zone.`,
   'assessment.form-mismatch': (p: { kind: string; form: string }) =>
     `Not determined: a ${p.kind} needs the protection form "${p.form}"; change the member's form or the zone's system.`,

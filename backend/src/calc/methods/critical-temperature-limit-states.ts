@@ -9,7 +9,7 @@ import { STRENGTH_ENDS_C, kE, kY, table31Rows, table31Source, temperatureOfKy } 
 import { citation } from '../formula.js';
 import type { CriticalTemperatureCase, LimitStateResult } from '../types.js';
 import type { SectionClass } from '../standards/en-1993-1-1/table-5-2.js';
-import type { MemberDesign } from '@mantlet/common';
+import type { MemberDesign, MemberType } from '@mantlet/common';
 import type { FireEffect } from './fire-effect.js';
 
 /** One limit state of one member: effect and resistance in N or N·mm. `bare` asks with κ1 of an unprotected member. */
@@ -142,13 +142,16 @@ function shearedModulus(c: CriticalTemperatureCase, modulus: number, plastic: bo
   return modulus;
 }
 
+const isBeam = (type: MemberType): boolean => type === 'beam' || type === 'secondary-beam';
+
 export function bending(c: CriticalTemperatureCase, design: MemberDesign, effect: FireEffect, sectionClass: SectionClass, { fy, gamma }: Material): LimitState {
   const plastic = sectionClass <= 2;
   const modulus = plastic ? c.properties.wplYMm3 : c.properties.welYMm3;
   const sheared = shearedModulus(c, modulus, plastic);
   const shearCold = (c.properties.shearAreaZMm2 * fy) / (Math.sqrt(3) * gamma);
   const k2 = kappa2(design.continuousBeam);
-  const k1 = (bare: boolean) => kappa1(c.exposure.arrangement, !bare);
+  // κ1 is for beams under a slab; a column against a wall is as warm on both flanges for all that is known
+  const k1 = (bare: boolean) => (isBeam(c.memberType) ? kappa1(c.exposure.arrangement, !bare) : 1);
   const left = (ky: number) => modulus - (effect.shearZN > 0 ? shearLoss(effect.shearZN, ky * shearCold) * sheared : 0);
   const at = (ky: number, bare: boolean) => Math.min((left(ky) * ky * fy) / (gamma * k1(bare) * k2), left(1) * fy);
   const demand = effect.momentYNmm;

@@ -35,6 +35,7 @@ export function refusal(c: CriticalTemperatureCase, design: MemberDesign, effect
   if (!calculatedShapes.includes(c.shape.kind)) return message('assessment.shape-not-calculated', { shape: shapeWords[c.shape.kind] });
   if (momentYNmm > 0 && (compressionN > 0 || tensionN > 0)) return message('assessment.axial-with-bending', {});
   if (momentYNmm > 0 && design.lateralRestraint === 'at-points' && !cannotTwist(c)) return message('assessment.lateral-torsional', {});
+  if (compressionN > 0 && design.bucklingRule !== 'given' && c.memberType !== 'column') return message('assessment.braced-rule-for-columns', {});
   if (compressionN > 0 && design.bucklingLengthYMm === null) return message('assessment.no-buckling-length', { axis: 'y' });
   if (compressionN > 0 && design.bucklingLengthZMm === null) return message('assessment.no-buckling-length', { axis: 'z' });
   return shearZN > 0 ? shearBuckling(c) : null;

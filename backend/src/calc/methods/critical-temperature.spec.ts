@@ -54,6 +54,12 @@ describe('bending', () => {
     expect(continuous.temperatureC).toBeCloseTo(600 + (100 * (0.47 - 0.36125)) / 0.24, 6);
   });
 
+  it('keeps κ1 for beams: a column against a wall has none', () => {
+    const moment = (0.5 * sectionProperties(ipe300).wplYMm3 * 275) / 1e6;
+    const result = determined(criticalTemperature(member(calculatedBasis({ momentYKnm: moment }), { memberType: 'column', exposure: { arrangement: 'three-sides', reason: 'against a wall' } })));
+    expect([result.temperatureC, result.bareTemperatureC]).toEqual([expect.closeTo(590.32, 2), expect.closeTo(590.32, 2)]);
+  });
+
   it('never lets κ lift the resistance above the cold one', () => {
     const moment = (1.01 * sectionProperties(ipe300).wplYMm3 * 275) / 1e6;
     const result = criticalTemperature(member(calculatedBasis({ momentYKnm: moment }), { exposure: { arrangement: 'three-sides', reason: '' } }));
@@ -148,6 +154,7 @@ describe('refusals', () => {
     ['web openings', member(calculatedBasis({ momentYKnm: 10 }, { webOpenings: true }))],
     ['a channel', member(calculatedBasis({ momentYKnm: 10 }), { shape: { kind: 'channel', hMm: 200, bMm: 75, twMm: 8.5, tfMm: 11.5, rootRadiusMm: 11.5, toeRadiusMm: 6, flangeSlope: 0.08 } })],
     ['buckle in shear', member(calculatedBasis({ momentYKnm: 10, shearZKn: 10 }), { shape: { kind: 'i', hMm: 1000, bMm: 300, twMm: 8, tfMm: 20, rootRadiusMm: 0 } })],
+    ['this member is not a column', member(calculatedBasis({ axialKn: 10 }, { bucklingLengthYMm: 3000, bucklingLengthZMm: 3000, bucklingRule: 'braced-intermediate' }), { memberType: 'bracing' })],
     ['Not determined: no critical temperature', member({ way: 'none' })],
   ])('%s', (words, c) => {
     expect(criticalTemperature(c).kind).toBe('not-determined');

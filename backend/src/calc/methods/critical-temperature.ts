@@ -131,7 +131,7 @@ function calculated(c: CriticalTemperatureCase, design: MemberDesign, working: W
   const capped = cap < lowest.temperatureC;
   return {
     kind: 'determined', temperatureC: Math.min(lowest.temperatureC, cap), bareTemperatureC: Math.min(bare, cap), way,
-    method: class4 ? 'class 4 default' : 'limit states of EN 1993-1-2',
+    method: capped ? 'class 4 default' : 'limit states of EN 1993-1-2',
     governing: capped ? null : lowest.name, utilisation: capped ? null : lowest.utilisation, limitStates: capped ? [] : limitStates, assumed: false,
   };
 }

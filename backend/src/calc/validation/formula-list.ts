@@ -12,6 +12,7 @@ import { netHeatFluxFormula } from '../standards/en-1991-1-2/clause-3-1-net-heat
 import { externalCurve, hydrocarbonCurve, standardCurve } from '../standards/en-1991-1-2/clause-3-2-nominal-curves.js';
 import { reductionFactorFormula, utilisationFromAmbientFormula } from '../standards/en-1993-1-2/clause-2-4-2-reduction-factor.js';
 import { steelConductivityFormula, steelSpecificHeatFormula } from '../standards/en-1993-1-2/clause-3-4-1-thermal-properties.js';
+import { coldBucklingReductionFormula, imperfectionFactors } from '../standards/en-1993-1-1/table-6-1.js';
 import { fireEpsilonFormula } from '../standards/en-1993-1-2/clause-4-2-2-classification.js';
 import { tensionResistanceFormula } from '../standards/en-1993-1-2/clause-4-2-3-1-tension.js';
 import { bucklingReductionFormula, compressionResistanceFormula, slendernessFormula, slendernessInFireFormula } from '../standards/en-1993-1-2/clause-4-2-3-2-compression.js';
@@ -47,7 +48,7 @@ export const formulaChapters: FormulaChapter[] = [
   {
     title: 'Resistance and critical temperature',
     formulas: [
-      printed(fireEpsilonFormula), printed(tensionResistanceFormula), printed(slendernessFormula), printed(slendernessInFireFormula), printed(bucklingReductionFormula),
+      printed(fireEpsilonFormula), printed(tensionResistanceFormula), printed(slendernessFormula), printed(slendernessInFireFormula), printed(bucklingReductionFormula), printed(coldBucklingReductionFormula),
       printed(compressionResistanceFormula), printed(bendingResistanceFormula), printed(shearReductionFormula), printed(shearResistanceFormula), printed(criticalTemperatureFormula),
     ],
   },
@@ -60,7 +61,8 @@ export const tablesRead: [string, string][] = [
   ['EN 1993-1-1:2005 Table 3.1', 'yield strength of S235, S275, S355, S420, S460 to 40 and to 80 mm'],
   ['ASTM A36, A992, A500 grade C (memory)', 'yield strength 250, 345, 345 MPa'],
   ['EN 1993-1-1:2005 Table 5.2', 'limits of c/t and d/t for classes 1 to 3, with ε of EN 1993-1-2 4.2.2'],
-  ['EN 1993-1-2:2005 4.2.3.3(7), (8)', 'κ1: 1.0; 0.85 protected and 0.7 bare with a slab on the fourth side. κ2: 0.85 over the supports of a continuous beam, else 1.0'],
+  ['EN 1993-1-1:2005 Tables 6.1, 6.2 (memory)', `imperfection factors of the cold buckling curves ${Object.entries(imperfectionFactors).map(([curve, alpha]) => `${curve} ${alpha}`).join(', ')}; the most favourable curve of a shape, where a cold utilisation is carried over to fire`],
+  ['EN 1993-1-2:2005 4.2.3.3(7), (8)', 'κ1: 1.0; 0.85 protected and 0.7 bare with a slab on the fourth side, for beams alone. κ2: 0.85 over the supports of a continuous beam, else 1.0'],
   ['EN 1993-1-2:2005 4.2.3.2(5)', 'buckling length of a braced continuous column: 0.5 between storeys, 0.7 at the top, where the engineer confirms the rule'],
   ['EN 1991-1-2:2002 3.2, 3.3.1.1(3)', 'α_c: 25 W/m²K; 50 for the hydrocarbon curve; 35 for parametric fires'],
 ];
@@ -72,7 +74,8 @@ export const decisions: string[] = [
   'Both axes share one buckling curve in fire, so the more slender axis governs at every temperature and is the one reported.',
   'High shear (above half the shear resistance at temperature) reduces the bending resistance by EN 1993-1-1 6.2.8.',
   'Class 4 (4.2.3.6): the lower of the project’s setting and of what the gross section would carry, in bending and compression; tension has no class. Where only a utilisation is known the member’s type says how it is stressed: beams bend, columns and bracing are compressed, ties pull. A declared temperature stands.',
-  'From a utilisation: beams and ties by (4.22) or by inverting k_y, as the project sets, μ0 below 0.013 read as 0.013. Columns and bracing may buckle, where (4.22) does not hold: they are read from the smaller of k_y and k_E, which is on the safe side for every slenderness.',
+  'From a utilisation: beams and ties by (4.22) or by inverting k_y, as the project sets, μ0 below 0.013 read as 0.013. Columns and bracing may buckle, and so may a beam that is said to: there (4.22) does not hold, and they are read from the smaller of k_y and k_E, which is on the safe side for every slenderness.',
+  'A cold utilisation rests on the resistance of EN 1993-1-1, μ0 on that of EN 1993-1-2 at 20 °C, which is the smaller for members that buckle (its one curve lies below the cold ones) and for sections whose class is worse with the reduced ε. μ0 = η_fi·E_d/R_d is divided by the least R_fi,d,0/R_d: of all slendernesses, against the most favourable cold curve of the shape; W_el/W_pl where class 1 or 2 becomes 3. Above 1 the member is not determined. A beam that may buckle needs its utilisation in fire.',
   'Above a utilisation of 1, in fire or cold, a member is under-strength cold.',
   'Equation (4.25) is stepped at 5 s and (4.27) at 30 s or less, with the gas temperature at the middle of each step. A_m/V below 10 1/m is read as 10 in (4.25).',
   'Conductivity given by temperature is read at the mean of gas and steel temperature.',
@@ -83,8 +86,9 @@ export const refused: string[] = [
   'lateral-torsional buckling (a beam held at points only; square and circular hollow sections need no such check)',
   'axial force together with bending (unless one of them is exactly zero)',
   'composite members; web openings',
-  'resistance of unequal I sections, channels, tees, angles, flats and rounds (their section factor and heating are computed; give a utilisation or declare the temperature)',
+  'resistance of unequal I sections, channels, tees, angles, flats and rounds (their section factor and heating are computed; give a utilisation, of a beam that may buckle marked as such, or declare the temperature)',
   'shear in webs above h/t = 72·√(235/f_y), which may buckle in shear',
+  'the buckling lengths of braced continuous columns (4.2.3.2(5)) for anything but a column',
   'compression without both buckling lengths; members without actions; classification of a flat',
   'steel above 80 mm and grades not listed; stainless, cold-formed and cast steel',
 ];

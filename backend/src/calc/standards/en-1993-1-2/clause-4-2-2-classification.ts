@@ -89,3 +89,10 @@ export function sectionClass(shape: SectionShape, loading: Loading, yieldStrengt
     case 'flat': return { ok: false, reason: message('assessment.shape-not-classified', { shape: 'a flat' }) };
   }
 }
+
+/** The class at normal temperature, with ε = √(235/f_y); 4 where Table 5.2 gives none. */
+export function coldSectionClass(shape: SectionShape, loading: Loading, yieldStrengthMPa: number): SectionClass {
+  // the ε of fire is 0.85·√(235/f_y), which for 0.85²·f_y is the cold one
+  const found = sectionClass(shape, loading, yieldStrengthMPa * 0.85 ** 2);
+  return found.ok ? found.value : 4;
+}

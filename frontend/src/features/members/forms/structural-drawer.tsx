@@ -48,14 +48,17 @@ function WayFields({ form, memberType }: { form: StructuralForm; memberType: Mem
   const basis = useCurrentProject().settings?.designBasis ?? defaultDesignBasis;
   const way = useWatch({ control, name: 'basis.way' });
   const reference = <TextField control={control} name="basis.reference" label="Reference" help="Where the value comes from: calculation, sheet, date." />;
+  const beam = memberType === 'beam' || memberType === 'secondary-beam';
+  const buckles = beam && <CheckField control={control} name="basis.mayBuckle" label="The beam may buckle" help="Lateral-torsional or shear buckling may govern. Unmarked: held laterally, so that equation (4.22) or k y alone holds. EN 1993-1-2 4.2.4." />;
   switch (way) {
     case 'declared': return <><NumberField control={control} name="basis.temperatureC" label="Critical temperature" unit="°C" help={`100 to 1200 °C. Above ${basis.secondSignatureAboveC} °C the fire engineer is asked to accept it.`} />{reference}</>;
-    case 'utilisation': return <><NumberField control={control} name="basis.mu0" label="Degree of utilisation μ0" min={0} help="Effect in fire over the resistance at the start of the fire: E fi,d / R fi,d,0. EN 1993-1-2 4.2.4(3)." />{reference}</>;
+    case 'utilisation': return <><NumberField control={control} name="basis.mu0" label="Degree of utilisation μ0" min={0} help="Effect in fire over the resistance at the start of the fire: E fi,d / R fi,d,0. EN 1993-1-2 4.2.4(3)." />{buckles}{reference}</>;
     case 'ambient-utilisation':
       return (
         <>
           <NumberField control={control} name="basis.utilisation" label="Utilisation cold" min={0} help="E d / R d of the ambient design; multiplied by η fi." />
           <NumberField control={control} name="basis.etaFi" label="Reduction factor η fi" min={0} max={1} help={`Left empty, the project's ${basis.etaFi} is used. EN 1993-1-2 2.4.2.`} />
+          {buckles}
           {reference}
         </>
       );

@@ -14,6 +14,7 @@ export interface StructuralValues {
     mu0: number | null;
     utilisation: number | null;
     etaFi: number | null;
+    mayBuckle: boolean;
     reference: string;
     design: Omit<MemberDesign, 'actions'> & { actions: ActionsValues };
   };
@@ -34,7 +35,7 @@ export function structuralValues(basis: CriticalTemperatureBasis, version: numbe
   return {
     version,
     basis: {
-      temperatureC: null, mu0: null, utilisation: null, etaFi: null, reference: '', ...basis,
+      temperatureC: null, mu0: null, utilisation: null, etaFi: null, mayBuckle: false, reference: '', ...basis,
       design: {
         bucklingLengthYMm: null, bucklingLengthZMm: null, bucklingRule: 'given', lateralRestraint: 'continuous', continuousBeam: false, composite: false, webOpenings: false,
         ...design, actions: actionsValues(design?.actions ?? null),
