@@ -22,16 +22,24 @@ function remembered(): ThemeChoice {
   }
 }
 const darkWanted = () => window.matchMedia('(prefers-color-scheme: dark)');
+const stillWanted = () => window.matchMedia('(prefers-reduced-motion: reduce)');
+
+/** Follows a wish of the system while the page is open. */
+function useWish(wish: () => MediaQueryList): boolean {
+  const [holds, setHolds] = useState(() => wish().matches);
+  useEffect(() => {
+    const query = wish();
+    const follow = () => setHolds(query.matches);
+    query.addEventListener('change', follow);
+    return () => query.removeEventListener('change', follow);
+  }, [wish]);
+  return holds;
+}
 
 export function ThemeProvider({ children }: { children: ReactNode }) {
   const [choice, setChoice] = useState(remembered);
-  const [systemDark, setSystemDark] = useState(() => darkWanted().matches);
-  useEffect(() => {
-    const query = darkWanted();
-    const follow = () => setSystemDark(query.matches);
-    query.addEventListener('change', follow);
-    return () => query.removeEventListener('change', follow);
-  }, []);
+  const systemDark = useWish(darkWanted);
+  const still = useWish(stillWanted);
   const ground = choice === 'system' ? (systemDark ? 'dark' : 'light') : choice;
   useLayoutEffect(() => { document.documentElement.dataset['ground'] = ground; }, [ground]);
   const state = useMemo<ThemeState>(() => ({
@@ -41,7 +49,11 @@ export function ThemeProvider({ children }: { children: ReactNode }) {
       try { localStorage.setItem(storageKey, next); } catch { /* kept for this visit only */ }
     },
   }), [choice, ground]);
-  const config = useMemo(() => antdTheme(ground === 'dark' ? dark : light), [ground]);
+  const config = useMemo(() => {
+    const theme = antdTheme(ground === 'dark' ? dark : light);
+    // a list that waits for the end of a motion that styles cut short would stay off the page: without motion nothing waits
+    return still ? { ...theme, token: { ...theme.token, motion: false } } : theme;
+  }, [ground, still]);
   return (
     <ThemeContext value={state}>
       <style>{paletteCss}</style>
