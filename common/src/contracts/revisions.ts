@@ -19,7 +19,8 @@ export const revisionInputSchema = z.object({ code: codeSchema, purpose: noteSch
 export type RevisionInput = z.infer<typeof revisionInputSchema>;
 export const returnSchema = z.object({ comment: z.string().trim().min(3, 'say what must change').max(2000) });
 export type ReturnInput = z.infer<typeof returnSchema>;
-export interface SignatureDto { name: string; at: string }
+/** userId tells two people of one name apart */
+export interface SignatureDto { userId: string; name: string; at: string }
 export interface RevisionDto {
   id: string; code: string; purpose: string; state: RevisionState; createdAt: string;
   prepared: SignatureDto | null; checked: SignatureDto | null; issued: SignatureDto | null;

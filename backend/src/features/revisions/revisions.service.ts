@@ -132,7 +132,7 @@ export class RevisionsService {
       if (revision.state !== 'checked') throw conflict(message('schedule.not-checked', { code: revision.code, state: inWords(revision.state) }));
       const snapshot = await this.intactSnapshot(manager, revision);
       const issuedAt = new Date();
-      const signatures = { ...signaturesOf(revision), state: 'issued' as const, issued: { name: scope.actor.name, at: issuedAt.toISOString() } };
+      const signatures = { ...signaturesOf(revision), state: 'issued' as const, issued: signature(scope.actor, issuedAt) };
       const pdf = await this.pdfs.render(snapshot, revision.snapshotSha256, signatures);
       await manager.update(Revision, { projectId: scope.projectId, state: 'issued' }, { state: 'superseded' });
       await manager.update(Revision, id, {
@@ -235,7 +235,7 @@ function blocked(blockers: readonly OpenItemDto[]) {
   return unprocessable(message('schedule.blocked', { titles, more: blockers.length - titles.length }), blockers.map((item) => ({ path: item.code, message: item.title })));
 }
 
-const signature = (by: { name: string } | null, at: Date | null) => (by && at ? { name: by.name, at: at.toISOString() } : null);
+const signature = (by: { id: string; name: string } | null, at: Date | null) => (by && at ? { userId: by.id, name: by.name, at: at.toISOString() } : null);
 
 function signaturesOf(revision: Revision): PdfSignatures {
   return {

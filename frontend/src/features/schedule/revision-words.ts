@@ -16,18 +16,18 @@ export interface StepOffer { step: Step; text: string; /** null: may be taken; e
 
 /**
  * The next step of a revision and whether this person may take it.
- * The checker is never the preparer; the server decides by account, the client by the name in the signature.
+ * The checker is never the preparer: two people of one name are told apart by their accounts, as on the server.
  */
-export function nextStep(revision: RevisionDto, held: readonly Role[], myName: string | null, readiness: ReadinessDto | undefined): StepOffer | null {
+export function nextStep(revision: RevisionDto, held: readonly Role[], myId: string | null, readiness: ReadinessDto | undefined): StepOffer | null {
   if (!isOpen(revision.state)) return null;
   const refused = may(held, 'edit-revisions') ? null : whyNot('edit-revisions');
   if (revision.state === 'draft') {
     const blockers = readiness?.blockers.length ?? 0;
-    const why = refused ?? (blockers > 0 ? `${countWord(blockers)} ${blockers === 1 ? 'item keeps' : 'items keep'} it from being prepared; they are listed under Readiness.` : null);
+    const why = refused ?? (blockers > 0 ? `${countWord(blockers)} ${blockers === 1 ? 'item keeps' : 'items keep'} it from being prepared; the Schedule page lists them under Readiness.` : null);
     return { step: 'prepare', text: 'Prepare', why };
   }
   if (revision.state === 'prepared') {
-    const own = myName !== null && revision.prepared?.name === myName;
+    const own = myId !== null && revision.prepared?.userId === myId;
     const why = refused ?? (own ? `You prepared ${revision.code} yourself. It is checked by another specifier, so that two people have looked at it.` : null);
     return { step: 'check', text: 'Sign as checked', why };
   }

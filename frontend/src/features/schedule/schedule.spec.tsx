@@ -13,7 +13,7 @@ const revision = (more: Partial<RevisionDto> = {}): RevisionDto => ({
 const item = (more: Partial<OpenItemDto> = {}): OpenItemDto => ({ role: 'structural-engineer', kind: 'blocker', code: 'no-actions', title: '3 beams have no actions', zoneId: 'z1', zoneLabel: 'Z01 Hall', memberIds: ['m1'], count: 3, page: 'member', ...more });
 const ready: ReadinessDto = { ready: true, current: true, blockers: [], warnings: [] };
 const blocked: ReadinessDto = { ready: false, current: true, blockers: [item(), item({ role: 'specifier', title: 'Z02 has no system', page: 'zones' })], warnings: [item({ kind: 'warning', title: 'Above 650 °C' })] };
-const signed = (name: string) => ({ name, at: '2026-05-02T08:00:00Z' });
+const signed = (name: string, userId = name) => ({ userId, name, at: '2026-05-02T08:00:00Z' });
 
 describe('the next step', () => {
   it('is offered to a specifier when nothing blocks', () => expect(nextStep(revision(), ['specifier'], 'Ada', ready)).toEqual({ step: 'prepare', text: 'Prepare', why: null }));
@@ -25,6 +25,11 @@ describe('the next step', () => {
     const prepared = revision({ state: 'prepared', prepared: signed('Ada') });
     expect(nextStep(prepared, ['specifier'], 'Ada', ready)?.why).toMatch(/^You prepared P01 yourself/);
     expect(nextStep(prepared, ['specifier'], 'Ben', ready)).toMatchObject({ step: 'check', why: null });
+  });
+  it('tells two people of one name apart', () => {
+    const prepared = revision({ state: 'prepared', prepared: signed('Ada Quill', 'u1') });
+    expect(nextStep(prepared, ['specifier'], 'u1', ready)?.why).toMatch(/yourself/);
+    expect(nextStep(prepared, ['specifier'], 'u2', ready)?.why).toBeNull();
   });
   it('ends with issue', () => {
     expect(nextStep(revision({ state: 'checked' }), ['specifier'], 'Ada', ready)).toMatchObject({ step: 'issue', why: null });

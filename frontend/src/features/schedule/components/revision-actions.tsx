@@ -20,10 +20,10 @@ interface RevisionActionsProps { projectId: string; revision: RevisionDto; held:
 /** What can be done with a revision now, by this person; what cannot says why. */
 export function RevisionActions({ projectId, revision, held, readiness }: RevisionActionsProps) {
   const { modal } = App.useApp();
-  const myName = useSession().data?.user?.name ?? null;
+  const myId = useSession().data?.user?.id ?? null;
   const take = useTakeStep(projectId, revision.id);
   const [drawer, setDrawer] = useState<'change' | 'return' | null>(null);
-  const offer = nextStep(revision, held, myName, readiness);
+  const offer = nextStep(revision, held, myId, readiness);
   if (!offer) return null;
   const edits = may(held, 'edit-revisions');
   const ask = () => modal.confirm({ ...questions[offer.step](revision.code), icon: null, cancelText: 'Not yet', onOk: () => take.mutateAsync(offer.step).catch(() => undefined) });
