@@ -35,7 +35,7 @@ export interface PolicyMaterialDto {
   policy: TargetPolicy['policy'];
   /** distinct applied thicknesses, rising */
   thicknesses: number[];
-  /** litres of coating (practical), m² of board sheet, m³ of spray */
+  /** litres of coating (practical), m² of board sheet (every layer counts), m³ of spray */
   material: number | null;
   materialUnit: 'L' | 'm²' | 'm³';
   /** protected area under the policy, m²: board girths grow with thickness */

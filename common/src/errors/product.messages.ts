@@ -1,4 +1,4 @@
-import { formatApart, formatNumber } from '../units/format.js';
+import { formatApart, formatLimitTemperature, formatNumber } from '../units/format.js';
 
 /**
  * Reading of assessed product data. Codes that begin with `product.outside-` say that the assessment does not reach;
@@ -16,7 +16,7 @@ export const productMessages = {
   'product.outside-period': (p: { periodMin: number; limitMin: number }) =>
     `Outside the assessment: R ${p.periodMin} is above R ${formatNumber(p.limitMin)}.`,
   'product.outside-cell': (p: { sectionFactorPerM: number; temperatureC: number; periodMin: number }) =>
-    `Outside the assessment: no thickness is given at A/V ${formatNumber(p.sectionFactorPerM)}, ${formatNumber(p.temperatureC)} °C, R ${p.periodMin}.`,
+    `Outside the assessment: no thickness is given at A/V ${formatNumber(p.sectionFactorPerM)}, ${formatLimitTemperature(p.temperatureC)}, R ${p.periodMin}.`,
   'product.outside-shape': (p: { group: string; orientation: string }) =>
     `Outside the assessment: no data for ${p.group} sections as ${p.orientation}s.`,
   'product.outside-curve': (p: { curve: string; covered: string }) =>
@@ -28,7 +28,7 @@ export const productMessages = {
     return `Outside the assessment: ${value} ${p.unit} is below the least assessed thickness, ${least} ${p.unit}.`;
   },
   'product.no-solution': (p: { sectionFactorPerM: number; temperatureC: number }) =>
-    `Not determined: the regression gives no thickness at A/V ${formatNumber(p.sectionFactorPerM)} and ${formatNumber(p.temperatureC)} °C.`,
+    `Not determined: the regression gives no thickness at A/V ${formatNumber(p.sectionFactorPerM)} and ${formatLimitTemperature(p.temperatureC)}.`,
   'product.form-not-for-kind': (p: { form: string; kind: string }) =>
     `Not determined: ${p.form} do not describe a ${p.kind}; upload its thickness table or regression.`,
   'product.no-stock': (_: Record<string, never>) =>

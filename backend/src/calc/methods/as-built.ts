@@ -1,6 +1,6 @@
 import { message } from '@mantlet/common';
 import type { ProductKind, ReadingRules, RegressionFit, ThermalProperties, ThicknessTable } from '@mantlet/common';
-import { curveRefusal, groupNames } from '../standards/en-13381/coverage.js';
+import { curveRefusal, groupNames, limitInWords } from '../standards/en-13381/coverage.js';
 import { coefficientsOf, fitInWords, placeInFits, regressionTime } from '../standards/en-13381/regression.js';
 import { placeInTable, readingInWords, roundUpThickness, tablesFor, thicknessAt } from '../standards/en-13381/thickness-table.js';
 import type { AssessedProduct, Determined, ThicknessRequest } from '../types.js';
@@ -88,7 +88,7 @@ function fromThermal(properties: ThermalProperties, kind: ProductKind, request: 
       periodMin: whole < 1 ? null : whole,
       shortestAssessedMin: 1,
       limitedByAssessment: minutes === null || thicknessMm > properties.maxThicknessMm,
-      reading: `Thermal properties, (4.27): ${used} mm at A/V ${Math.round(found.value.sectionFactorPerM)} to ${Math.round(found.value.temperatureC)} °C`,
+      reading: `Thermal properties, (4.27): ${used} mm at A/V ${Math.round(found.value.sectionFactorPerM)} to ${limitInWords(found.value.temperatureC)}`,
     },
   };
 }

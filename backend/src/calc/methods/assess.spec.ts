@@ -154,6 +154,23 @@ describe('a member explained', () => {
     expect(working.find((s) => s.what.startsWith('Protected steel'))?.value).toBeCloseTo(atPeriod, 6);
   });
 
+  it('solves a regression in the unit of its kind, and says limits downwards', () => {
+    // by hand: (60 + 15 − 0.03·580.9)/(0.9 + 0.95·580.9/A/V) at the beam's A/V
+    const fit = {
+      shape: 'open' as const, orientation: 'beam' as const, coefficients: [-15, 0.9, 0, 0.03, 0, 0.95, 0, 0], minThickness: 10, maxThickness: 60,
+      minSectionFactorPerM: 40, maxSectionFactorPerM: 300, minTemperatureC: 350, maxTemperatureC: 750, minPeriodMin: 30, maxPeriodMin: 180,
+    };
+    const product: MemberCase['product'] = { ...coating, kind: 'spray', evidence: { form: 'regression', fits: [fit] } };
+    const { result, working } = explainMember({ ...beam, basis: { way: 'declared', temperatureC: 580.9, reference: 'test' }, product });
+    const step = working.find((s) => s.source.startsWith('EN 13381-8 annex'));
+    const sectionFactorPerM = result.sectionFactorPerM as number;
+    expect(step).toMatchObject({ unit: 'mm', note: expect.stringMatching(/^tested from 10 to 60 mm/) as string });
+    expect(step?.value).toBeCloseTo((75 - 0.03 * 580.9) / (0.9 + (0.95 * 580.9) / sectionFactorPerM), 9);
+    expect(step?.what).not.toMatch(/_/);
+    expect(result.evidenceReading).toMatch(/^Regression: R 60, 580 °C/);
+    expect(working.find((s) => s.what.startsWith('Bare steel'))?.note).toMatch(/^above 580 °C/);
+  });
+
   it('ends in the reason where there is no thickness', () => {
     const { working, charts } = explainMember({ ...beam, product: null });
     expect(working[working.length - 1]).toMatchObject({ value: null, note: expect.stringMatching(/no system/) as string });

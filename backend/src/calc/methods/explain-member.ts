@@ -1,4 +1,5 @@
 import type { CurveSample, MemberChartsDto, MemberResultDto, WorkingStepDto } from '@mantlet/common';
+import { formatLimitTemperature } from '@mantlet/common';
 import { profileGroup, sectionFactor } from '../sections/index.js';
 import { defineFormula, explain } from '../formula.js';
 import { gasTemperatureC, naturalFireDurationMin } from '../standards/gas-temperature.js';
@@ -46,8 +47,8 @@ function bareSteps(c: MemberCase, own: SectionFactor, result: MemberResultDto): 
       { symbol: 't', value: c.periodMin, unit: 'min' },
     ],
     note: result.bareTemperatureC <= limit
-      ? `not above ${limit.toFixed(0)} °C: may stay bare`
-      : `above ${limit.toFixed(0)} °C${result.bareMinutes === null ? '' : `, which it reaches after ${result.bareMinutes.toFixed(1)} min`}: needs protection`,
+      ? `not above ${formatLimitTemperature(limit)}: may stay bare`
+      : `above ${formatLimitTemperature(limit)}${result.bareMinutes === null ? '' : `, which it reaches after ${result.bareMinutes.toFixed(1)} min`}: needs protection`,
     value: result.bareTemperatureC, unit: '°C', source: 'EN 1993-1-2:2005 4.2.5.1 (4.25)',
   }];
 }

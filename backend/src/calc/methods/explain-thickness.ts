@@ -1,7 +1,7 @@
 import type { WorkingStepDto } from '@mantlet/common';
-import { sentence } from '@mantlet/common';
+import { formatLimitTemperature, sentence, thicknessUnit } from '@mantlet/common';
 import { explain } from '../formula.js';
-import { coefficientsOf, placeInFits, regressionThickness } from '../standards/en-13381/regression.js';
+import { EVIDENCE_UNIT, coefficientsOf, placeInFits, regressionThickness } from '../standards/en-13381/regression.js';
 import { thicknessTableSource } from '../standards/en-13381/thickness-table.js';
 import { heatRatioFormula, moistureDwellFormula } from '../standards/en-1993-1-2/clause-4-2-5-2-protected.js';
 import type { AssessedProduct, MemberCase, RequiredThickness, ThicknessRequest } from '../types.js';
@@ -15,6 +15,8 @@ const sourceOf: Record<AssessedProduct['evidence']['form'], string> = {
   thermal: 'EN 1993-1-2:2005 4.2.5.2 (4.27) with the assessed properties',
 };
 
+const unitOf = ({ kind }: AssessedProduct): 'µm' | 'mm' => thicknessUnit[kind];
+
 function regressionSteps(product: AssessedProduct, request: ThicknessRequest): WorkingStepDto[] {
   if (product.evidence.form !== 'regression') return [];
   const place = placeInFits(product.evidence.fits, request);
@@ -23,7 +25,9 @@ function regressionSteps(product: AssessedProduct, request: ThicknessRequest): W
   const { step } = explain(regressionThickness, {
     ...coefficientsOf(fit), temperatureC, sectionFactorPerM, periodMin: Math.max(request.periodMin, fit.minPeriodMin),
   });
-  return [{ ...step, note: `tested from ${fit.minThickness} to ${fit.maxThickness}; less is raised to the least tested, more is refused` }];
+  const unit = unitOf(product);
+  const inputs = step.inputs.map((input) => (input.unit === EVIDENCE_UNIT ? { ...input, unit } : input));
+  return [{ ...step, what: 'Thickness from the regression, solved from its equation for the time', inputs, unit, note: `tested from ${fit.minThickness} to ${fit.maxThickness} ${unit}; less is raised to the least tested, more is refused` }];
 }
 
 function thermalSteps(product: AssessedProduct, request: ThicknessRequest, required: RequiredThickness): WorkingStepDto[] {
@@ -47,7 +51,7 @@ function thermalSteps(product: AssessedProduct, request: ThicknessRequest, requi
         { symbol: 'A_p/V', value: sectionFactorPerM, unit: '1/m' }, { symbol: 'd_p', value: required.thickness, unit: 'mm' },
         { symbol: 't', value: request.periodMin, unit: 'min' },
       ],
-      note: `not above the design temperature of ${temperatureC.toFixed(0)} °C`,
+      note: `not above the design temperature of ${formatLimitTemperature(temperatureC)}`,
       value: endC, unit: '°C', source: sourceOf.thermal,
     },
   ];
@@ -55,7 +59,7 @@ function thermalSteps(product: AssessedProduct, request: ThicknessRequest, requi
 
 /** The working of a required thickness, after the fact: each step is evaluated by the descriptor that the reading used. */
 export function explainThickness(product: NonNullable<MemberCase['product']>, request: ThicknessRequest, required: RequiredThickness): WorkingStepDto[] {
-  const unit = product.kind === 'coating' ? 'µm' : 'mm';
+  const unit = unitOf(product);
   return [
     ...regressionSteps(product, request),
     ...thermalSteps(product, request, required),

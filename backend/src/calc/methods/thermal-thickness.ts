@@ -1,6 +1,6 @@
 import { message } from '@mantlet/common';
 import type { FireCurve, Message, ProductKind, ThermalProperties } from '@mantlet/common';
-import { formNames } from '../standards/en-13381/coverage.js';
+import { formNames, limitInWords } from '../standards/en-13381/coverage.js';
 import { stacksOf } from '../standards/en-13381/stacks.js';
 import type { Determined, RequiredThickness, ThicknessRequest } from '../types.js';
 import type { Stack } from '../standards/en-13381/stacks.js';
@@ -135,6 +135,6 @@ export function thicknessFromThermal(properties: ThermalProperties, kind: Produc
   if (!stack) return { ok: false, reason: message('product.outside-thickness', { greatest: greatest.thicknessMm, unit: 'mm' }) };
   known.set(key, { thicknessMm: stack.thicknessMm, sectionFactorPerM: place.sectionFactorPerM, temperatureC: place.temperatureC });
   const layers = stack.layers && stack.layers.length > 1 ? ` in layers of ${stack.layers.join(' + ')} mm` : '';
-  const reading = `Thermal properties, (4.27): R ${periodMin}, ${Math.round(place.temperatureC)} °C, A/V ${Math.round(place.sectionFactorPerM)}${layers}`;
+  const reading = `Thermal properties, (4.27): R ${periodMin}, ${limitInWords(place.temperatureC)}, A/V ${Math.round(place.sectionFactorPerM)}${layers}`;
   return { ok: true, value: { thickness: stack.thicknessMm, layers: stack.layers, reading } };
 }

@@ -45,7 +45,7 @@ const perry = (slenderness: number, fy: number): ValidationCase => ({
 });
 
 export const materialSets: ValidationSet[] = [
-  { source: 'EN 1993-1-2:2005', where: 'Table 3.1', standing: 'read', cases: table31 },
+  { source: 'EN 1993-1-2:2005', where: 'Table 3.1', standing: 'published', cases: table31 },
   {
     source: 'EN 1993-1-2:2005', where: '3.4.1.2, Figure 3.4', standing: 'memory',
     cases: [
@@ -63,10 +63,10 @@ export const materialSets: ValidationSet[] = [
       { what: 'λ_a from 800 °C', expected: 27.3, tolerance: 0, unit: 'W/mK', compute: () => steelConductivityFormula.evaluate({ temperatureC: 800 }) },
     ],
   },
-  { source: 'EN 1993-1-2:2005', where: '4.2.4 Table 4.1', standing: 'read', cases: fromTable41(table41) },
+  { source: 'EN 1993-1-2:2005', where: '4.2.4 Table 4.1', standing: 'published', cases: fromTable41(table41) },
   { source: 'EN 1993-1-2:2005', where: '4.2.4 Table 4.1, further rows', standing: 'memory', cases: fromTable41(table41Recalled) },
   {
-    source: 'Ayrton-Perry equation, of which (4.6) is the solution (background of EN 1993-1-1 6.3.1.2)', where: '(1 − χ)(1 − χ·λ̄²) = α·λ̄·χ', standing: 'memory',
+    source: 'Ayrton-Perry equation, of which (4.6) is the solution (background of EN 1993-1-1 6.3.1.2)', where: '(1 − χ)(1 − χ·λ̄²) = α·λ̄·χ', standing: 'own check',
     cases: [perry(0.2, 235), perry(0.7, 275), perry(1, 355), perry(1.6, 460), perry(3, 355)],
   },
 ];

@@ -21,7 +21,7 @@ export function formulasMarkdown(): string {
   const chapters = formulaChapters.map((c) => `## ${c.title}\n\n${c.formulas.map(formulaText).join('\n\n')}`);
   const tables = `## Tables and factors\n\n| source | what is read |\n|---|---|\n${tablesRead.map(([a, b]) => `| ${cell(a)} | ${cell(b)} |`).join('\n')}`;
   return [
-    '# Formulas\n\nPrinted from the descriptors the program computes with; do not edit by hand (`node backend/scripts/docs.mjs`). “(memory)” marks what was recalled rather than read from print.',
+    '# Formulas\n\nPrinted from the descriptors the program computes with; do not edit by hand (`node backend/scripts/docs.mjs`). “(memory)” marks what was recalled. The rest is as published in the source named, taken from a compilation and not read again in the printed standard.',
     caution, ...chapters, tables, `## Decisions\n\n${bullets(decisions)}`, `## Refused by name\n\n${bullets(refused)}`,
   ].join('\n\n') + '\n';
 }
@@ -47,7 +47,7 @@ function setText(set: ValidationSet): string {
 export function validationMarkdown(): string {
   const total = validationSets.reduce((sum, set) => sum + set.cases.length, 0);
   return [
-    `# Validation\n\nPrinted from the cases the tests run; do not edit by hand (\`node backend/scripts/docs.mjs\`). ${total} values from ${validationSets.length} sources. *read*: from the source; *memory*: recalled, to be confirmed against print; *second computation*: no print gives it, it was computed independently of this code.`,
+    `# Validation\n\nPrinted from the cases the tests run; do not edit by hand (\`node backend/scripts/docs.mjs\`). ${total} values from ${validationSets.length} sources. *published*: as published in the source named, taken from a compilation of its values and not read again in the printed standard; *memory*: recalled, to be confirmed against print; *second computation*: no print gives it, it was computed independently of this code; *own check*: an identity or limit that the source’s own equations must keep. Whoever relies on a figure should hold it against the printed standard first.`,
     'Beyond these, `heat-balance.spec.ts` integrates the heat balance of bare and protected steel a second way, by a general-purpose package for ordinary differential equations, and the specs beside the methods hold the invariants (the resistance at the critical temperature is the effect, more load or length never raises it, and so on). Section properties are checked beside `calc/sections`.',
     ...validationSets.map(setText),
   ].join('\n\n') + '\n';

@@ -15,7 +15,11 @@ export interface ValidationSet {
   source: string;
   /** clause, table or page */
   where: string;
-  /** read: from the source · memory: recalled · second computation: no print, computed independently before this code was written */
-  standing: 'read' | 'memory' | 'second computation';
+  /**
+   * published: as published in the source, taken from a compilation and not read again in print · memory: recalled ·
+   * second computation: no print, computed independently before this code was written · own check: an identity or limit that holds by the
+   * source's own equations
+   */
+  standing: 'published' | 'memory' | 'second computation' | 'own check';
   cases: ValidationCase[];
 }

@@ -112,6 +112,6 @@ function applyTarget(inputs: ProjectInputs, productId: string, group: Pair[]): Z
   return {
     productId, productName: product.name, productKind: product.kind, thicknessUnit: thicknessUnit[product.kind], members: target.members, areaM2,
     governing: target.governing, lowestCriticalTemperatureC: target.lowestCriticalTemperatureC, highestSectionFactorPerM: target.highestSectionFactorPerM,
-    policies: target.policies.map(({ policy, thicknesses, material, materialUnit }): PolicyMaterialDto => ({ policy, thicknesses, material, materialUnit })),
+    policies: target.policies.map(({ policy, thicknesses, material, materialUnit, areaM2: policyAreaM2, volumeM3 }): PolicyMaterialDto => ({ policy, thicknesses, material, materialUnit, areaM2: policyAreaM2, volumeM3 })),
   };
 }

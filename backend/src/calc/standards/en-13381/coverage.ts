@@ -28,3 +28,6 @@ export const groupNames: Record<ProfileGroup, string> = {
 export const formNames: Record<Evidence['form'], string> = {
   table: 'thickness tables', regression: 'regression coefficients', thermal: 'thermal properties',
 };
+
+/** A limit to 1 °C, downwards as `formatLimitTemperature`, without its cost: every reading of a search says it. */
+export const limitInWords = (temperatureC: number): string => `${Math.floor(temperatureC + 1e-6)} °C`;

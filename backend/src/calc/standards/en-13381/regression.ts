@@ -2,7 +2,7 @@ import { message } from '@mantlet/common';
 import type { Message, ProductKind, RegressionFit } from '@mantlet/common';
 import { defineFormula } from '../../formula.js';
 import type { Determined, RequiredThickness, ThicknessRequest } from '../../types.js';
-import { groupNames } from './coverage.js';
+import { groupNames, limitInWords } from './coverage.js';
 
 export interface RegressionInput {
   a0: number; a1: number; a2: number; a3: number; a4: number; a5: number; a6: number; a7: number;
@@ -10,6 +10,9 @@ export interface RegressionInput {
   temperatureC: number;
   sectionFactorPerM: number;
 }
+
+/** A coating's evidence counts in µm, a board's or spray's in mm; the working names which. */
+export const EVIDENCE_UNIT = 'µm or mm';
 
 const coefficient = (n: number) => ({ symbol: `a_${n}`, meaning: 'regression coefficient of the assessment', unit: '' });
 const coefficientSymbols = {
@@ -35,7 +38,7 @@ export const regressionTime = defineFormula<RegressionInput>({
   result: { symbol: 't', meaning: 'time to the design temperature', unit: 'min' },
   symbols: {
     ...coefficientSymbols,
-    thickness: { symbol: 'd_p', meaning: 'thickness of protection', unit: 'unit of the evidence' },
+    thickness: { symbol: 'd_p', meaning: 'thickness of protection', unit: EVIDENCE_UNIT },
     temperatureC: { symbol: 'θ_a', meaning: 'design temperature of the steel', unit: '°C' },
     sectionFactorPerM: { symbol: 'A_m/V', meaning: 'section factor', unit: '1/m' },
   },
@@ -46,10 +49,10 @@ export const regressionTime = defineFormula<RegressionInput>({
 
 /** The same equation solved for the thickness; it is linear in d_p. */
 export const regressionThickness = defineFormula<Omit<RegressionInput, 'thickness'> & { periodMin: number }>({
-  label: 'Thickness from the regression, solved for d_p',
+  label: 'Thickness by multiple linear regression, solved from the time',
   source,
   expression: '(t − a_0 − a_3·θ_a − a_6·θ_a/(A_m/V) − a_7/(A_m/V))/(a_1 + a_2/(A_m/V) + a_4·θ_a + a_5·θ_a/(A_m/V))',
-  result: { symbol: 'd_p', meaning: 'thickness of protection', unit: 'unit of the evidence' },
+  result: { symbol: 'd_p', meaning: 'thickness of protection', unit: EVIDENCE_UNIT },
   symbols: {
     ...coefficientSymbols,
     temperatureC: regressionTime.symbols.temperatureC,
@@ -110,7 +113,7 @@ export function placeInFits(fits: readonly RegressionFit[], request: Omit<Thickn
 
 export function fitInWords(place: RegressionPlace): string {
   const { fit } = place;
-  return `${Math.round(place.temperatureC)} °C, A/V ${Math.round(place.sectionFactorPerM)}, ${groupNames[fit.shape]} section, ${fit.orientation}`;
+  return `${limitInWords(place.temperatureC)}, A/V ${Math.round(place.sectionFactorPerM)}, ${groupNames[fit.shape]} section, ${fit.orientation}`;
 }
 
 /** Required thickness from the regression: never below the least tested, refused above the greatest. */

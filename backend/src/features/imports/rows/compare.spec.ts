@@ -48,6 +48,14 @@ describe('a row held against the project', () => {
     expect(again.state).toBe('unchanged');
   });
 
+  it('keeps what is known of a beam that may buckle beside a new utilisation', () => {
+    const buckling: StandingMember = { ...standing, basis: { way: 'utilisation', mu0: 0.5, mayBuckle: true, reference: 'C1' } };
+    const changed = compareRow(row({ basis: { way: 'utilisation', mu0: 0.6, reference: 'C2' } }), buckling, none, namer);
+    expect(changed.basis).toEqual({ way: 'utilisation', mu0: 0.6, mayBuckle: true, reference: 'C2' });
+    expect(changed.changes).toEqual([{ field: 'utilisation', old: 'Utilisation in fire 0.5, may buckle (C1)', new: 'Utilisation in fire 0.6, may buckle (C2)' }]);
+    expect(compareRow(row({ basis: { way: 'utilisation', mu0: 0.6, reference: 'C2' } }), standing, none, namer).basis).not.toHaveProperty('mayBuckle');
+  });
+
   it('is answered by the member, or the zone for all rows, where it names only a level of several zones or faces without names', () => {
     const unclear = [{ field: 'level' as const, reason: message('import.row-zone-unclear', { level: '00', zones: ['Z1', 'Z2'] }) }];
     expect(compareRow(row({}, unclear), standing, none, namer).state).toBe('unchanged');

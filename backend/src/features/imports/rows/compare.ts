@@ -34,11 +34,20 @@ export function compareRow(row: ReadRow, standing: StandingMember | null, defaul
   const target = standing ? updated(standing, row) : fresh(row, defaults);
   const missing = standing ? [] : missingFields(row, target);
   const problems = [...row.problems.filter((problem) => !isAnswered(problem, standing, defaults, namer)), ...missing.map((field) => ({ field, reason: message('import.row-needed', { field: importFieldNames[field] }) }))];
-  const base = { row: row.row, mark: row.mark, values: row.values, problems, standing, basis: row.draft.basis ?? null };
+  const base = { row: row.row, mark: row.mark, values: row.values, problems, standing, basis: basisOf(row, standing) };
   if (problems.length) return { ...base, state: 'wrong', changes: [], target: null };
   if (!standing) return { ...base, state: 'new', changes: [], target: target as Writable };
-  const changes = changesOf(standing, target as Writable, row.draft.basis, namer);
+  const changes = changesOf(standing, target as Writable, base.basis ?? undefined, namer);
   return { ...base, state: changes.length ? 'changed' : 'unchanged', changes, target: target as Writable };
+}
+
+/** A schedule gives a utilisation as a number; that the beam may buckle, known of the member that is there, stays known. */
+function basisOf(row: ReadRow, standing: StandingMember | null): CriticalTemperatureBasis | null {
+  const given = row.draft.basis ?? null;
+  if (given?.way !== 'utilisation' || !standing) return given;
+  const before = standing.basis;
+  const buckles = 'mayBuckle' in before ? before.mayBuckle : before.way === 'calculated' && before.design.lateralRestraint === 'at-points';
+  return buckles ? { ...given, mayBuckle: true } : given;
 }
 
 /**
@@ -131,6 +140,6 @@ const exposureText = (exposure: Exposure): string =>
 
 function basisText(basis: CriticalTemperatureBasis): string {
   if (basis.way === 'declared') return `Declared ${basis.temperatureC} °C (${basis.reference})`;
-  if (basis.way === 'utilisation') return `Utilisation in fire ${basis.mu0} (${basis.reference})`;
+  if (basis.way === 'utilisation') return `Utilisation in fire ${basis.mu0}${basis.mayBuckle ? ', may buckle' : ''} (${basis.reference})`;
   return wayNames[basis.way];
 }

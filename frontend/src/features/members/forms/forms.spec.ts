@@ -11,8 +11,8 @@ const design = {
   bucklingLengthYMm: null, bucklingLengthZMm: null, bucklingRule: 'given' as const, lateralRestraint: 'continuous' as const, continuousBeam: true, composite: false, webOpenings: false,
 };
 const ways: CriticalTemperatureBasis[] = [
-  { way: 'declared', temperatureC: 560, reference: 'Letter' }, { way: 'utilisation', mu0: 0.55, reference: 'Sheet 1' },
-  { way: 'ambient-utilisation', utilisation: 0.8, etaFi: null, reference: 'Sheet 2' }, { way: 'calculated', design, reference: 'Sheet 3' }, { way: 'assumed' }, { way: 'none' },
+  { way: 'declared', temperatureC: 560, reference: 'Letter' }, { way: 'utilisation', mu0: 0.55, mayBuckle: true, reference: 'Sheet 1' },
+  { way: 'ambient-utilisation', utilisation: 0.8, etaFi: null, mayBuckle: false, reference: 'Sheet 2' }, { way: 'calculated', design, reference: 'Sheet 3' }, { way: 'assumed' }, { way: 'none' },
 ];
 
 describe('the structural form', () => {

@@ -17,7 +17,10 @@ function Policy({ material, unit, chosen }: { material: PolicyMaterialDto | unde
   if (!material) return <span className="mt-sub">–</span>;
   return (
     <div className={chosen ? 'mt-strong' : ''}>
-      <Quantity value={material.material} unit={material.materialUnit} decimals={1} what="Material" />
+      <Quantity value={material.material} unit={material.materialUnit === 'm²' ? 'm² of sheet' : material.materialUnit} decimals={1} what="Material" />
+      {material.materialUnit === 'm²' && material.volumeM3 !== undefined && (
+        <div className="mt-sub"><Quantity value={material.volumeM3} unit="m³" decimals={2} what="Board in place, all layers" /> in place</div>
+      )}
       {material.thicknesses.length > 0 && <div className="mt-sub">{manyMm(material.thicknesses, unit)}</div>}
       {chosen && <StatusWord kind="settled">Chosen</StatusWord>}
     </div>
@@ -42,7 +45,7 @@ export function TargetDetail({ zone, projectId }: { zone: ZoneDto; projectId: st
           title: 'Governing member', key: 'governing',
           render: (_, t) => (t.governing ? <><Link to={`/projects/${projectId}/members/${t.governing.memberId}`}>{t.governing.mark}</Link> needs {thicknessMm(t.governing.requiredThickness, t.thicknessUnit)}{'\u00a0'}mm</> : 'None needs any'),
         },
-        { title: 'Lowest θcr', key: 'theta', numeric: true, render: (_, t) => <Quantity value={t.lowestCriticalTemperatureC} unit="°C" what="Lowest critical temperature" /> },
+        { title: 'Lowest θcr', key: 'theta', numeric: true, render: (_, t) => <Quantity value={t.lowestCriticalTemperatureC === null ? null : Math.floor(t.lowestCriticalTemperatureC + 1e-6)} unit="°C" what="Lowest critical temperature" /> },
         { title: 'Highest A/V', key: 'av', numeric: true, render: (_, t) => <Quantity value={t.highestSectionFactorPerM} unit="1/m" what="Highest section factor" /> },
         column('own', 'Each its own'), column('bands', zone.targetPolicy.policy === 'bands' ? targetPolicyName(zone.targetPolicy) : 'Bands'), column('one', 'One for all'),
       ]}
