@@ -58,6 +58,15 @@ describe('members', () => {
     expect(trail.changes).toEqual(expect.arrayContaining([{ field: 'zone', old: null, new: 'Z1' }, { field: 'section', old: null, new: 'PG' }]));
   });
 
+  it('come in the order in which people count', async () => {
+    for (const mark of ['B10', 'B2', 'B1', 'A3', 'B2a']) await make({ mark });
+    expect((await list()).items.map((row) => row.mark)).toEqual(['A3', 'B1', 'B2', 'B2a', 'B10']);
+    const b2 = (await list({ search: 'B2' })).items[0]!;
+    const { previousId, nextId } = await sheet(b2.id);
+    const neighbours = await Promise.all([previousId, nextId].map(async (id) => (await sheet(id!)).member.mark));
+    expect(neighbours).toEqual(['B1', 'B2a']);
+  });
+
   it("keep each role to its own part", async () => {
     const made = await make();
     const basis = { way: 'declared', temperatureC: 560, reference: 'Calculation 12' };

@@ -1,6 +1,7 @@
 import type { ColumnOptions } from 'typeorm';
 
-/** Codes, marks, names: compared as typed, unique per owner. */
+/** Marks, codes and designations: told apart as typed, ordered as people do, B2 before B10 (the migration makes the collation). */
+export const natural: ColumnOptions = { type: 'text', collation: 'natural' };
 export const timestamp: ColumnOptions = { type: 'timestamptz' };
 export const nullableTimestamp: ColumnOptions = { type: 'timestamptz', nullable: true };
 

@@ -1,6 +1,6 @@
 import { Check, Column, Entity, JoinColumn, ManyToOne, PrimaryGeneratedColumn, Unique, VersionColumn } from 'typeorm';
 import type { Relation } from 'typeorm';
-import { measure } from '../../database/columns.js';
+import { measure, natural } from '../../database/columns.js';
 import { Project } from '../projects/project.entity.js';
 
 @Entity('levels')
@@ -9,7 +9,7 @@ import { Project } from '../projects/project.entity.js';
 export class Level {
   @PrimaryGeneratedColumn('uuid') id!: string;
   @Column('uuid') projectId!: string;
-  @Column('text') code!: string;
+  @Column(natural) code!: string;
   @Column('text') name!: string;
   @Column(measure) elevationM!: number;
   @Column(measure) heightM!: number;

@@ -1,7 +1,7 @@
 import type { CriticalTemperatureBasis, Exposure, MemberType, ProtectionForm, SteelGrade } from '@mantlet/common';
 import { Check, Column, Entity, Index, JoinColumn, ManyToOne, OneToMany, OneToOne, PrimaryGeneratedColumn, Unique, VersionColumn } from 'typeorm';
 import type { Relation } from 'typeorm';
-import { measure, nullableTimestamp } from '../../database/columns.js';
+import { measure, natural, nullableTimestamp } from '../../database/columns.js';
 import { MemberResult } from '../assessment/member-result.entity.js';
 import { Project } from '../projects/project.entity.js';
 import { Section } from '../sections/section.entity.js';
@@ -17,7 +17,7 @@ export class Member {
   @PrimaryGeneratedColumn('uuid') id!: string;
   @Column('uuid') projectId!: string;
   @Index() @Column('uuid') zoneId!: string;
-  @Column('text') mark!: string;
+  @Column(natural) mark!: string;
   @Column('text') memberType!: MemberType;
   @Index() @Column('uuid') sectionId!: string;
   @Column('text') grade!: SteelGrade;

@@ -1,7 +1,7 @@
 import type { RevisionState } from '@mantlet/common';
 import { Check, Column, CreateDateColumn, Entity, Index, JoinColumn, ManyToOne, PrimaryGeneratedColumn, Unique } from 'typeorm';
 import type { Relation } from 'typeorm';
-import { nullableMeasure, nullableTimestamp } from '../../database/columns.js';
+import { natural, nullableMeasure, nullableTimestamp } from '../../database/columns.js';
 import { Project } from '../projects/project.entity.js';
 import { User } from '../users/user.entity.js';
 
@@ -16,7 +16,7 @@ import { User } from '../users/user.entity.js';
 export class Revision {
   @PrimaryGeneratedColumn('uuid') id!: string;
   @Column('uuid') projectId!: string;
-  @Column('text') code!: string;
+  @Column(natural) code!: string;
   @Column('text', { default: '' }) purpose!: string;
   @Column('text', { default: 'draft' }) state!: RevisionState;
   @Column('uuid', { nullable: true }) preparedById!: string | null;

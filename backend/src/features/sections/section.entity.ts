@@ -1,6 +1,7 @@
 import type { SectionFamily, SectionProperties, SectionShape } from '@mantlet/common';
 import { Column, Entity, Index, JoinColumn, ManyToOne, PrimaryGeneratedColumn } from 'typeorm';
 import type { Relation } from 'typeorm';
+import { natural } from '../../database/columns.js';
 import { Project } from '../projects/project.entity.js';
 
 /** A catalogue section (no project) or one a project made for itself. Properties are computed from the shape and kept beside it. */
@@ -11,7 +12,7 @@ export class Section {
   @PrimaryGeneratedColumn('uuid') id!: string;
   @Column('uuid', { nullable: true }) projectId!: string | null;
   @Index() @Column('text') family!: SectionFamily;
-  @Column('text') designation!: string;
+  @Column(natural) designation!: string;
   /** normalised spelling, by which schedules find it */
   @Column('text') designationKey!: string;
   @Column('text', { array: true, default: [] }) otherNames!: string[];

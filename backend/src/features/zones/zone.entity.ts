@@ -1,6 +1,7 @@
 import type { FireCurve, TargetPolicy } from '@mantlet/common';
 import { Check, Column, Entity, Index, JoinColumn, ManyToOne, OneToMany, PrimaryGeneratedColumn, Unique, VersionColumn } from 'typeorm';
 import type { Relation } from 'typeorm';
+import { natural } from '../../database/columns.js';
 import { Level } from '../levels/level.entity.js';
 import { Project } from '../projects/project.entity.js';
 import { ZoneSystem } from './zone-system.entity.js';
@@ -12,7 +13,7 @@ export class Zone {
   @PrimaryGeneratedColumn('uuid') id!: string;
   @Column('uuid') projectId!: string;
   @Index() @Column('uuid') levelId!: string;
-  @Column('text') code!: string;
+  @Column(natural) code!: string;
   @Column('text') name!: string;
   @Column('integer') periodMin!: number;
   @Column('jsonb') curve!: FireCurve;
