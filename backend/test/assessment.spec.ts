@@ -1,4 +1,5 @@
-import type { MemberResultDto, OpenItemDto } from '@mantlet/common';
+import { designRoles } from '@mantlet/common';
+import type { MemberResultDto, OpenItemDto, ProjectListItemDto } from '@mantlet/common';
 import { AssessmentService } from '../src/features/assessment/assessment.service.js';
 import { MemberResult } from '../src/features/assessment/member-result.entity.js';
 import { ZoneResult } from '../src/features/assessment/zone-result.entity.js';
@@ -15,6 +16,17 @@ const effect = (momentYKnm: number): MemberSpec['basis'] => ({
     lateralRestraint: 'continuous', continuousBeam: false, composite: false, webOpenings: false,
   },
 });
+
+/** Blockers that wait on each role: as the list of projects counts them, and as the project lists them. */
+async function expectSameCounts(p: ScheduleProject): Promise<void> {
+  const { blockers } = (await p.team.specifier.get(p.url('readiness')).expect(200)).body as { blockers: OpenItemDto[] };
+  expect(blockers.length).toBeGreaterThan(0);
+  for (const role of designRoles) {
+    const [listed] = (await p.team[role].get('/api/projects').expect(200)).body as ProjectListItemDto[];
+    expect({ role, waitsOnMe: listed?.waitsOnMe }).toEqual({ role, waitsOnMe: blockers.filter((item) => item.role === role).length });
+  }
+}
+const isCurrent = async (p: ScheduleProject): Promise<boolean> => ((await p.team.specifier.get(p.url('readiness')).expect(200)).body as { current: boolean }).current;
 
 describe('assessment', () => {
   let app: TestApp;
@@ -61,6 +73,12 @@ describe('assessment', () => {
       expect(coating.policies.map((policy) => policy.policy)).toEqual(['own', 'bands', 'one']);
       const own = coating.policies[0]!.material!;
       expect(coating.policies[2]!.material!).toBeGreaterThan(own);
+      // litres to buy are the volume in place over the solids and what is left of the loss; the volume is what compares like with like
+      for (const { areaM2, volumeM3 } of coating.policies) {
+        expect(areaM2).toBeCloseTo(coating.areaM2, 9);
+        expect(volumeM3).toBeGreaterThan(0);
+      }
+      expect(coating.policies[2]!.volumeM3! / coating.policies[0]!.volumeM3!).toBeCloseTo(coating.policies[2]!.material! / own, 9);
       // 10 IPE 300 of 6 m and 3 HE 300 B of 6 m, three sides: 1.16 − 0.15 and 1.73 − 0.30 m²/m (surface per metre of section tables)
       expect(coating.areaM2).toBeCloseTo(60 * (1.16 - 0.15) + 18 * (1.73 - 0.3), 0);
     });
@@ -72,21 +90,19 @@ describe('assessment', () => {
 
     it('sees results that are older than their inputs, and refuses to go on with them', async () => {
       const { manager } = app.dataSource;
-      const assessment = app.app.get(AssessmentService, { strict: false });
-      expect(await assessment.isCurrent(p.project.id)).toBe(true);
+      expect(await isCurrent(p)).toBe(true);
       await manager.update(Member, p.members.get('B0-001')!.id, { quantity: 5 });
-      expect(await assessment.isCurrent(p.project.id)).toBe(false);
       const { body } = await p.team.specifier.get(p.url('readiness')).expect(200);
       expect(body).toMatchObject({ ready: false, current: false });
       expect(titles(body.blockers)).toEqual(['1 result is older than the inputs; recalculate']);
       expect((await p.team.specifier.post(p.url('recalculate')).expect(200)).body).toEqual({ members: 8, changed: 1 });
-      expect(await assessment.isCurrent(p.project.id)).toBe(true);
+      expect(await isCurrent(p)).toBe(true);
     });
 
     it('sees that a member left its zone', async () => {
       const extra = await makeScheduleProject(app);
       await app.dataSource.manager.delete(Member, extra.members.get('B0-002')!.id);
-      expect(await app.app.get(AssessmentService, { strict: false }).isCurrent(extra.project.id)).toBe(false);
+      expect(await isCurrent(extra)).toBe(false);
     });
 
     it('explains a member with the same numbers as it stores', async () => {
@@ -143,6 +159,10 @@ describe('assessment', () => {
       expect(blockers.map((item) => item.role)).toEqual(['structural-engineer', 'structural-engineer', 'fire-engineer', 'specifier', 'specifier']);
     });
 
+    it('counts for the list of projects, role by role, what the project itself lists', async () => {
+      await expectSameCounts(p);
+    });
+
     it('warns of what deserves a signature', () => {
       expect(titles(warnings)).toEqual(
         expect.arrayContaining(['1 beam has a critical temperature above 650 °C without a second signature', '1 beam may stay bare; no reason is signed yet']),
@@ -167,6 +187,7 @@ describe('assessment', () => {
       const { body } = await old.team.specifier.get(old.url('readiness')).expect(200);
       expect(titles(body.blockers)).toEqual(expect.arrayContaining(['The assessment of Testcoat expired on 2020-01-31; 4 members rest on it']));
       expect(await resultOf(old, 'B0-001')).toMatchObject({ verdict: 'protected', open: true });
+      await expectSameCounts(old);
     });
 
     it('asks for members where there are none', async () => {
@@ -174,6 +195,7 @@ describe('assessment', () => {
       const { body } = await empty.team.specifier.get(empty.url('readiness')).expect(200);
       expect(body).toMatchObject({ ready: false, current: true });
       expect(body.blockers[0].code).toBe('no-members');
+      await expectSameCounts(empty);
     });
   });
 });

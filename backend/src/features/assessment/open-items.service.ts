@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { formatNumber } from '@mantlet/common';
-import type { OpenItemDto } from '@mantlet/common';
+import type { OpenItemDto, Role } from '@mantlet/common';
 import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource } from 'typeorm';
 import type { EntityManager } from 'typeorm';
@@ -12,6 +12,7 @@ import type { OpenMember } from './open-items.js';
 import type { InputZone, ProjectInputs } from './project-inputs.service.js';
 import { ProjectInputsService } from './project-inputs.service.js';
 import { storedOutcomes } from './result-store.js';
+import { waitingCounts } from './waiting-counts.js';
 import type { MemberOutcome } from './zone-outcome.js';
 
 /** What keeps a schedule from being prepared or deserves a look, and who must act. */
@@ -40,6 +41,11 @@ export class OpenItemsService {
       ...expiredProducts(inputs, stored),
       ...foreignEnvironments(inputs, stored),
     ]);
+  }
+
+  /** How many blockers wait for each role, by project; cheap, see waitingCounts. */
+  waiting(projectIds: readonly string[]): Promise<Map<string, Map<Role, number>>> {
+    return waitingCounts(this.dataSource.manager, projectIds);
   }
 }
 

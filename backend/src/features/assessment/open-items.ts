@@ -75,7 +75,10 @@ function sayUnderStrength(members: readonly OpenMember[]): string {
 /** Reasons that the specifier settles by another section, form or system; the structural engineer settles the others. */
 const specifiersReasons = /^(product\.|section\.|assessment\.(no-system|form-mismatch|unknown-grade|too-thick-for-grade)$)/;
 
-function blockerOf(m: OpenMember): Finding | null {
+/** What of a member decides whether, and by whom, it must be settled. */
+type Blocking = Pick<OpenMember, 'verdict' | 'memberType' | 'assumed'> & { reason: { code: string } | null };
+
+export function blockerOf(m: Blocking): Finding | null {
   const page = 'members';
   if (m.verdict === 'under-strength') return { kind: 'blocker', code: 'under-strength', role: 'structural-engineer', page, say: sayUnderStrength };
   const code = m.reason?.code ?? 'unknown';

@@ -15,7 +15,7 @@ export interface InputZone {
 export interface InputSection { id: string; designation: string; shape: SectionShape; properties: SectionProperties }
 export interface InputProduct {
   id: string; name: string; kind: ProductKind; evidence: Evidence; curves: NominalCurve[]; environments: string[]; expiresOn: string;
-  /** its assessment ended before today */
+  /** its assessment ended before today, by UTC as everywhere */
   expired: boolean;
   supply: ProductSupply;
 }
@@ -86,7 +86,7 @@ export class ProjectInputsService {
 
   private products(manager: EntityManager, zoneIds: string[]): Promise<InputProduct[]> {
     return manager.query<InputProduct[]>(
-      `SELECT id, name, kind, evidence, curves, environments, evidence_expires_on::text AS "expiresOn", evidence_expires_on < CURRENT_DATE AS expired, supply
+      `SELECT id, name, kind, evidence, curves, environments, evidence_expires_on::text AS "expiresOn", evidence_expires_on < (now() AT TIME ZONE 'UTC')::date AS expired, supply
        FROM products WHERE id IN (SELECT product_id FROM zone_systems WHERE zone_id = ANY($1))`, [zoneIds]);
   }
 }

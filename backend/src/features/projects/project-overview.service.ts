@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { designRoles } from '@mantlet/common';
-import type { OpenItemDto, ProjectDto, ProjectListItemDto, Role } from '@mantlet/common';
+import type { ProjectDto, ProjectListItemDto, Role } from '@mantlet/common';
 import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource, In, IsNull } from 'typeorm';
 import type { Actor, ProjectScope } from '../../shared/access.js';
@@ -39,7 +39,7 @@ export class ProjectOverviewService {
     const revisions = await this.revisionsOf(ids);
     const inDesign = ids.filter((id) => seesDesign(held.get(id) ?? []));
     const tallies = await this.talliesOf(inDesign);
-    const waiting = new Map(await Promise.all(inDesign.map(async (id): Promise<[string, OpenItemDto[]]> => [id, await this.openItems.openItems(id)])));
+    const waiting = await this.openItems.waiting(inDesign);
     const byNumber = new Intl.Collator('en', { numeric: true });
     return projects
       .sort((a, b) => byNumber.compare(a.number, b.number))
@@ -53,7 +53,7 @@ export class ProjectOverviewService {
         const tally = tallies.get(project.id) ?? emptyTally;
         return {
           ...head, revision: shown(open ?? issued), members: tally.members, protectedAreaM2: tally.protectedAreaM2, open: tally.open,
-          waitsOnMe: waitsOn(roles, waiting.get(project.id) ?? []) + signatureOf(actor, roles, open),
+          waitsOnMe: waitsOn(roles, waiting.get(project.id)) + signatureOf(actor, roles, open),
         };
       });
   }
@@ -117,8 +117,8 @@ export class ProjectOverviewService {
 
 const shown = (revision: RevisionHead | null): ProjectListItemDto['revision'] => revision && { code: revision.code, state: revision.state };
 
-const waitsOn = (roles: readonly Role[], items: readonly OpenItemDto[]): number =>
-  items.filter((item) => item.kind === 'blocker' && roles.includes(item.role)).length;
+const waitsOn = (roles: readonly Role[], waiting: ReadonlyMap<Role, number> | undefined): number =>
+  roles.reduce((sum, role) => sum + (waiting?.get(role) ?? 0), 0);
 
 /** 1 where the open revision waits for this person: to check what another prepared, or to issue what is checked. */
 function signatureOf(actor: Actor, roles: readonly Role[], open: RevisionHead | null): number {
