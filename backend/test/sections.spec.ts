@@ -57,15 +57,15 @@ describe('sections', () => {
       ['UB 254x146x31', 'UB 254x146x31'], ['254 x 146 x 31 UB', 'UB 254x146x31'], ['IPE300', 'IPE 300'],
       ['HE 300 B', 'HEB 300'], ['HEB300', 'HEB 300'], ['SHS 150x150x6.3', 'SHS 150x150x6.3'], ['CHS 168.3*6.3', 'CHS 168.3x6.3'],
     ])('understands %s in a schedule', async (text, designation) => {
-      const found = await app.app.get(SectionsService).resolve(project.id, text);
-      expect(found).toMatchObject({ section: { designation } });
+      const sections = await app.app.get(SectionsService).resolver(project.id);
+      expect(sections.find(text)).toMatchObject({ designation });
     });
 
     it('suggests the nearest for a slip, and nothing for what names no section', async () => {
-      const sections = app.app.get(SectionsService);
-      const slip = await sections.resolve(project.id, 'UB 254x146x32');
-      expect((slip as { suggestions: string[] }).suggestions[0]).toBe('UB 254x146x31');
-      expect(await sections.resolve(project.id, '---')).toEqual({ suggestions: [] });
+      const sections = await app.app.get(SectionsService).resolver(project.id);
+      expect(sections.find('UB 254x146x32')).toBeNull();
+      expect(sections.suggest('UB 254x146x32')[0]).toBe('UB 254x146x31');
+      expect([sections.find('---'), sections.suggest('---')]).toEqual([null, []]);
     });
   });
 
@@ -85,8 +85,9 @@ describe('sections', () => {
       const stranger = (await app.team(other)).specifier;
       expect((await stranger.get(`/api/projects/${other.id}/sections`).query({ search: 'PG 900' })).body.total).toBe(0);
       await stranger.delete(`/api/projects/${other.id}/sections/${made.body.id as string}`).expect(404);
-      expect(await app.app.get(SectionsService).resolve(other.id, 'PG 900')).not.toHaveProperty('section');
-      expect(await app.app.get(SectionsService).resolve(project.id, 'pg-900')).toMatchObject({ section: { id: made.body.id } });
+      const sections = app.app.get(SectionsService);
+      expect((await sections.resolver(other.id)).find('PG 900')).toBeNull();
+      expect((await sections.resolver(project.id)).find('pg-900')).toMatchObject({ id: made.body.id });
     });
 
     it('are refused to everybody else', async () => {

@@ -2,7 +2,7 @@ import { Catch, HttpException, HttpStatus, Logger } from '@nestjs/common';
 import type { ArgumentsHost, ExceptionFilter } from '@nestjs/common';
 import { message, sentence } from '@mantlet/common';
 import type { Message } from '@mantlet/common';
-import type { Response } from 'express';
+import type { Request, Response } from 'express';
 import { EntityNotFoundError, QueryFailedError } from 'typeorm';
 import type { ErrorBody } from './refusal.js';
 
@@ -21,7 +21,19 @@ function fromDatabase(error: QueryFailedError): { status: HttpStatus; body: Erro
   if (code === '22021' || code === '22P02' || code === '22P05' || code === '22003') {
     return { status: HttpStatus.BAD_REQUEST, body: body(message('shared.invalid', { where: 'Input', problem: 'holds a character or number that cannot be stored' })) };
   }
+  // two transactions that waited for each other, or one that could not be set among the others: the database undid this one
+  if (code === '40P01' || code === '40001' || code === '55P03') return { status: HttpStatus.CONFLICT, body: body(message('shared.busy', {})) };
+  if (code === '57014') return { status: HttpStatus.SERVICE_UNAVAILABLE, body: body(message('shared.took-too-long', {})) };
   return null;
+}
+
+/** What a library refused before any of our code saw it: its own words are for programmers. */
+function plain(status: number, request: Request): ErrorBody {
+  const upload = request.headers['content-type']?.startsWith('multipart/') ?? false;
+  if (status === Number(HttpStatus.TOO_MANY_REQUESTS)) return body(message('shared.too-many-requests', {}));
+  if (status === Number(HttpStatus.NOT_FOUND)) return body(message('shared.not-found', { what: 'page' }));
+  if (status === Number(HttpStatus.PAYLOAD_TOO_LARGE)) return body(message('shared.too-large', { what: upload ? 'file' : 'input' }));
+  return body(upload ? message('shared.upload-unreadable', {}) : message('shared.unreadable', {}));
 }
 
 /** Turns every fault into a status and a sentence; only what nobody foresaw is logged and answered 500. */
@@ -30,20 +42,21 @@ export class ErrorFilter implements ExceptionFilter {
   private readonly logger = new Logger('Error');
 
   catch(error: unknown, host: ArgumentsHost): void {
-    const response = host.switchToHttp().getResponse<Response>();
+    const http = host.switchToHttp();
+    const response = http.getResponse<Response>();
     if (response.headersSent) {
       response.end();
       return;
     }
-    const { status, body: answer } = this.describe(error);
+    const { status, body: answer } = this.describe(error, http.getRequest<Request>());
     response.status(status).json(answer);
   }
 
-  private describe(error: unknown): { status: number; body: ErrorBody } {
+  private describe(error: unknown, request: Request): { status: number; body: ErrorBody } {
     if (error instanceof HttpException) {
       const given = error.getResponse();
       const known = typeof given === 'object' && 'code' in given ? (given as ErrorBody) : null;
-      return { status: error.getStatus(), body: known ?? this.plain(error) };
+      return { status: error.getStatus(), body: known ?? plain(error.getStatus(), request) };
     }
     if (error instanceof QueryFailedError) {
       const known = fromDatabase(error);
@@ -52,18 +65,8 @@ export class ErrorFilter implements ExceptionFilter {
     if (error instanceof EntityNotFoundError) return { status: HttpStatus.NOT_FOUND, body: body(message('shared.not-found', { what: 'entry' })) };
     // body-parser and its kin speak in `status` and `expose`
     const thrown = error as { status?: number; expose?: boolean; message?: string };
-    if (thrown.expose && thrown.status && thrown.status < 500) {
-      const problem = thrown.status === 413 ? 'is too large' : 'could not be read';
-      return { status: thrown.status, body: body(message('shared.invalid', { where: 'Request', problem })) };
-    }
+    if (thrown.expose && thrown.status && thrown.status < 500) return { status: thrown.status, body: plain(thrown.status, request) };
     this.logger.error(error instanceof Error ? error.stack : String(error));
     return { status: HttpStatus.INTERNAL_SERVER_ERROR, body: body(message('shared.unexpected', {})) };
-  }
-
-  private plain(error: HttpException): ErrorBody {
-    if (error.getStatus() === HttpStatus.TOO_MANY_REQUESTS) return body(message('shared.too-many-requests', {}));
-    if (error.getStatus() === HttpStatus.PAYLOAD_TOO_LARGE) return body(message('shared.invalid', { where: 'File', problem: 'is larger than this page accepts' }));
-    if (error.getStatus() === HttpStatus.NOT_FOUND) return body(message('shared.not-found', { what: 'page' }));
-    return { message: error.message, code: 'shared.invalid' };
   }
 }

@@ -1,8 +1,10 @@
 import { BadRequestException, StandardSchemaValidationPipe } from '@nestjs/common';
 import { z } from 'zod';
+import { speakInWords } from './input-words.js';
 
 /** Answers 400 with one sentence and the fields at fault, in the words of the schema. */
 export function validationPipe(): StandardSchemaValidationPipe {
+  speakInWords();
   return new StandardSchemaValidationPipe({
     exceptionFactory: (found) => {
       const issues = found.slice(0, 50).map((issue) => ({

@@ -5,6 +5,7 @@ import { DataSource } from 'typeorm';
 import type { EntityManager } from 'typeorm';
 import { determineSectionOutline, explainMember } from '../../calc/index.js';
 import type { TakeoffMember } from '../../calc/index.js';
+import { lockProject } from '../../shared/project-lock.js';
 import { notFound } from '../../shared/refusal.js';
 import { acceptanceHolds, inputHashes, resolveCases, withSteelReason } from './member-case.js';
 import type { InputAcceptance, ProjectInputs } from './project-inputs.service.js';
@@ -41,19 +42,11 @@ export class AssessmentService {
   ) {}
 
   /**
-   * Lets one transaction at a time write to a project's inputs and results. A transaction that writes to members, zones or systems
-   * calls this first, before it changes anything, so that two of them never wait for each other. Released at its end.
-   */
-  async lockProject(manager: EntityManager, projectId: string): Promise<void> {
-    await manager.query('SELECT pg_advisory_xact_lock(hashtextextended($1, 0))', [`project ${projectId}`]);
-  }
-
-  /**
    * Assesses anew the members of these zones (all zones where null) and their zone targets, in the caller's transaction.
    * Call it after every change to anything that enters a result. `changed` counts members whose result is another than before.
    */
   async recompute(manager: EntityManager, projectId: string, zoneIds: string[] | null): Promise<{ members: number; changed: number }> {
-    await this.lockProject(manager, projectId);
+    await lockProject(manager, projectId);
     const inputs = await this.inputs.load(manager, projectId, zoneIds);
     const outcome = assessInputs(inputs);
     const changed = await storeOutcomes(manager, inputs.zones.map((zone) => zone.id), outcome.members);
@@ -114,13 +107,7 @@ export class AssessmentService {
     });
   }
 
-  /** Whether every stored result was worked out from the inputs as they stand. */
-  async isCurrent(projectId: string): Promise<boolean> {
-    const { manager } = this.dataSource;
-    const stale = await this.stale(manager, await this.inputs.load(manager, projectId, null));
-    return stale.memberIds.length === 0 && stale.zoneIds.length === 0;
-  }
-
+  /** What was not worked out from the inputs as they stand. */
   async stale(manager: EntityManager, inputs: ProjectInputs): Promise<StaleResults> {
     const zoneIds = inputs.zones.map((zone) => zone.id);
     const hashes = inputHashes(inputs);

@@ -5,6 +5,7 @@ import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource } from 'typeorm';
 import type { EntityManager } from 'typeorm';
 import type { ProjectScope } from '../../shared/access.js';
+import { lockProject } from '../../shared/project-lock.js';
 import { conflict, notFound, requireVersion } from '../../shared/refusal.js';
 import { AuditService, changesBetween } from '../audit/audit.service.js';
 import { Zone } from '../zones/zone.entity.js';
@@ -28,6 +29,7 @@ export class LevelsService {
 
   async create(scope: ProjectScope, input: LevelInput): Promise<LevelDto> {
     return this.dataSource.transaction(async (manager) => {
+      await lockProject(manager, scope.projectId);
       await this.requireFreeCode(manager, scope.projectId, input.code, null);
       const level = await manager.save(manager.create(Level, { ...input, projectId: scope.projectId }));
       await this.record(manager, scope, 'level made', level, changesBetween<LevelInput>({}, input, fields));
@@ -59,8 +61,10 @@ export class LevelsService {
     });
   }
 
+  /** With no other writer on the project until the end. */
   private async lock(manager: EntityManager, projectId: string, levelId: string): Promise<Level> {
-    const level = await manager.findOne(Level, { where: { id: levelId, projectId }, lock: { mode: 'pessimistic_write' } });
+    await lockProject(manager, projectId);
+    const level = await manager.findOneBy(Level, { id: levelId, projectId });
     if (!level) throw notFound('level of this project');
     return level;
   }

@@ -5,6 +5,7 @@ import type { CriticalTemperatureBasis, MemberInput } from '@mantlet/common';
 import { In } from 'typeorm';
 import type { EntityManager } from 'typeorm';
 import type { ProjectScope } from '../../shared/access.js';
+import { lockProject } from '../../shared/project-lock.js';
 import { conflict, unprocessable } from '../../shared/refusal.js';
 import { AssessmentService } from '../assessment/assessment.service.js';
 import { AuditService, changesBetween } from '../audit/audit.service.js';
@@ -42,7 +43,7 @@ export class MemberWriterService {
 
   /** Before anything is read that is to be written: one writer at a time per project. */
   lock(manager: EntityManager, projectId: string): Promise<void> {
-    return this.assessment.lockProject(manager, projectId);
+    return lockProject(manager, projectId);
   }
 
   /** @throws Refusal where zone or section are not of the project, or the mark is taken */

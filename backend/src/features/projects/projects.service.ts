@@ -5,6 +5,7 @@ import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource } from 'typeorm';
 import type { EntityManager } from 'typeorm';
 import type { Actor, ProjectScope } from '../../shared/access.js';
+import { lockProject } from '../../shared/project-lock.js';
 import { conflict, notFound, requireVersion } from '../../shared/refusal.js';
 import { AssessmentService } from '../assessment/assessment.service.js';
 import { AuditService, changesBetween } from '../audit/audit.service.js';
@@ -71,7 +72,8 @@ export class ProjectsService {
     edit: (manager: EntityManager, project: Project) => Promise<Edit> | Edit,
   ): Promise<void> {
     await this.dataSource.transaction(async (manager) => {
-      const project = await manager.findOne(Project, { where: { id: scope.projectId }, lock: { mode: 'for_no_key_update' } });
+      await lockProject(manager, scope.projectId);
+      const project = await manager.findOneBy(Project, { id: scope.projectId });
       if (!project) throw notFound('project');
       const { settings, number, name, place, currency, note } = project;
       requireVersion('project', project, version, { number, name, place, currency, note, settings, version: project.version });

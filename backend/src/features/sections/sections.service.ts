@@ -6,6 +6,7 @@ import { DataSource, In, IsNull } from 'typeorm';
 import type { EntityManager, FindOptionsWhere } from 'typeorm';
 import { determineSectionProperties, normaliseDesignation, shapeFault } from '../../calc/index.js';
 import type { ProjectScope } from '../../shared/access.js';
+import { lockProject } from '../../shared/project-lock.js';
 import { conflict, notFound, unprocessable } from '../../shared/refusal.js';
 import { AuditService } from '../audit/audit.service.js';
 import { Member } from '../members/member.entity.js';
@@ -50,13 +51,6 @@ export class SectionsService {
     return makeResolver(await manager.find(Section, { where: visibleTo(projectId), order: { designation: 'ASC' } }));
   }
 
-  /** One name: its section, or what it may have meant. */
-  async resolve(projectId: string, text: string): Promise<{ section: Section } | { suggestions: string[] }> {
-    const resolver = await this.resolver(projectId);
-    const section = resolver.find(text);
-    return section ? { section } : { suggestions: resolver.suggest(text) };
-  }
-
   /** A section the catalogue does not hold. Everything but its dimensions is computed; refused in words where they make no section. */
   async create(scope: ProjectScope, input: CustomSection): Promise<SectionDto> {
     const properties = propertiesOf(input);
@@ -65,6 +59,7 @@ export class SectionsService {
       throw unprocessable(message('section.no-name', { name: input.designation }), [{ path: 'designation', message: 'needs letters or numbers' }]);
     }
     return this.dataSource.transaction(async (manager) => {
+      await lockProject(manager, scope.projectId);
       const known = await manager.findOne(Section, { where: visibleTo(scope.projectId).map((where) => ({ ...where, designationKey })) });
       if (known) throw conflict(message('shared.exists', { what: known.projectId ? 'section' : 'catalogue section', name: known.designation }));
       const section = await manager.save(
@@ -83,7 +78,8 @@ export class SectionsService {
 
   async remove(scope: ProjectScope, sectionId: string): Promise<void> {
     await this.dataSource.transaction(async (manager) => {
-      const section = await manager.findOne(Section, { where: { id: sectionId, projectId: scope.projectId }, lock: { mode: 'pessimistic_write' } });
+      await lockProject(manager, scope.projectId);
+      const section = await manager.findOneBy(Section, { id: sectionId, projectId: scope.projectId });
       if (!section) throw notFound('section of this project');
       const users = await manager.countBy(Member, { sectionId });
       if (users) throw conflict(message('shared.in-use', { what: 'section', by: users === 1 ? '1 member' : `${users} members` }));

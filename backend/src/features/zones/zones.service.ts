@@ -5,6 +5,7 @@ import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource, In } from 'typeorm';
 import type { EntityManager } from 'typeorm';
 import type { ProjectScope } from '../../shared/access.js';
+import { lockProject } from '../../shared/project-lock.js';
 import { conflict, notFound, requireVersion, unprocessable } from '../../shared/refusal.js';
 import { AssessmentService } from '../assessment/assessment.service.js';
 import { AuditService, changesBetween } from '../audit/audit.service.js';
@@ -48,6 +49,7 @@ export class ZonesService {
 
   async create(scope: ProjectScope, input: ZoneInput): Promise<ZoneDto> {
     return this.dataSource.transaction(async (manager) => {
+      await lockProject(manager, scope.projectId);
       await this.requireLevel(manager, scope.projectId, input.levelId);
       await this.requireFreeCode(manager, scope.projectId, input.code, null);
       const zone = await manager.save(manager.create(Zone, { ...input, projectId: scope.projectId }));
@@ -86,7 +88,7 @@ export class ZonesService {
 
   async setProtection(scope: ProjectScope, zoneId: string, input: ZoneProtection): Promise<ZoneDto> {
     return this.dataSource.transaction(async (manager) => {
-      // products before zones, as an edit of a product does: whoever comes second sees the other's change
+      // products before the project, as an edit of a product does: whoever comes second sees the other's change
       const products = await this.requireProducts(manager, scope.projectId, input);
       const zone = await this.lock(manager, scope.projectId, zoneId);
       await this.requireCurrent(manager, zone, input.version);
@@ -141,8 +143,10 @@ export class ZonesService {
     return [...changesBetween<Pick<Zone, 'environment' | 'targetPolicy'>>(zone, input, ['environment', 'targetPolicy']), ...systems];
   }
 
+  /** With no other writer on the project until the end. */
   private async lock(manager: EntityManager, projectId: string, zoneId: string): Promise<Zone> {
-    const zone = await manager.findOne(Zone, { where: { id: zoneId, projectId }, lock: { mode: 'pessimistic_write' } });
+    await lockProject(manager, projectId);
+    const zone = await manager.findOneBy(Zone, { id: zoneId, projectId });
     if (!zone) throw notFound('zone of this project');
     return zone;
   }
