@@ -3,6 +3,7 @@ import { sha256 } from '../src/shared/canonical-json.js';
 import { AuditEntry } from '../src/features/audit/audit-entry.entity.js';
 import { Member } from '../src/features/members/member.entity.js';
 import { Revision } from '../src/features/revisions/revision.entity.js';
+import { SchedulePdfService } from '../src/features/revisions/schedule-pdf.service.js';
 import type { Agent } from './support/app.js';
 import { TestApp } from './support/app.js';
 import { makeScheduleProject, recompute, settledMembers } from './support/schedule-project.js';
@@ -116,6 +117,28 @@ describe('revisions', () => {
     const answers = await Promise.all([step(p, p.team.specifier, id, 'issue'), step(p, p.checker, id, 'issue')]);
     expect(answers.map((a) => a.status).sort()).toEqual([200, 409]);
     expect(answers.find((a) => a.status === 409)!.body.message).toMatch(/^Revision P01 was issued by (The|Checking) specifier on \d{4}-\d\d-\d\d; nothing is left to do\.$/);
+  });
+
+  it('keep nobody from working while the PDF is rendered, and are not issued if they were returned meanwhile', async () => {
+    const p = await makeScheduleProject(app);
+    const { id } = await start(p);
+    await step(p, p.team.specifier, id, 'prepare').expect(200);
+    await step(p, p.checker, id, 'check').expect(200);
+    const pdfs = app.app.get(SchedulePdfService, { strict: false });
+    const render = pdfs.render.bind(pdfs);
+    const during = jest.spyOn(pdfs, 'render').mockImplementationOnce(async (...schedule) => {
+      await p.team.specifier.post(p.url('recalculate')).expect(200);
+      await step(p, p.checker, id, 'return', { comment: 'Zone Z02 needs R 60' }).expect(200);
+      await step(p, p.team.specifier, id, 'prepare').expect(200);
+      await step(p, p.checker, id, 'check').expect(200);
+      return render(...schedule);
+    });
+    const refused = (await step(p, p.team.specifier, id, 'issue').expect(409)).body;
+    expect(during).toHaveBeenCalledTimes(1);
+    during.mockRestore();
+    expect(refused.code).toBe('shared.stale');
+    expect(await app.dataSource.manager.findOneBy(Revision, { id })).toMatchObject({ state: 'checked', pdfSha256: null, issuedAt: null });
+    await step(p, p.team.specifier, id, 'issue').expect(200);
   });
 
   it('cannot be changed in the database once issued', async () => {

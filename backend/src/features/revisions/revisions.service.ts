@@ -1,3 +1,4 @@
+import { isDeepStrictEqual } from 'node:util';
 import { Injectable } from '@nestjs/common';
 import { message, revisionStateNames } from '@mantlet/common';
 import type {
@@ -9,6 +10,7 @@ import type { EntityManager, FindOptionsWhere } from 'typeorm';
 import { isDesigner } from '../../shared/access.js';
 import type { ProjectScope } from '../../shared/access.js';
 import { canonicalJson, sha256 } from '../../shared/canonical-json.js';
+import { lockProject } from '../../shared/project-lock.js';
 import { conflict, notFound, unprocessable } from '../../shared/refusal.js';
 import { AssessmentService } from '../assessment/assessment.service.js';
 import { OpenItemsService } from '../assessment/open-items.service.js';
@@ -62,7 +64,7 @@ export class RevisionsService {
   async create(scope: ProjectScope, input: RevisionInput): Promise<RevisionDto> {
     const { projectId } = scope;
     return this.dataSource.transaction(async (manager) => {
-      await this.assessment.lockProject(manager, projectId);
+      await lockProject(manager, projectId);
       const open = await manager.findOneBy(Revision, { projectId, state: In(openStates) });
       if (open) throw conflict(message('schedule.one-open', { code: open.code, state: inWords(open.state) }));
       await this.requireFreeCode(manager, projectId, input.code);
@@ -74,7 +76,7 @@ export class RevisionsService {
 
   async update(scope: ProjectScope, id: string, input: RevisionInput): Promise<RevisionDto> {
     return this.inState(scope, id, async (manager, revision) => {
-      this.requireDraft(revision);
+      requireDraft(revision);
       if (input.code !== revision.code) await this.requireFreeCode(manager, scope.projectId, input.code);
       await manager.update(Revision, id, { code: input.code, purpose: input.purpose });
       await this.record(manager, scope, id, input.code, 'revision changed', { changes: changesBetween<RevisionInput>(revision, input, ['code', 'purpose']) });
@@ -84,7 +86,7 @@ export class RevisionsService {
   /** Freezes the schedule, if nothing stands in the way. What changes afterwards belongs to the next revision. */
   async prepare(scope: ProjectScope, id: string): Promise<RevisionDto> {
     return this.inState(scope, id, async (manager, revision) => {
-      this.requireDraft(revision);
+      requireDraft(revision);
       const at = new Date();
       const snapshot = await this.snapshots.take(manager, revision, at);
       if (snapshot.blockers.length > 0) throw blocked(snapshot.blockers);
@@ -123,17 +125,22 @@ export class RevisionsService {
     });
   }
 
-  /** Renders the PDF from the snapshot, once, and supersedes the revision issued before: all or nothing. The second of two waits and is told. */
+  /**
+   * Renders the PDF from the snapshot and supersedes the revision issued before: all or nothing. Rendering takes seconds, in which
+   * nobody is kept from working; what was rendered is stored only if it is still what was checked. The second of two is told.
+   */
   async issue(scope: ProjectScope, id: string): Promise<RevisionDto> {
+    const rendered = await this.find(scope, id);
+    requireChecked(rendered);
+    const snapshot = await this.intactSnapshot(this.dataSource.manager, rendered);
+    const issuedAt = new Date();
+    const signatures = { ...signaturesOf(rendered), state: 'issued' as const, issued: signature(scope.actor, issuedAt) };
+    const pdf = await this.pdfs.render(snapshot, rendered.snapshotSha256, signatures);
     return this.inState(scope, id, async (manager, revision) => {
-      if (revision.state === 'issued' && revision.issuedBy && revision.issuedAt) {
-        throw conflict(message('schedule.issued-already', { code: revision.code, by: revision.issuedBy.name, at: revision.issuedAt.toISOString().slice(0, 10) }));
-      }
-      if (revision.state !== 'checked') throw conflict(message('schedule.not-checked', { code: revision.code, state: inWords(revision.state) }));
-      const snapshot = await this.intactSnapshot(manager, revision);
-      const issuedAt = new Date();
-      const signatures = { ...signaturesOf(revision), state: 'issued' as const, issued: signature(scope.actor, issuedAt) };
-      const pdf = await this.pdfs.render(snapshot, revision.snapshotSha256, signatures);
+      requireChecked(revision);
+      // returned, prepared and checked anew meanwhile: another schedule, or other signatures under it
+      const before = [rendered.snapshotSha256, signaturesOf(rendered)];
+      if (!isDeepStrictEqual(before, [revision.snapshotSha256, signaturesOf(revision)])) throw conflict(message('shared.stale', { what: 'revision' }));
       await manager.update(Revision, { projectId: scope.projectId, state: 'issued' }, { state: 'superseded' });
       await manager.update(Revision, id, {
         state: 'issued', issuedById: scope.actor.id, issuedAt, pdf, pdfSha256: sha256(pdf), pdfBytes: pdf.length,
@@ -177,7 +184,7 @@ export class RevisionsService {
   /** Runs a step of the revision's life with the project and the revision held, so that two people cannot take it at once. */
   private async inState(scope: ProjectScope, id: string, step: (manager: EntityManager, revision: Revision) => Promise<void>): Promise<RevisionDto> {
     return this.dataSource.transaction(async (manager) => {
-      await this.assessment.lockProject(manager, scope.projectId);
+      await lockProject(manager, scope.projectId);
       const revision = await manager.findOne(Revision, { where: { id, projectId: scope.projectId }, relations: signers });
       if (!revision) throw notFound('revision');
       await step(manager, revision);
@@ -193,10 +200,6 @@ export class RevisionsService {
 
   private async dto(manager: EntityManager, id: string): Promise<RevisionDto> {
     return toRevisionDto(await manager.findOneOrFail(Revision, { where: { id }, relations: signers }));
-  }
-
-  private requireDraft(revision: Revision): void {
-    if (revision.state !== 'draft') throw conflict(message('schedule.not-draft', { code: revision.code, state: inWords(revision.state) }));
   }
 
   private async requireFreeCode(manager: EntityManager, projectId: string, code: string): Promise<void> {
@@ -228,6 +231,16 @@ export class RevisionsService {
 
 function visibleTo(scope: ProjectScope): FindOptionsWhere<Revision> {
   return { projectId: scope.projectId, ...(isDesigner(scope) ? {} : { state: In(issuedStates) }) };
+}
+
+function requireDraft({ code, state }: Revision): void {
+  if (state !== 'draft') throw conflict(message('schedule.not-draft', { code, state: inWords(state) }));
+}
+
+function requireChecked(revision: Revision): void {
+  const { code, state, issuedBy, issuedAt } = revision;
+  if (state === 'issued' && issuedBy && issuedAt) throw conflict(message('schedule.issued-already', { code, by: issuedBy.name, at: issuedAt.toISOString().slice(0, 10) }));
+  if (state !== 'checked') throw conflict(message('schedule.not-checked', { code, state: inWords(state) }));
 }
 
 function blocked(blockers: readonly OpenItemDto[]) {
