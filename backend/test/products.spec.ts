@@ -41,7 +41,14 @@ describe('products', () => {
       const summary = listed.find((product) => product.id === made.id);
       expect(summary).toMatchObject({ form: 'table', usedByZones: 0, name: input.name, invented: true });
       expect(summary).not.toHaveProperty('evidence');
-      expect((await team.reader.get(`/api/products/${made.id}`).expect(200)).body).toEqual(made);
+      // what it costs is the administrator's to see, and the design team's on its project
+      const unpriced = { ...made, supply: { ...made.supply, materialRate: null, labourRate: null } };
+      expect(made.supply).toMatchObject({ materialRate: '12.50', labourRate: '20.00' });
+      for (const role of ['contractor', 'reader'] as const) {
+        expect((await team[role].get(`/api/products/${made.id}`).expect(200)).body).toEqual(unpriced);
+        expect((await team[role].get('/api/products').expect(200)).text).not.toMatch(/Rate":"/);
+      }
+      expect((await administrator.get(`/api/products/${made.id}`).expect(200)).body).toEqual(made);
       expect((await team.specifier.get(at(`/${made.id}`)).expect(200)).body).toEqual(made);
       for (const role of ['fire-engineer', 'specifier'] as const) {
         await team[role].put(`/api/products/${made.id}`).send({ ...input, version: 1 }).expect(403);
@@ -205,7 +212,7 @@ describe('products', () => {
       const none = await team.specifier.put(at(`/${made.id}/evidence-file`)).field('other', 'x').expect(422);
       expect(none.body.code).toBe('product.no-file');
       const large = await team.specifier.put(at(`/${made.id}/evidence-file`)).attach('file', Buffer.concat([pdf, Buffer.alloc(10 * 1024 * 1024)]), 'large.pdf').expect(413);
-      expect(large.body.message).toBe('File: is larger than this page accepts');
+      expect(large.body.message).toBe('The file is larger than is accepted here. Nothing was changed; send less at once.');
       await team.specifier.put(at(`/${made.id}/evidence-file`)).attach('another', pdf, 'x.pdf').expect(400);
     });
   });

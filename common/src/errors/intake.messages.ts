@@ -30,6 +30,7 @@ export const intakeMessages = {
   'import.too-many-rows': (p: { file: string; sheet: string; rows: number; limit: number }) =>
     `${p.file}, sheet "${p.sheet}": content in row ${p.rows}; at most ${p.limit} rows are read. Split the schedule.`,
   'import.too-many-cells': (p: { file: string; limit: number }) => `${p.file} holds more than ${p.limit} cells. Split the schedule.`,
+  'import.too-much-text': (p: { file: string; limit: number }) => `${p.file} holds more than ${p.limit} characters of text. Split the schedule.`,
   'import.quote-open': (p: { file: string; line: number }) =>
     `${p.file}, line ${p.line}: a quotation mark is opened and not closed as CSV asks for. Correct that line and upload again.`,
   'import.no-content': (p: { file: string }) => `${p.file} holds no rows. Nothing to import.`,

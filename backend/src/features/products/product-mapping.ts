@@ -25,6 +25,9 @@ function withoutEvidence(product: Product): Omit<ProductDto, 'evidence'> {
 
 export const toProductDto = (product: Product): ProductDto => ({ ...withoutEvidence(product), evidence: product.evidence });
 
+/** A product as those see it who neither keep the library nor work on a project that uses it: what it costs is not theirs to know. */
+export const withoutRates = <T extends Pick<ProductDto, 'supply'>>(product: T): T => ({ ...product, supply: { ...product.supply, materialRate: null, labourRate: null } });
+
 export const toProductSummaryDto = (product: Product, form: Evidence['form'], usedByZones: number): ProductSummaryDto =>
   ({ ...withoutEvidence(product), form, usedByZones });
 

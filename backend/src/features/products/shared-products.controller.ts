@@ -7,9 +7,10 @@ import type { Actor } from '../../shared/access.js';
 import { idParam } from '../../shared/validation.js';
 import { uploadLimits } from './evidence-file.js';
 import { ProductFilesService } from './product-files.service.js';
+import { withoutRates } from './product-mapping.js';
 import { ProductsService } from './products.service.js';
 
-/** The shared library: the administrator keeps it, everybody reads it. */
+/** The shared library: the administrator keeps it, everybody reads it; the rates only the administrator, others on the projects they design. */
 @Controller('products')
 export class SharedProductsController {
   constructor(
@@ -19,14 +20,16 @@ export class SharedProductsController {
 
   @Get()
   @SignedIn()
-  list(): Promise<ProductSummaryDto[]> {
-    return this.products.list(null);
+  async list(@CurrentActor() actor: Actor): Promise<ProductSummaryDto[]> {
+    const products = await this.products.list(null);
+    return actor.administrator ? products : products.map(withoutRates);
   }
 
   @Get(':productId')
   @SignedIn()
-  get(@Param('productId', idParam) productId: string): Promise<ProductDto> {
-    return this.products.get(null, productId);
+  async get(@CurrentActor() actor: Actor, @Param('productId', idParam) productId: string): Promise<ProductDto> {
+    const product = await this.products.get(null, productId);
+    return actor.administrator ? product : withoutRates(product);
   }
 
   @Post()

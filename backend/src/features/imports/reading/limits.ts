@@ -9,5 +9,7 @@ export const fileLimits = {
   columns: 200,
   cells: 1_000_000,
   cellCharacters: 2000,
+  /** a workbook stores a text once however many cells show it: without this a small file could fill the memory */
+  characters: 20_000_000,
 } as const;
 export const megabytes = (bytes: number): number => Math.round(bytes / 1024 / 1024);

@@ -90,6 +90,16 @@ describe('files that are no schedule', () => {
     expect(await refusal(makeZip(Array.from({ length: 2001 }, (_, i) => ({ name: `f${i}`, content: '' }))))).toMatch(/not opened/);
   });
 
+  it('that show one long text in thousands of cells are not taken in', async () => {
+    const long = 'x'.repeat(2000);
+    const content = await workbook((book) => {
+      const sheet = book.addWorksheet('One');
+      for (let i = 0; i < 110; i += 1) sheet.addRow(Array.from({ length: 100 }, () => long));
+    });
+    expect(content.length).toBeLessThan(200_000);
+    expect(await refusal(content)).toBe('schedule.xlsx holds more than 20000000 characters of text. Split the schedule.');
+  });
+
   it('never end in anything but sheets or a sentence, whatever their bytes', async () => {
     const bytes = fc.oneof(fc.uint8Array({ maxLength: 300 }).map((b) => Buffer.from(b)), fc.string({ unit: 'binary', maxLength: 300 }).map((s) => Buffer.from(s)),
       fc.array(fc.array(fc.string({ maxLength: 8 }), { maxLength: 6 }), { maxLength: 8 }).map((rows) => Buffer.from(rows.map((r) => r.join(',')).join('\n'))));

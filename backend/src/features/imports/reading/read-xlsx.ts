@@ -20,7 +20,13 @@ export async function readXlsx(file: string, content: Buffer): Promise<CellGrid[
   if (other) throw unprocessable(message('import.not-a-schedule', { file, kind: other }));
   const workbook = await load(file, content);
   const visible = workbook.worksheets.filter((sheet) => sheet.state === 'visible' || !sheet.state);
-  return (visible.length ? visible : workbook.worksheets).map((sheet) => ({ name: sheet.name.slice(0, 200), rows: sheetRows(file, sheet) }));
+  let characters = 0;
+  const take = (text: string): string => {
+    characters += text.length;
+    if (characters > fileLimits.characters) throw unprocessable(message('import.too-much-text', { file, limit: fileLimits.characters }));
+    return text;
+  };
+  return (visible.length ? visible : workbook.worksheets).map((sheet) => ({ name: sheet.name.slice(0, 200), rows: sheetRows(file, sheet, take) }));
 }
 
 function otherKind(entries: readonly string[]): string | null {
@@ -45,12 +51,13 @@ async function load(file: string, content: Buffer): Promise<ExcelJS.Workbook> {
   return workbook;
 }
 
-function sheetRows(file: string, sheet: Worksheet): string[][] {
+/** `take` is given every cell's text, and throws where the file holds too much of it. */
+function sheetRows(file: string, sheet: Worksheet, take: (text: string) => string): string[][] {
   const rows: string[][] = [];
   sheet.eachRow((row, number) => {
     const cells: string[] = [];
     row.eachCell((cell, column) => {
-      const text = column <= fileLimits.columns ? cleanCell(cellText(cell.value)) : '';
+      const text = column <= fileLimits.columns ? take(cleanCell(cellText(cell.value))) : '';
       if (text) cells[column - 1] = text;
     });
     if (!cells.length) return;
