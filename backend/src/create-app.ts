@@ -22,8 +22,9 @@ const safeMethods = new Set(['GET', 'HEAD', 'OPTIONS']);
 /** A browser says where a request comes from; a write from another site is refused. SameSite cookies are the first line. */
 function sameOriginOnly(request: Request, response: Response, next: NextFunction): void {
   const origin = request.headers.origin;
-  const foreign = origin !== undefined && URL.canParse(origin) && new URL(origin).host !== request.headers.host;
-  if (safeMethods.has(request.method) || (!foreign && origin !== 'null')) return next();
+  // one that cannot be read ("null", from a sandboxed page) is foreign as well
+  const foreign = origin !== undefined && (!URL.canParse(origin) || new URL(origin).host !== request.headers.host);
+  if (safeMethods.has(request.method) || !foreign) return next();
   const reason = message('shared.forbidden', { who: 'pages of this installation', what: 'send changes to it' });
   response.status(HttpStatus.FORBIDDEN).json({ message: sentence(reason), code: reason.code });
 }
@@ -33,6 +34,8 @@ export async function createApp(options: AppOptions): Promise<NestExpressApplica
   const app = await NestFactory.create<NestExpressApplication>(AppModule.forDatabase(options.databaseUrl), {
     logger: options.quiet ? ['fatal'] : ['warn', 'error', 'fatal'],
   });
+  // secure cookies mean a TLS proxy in front: it says over which scheme and from which address a request came
+  if (options.secureCookies) app.set('trust proxy', 1);
   app.use(
     helmet({
       contentSecurityPolicy: {
@@ -49,13 +52,14 @@ export async function createApp(options: AppOptions): Promise<NestExpressApplica
       strictTransportSecurity: options.secureCookies ?? false,
     }),
   );
+  // before sessions, which the client's own files need not touch
+  if (options.clientDir) serveClient(app, options.clientDir);
   app.use(sameOriginOnly);
   app.useBodyParser('json', { limit: '4mb' });
   const sessions = useSessions(app, { url: options.databaseUrl, secret: options.sessionSecret, secure: options.secureCookies ?? false });
   app.setGlobalPrefix('api');
   app.useGlobalPipes(validationPipe());
   app.useGlobalFilters(new ErrorFilter());
-  if (options.clientDir) serveClient(app, options.clientDir);
   const close = app.close.bind(app);
   app.close = async () => {
     await close();

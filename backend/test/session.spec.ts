@@ -47,6 +47,18 @@ describe('session', () => {
   it('refuses a write that another site sends', async () => {
     const answer = await app.anonymous().post('/api/session').set('Origin', 'https://elsewhere.example').send({}).expect(403);
     expect(answer.body.message).toMatch(/^Only pages of this installation/);
+    await app.anonymous().post('/api/session').set('Origin', 'null').send({}).expect(403);
+    await app.anonymous().post('/api/session').set('Origin', 'no address').send({}).expect(403);
+  });
+
+  it('keeps one of two administrators who put each other out of office at the same moment', async () => {
+    const agents = await Promise.all([app.makeUser('Fa', { administrator: true }), app.makeUser('Gi', { administrator: true })].map(async (made) => ({ user: await made, agent: await app.signIn(await made) })));
+    await app.dataSource.query('UPDATE users SET administrator = false WHERE id <> ALL($1)', [agents.map(({ user }) => user.id)]);
+    const dismiss = (by: number, of: number) => agents[by]!.agent.patch(`/api/users/${agents[of]!.user.id}`).send({ name: 'Out', administrator: false, disabled: false });
+    const statuses = (await Promise.all([dismiss(0, 1), dismiss(1, 0)])).map((answer) => answer.status);
+    // the second is told that it is the last one, or that it is no administrator any more
+    expect(statuses.filter((status) => status === 200)).toHaveLength(1);
+    expect(await app.dataSource.query('SELECT count(*)::int AS n FROM users WHERE administrator AND NOT disabled')).toEqual([{ n: 1 }]);
   });
 
   it('says in words what is wrong with the input', async () => {
@@ -59,5 +71,18 @@ describe('session', () => {
         { path: 'password', message: 'needs at least 12 characters' },
       ]),
     );
+  });
+});
+
+describe('session behind a TLS proxy', () => {
+  it('gives a cookie that travels over TLS only', async () => {
+    const app = await TestApp.start({ secureCookies: true });
+    try {
+      const { email } = await app.makeUser('Ha');
+      const answer = await app.anonymous().post('/api/session').set('X-Forwarded-Proto', 'https').send({ email, password: 'a long test password' }).expect(200);
+      expect(String(answer.headers['set-cookie'])).toMatch(/HttpOnly; Secure; SameSite=Lax/);
+    } finally {
+      await app.stop();
+    }
   });
 });

@@ -27,13 +27,13 @@ export class TestApp {
     private readonly dropDatabase: () => Promise<void>,
   ) {}
 
-  static async start(options: { catalogue?: boolean } = {}): Promise<TestApp> {
+  static async start(options: { catalogue?: boolean; secureCookies?: boolean } = {}): Promise<TestApp> {
     const database = await createTestDatabase();
     const migrating = await new DataSource(dataSourceOptions(database.url)).initialize();
     await migrating.runMigrations();
     if (options.catalogue) await seedCatalogue(migrating);
     await migrating.destroy();
-    const app = await createApp({ databaseUrl: database.url, sessionSecret: 'test secret', quiet: true });
+    const app = await createApp({ databaseUrl: database.url, sessionSecret: 'test secret', secureCookies: options.secureCookies ?? false, quiet: true });
     await app.init();
     return new TestApp(app, app.get(DataSource), database.drop);
   }

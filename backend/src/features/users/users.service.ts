@@ -66,10 +66,12 @@ export class UsersService {
 
   async update(id: string, input: UserUpdate, by: Actor): Promise<UserDto> {
     return this.dataSource.transaction(async (manager) => {
+      // held to the end, so that two administrators cannot put each other out of office at once
+      const inOffice = await manager.find(User, { where: { administrator: true, disabled: false }, order: { id: 'ASC' }, lock: { mode: 'pessimistic_write' } });
       const user = await manager.findOneBy(User, { id });
       if (!user) throw notFound('account');
       const losesOffice = user.administrator && (!input.administrator || input.disabled);
-      if (losesOffice && (await manager.countBy(User, { administrator: true, disabled: false })) < 2) {
+      if (losesOffice && !inOffice.some((other) => other.id !== id)) {
         throw conflict(message('shared.in-use', { what: 'account', by: 'the installation as its only administrator' }));
       }
       const changes = changesBetween<UserUpdate>(user, input, ['name', 'administrator', 'disabled']);
