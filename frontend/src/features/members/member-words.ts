@@ -1,5 +1,5 @@
 import type { MemberRowDto, MemberSheetDto, VerdictKind } from '@mantlet/common';
-import { exposureNames, formatPeriod, memberTypeNames } from '@mantlet/common';
+import { exposureNames, formatPeriod, formatThickness, memberTypeNames } from '@mantlet/common';
 import { count, countWord, formatNumber } from '../../lib/format.js';
 import type { StatusKind } from '../../ui/status-word.js';
 
@@ -17,6 +17,15 @@ export function listHeading(total: number | undefined, open: number | undefined)
 }
 
 export const rowState = (row: Pick<MemberRowDto, 'open' | 'verdict'>): StatusKind => (row.open ? 'attention' : row.verdict === null ? 'neutral' : 'settled');
+
+type RowResult = Pick<MemberRowDto, 'verdict' | 'requiredThickness' | 'appliedThickness' | 'thicknessUnit' | 'productName' | 'sentence'>;
+/** The result as a row of the list says it, in one line: "34 mm Demo Spray M · zone gives 42 mm". Other results keep their sentence. */
+export function rowResult(row: RowResult): string {
+  const { verdict, requiredThickness: required, appliedThickness: applied, thicknessUnit: unit, productName } = row;
+  if (verdict !== 'protected' || required === null || unit === null) return row.sentence;
+  const [needs, gets] = [formatThickness(required, unit), formatThickness(applied, unit)];
+  return `${needs}${productName ? ` ${productName}` : ''}${applied !== null && applied > required && gets !== needs ? ` · zone gives ${gets}` : ''}`;
+}
 
 /** The sheet's heading: the result, with its period where that completes the sentence. */
 export function sheetHeading({ sentence, result, zone }: Pick<MemberSheetDto, 'sentence' | 'result' | 'zone'>): string {
@@ -38,7 +47,7 @@ export const changedWords = (n: number): string => (n === 0 ? 'Nothing was diffe
 /** Why a member with a result still counts as open, as far as its row tells; null where the result itself says it. */
 export function openReason(row: Pick<MemberRowDto, 'open' | 'verdict' | 'assumed' | 'criticalTemperatureC'>, secondSignatureAboveC: number): string | null {
   if (!row.open || (row.verdict !== 'protected' && row.verdict !== 'bare')) return null;
-  if (row.assumed) return 'Rests on an assumed temperature that nobody accepted';
+  if (row.assumed) return 'Assumed temperature, not accepted yet';
   if (row.criticalTemperatureC !== null && row.criticalTemperatureC > secondSignatureAboveC) return `Above ${secondSignatureAboveC} °C, not accepted yet`;
   return row.verdict === 'bare' ? 'Staying bare is not accepted yet' : 'Something is open: see its zone and product';
 }

@@ -35,4 +35,9 @@ describe('figures', () => {
     expect(resultText({ value: 839_172.98, unit: 'N' })).toBe('839.2\u00a0kN');
     expect(resultText({ value: null, unit: '°C' })).toBeNull();
   });
+  it('never shows a limit temperature higher than it is', () => {
+    expect(resultText({ value: 615.98, unit: '°C' })).toBe('615.9\u00a0°C');
+    expect(resultText({ value: 615, unit: '°C' })).toBe('615.0\u00a0°C');
+    expect(workingLine(step('k_y,θ by Table 3.1', [input('θ_a', 615.98, '°C')])).rest[0]?.text).toBe('615.9\u00a0°C');
+  });
 });

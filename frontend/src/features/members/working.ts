@@ -17,12 +17,16 @@ export function figure(value: number | string): string {
 const grouped = (text: string) => text.replace(/^(-?)(\d{5,})/, (_, sign: string, whole: string) => sign + whole.replace(/\B(?=(\d{3})+$)/g, '\u202f'));
 
 const scaled: Record<string, { unit: string; by: number; above: number }> = { 'N·mm': { unit: 'kNm', by: 1e6, above: 1e5 }, N: { unit: 'kN', by: 1e3, above: 1e3 } };
+/** A temperature in a working, to 0.1 °C and downwards as limits are everywhere: 615.98 °C must not read 616 here and 615 in the heading. */
+const temperature = (valueC: number) => grouped((Math.floor(valueC * 10 + 1e-6) / 10).toFixed(1)).replace('-', '\u2212');
+const inputFigure = ({ value, unit }: WorkingStepDto['inputs'][number]) => (unit === '°C' && typeof value === 'number' && !Number.isInteger(value) ? temperature(value) : figure(value));
+
 /** A result in the unit people read it in: 522 213 518 N·mm is 522.2 kNm. */
 export function resultText({ value, unit }: Pick<WorkingStepDto, 'value' | 'unit'>): string | null {
   if (value === null) return null;
   const scale = scaled[unit];
   const [shown, as] = scale && Math.abs(value) >= scale.above ? [value / scale.by, scale.unit] : [value, unit];
-  const text = as === '°C' ? figure(Math.round(shown * 10) / 10) : as === 'kN' || as === 'kNm' ? figure(Math.round(shown * 10) / 10) : figure(shown);
+  const text = as === '°C' ? temperature(shown) : as === 'kN' || as === 'kNm' ? figure(Math.round(shown * 10) / 10) : figure(shown);
   return as ? `${text}\u00a0${as === '1/m' ? 'm⁻¹' : as}` : text;
 }
 
@@ -40,7 +44,7 @@ function substitute(expression: string, inputs: WorkingStepDto['inputs']): Subst
     const found = symbols.find(({ symbol }) => symbol && rest.startsWith(symbol) && !symbolChar.test(rest[symbol.length] ?? ' '));
     if (found) {
       used.add(found.symbol);
-      const number = figure(found.value);
+      const number = inputFigure(found);
       text += number.startsWith('\u2212') ? `(${number})` : number;
       at += found.symbol.length;
     } else {
@@ -66,6 +70,6 @@ export function workingLine(step: WorkingStepDto): WorkingLine {
   const equals = step.equation.indexOf(' = ');
   const [head] = equals < 0 ? [''] : step.equation.slice(equals + 3).split(/, (?=\S+ = )/);
   const { text, used } = substitute(head ?? '', step.inputs);
-  const rest = step.inputs.filter(({ symbol }) => !used.has(symbol)).map(({ symbol, value, unit }) => ({ symbol, text: `${figure(value)}${unit ? `\u00a0${unit === '1/m' ? 'm⁻¹' : unit}` : ''}` }));
+  const rest = step.inputs.filter(({ symbol }) => !used.has(symbol)).map((input) => ({ ...input, number: inputFigure(input) })).map(({ symbol, number, unit }) => ({ symbol, text: `${number}${unit ? `\u00a0${unit === '1/m' ? 'm⁻¹' : unit}` : ''}` }));
   return { equation: step.equation, numbers: used.size > 0 ? text : null, rest };
 }

@@ -1,10 +1,10 @@
 import type { MemberSheetDto } from '@mantlet/common';
 import { fireCurveNames, formatLimitTemperature, formatThickness, wayNames } from '@mantlet/common';
-import { formatDate } from '../../../lib/format.js';
+import { formatDate, formatNumber } from '../../../lib/format.js';
 import { HeatingChart } from '../../../ui/drawing/heating-chart.js';
 import { ResistanceChart } from '../../../ui/drawing/resistance-chart.js';
 import { SectionDrawing } from '../../../ui/drawing/section-drawing.js';
-import { firstReach } from '../../../ui/drawing/chart-scale.js';
+import { firstReach, valueAt } from '../../../ui/drawing/chart-scale.js';
 import { shapeDetails } from '../../../ui/drawing/shape-preview.js';
 import { Panel } from '../../../ui/panel.js';
 
@@ -44,13 +44,18 @@ function ResistancePanel({ sheet }: { sheet: MemberSheetDto }) {
   );
 }
 
+/** Bare steel at the end of the period, as stored or, where the member has no result to store it with, as drawn. */
+export const bareAtEnd = ({ result, charts }: Pick<MemberSheetDto, 'result' | 'charts'>): number | null =>
+  result?.bareTemperatureC ?? (charts ? valueAt(charts.bare, charts.periodMin) : null);
+
 function HeatingPanel({ sheet }: { sheet: MemberSheetDto }) {
   const { result, charts, zone } = sheet;
   if (!charts) return <Panel title="Heating not determined"><p className="mt-sub">There is no section factor to heat the steel by.</p></Panel>;
   const critical = result?.criticalTemperatureC ?? null;
   const limit = result?.verdict === 'bare' ? result.bareCriticalTemperatureC ?? critical : critical;
   const minutes = limit === null ? null : firstReach(charts.bare, limit);
-  const title = limit === null ? `Bare, it is at ${Math.round(result?.bareTemperatureC ?? charts.bare.at(-1)?.[1] ?? 20)} °C in the end`
+  const end = bareAtEnd(sheet);
+  const title = limit === null ? (end === null ? 'How it heats without protection' : `Bare, it is at ${formatNumber(end)} °C after ${charts.periodMin} minutes`)
     : minutes === null ? `Bare, it stays below ${formatLimitTemperature(limit)}` : `Bare, it is at ${formatLimitTemperature(limit)} after ${Math.floor(minutes)} minutes`;
   const holds = charts.protected && limit !== null ? firstReach(charts.protected, limit) : null;
   const thickness = formatThickness(result?.requiredThickness, result?.thicknessUnit ?? 'mm');
@@ -63,7 +68,8 @@ function HeatingPanel({ sheet }: { sheet: MemberSheetDto }) {
   );
 }
 
-/** Section, resistance and heating, side by side. */
+/** Section, resistance and heating, side by side; where no resistance can be drawn, its words stand over a wider heating. */
 export function MemberDrawings({ sheet }: { sheet: MemberSheetDto }) {
+  if (!sheet.charts?.resistance.length) return <div className="mt-drawings mt-drawings-two"><SectionPanel sheet={sheet} /><div className="mt-stack"><ResistancePanel sheet={sheet} /><HeatingPanel sheet={sheet} /></div></div>;
   return <div className="mt-drawings"><SectionPanel sheet={sheet} /><ResistancePanel sheet={sheet} /><HeatingPanel sheet={sheet} /></div>;
 }

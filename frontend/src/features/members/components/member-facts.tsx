@@ -9,13 +9,15 @@ import { useMay } from '../../projects/project-context.js';
 import { useWithdrawAcceptance } from '../api/members.js';
 import { FailedSave } from '../../../ui/form/failed-save.js';
 import { acceptanceNames } from '../member-words.js';
+import { bareAtEnd } from './member-drawings.js';
 
 const missing = 'not determined';
 const orMissing = (text: string) => (text === '–' ? missing : text);
 
 /** Unprotected under a slab, κ1 is another than protected: the temperature it must hold is then said as well. */
 function bareWords(result: MemberSheetDto['result']): string {
-  if (result?.bareMinutes == null) return 'its temperature is not reached within 240 min, or not determined';
+  if (result?.criticalTemperatureC == null) return missing;
+  if (result.bareMinutes === null) return 'longer than 240 min';
   const { bareCriticalTemperatureC: bare, criticalTemperatureC: critical } = result;
   const apart = bare !== null && bare !== critical ? `, then at ${formatLimitTemperature(bare)} (κ1 of an unprotected beam)` : '';
   return `${formatMinutes(Math.floor(result.bareMinutes))}${apart}`;
@@ -36,11 +38,11 @@ function facts(sheet: MemberSheetDto): [string, ReactNode][] {
     ['Area to protect', orMissing(formatArea(areaM2))],
     ['How the temperature comes about', `${wayNames[member.basis.way]}${result?.method ? `: ${result.method}` : ''}`],
     ['Utilisation in fire', result?.utilisation == null ? 'not calculated' : formatNumber(result.utilisation, 2)],
-    ['Bare steel at the end', orMissing(formatTemperature(result?.bareTemperatureC))],
+    [`Bare steel at ${sheet.zone.periodMin} min`, orMissing(formatTemperature(bareAtEnd(sheet)))],
     ['Bare steel holds', bareWords(result)],
-    ['Needs', result?.requiredThickness == null ? missing : formatThickness(result.requiredThickness, result.thicknessUnit ?? 'mm')],
-    ['Gets with its zone', result?.appliedThickness == null ? missing : `${formatThickness(result.appliedThickness, result.thicknessUnit ?? 'mm')}${result.layers ? ` in layers of ${result.layers.join(' + ')} mm` : ''}`],
-    ['Read in the evidence at', result?.evidenceReading ?? missing],
+    ['Needs', result?.verdict === 'bare' ? 'no protection' : result?.requiredThickness == null ? missing : formatThickness(result.requiredThickness, result.thicknessUnit ?? 'mm')],
+    ...(result?.appliedThickness == null ? [] : [['Gets with its zone', `${formatThickness(result.appliedThickness, result.thicknessUnit ?? 'mm')}${result.layers ? ` in layers of ${result.layers.join(' + ')} mm` : ''}`] as [string, ReactNode]]),
+    ...(result?.evidenceReading ? [['Read in the evidence at', result.evidenceReading] as [string, ReactNode]] : []),
     ...(member.coatBackConnections > 0 ? [['Coat-back', `${count(member.coatBackConnections, 'connection')}, girth ${formatNumber(member.coatBackGirthMm)} mm`] as [string, ReactNode]] : []),
     ...(member.deductionM2 > 0 ? [['Deduction', formatArea(member.deductionM2, 2)] as [string, ReactNode]] : []),
     ...(member.note ? [['Note', member.note] as [string, ReactNode]] : []),
@@ -62,7 +64,7 @@ export function Acceptances({ projectId, memberId, acceptances }: { projectId: s
       <ul className="mt-history">
         {acceptances.map((a) => (
           <li key={`${a.kind} ${a.at}`}>
-            <StatusWord kind={a.stillHolds ? 'settled' : 'attention'}>{acceptanceNames[a.kind]}{a.valueC === null ? '' : `, ${formatTemperature(a.valueC)}`}: {a.stillHolds ? 'holds' : 'lapsed, the value has changed'}</StatusWord>
+            <StatusWord kind={a.stillHolds ? 'settled' : 'attention'}>{acceptanceNames[a.kind]}{a.valueC === null ? '' : `, ${formatLimitTemperature(a.valueC)}`}: {a.stillHolds ? 'holds' : 'lapsed, the value has changed'}</StatusWord>
             <span>{a.reason}</span>
             <span className="mt-sub">{a.by}, {formatDate(a.at)}</span>
             {may('accept-temperatures') && <div><Button size="small" loading={withdraw.isPending} onClick={() => withdraw.mutate({ memberIds: [memberId], kind: a.kind })}>Withdraw the acceptance</Button></div>}

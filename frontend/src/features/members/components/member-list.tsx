@@ -45,7 +45,7 @@ export function MemberList({ projectId, page, stale, filter, setFilter, firstSte
       <div className="mt-members" aria-busy={stale}>
         <ScheduleTable<MemberRowDto>
           caption="Members" rows={page.items} rowKey={(r) => r.id} columns={memberColumns(projectId, filter, addressOfFilter(filter).toString(), aboveC)} loading={stale} empty={empty} tableLayout="fixed"
-          scroll={{ x: 1080 }}
+          scroll={{ x: 1120 }}
           {...(mayChoose && {
             rowSelection: {
               selectedRowKeys: chosen.map((r) => r.id), preserveSelectedRowKeys: true, columnWidth: 40, getCheckboxProps: (r: MemberRowDto) => ({ 'aria-label': `Choose ${r.mark}` } as object),
