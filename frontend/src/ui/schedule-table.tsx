@@ -38,7 +38,7 @@ function withSchedule<T>(column: ScheduleColumn<T>): ColumnType<T> {
 /** antd's table set like a drawing schedule: hairlines, small head, sticky below the title strip, folding on a phone. */
 export function ScheduleTable<T extends object>({ caption, columns, rows, rowKey, fold = true, empty, minWidth, onRow, className, ...rest }: ScheduleTableProps<T>) {
   return (
-    <div className={`mt-schedule ${fold ? 'mt-schedule-fold' : ''} ${className ?? ''}`} role="region" aria-label={caption}>
+    <div className={`mt-schedule ${fold ? 'mt-schedule-fold' : ''} ${className ?? ''}`} role="group" aria-label={caption}>
       <Table<T>
         size="small"
         pagination={false}

@@ -1,4 +1,4 @@
-import { Button, Spin } from 'antd';
+import { Button } from 'antd';
 import type { ReactNode } from 'react';
 import { ApiError } from '../lib/api-client.js';
 
@@ -16,8 +16,8 @@ export function EmptyState({ title, children, action }: { title: ReactNode; chil
 export function LoadingState({ what = 'this page' }: { what?: string }) {
   return (
     <div className="mt-state mt-state-loading" role="status">
-      <Spin size="small" delay={250} />
       <span className="mt-sub">Loading {what}…</span>
+      <span className="mt-lines" aria-hidden="true"><span /><span /><span /><span /></span>
     </div>
   );
 }

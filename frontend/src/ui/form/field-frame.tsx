@@ -2,7 +2,7 @@ import type { ReactNode } from 'react';
 
 const bounds = { '<=': 'at most', '>=': 'at least', '<': 'below', '>': 'above' } as const;
 
-/** "must be above 0" needs its subject; a whole sentence stands alone; what a schema says of itself is put plainly. */
+/** "must be above 0" needs its subject; "say why" and a whole sentence stand alone; what a schema says of itself is put plainly. */
 export function fieldSentence(label: string, problem: string): string {
   if (/^Invalid input/.test(problem)) return `${label} is needed.`;
   if (/^Invalid option/.test(problem)) return `${label}: choose one of the values offered.`;
@@ -10,7 +10,8 @@ export function fieldSentence(label: string, problem: string): string {
   if (limit) return `${label} must be ${bounds[limit[1] as keyof typeof bounds]} ${limit[2]}.`;
   const length = /^Too (big|small): expected string to have [<>]=?\s?(\d+)/.exec(problem);
   if (length) return `${label} is ${length[1] === 'big' ? 'longer' : 'shorter'} than ${length[2]} characters.`;
-  const text = /^[a-z]/.test(problem) ? `${label} ${problem}` : problem;
+  const asked = /^(say|choose|give|name|state)\b/.test(problem) ? problem.charAt(0).toUpperCase() + problem.slice(1) : problem;
+  const text = /^[a-z]/.test(asked) ? `${label} ${asked}` : asked;
   return /[.!?]$/.test(text) ? text : `${text}.`;
 }
 

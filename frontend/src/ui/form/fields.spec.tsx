@@ -47,6 +47,7 @@ describe('a form resolved by the contract', () => {
   });
   it('turns a schema\'s words into a sentence', () => {
     expect(fieldSentence('Length', 'must be above 0')).toBe('Length must be above 0.');
+    expect(fieldSentence('Reference', 'say where the value comes from')).toBe('Say where the value comes from.');
     expect(fieldSentence('Section', 'Invalid input: expected string, received undefined')).toBe('Section is needed.');
     expect(fieldSentence('γG', 'Too big: expected number to be <=3')).toBe('γG must be at most 3.');
     expect(fieldSentence('Place', 'Too big: expected string to have <=200 characters')).toBe('Place is longer than 200 characters.');
