@@ -1,0 +1,58 @@
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { People, account, faults, heading, signIn } from './support/browser.js';
+
+let people: People;
+beforeAll(async () => { people = await People.start(); });
+afterAll(async () => {
+  await people.stop();
+  expect(faults).toEqual([]);
+});
+
+describe('who comes in, and what they find', () => {
+  it.each([
+    ['Fire engineer', ['Building', 'Zones', 'Members', 'Products', 'Quantities', 'Schedule', 'Site', 'Team and basis']],
+    ['Structural engineer', ['Building', 'Zones', 'Members', 'Products', 'Quantities', 'Schedule', 'Site', 'Team and basis']],
+    ['Specifier', ['Building', 'Zones', 'Members', 'Products', 'Quantities', 'Schedule', 'Site', 'Team and basis']],
+    ['Contractor', ['Site', 'Schedule']],
+  ])('%s signs in and sees the pages that are theirs', async (role, pages) => {
+    const page = await people.person(role);
+    const names = await page.getByRole('navigation', { name: 'Pages' }).locator('a > span:first-child').allTextContents();
+    expect(names.filter((name) => name !== 'All projects')).toEqual(pages);
+    await page.context().close();
+  });
+
+  it('a wrong password is refused in words, and the e-mail stays', async () => {
+    const page = await people.visitor();
+    await page.goto('/');
+    await page.getByLabel('E-mail').fill(account('Specifier').email);
+    await page.getByLabel('Password', { exact: true }).fill('not the password');
+    await page.getByRole('button', { name: 'Sign in' }).click();
+    await page.getByRole('alert').waitFor();
+    expect(await page.getByLabel('E-mail').inputValue()).toBe(account('Specifier').email);
+  });
+
+  it('the administrator keeps accounts and reads no project', async () => {
+    const page = await people.visitor();
+    await signIn(page, account('Administrator'));
+    expect(await page.getByText('Marrow Gate Civic Library').count()).toBe(0);
+    await page.getByRole('link', { name: 'Accounts' }).click();
+    await page.getByText(account('Contractor').email).waitFor();
+  });
+
+  it('the first visitor of an empty installation makes the administrator’s account', async () => {
+    const page = await people.visitor({ empty: true });
+    await page.goto('/');
+    await heading(page).filter({ hasText: 'Make the first account' }).waitFor();
+    await page.getByLabel('Name').fill('Somebody First');
+    await page.getByLabel('E-mail').fill('first@office.example.test');
+    await page.getByLabel('Password', { exact: true }).fill('too short');
+    await page.getByRole('button', { name: 'Make the account' }).click();
+    await page.getByText('Password needs at least 12 characters.').waitFor();
+    await page.getByLabel('Password', { exact: true }).fill('four unrelated words here');
+    await page.getByRole('button', { name: 'Make the account' }).click();
+    await page.getByRole('link', { name: 'Accounts' }).waitFor();
+    const second = await people.visitor({ empty: true });
+    await second.goto('/set-up');
+    await second.getByRole('button', { name: 'Sign in' }).waitFor();
+  });
+});

@@ -1,0 +1,94 @@
+import { readFileSync } from 'node:fs';
+import path from 'node:path';
+import { chromium } from 'playwright-core';
+import type { Browser, BrowserContext, Locator, Page } from 'playwright-core';
+
+function required(name: string): string {
+  const value = process.env[name];
+  if (!value) throw new Error(`${name} is not set: run the journeys through \`npm test -- e2e\`.`);
+  return value;
+}
+
+interface Account { name: string; email: string; password: string; role: string }
+const accounts = JSON.parse(readFileSync(path.resolve(import.meta.dirname, '../../../seeds/demo/accounts.json'), 'utf8')) as Account[];
+
+/** The demo's account whose role begins with this. */
+export function account(role: string): Account {
+  const found = accounts.find((one) => one.role.startsWith(role));
+  if (!found) throw new Error(`No demo account for ${role}.`);
+  return found;
+}
+
+/** One browser for a file of journeys; a context of its own for each person, so that several are signed in side by side. */
+export class People {
+  private readonly contexts: BrowserContext[] = [];
+  private constructor(private readonly browser: Browser) {}
+
+  static async start(): Promise<People> {
+    return new People(await chromium.launch({ executablePath: required('CHROMIUM_PATH'), args: ['--no-sandbox', '--disable-dev-shm-usage'] }));
+  }
+
+  async stop(): Promise<void> {
+    await Promise.all(this.contexts.map((context) => context.close()));
+    await this.browser.close();
+  }
+
+  /** A fresh visitor. Fails the journey where a page throws. */
+  async visitor(options: { empty?: boolean; dark?: boolean } = {}): Promise<Page> {
+    const context = await this.browser.newContext({
+      baseURL: required(options.empty ? 'MANTLET_E2E_EMPTY_URL' : 'MANTLET_E2E_URL'), viewport: { width: 1440, height: 920 }, locale: 'en-GB',
+      acceptDownloads: true, colorScheme: options.dark ? 'dark' : 'light', reducedMotion: 'reduce',
+    });
+    this.contexts.push(context);
+    context.setDefaultTimeout(30_000);
+    const page = await context.newPage();
+    page.on('pageerror', (error) => faults.push(error));
+    return page;
+  }
+
+  /** Somebody of the demo's team, signed in by the form and on the project's first page. */
+  async person(role: string, options: { dark?: boolean } = {}): Promise<Page> {
+    const page = await this.visitor(options);
+    await signIn(page, account(role));
+    await page.getByRole('link', { name: 'Marrow Gate Civic Library' }).first().click();
+    await page.getByRole('link', { name: 'All projects', exact: true }).waitFor();
+    return page;
+  }
+}
+
+/** What pages threw; a journey's last step asks for none. */
+export const faults: Error[] = [];
+
+export async function signIn(page: Page, { email, password }: Pick<Account, 'email' | 'password'>): Promise<void> {
+  await page.goto('/');
+  await page.getByLabel('E-mail').fill(email);
+  await page.getByLabel('Password', { exact: true }).fill(password);
+  await page.getByRole('button', { name: 'Sign in' }).click();
+  await page.getByRole('link', { name: 'Mantlet, all projects' }).waitFor();
+}
+
+/** Goes to a page of the project by the list at the left. */
+export async function goTo(page: Page, name: string): Promise<void> {
+  const link = page.getByRole('navigation', { name: 'Pages' }).getByRole('link', { name: new RegExp(`^${name}`) });
+  await link.click();
+  // the old page stays until the new one is there
+  await link.and(page.locator('[aria-current=page]')).waitFor();
+  await page.getByRole('heading', { level: 1 }).waitFor();
+  await page.getByText(/^Loading .*…$/).first().waitFor({ state: 'hidden' });
+}
+
+/** Opens a select by its label and takes the choice with this text. */
+export async function choose(page: Page, within: Page | Locator, label: string | RegExp, text: string | RegExp): Promise<void> {
+  await within.getByRole('combobox', { name: label }).click();
+  await page.locator('.ant-select-dropdown:visible').getByTitle(text, { exact: true }).click();
+}
+
+export const heading = (page: Page): Locator => page.getByRole('heading', { level: 1 });
+
+/** The sheet of a member, found by its mark in the list. */
+export async function openMember(page: Page, mark: string): Promise<void> {
+  await goTo(page, 'Members');
+  await page.getByLabel('Search').fill(mark);
+  await page.getByRole('link', { name: mark, exact: true }).click();
+  await page.getByRole('link', { name: 'All members' }).waitFor();
+}
