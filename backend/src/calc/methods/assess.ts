@@ -115,8 +115,7 @@ export function prepare(c: MemberCase): Prepared {
     result.sectionFactorPerM = own.sectionFactorPerM;
     result.coatedGirthMm = own.coatedGirthMm;
   }
-  const { basis, memberType, shape, properties, steel, exposure, design, accepted } = c;
-  const strong = applyCritical(result, criticalTemperature({ basis, memberType, shape, properties, steel, exposure, design, accepted }));
+  const strong = applyCritical(result, criticalTemperature(c));
   if (result.verdict === 'under-strength') return { result, heating: null, own };
   if (!factor.ok) result.reason = factor.reason;
   return { result, heating: strong && own ? bareHeating(c, own) : null, own };

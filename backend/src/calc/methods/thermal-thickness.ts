@@ -104,7 +104,8 @@ const remembered = new WeakMap<ThermalProperties, Map<number, Remembered>>();
 const mostRemembered = 20_000;
 
 function neighbourhood(place: ThermalPlace, curve: FireCurve, periodMin: number): number {
-  return (Math.round(Math.log(place.sectionFactorPerM) * 8) * 64 + Math.round(place.temperatureC / 30)) * 512 + periodMin + curve.kind.length / 32;
+  // one whole number, which maps find fastest: periods are below 512 min, names of curves below 32 letters
+  return ((Math.round(Math.log(place.sectionFactorPerM) * 8) * 64 + Math.round(place.temperatureC / 30)) * 512 + periodMin) * 32 + curve.kind.length;
 }
 
 /** The earlier answer carried over: thickness grows a little slower than A/V, and falls with the temperature allowed. */
