@@ -1,5 +1,5 @@
-import { Button } from 'antd';
-import { Link, useRouteError } from 'react-router-dom';
+import { useRouteError } from 'react-router-dom';
+import { LinkButton } from '../ui/link-button.js';
 import { Page } from '../ui/page.js';
 import { ErrorState } from '../ui/states.js';
 
@@ -12,7 +12,7 @@ export function RouteFault() {
 export function NotFound() {
   return (
     <Page title="Not found" heading="There is no page at this address" sub="It may have been mistyped, or belong to something that was deleted.">
-      <p><Link to="/projects"><Button type="primary">Go to the projects</Button></Link></p>
+      <p><LinkButton to="/projects" type="primary">Go to the projects</LinkButton></p>
     </Page>
   );
 }

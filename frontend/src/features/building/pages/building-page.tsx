@@ -1,8 +1,8 @@
-import { Button } from 'antd';
-import { Link, Navigate } from 'react-router-dom';
+import { Navigate } from 'react-router-dom';
 import type { BuildingDto, ProjectDto } from '@mantlet/common';
 import { countWord, formatNumber } from '../../../lib/format.js';
 import { BuildingElevation } from '../../../ui/drawing/building-elevation.js';
+import { LinkButton } from '../../../ui/link-button.js';
 import { Page } from '../../../ui/page.js';
 import { Panel } from '../../../ui/panel.js';
 import { EmptyState, QueryState } from '../../../ui/states.js';
@@ -26,14 +26,14 @@ function FirstStep({ building, at }: { building: BuildingDto; at: string }) {
   const may = useMay();
   if (building.levels.length === 0) {
     return (
-      <EmptyState title="Draw up the levels and zones first" action={<Link to={`${at}/zones`}><Button type={may('edit-levels') ? 'primary' : 'default'}>Go to the zones</Button></Link>}>
+      <EmptyState title="Draw up the levels and zones first" action={<LinkButton to={`${at}/zones`} type={may('edit-levels') ? 'primary' : 'default'}>Go to the zones</LinkButton>}>
         {may('edit-levels') ? 'Give each level its height above the datum, and each zone its period and fire curve.' : 'The fire engineer gives each level its height and each zone its period.'}
       </EmptyState>
     );
   }
   if (building.members > 0) return null;
   return (
-    <EmptyState title="Bring in the member schedule next" action={may('import-members') ? <Link to={`${at}/members/import`}><Button type="primary">Import members</Button></Link> : null}>
+    <EmptyState title="Bring in the member schedule next" action={may('import-members') ? <LinkButton to={`${at}/members/import`} type="primary">Import members</LinkButton> : null}>
       {may('import-members') ? 'Upload the steel schedule as CSV or XLSX, or type members in one by one.' : 'The specifier imports or types in the members.'}
     </EmptyState>
   );

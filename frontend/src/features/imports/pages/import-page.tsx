@@ -6,7 +6,7 @@ import type { ImportDto, ImportResultDto } from '@mantlet/common';
 import { Page } from '../../../ui/page.js';
 import { Panel } from '../../../ui/panel.js';
 import { QueryState } from '../../../ui/states.js';
-import { LinkButton } from '../../members/components/link-button.js';
+import { LinkButton } from '../../../ui/link-button.js';
 import { RequireRight, useCurrentProject } from '../../projects/project-context.js';
 import { firstPreview, useAbandon, useImport, usePreview } from '../api/imports.js';
 import { ColumnsStep } from '../components/columns-step.js';

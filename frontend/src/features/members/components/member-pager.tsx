@@ -1,6 +1,6 @@
 import { useEffect } from 'react';
 import { useNavigate } from 'react-router-dom';
-import { LinkButton } from './link-button.js';
+import { LinkButton } from '../../../ui/link-button.js';
 
 interface MemberPagerProps { projectId: string; previousId: string | null; nextId: string | null; state: unknown }
 

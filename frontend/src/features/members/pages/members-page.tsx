@@ -6,7 +6,7 @@ import { Panel } from '../../../ui/panel.js';
 import { EmptyState, QueryState } from '../../../ui/states.js';
 import { RequireRight, useCurrentProject, useMay } from '../../projects/project-context.js';
 import { useMembers } from '../api/members.js';
-import { LinkButton } from '../components/link-button.js';
+import { LinkButton } from '../../../ui/link-button.js';
 import { MemberFilters } from '../components/member-filters.js';
 import { MemberList } from '../components/member-list.js';
 import { NewMemberDrawer } from '../forms/member-drawer.js';
