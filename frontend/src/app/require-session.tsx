@@ -5,6 +5,7 @@ import { useSession } from '../features/session/api/session.js';
 import { SessionEndedDialog } from '../features/session/components/session-ended-dialog.js';
 import { onSignedOut } from '../lib/api-client.js';
 import { sessionKey } from '../lib/query-client.js';
+import { LeaveGuard } from '../ui/form/use-unsaved-changes.js';
 import { ErrorState, LoadingState } from '../ui/states.js';
 
 /**
@@ -28,6 +29,7 @@ export function RequireSession() {
   if (!user) return <Navigate to={`/sign-in?to=${encodeURIComponent(location.pathname + location.search)}`} replace />;
   return (
     <>
+      <LeaveGuard />
       <Outlet />
       {ended && (
         <SessionEndedDialog

@@ -8,6 +8,7 @@ import { vi } from 'vitest';
 import { ProjectProvider } from '../features/projects/project-context.js';
 import { createQueryClient } from '../lib/query-client.js';
 import { PageInfoProvider } from '../ui/page-info.js';
+import { LeaveGuard } from '../ui/form/use-unsaved-changes.js';
 import { ThemeProvider } from '../ui/theme/theme-provider.js';
 
 export const projectId = '11111111-1111-4111-8111-111111111111';
@@ -20,7 +21,7 @@ export const testProject = (roles: Role[], more: Partial<ProjectDto> = {}): Proj
 /** Renders a page inside what the application gives it. path is the route pattern, at the address visited. */
 export function renderPage(page: ReactElement, options: { project?: ProjectDto; path?: string; at?: string } = {}) {
   const { project, path = '/projects/:projectId/*', at = `/projects/${project?.id ?? projectId}` } = options;
-  const element = project ? <ProjectProvider project={project}>{page}</ProjectProvider> : page;
+  const element = <><LeaveGuard />{project ? <ProjectProvider project={project}>{page}</ProjectProvider> : page}</>;
   const router = createMemoryRouter([{ path, element }, { path: '*', element: <p>elsewhere</p> }], { initialEntries: [at] });
   const result = render(
     <QueryClientProvider client={createQueryClient()}>

@@ -1,6 +1,9 @@
 import { Alert, Button } from 'antd';
+import { useEffect, useRef } from 'react';
 import type { ReactNode } from 'react';
 import { ApiError } from '../../lib/api-client.js';
+import { fieldName } from '../../lib/record-words.js';
+import { fieldSentence } from './field-frame.js';
 
 interface FailedSaveProps {
   error: unknown;
@@ -15,21 +18,29 @@ function words(error: unknown): { title: string; rest: ReactNode } {
   return { title: 'Not saved', rest: error.message };
 }
 
+/** "curve.fireLoadTotalMjPerM2" → "Curve fire load total" */
+const nameOf = (path: string) => { const name = fieldName(path); return name.charAt(0).toUpperCase() + name.slice(1); };
+
 /** Stands above a form whose save failed. The form below keeps everything that was typed. */
 export function FailedSave({ error, onReload }: FailedSaveProps) {
+  const place = useRef<HTMLDivElement>(null);
+  // the save button stands at the form's foot; what went wrong, above the form, may be out of sight
+  useEffect(() => { if (error) place.current?.scrollIntoView?.({ block: 'nearest' }); }, [error]);
   if (!error) return null;
   const { title, rest } = words(error);
   const issues = error instanceof ApiError ? error.issues : [];
   return (
-    <Alert
-      type="error" role="alert" title={title} className="mt-failed"
-      description={
-        <>
-          <p>{rest}</p>
-          {issues.length > 0 && <ul>{issues.map((i) => <li key={i.path + i.message}>{i.path ? `${i.path}: ` : ''}{i.message}</li>)}</ul>}
-          {error instanceof ApiError && error.isStale && onReload && <Button size="small" onClick={onReload}>Load the saved version into the untouched fields</Button>}
-        </>
-      }
-    />
+    <div ref={place} className="mt-failed">
+      <Alert
+        type="error" role="alert" title={title}
+        description={
+          <>
+            <p>{rest}</p>
+            {issues.length > 0 && <ul>{issues.map((i) => <li key={i.path + i.message}>{i.path ? fieldSentence(nameOf(i.path), i.message) : i.message}</li>)}</ul>}
+            {error instanceof ApiError && error.isStale && onReload && <Button size="small" onClick={onReload}>Load the saved version into the untouched fields</Button>}
+          </>
+        }
+      />
+    </div>
   );
 }

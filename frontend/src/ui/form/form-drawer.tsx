@@ -1,6 +1,6 @@
 import { App, Button, Drawer } from 'antd';
 import type { FormEventHandler, ReactNode } from 'react';
-import { useId } from 'react';
+import { useId, useRef } from 'react';
 import { FailedSave } from './failed-save.js';
 import { useUnsavedChanges } from './use-unsaved-changes.js';
 
@@ -25,6 +25,12 @@ interface FormDrawerProps {
 export function FormDrawer({ title, open, onClose, onSubmit, dirty, saving, error, onReload, saveText = 'Save', extra, size = 520, children }: FormDrawerProps) {
   const { modal } = App.useApp();
   const formId = useId();
+  const form = useRef<HTMLFormElement>(null);
+  // the drawer takes the focus while it slides in; once it stands, typing begins in its first field
+  const begin = (isOpen: boolean) => {
+    if (!isOpen || form.current?.contains(document.activeElement)) return;
+    form.current?.querySelector<HTMLElement>('input:not(:disabled), textarea:not(:disabled)')?.focus();
+  };
   useUnsavedChanges(open && dirty && !saving);
   const close = () => {
     if (!dirty) return onClose();
@@ -32,7 +38,7 @@ export function FormDrawer({ title, open, onClose, onSubmit, dirty, saving, erro
   };
   return (
     <Drawer
-      title={title} open={open} onClose={close} size={size} destroyOnHidden mask={{ closable: !dirty }} rootClassName="mt-drawer"
+      title={title} open={open} onClose={close} afterOpenChange={begin} size={size} destroyOnHidden mask={{ closable: !dirty }} rootClassName="mt-drawer"
       footer={
         <div className="mt-drawer-foot">
           <div>{extra}</div>
@@ -44,7 +50,7 @@ export function FormDrawer({ title, open, onClose, onSubmit, dirty, saving, erro
       }
     >
       <FailedSave error={error} onReload={onReload} />
-      <form id={formId} onSubmit={onSubmit} noValidate className="mt-form">{children}</form>
+      <form id={formId} ref={form} onSubmit={onSubmit} noValidate className="mt-form">{children}</form>
     </Drawer>
   );
 }

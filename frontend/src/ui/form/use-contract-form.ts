@@ -15,7 +15,9 @@ export function useContractForm<In extends FieldValues, Out>(
 ): UseFormReturn<In, unknown, Out> {
   return useForm<In, unknown, Out>({
     resolver: zodResolver(schema),
-    mode: 'onTouched',
+    // first at the save: an error that appears as a field is left moves what lies below from under the pointer
+    mode: 'onSubmit',
+    reValidateMode: 'onChange',
     resetOptions: { keepDirtyValues: true },
     ...options,
   });

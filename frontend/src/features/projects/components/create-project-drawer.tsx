@@ -18,7 +18,7 @@ export function CreateProjectDrawer({ open, onClose }: { open: boolean; onClose:
   return (
     <FormDrawer title="Start a project" open={open} onClose={close} onSubmit={(e) => { void save(e); }} dirty={form.formState.isDirty && !create.isSuccess} saving={create.isPending} error={create.error} saveText="Start the project">
       <div className="mt-form-row">
-        <TextField control={form.control} name="number" label="Number" help="As your office files it, e.g. 24-017." autoFocus />
+        <TextField control={form.control} name="number" label="Number" help="As your office files it, e.g. 24-017." />
         <SelectField control={form.control} name="currency" label="Currency" options={currencies} />
       </div>
       <TextField control={form.control} name="name" label="Name" />

@@ -14,7 +14,7 @@ export function NewAccount({ onClose }: { onClose: () => void }) {
   const submit = form.handleSubmit((body) => create.mutate(body, { onSuccess: onClose }));
   return (
     <FormDrawer title="New account" open onClose={onClose} onSubmit={(e) => { void submit(e); }} dirty={form.formState.isDirty && !create.isSuccess} saving={create.isPending} error={create.error} saveText="Make the account" size={440}>
-      <TextField control={form.control} name="name" label="Name" autoFocus />
+      <TextField control={form.control} name="name" label="Name" />
       <TextField control={form.control} name="email" label="E-mail" type="email" />
       <TextField control={form.control} name="password" label="First password" type="password" autoComplete="new-password" help="At least 12 characters. Hand it over yourself; the person changes it under their name in the title strip." />
       <CheckField control={form.control} name="administrator" label="Administrator" help={administratorHelp} />

@@ -23,7 +23,7 @@ export function LevelDrawer({ projectId, level, nextElevationM, onClose }: Level
       dirty={form.formState.isDirty && !save.isSuccess} saving={save.isPending} error={save.error ?? remove.error} onReload={() => { void levels.refetch(); }} size={440}
       extra={level && <DeleteButton what={`level ${level.code}`} consequence="Only a level without zones can be deleted." busy={remove.isPending} onDelete={() => remove.mutate(level.id, { onSuccess: onClose })} />}
     >
-      <TextField control={form.control} name="code" label="Code" help="Short, as drawings use it: B1, L0, RF." autoFocus />
+      <TextField control={form.control} name="code" label="Code" help="Short, as drawings use it: B1, L0, RF." />
       <TextField control={form.control} name="name" label="Name" />
       <div className="mt-form-row">
         <NumberField control={form.control} name="elevationM" label="Elevation" unit="m" decimals={3} help="Top of structural floor above the project's datum; negative below it." />

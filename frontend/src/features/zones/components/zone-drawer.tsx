@@ -32,7 +32,7 @@ export function ZoneDrawer({ projectId, zone, levelId, levels, onClose }: ZoneDr
       extra={zone && <DeleteButton what={`zone ${zone.code}`} consequence="Only a zone without members can be deleted." busy={remove.isPending} onDelete={() => remove.mutate(zone.id, { onSuccess: onClose })} />}
     >
       <div className="mt-form-row">
-        <TextField control={form.control} name="code" label="Code" autoFocus />
+        <TextField control={form.control} name="code" label="Code" />
         <SelectField control={form.control} name="levelId" label="Level" options={levels.map((l) => ({ value: l.id, label: levelName(l) }))} />
       </div>
       <TextField control={form.control} name="name" label="Name" />
