@@ -26,12 +26,12 @@ function Zone({ box, href, hatch }: { box: ZoneBox; href: string; hatch: string 
   const tall = height >= 50;
   const wide = room > 118;
   return (
-    <Link to={href} aria-label={zoneInWords(box)}>
+    <g className="d-zone-link">
       <rect className="d-zone" x={x} y={y} width={width} height={height} strokeWidth="1.3" />
       {box.openWidth > 0 && <rect x={x + width - box.openWidth} y={y} width={box.openWidth} height={height} fill={`url(#${hatch})`} pointerEvents="none" />}
       <rect className="d-settled" x={x} y={y + height - bar} width={box.settledWidth} height={bar} pointerEvents="none" />
       {box.issuedWidth > 0 && <line className="d-line" x1={x} x2={x + box.issuedWidth} y1={y + height - bar - 3} y2={y + height - bar - 3} strokeWidth="2" />}
-      <g className="d-halo" pointerEvents="none">
+      <g className="d-halo" aria-hidden="true" pointerEvents="none">
         <text x={x + 11} y={y + 19} fontSize="14.5" fontWeight="600">R {zone.periodMin}</text>
         {tall && <text x={x + 11} y={y + 37} fontSize="12.5">{fitText(`${zone.code} ${zone.name}`, wide && zone.open > 0 ? room - 52 : room, 12.5)}</text>}
         {wide && <text className="d-sub" x={x + width - 11} y={y + 19} fontSize="12.5" textAnchor="end">{area}</text>}
@@ -39,8 +39,12 @@ function Zone({ box, href, hatch }: { box: ZoneBox; href: string; hatch: string 
           <text className="d-attention" x={wide ? x + width - 11 : x + 11} y={wide ? y + 37 : y + 55} fontSize="12.5" fontWeight="500" textAnchor={wide ? 'end' : 'start'}>{zone.open} open</text>
         )}
       </g>
-      <title>{zoneInWords(box)}</title>
-    </Link>
+      {/* above the texts, which are cut where there is no room: the link's own name says all of them */}
+      <Link to={href} aria-label={zoneInWords(box)}>
+        <rect x={x} y={y} width={width} height={height} fill="transparent" />
+        <title>{zoneInWords(box)}</title>
+      </Link>
+    </g>
   );
 }
 

@@ -16,9 +16,9 @@ export function OpenItems({ items, projectId, held }: { items: readonly OpenItem
         caption="What is open, and who must act" rows={items} sticky={false}
         rowKey={(i) => `${i.role} ${i.kind} ${i.code} ${i.zoneId ?? ''} ${i.memberIds[0] ?? ''} ${i.title}`}
         columns={[
-          { title: 'Who must act', key: 'who', width: 112, render: (_, i) => <span className="mt-sub">{roleNames[i.role]}{held.includes(i.role) && <><br /><span className="mt-strong mt-ink">You</span></>}</span> },
+          { title: 'Who must act', key: 'who', width: 112, className: 'mt-fold-text', render: (_, i) => <span className="mt-sub">{roleNames[i.role]}{held.includes(i.role) && <> <span className="mt-strong mt-ink mt-own-line">You</span></>}</span> },
           {
-            title: 'What is open', key: 'what', render: (_, i) => (
+            title: 'What is open', key: 'what', className: 'mt-fold-text', render: (_, i) => (
               <div>
                 <Link className="mt-strong mt-quiet-link" to={openItemLink(projectId, i)}>{keepUnits(i.title)}</Link>
                 <div className="mt-sub">{[i.kind === 'warning' ? 'Worth a look' : null, i.zoneLabel].filter(Boolean).join(' · ')}</div>

@@ -18,12 +18,12 @@ import { CreateProjectDrawer } from '../components/create-project-drawer.js';
 const notIssued = 'nothing is issued yet';
 
 const columns: ScheduleColumn<ProjectListItemDto>[] = [
-  { title: 'Number', dataIndex: 'number', width: 110 },
-  { title: 'Project', key: 'name', render: (_, p) => <><Link to={`/projects/${p.id}`} className="mt-strong">{p.name}</Link>{p.place && <div className="mt-sub">{p.place}</div>}</> },
+  { title: 'Number', dataIndex: 'number', width: 110, className: 'mt-fold-hide' },
+  { title: 'Project', key: 'name', className: 'mt-fold-head', render: (_, p) => <><span className="mt-fold-only mt-sub">{p.number}</span><Link to={`/projects/${p.id}`} className="mt-strong">{p.name}</Link>{p.place && <div className="mt-sub">{p.place}</div>}</> },
   { title: 'Your roles', key: 'roles', render: (_, p) => rolesInWords(p.roles) || '–' },
   { title: 'Revision', key: 'revision', width: 150, render: (_, p) => (p.revision ? `${p.revision.code} ${revisionStateNames[p.revision.state].toLowerCase()}` : 'None yet') },
   { title: 'Members', key: 'members', numeric: true, width: 96, render: (_, p) => <Quantity value={p.members} what="Members" reason={notIssued} /> },
-  { title: 'Protected m²', key: 'area', foldLabel: 'Protected', numeric: true, width: 120, render: (_, p) => <Quantity value={p.protectedAreaM2} decimals={1} unit="m²" bare what="Protected area" reason={notIssued} /> },
+  { title: 'Protected m²', key: 'area', numeric: true, width: 120, render: (_, p) => <Quantity value={p.protectedAreaM2} decimals={1} unit="m²" bare what="Protected area" reason={notIssued} /> },
   { title: 'Open', key: 'open', numeric: true, width: 80, render: (_, p) => <Quantity value={p.open} what="Open items" reason={notIssued} /> },
   {
     title: 'Waits on you', key: 'waits', width: 150,

@@ -23,7 +23,7 @@ function AddPerson({ projectId, onClose }: { projectId: string; onClose: () => v
   const submit = form.handleSubmit((body) => add.mutate(body, { onSuccess: onClose }));
   return (
     <FormDrawer title="Add a person" open onClose={onClose} onSubmit={(e) => { void submit(e); }} dirty={form.formState.isDirty && !add.isSuccess} saving={add.isPending} error={add.error} saveText="Add to the team" size={440}>
-      <TextField control={form.control} name="email" label="E-mail" type="email" help="Of an account that exists already; the administrator makes accounts." autoFocus />
+      <TextField control={form.control} name="email" label="E-mail" type="email" help="Of an account that exists already; the administrator makes accounts." />
       <CheckListField control={form.control} name="roles" label="Roles" options={roleOptions} help={roleHelp} />
     </FormDrawer>
   );
@@ -61,9 +61,9 @@ export function People({ projectId }: { projectId: string }) {
           <ScheduleTable
             caption="People on the project" rows={rows} rowKey={(p) => p.userId} sticky={false}
             columns={[
-              { title: 'Name', key: 'name', render: (_, p) => <><span className="mt-strong">{p.name}</span><div className="mt-sub">{p.email}</div></> },
-              { title: 'Roles', key: 'roles', render: (_, p) => rolesInWords(p.roles) },
-              ...(edit ? [{ title: <span className="mt-sr">Change</span>, key: 'edit', align: 'right' as const, width: 100, render: (_: unknown, p: MembershipDto) => <Button size="small" onClick={() => setEditing(p)} aria-label={`Roles of ${p.name}`}>Roles</Button> }] : []),
+              { title: 'Name', key: 'name', className: 'mt-fold-head', render: (_, p) => <><span className="mt-strong">{p.name}</span><div className="mt-sub">{p.email}</div></> },
+              { title: 'Roles', key: 'roles', className: 'mt-fold-text', render: (_, p) => rolesInWords(p.roles) },
+              ...(edit ? [{ title: <span className="mt-sr">Change</span>, key: 'edit', className: 'mt-fold-side', align: 'right' as const, width: 100, render: (_: unknown, p: MembershipDto) => <Button size="small" onClick={() => setEditing(p)} aria-label={`Roles of ${p.name}`}>Roles</Button> }] : []),
             ]}
           />
         )}

@@ -35,11 +35,11 @@ export default function AccountsPage() {
             <ScheduleTable
               caption="Accounts" rows={rows} rowKey={(u) => u.id}
               columns={[
-                { title: 'Name', key: 'name', render: (_, u) => <><span className="mt-strong">{u.name}</span><div className="mt-sub">{u.email}</div></> },
-                { title: 'Administrator', key: 'administrator', width: 140, render: (_, u) => (u.administrator ? 'Yes' : 'No') },
+                { title: 'Name', key: 'name', className: 'mt-fold-head', render: (_, u) => <><span className="mt-strong">{u.name}</span><div className="mt-sub">{u.email}</div>{u.administrator && <div className="mt-fold-only mt-sub">Administrator</div>}</> },
+                { title: 'Administrator', key: 'administrator', width: 140, className: 'mt-fold-hide', render: (_, u) => (u.administrator ? 'Yes' : 'No') },
                 { title: 'Last signed in', key: 'last', width: 190, render: (_, u) => (u.lastSignedInAt ? formatDateTime(u.lastSignedInAt) : 'Never') },
                 { title: 'State', key: 'state', width: 130, render: (_, u) => (u.disabled ? <StatusWord kind="neutral">Closed</StatusWord> : <StatusWord kind="settled">In use</StatusWord>) },
-                { title: <span className="mt-sr">Change</span>, key: 'edit', align: 'right', width: 90, render: (_, u) => <Button size="small" onClick={() => setEditing(u)} aria-label={`Edit ${u.name}`}>Edit</Button> },
+                { title: <span className="mt-sr">Change</span>, key: 'edit', className: 'mt-fold-side', align: 'right', width: 90, render: (_, u) => <Button size="small" onClick={() => setEditing(u)} aria-label={`Edit ${u.name}`}>Edit</Button> },
               ]}
             />
           </Panel>

@@ -21,6 +21,7 @@ function Policy({ material, unit, chosen }: { material: PolicyMaterialDto | unde
       {material.materialUnit === 'm²' && material.volumeM3 !== undefined && (
         <div className="mt-sub"><Quantity value={material.volumeM3} unit="m³" decimals={2} what="Board in place, all layers" /> in place</div>
       )}
+      {material.materialUnit === 'm²' && material.volumeM3 != null && <div><Quantity value={material.volumeM3} unit="m³" decimals={2} what="Board in place" /></div>}
       {material.thicknesses.length > 0 && <div className="mt-sub">{manyMm(material.thicknesses, unit)}</div>}
       {chosen && <StatusWord kind="settled">Chosen</StatusWord>}
     </div>

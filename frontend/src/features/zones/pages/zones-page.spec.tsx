@@ -3,7 +3,7 @@ import userEvent from '@testing-library/user-event';
 import { describe, expect, it, vi } from 'vitest';
 import type { LevelDto, Role, ZoneDto } from '@mantlet/common';
 import { projectId, renderPage, serve, testProject } from '../../../test/render.js';
-import { treeRows } from '../components/zone-tree.js';
+import { commonCurve, inPlace, treeRows } from '../components/zone-tree.js';
 import ZonesPage, { zonesWords } from './zones-page.js';
 
 const id = (n: number) => `33333333-3333-4333-8333-${String(n).padStart(12, '0')}`;
@@ -29,8 +29,18 @@ describe('the zones page', () => {
     expect(treeRows(levels, zones).map((r) => (r.kind === 'level' ? r.level.code : r.zone.code))).toEqual(['L1', 'Z3', 'L0', 'Z2', 'Z10']);
   });
   it('answers in its heading', () => {
-    expect(zonesWords(levels, zones)).toEqual({ heading: '3 zones on 2 levels, 60 to 90 minutes', sub: 'One zone has members open. Three have no protection system yet.' });
+    expect(zonesWords(levels, zones)).toEqual({ heading: '3 zones on 2 levels, 60 to 90 minutes', sub: 'Standard fire throughout. One zone has members open. Three have no protection system yet.' });
     expect(zonesWords([], []).heading).toBe('No levels yet');
+  });
+  it('names a curve once only where every zone has it', () => {
+    expect(commonCurve(zones)).toBe('standard');
+    expect(commonCurve([...zones, zone(14, 'Z4', id(2), { curve: { kind: 'hydrocarbon' } })])).toBeNull();
+    expect(commonCurve([])).toBeNull();
+  });
+  it('compares boards by volume, since sheet area counts layers', () => {
+    expect(inPlace({ policy: 'own', thicknesses: [24], material: 102, materialUnit: 'm²', volumeM3: 1.22 })).toEqual({ value: 1.22, unit: 'm³', decimals: 2 });
+    expect(inPlace({ policy: 'own', thicknesses: [1.2], material: 102, materialUnit: 'L', volumeM3: 0.1 })).toEqual({ value: 102, unit: 'L', decimals: 0 });
+    expect(inPlace(undefined).value).toBeNull();
   });
   it('lets the fire engineer edit levels and zones, and not the protection', async () => {
     open(['fire-engineer']);

@@ -1,6 +1,7 @@
 import { Button } from 'antd';
 import { useEffect, useState } from 'react';
 import { useSearchParams } from 'react-router-dom';
+import { fireCurveNames } from '@mantlet/common';
 import type { LevelDto, ProjectDto, ZoneDto } from '@mantlet/common';
 import { count, countWord } from '../../../lib/format.js';
 import { whyNot } from '../../../lib/may.js';
@@ -12,7 +13,8 @@ import { useLevels, useZones } from '../api/zones.js';
 import { LevelDrawer } from '../components/level-drawer.js';
 import { ProtectionDrawer } from '../components/protection-drawer.js';
 import { ZoneDrawer } from '../components/zone-drawer.js';
-import { treeRows, ZoneTree } from '../components/zone-tree.js';
+import { commonCurve, treeRows, ZoneTree } from '../components/zone-tree.js';
+import '../zones.css';
 
 export function zonesWords(levels: readonly LevelDto[], zones: readonly ZoneDto[]): { heading: string; sub: string } {
   if (levels.length === 0) return { heading: 'No levels yet', sub: 'Every member belongs to a zone, and every zone to a level.' };
@@ -22,9 +24,11 @@ export function zonesWords(levels: readonly LevelDto[], zones: readonly ZoneDto[
   const to = Math.max(...periods);
   const open = zones.filter((z) => z.open > 0);
   const bare = zones.filter((z) => z.systems.length === 0);
+  const curve = commonCurve(zones);
   return {
     heading: `${count(zones.length, 'zone')} on ${count(levels.length, 'level')}, ${from === to ? `${from}` : `${from} to ${to}`} minutes`,
     sub: [
+      curve && zones.length > 1 ? `${fireCurveNames[curve]} throughout.` : '',
       open.length ? `${countWord(open.length)} ${open.length === 1 ? 'zone has' : 'zones have'} members open.` : 'No zone has members open.',
       bare.length ? `${countWord(bare.length)} ${bare.length === 1 ? 'has' : 'have'} no protection system yet.` : '',
     ].filter(Boolean).join(' '),
@@ -70,7 +74,7 @@ function Content({ project, levels, zones, editing, setEditing }: ContentProps) 
         )}
       </Panel>
       <p className="mt-sub">
-        The three materials are what each policy would take: litres of coating, m² of board, m³ of spray. The chosen one is bold. {may('edit-zones') ? '' : `${whyNot('edit-zones')} `}{may('edit-protection') ? '' : whyNot('edit-protection')}
+        The three materials are what each policy would take: litres of coating, m³ of board and spray. The chosen one is bold. {may('edit-zones') ? '' : `${whyNot('edit-zones')} `}{may('edit-protection') ? '' : whyNot('edit-protection')}
       </p>
       <Editor editing={editing} project={project} levels={levels} zones={zones} onClose={() => setEditing(null)} />
     </>
