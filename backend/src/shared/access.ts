@@ -35,7 +35,7 @@ export interface ProjectScope {
   roles: Role[];
   actor: Actor;
 }
-export const isDesigner = (scope: ProjectScope): boolean => scope.roles.some((role) => (designRoles as readonly Role[]).includes(role));
+export const isDesigner = ({ roles }: Pick<ProjectScope, 'roles'>): boolean => roles.some((role) => (designRoles as readonly Role[]).includes(role));
 
 export type ScopedRequest = Request & { user?: Actor; projectScope?: ProjectScope };
 

@@ -12,7 +12,7 @@ export function validationPipe(): StandardSchemaValidationPipe {
         message: issue.message,
       }));
       const first = issues[0];
-      const where = first?.path ? `${first.path}: ` : '';
+      const where = `${first?.path || 'Input'}: `;
       return new BadRequestException({ message: `Not saved. ${where}${first?.message ?? 'the input is not valid'}`, code: 'shared.invalid', issues });
     },
   });

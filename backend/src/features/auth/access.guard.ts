@@ -1,6 +1,7 @@
 import { HttpStatus, Injectable } from '@nestjs/common';
 import type { CanActivate, ExecutionContext } from '@nestjs/common';
 import { message, roleNames } from '@mantlet/common';
+import type { Role } from '@mantlet/common';
 import { Reflector } from '@nestjs/core';
 import { z } from 'zod';
 import { ACCESS_RULE } from '../../shared/access.js';
@@ -33,10 +34,15 @@ export class AccessGuard implements CanActivate {
     const roles = z.uuid().safeParse(projectId).success ? await this.memberships.rolesOf(String(projectId), actor.id) : [];
     if (!roles.length) throw notFound('project');
     if (rule.roles && !rule.roles.some((role) => roles.includes(role))) {
-      const who = `the ${rule.roles.map((role) => roleNames[role].toLowerCase()).join(' or the ')}`;
-      throw new Refusal(HttpStatus.FORBIDDEN, message('shared.forbidden', { who, what: 'do this' }));
+      throw new Refusal(HttpStatus.FORBIDDEN, message('shared.forbidden', { who: inWords(rule.roles), what: 'do this' }));
     }
     request.projectScope = { projectId: String(projectId), roles, actor };
     return true;
   }
+}
+
+/** "the fire engineer, the structural engineer or the specifier" */
+function inWords(roles: readonly Role[]): string {
+  const names = roles.map((role) => `the ${roleNames[role].toLowerCase()}`);
+  return [names.slice(0, -1).join(', '), ...names.slice(-1)].filter(Boolean).join(' or ');
 }

@@ -4,11 +4,12 @@ import type { ImportConfirm, ImportDto, ImportMapping, ImportPreviewDto, ImportR
 import { Roles, Scope } from '../../shared/access.js';
 import type { ProjectScope } from '../../shared/access.js';
 import { unprocessable } from '../../shared/refusal.js';
+import { uploadedName } from '../../shared/uploaded-name.js';
 import { idParam } from '../../shared/validation.js';
 import { ImportConfirmService } from './import-confirm.service.js';
 import { ImportsService } from './imports.service.js';
 import type { PreviewQuery } from './imports.service.js';
-import { ScheduleFileInterceptor, uploadedName } from './schedule-file.interceptor.js';
+import { ScheduleFileInterceptor } from './schedule-file.interceptor.js';
 
 /** Member schedules as CSV or XLSX: upload, say what the columns hold, look at every row, confirm. */
 @Controller('projects/:projectId/imports')
@@ -24,7 +25,7 @@ export class ImportsController {
   @UseInterceptors(ScheduleFileInterceptor)
   upload(@Scope() scope: ProjectScope, @UploadedFile() file: Express.Multer.File | undefined): Promise<ImportDto> {
     if (!file) throw unprocessable(message('import.no-file', {}));
-    return this.imports.upload(scope, uploadedName(file), file.buffer);
+    return this.imports.upload(scope, uploadedName(file, 'The file'), file.buffer);
   }
 
   @Get(':importId')

@@ -20,10 +20,3 @@ export class ScheduleFileInterceptor extends FileReader implements NestIntercept
     }
   }
 }
-
-/** Browsers send names in UTF-8; the multipart reader takes them for Latin-1. No control characters, no paths. */
-export function uploadedName(file: Express.Multer.File): string {
-  const utf8 = Buffer.from(file.originalname, 'latin1').toString('utf8');
-  const name = utf8.includes('\uFFFD') ? file.originalname : utf8;
-  return (name.replace(/[\p{Cc}\p{Surrogate}]/gu, '').split(/[\\/]/).pop() ?? '').trim().slice(-200) || 'The file';
-}

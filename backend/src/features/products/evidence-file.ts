@@ -1,5 +1,6 @@
 import { message } from '@mantlet/common';
 import { unprocessable } from '../../shared/refusal.js';
+import { uploadedName } from '../../shared/uploaded-name.js';
 import { decodeText, fileKind, inspectZip } from '../imports/file-reading.service.js';
 
 export const evidenceFileBytes = 10 * 1024 * 1024;
@@ -21,14 +22,7 @@ export interface Upload {
 /** @throws Refusal where no file came */
 export function requireUpload(file: Express.Multer.File | undefined): Upload {
   if (!file) throw unprocessable(message('product.no-file', {}), [{ path: 'file', message: 'is needed' }]);
-  return { name: plainName(file.originalname), content: file.buffer };
-}
-
-/** Browsers send names as UTF-8, which the form reader takes for Latin-1. Folders and control characters go. */
-function plainName(sent: string): string {
-  const utf8 = Buffer.from(sent, 'latin1').toString('utf8');
-  const name = (utf8.includes('\ufffd') ? sent : utf8).replace(/^.*[\\/]/s, '').replace(/\p{Cc}|\p{Surrogate}/gu, '').trim();
-  return name.slice(-150) || 'evidence';
+  return { name: uploadedName(file, 'evidence'), content: file.buffer };
 }
 
 /** The file's name with the ending of what it really is, by its content. @throws Refusal where it is no PDF, CSV or XLSX */

@@ -1,5 +1,4 @@
 import { Injectable } from '@nestjs/common';
-import { designRoles } from '@mantlet/common';
 import type { ProjectDto, ProjectListItemDto, Role } from '@mantlet/common';
 import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource, In, IsNull } from 'typeorm';
@@ -19,8 +18,6 @@ import { Project } from './project.entity.js';
 type RevisionHead = Pick<Revision, 'id' | 'projectId' | 'code' | 'state' | 'preparedById' | 'members' | 'protectedAreaM2'>;
 interface Revisions { open: RevisionHead | null; issued: RevisionHead | null }
 
-const seesDesign = (roles: readonly Role[]): boolean => roles.some((role) => (designRoles as readonly Role[]).includes(role));
-
 /** What people see of a project before they open any of its pages; those without a design role see what is issued. */
 @Injectable()
 export class ProjectOverviewService {
@@ -37,7 +34,7 @@ export class ProjectOverviewService {
     const ids = [...held.keys()];
     const projects = await this.dataSource.manager.find(Project, { where: { id: In(ids) }, select: { id: true, number: true, name: true, place: true } });
     const revisions = await this.revisionsOf(ids);
-    const inDesign = ids.filter((id) => seesDesign(held.get(id) ?? []));
+    const inDesign = ids.filter((id) => isDesigner({ roles: held.get(id) ?? [] }));
     const tallies = await this.talliesOf(inDesign);
     const waiting = await this.openItems.waiting(inDesign);
     const byNumber = new Intl.Collator('en', { numeric: true });
@@ -47,7 +44,7 @@ export class ProjectOverviewService {
         const roles = held.get(project.id) ?? [];
         const { open, issued } = revisions.get(project.id) ?? { open: null, issued: null };
         const head = { id: project.id, number: project.number, name: project.name, place: project.place, roles };
-        if (!seesDesign(roles)) {
+        if (!isDesigner({ roles })) {
           return { ...head, revision: shown(issued), members: issued?.members ?? null, protectedAreaM2: issued?.protectedAreaM2 ?? null, open: null, waitsOnMe: 0 };
         }
         const tally = tallies.get(project.id) ?? emptyTally;
