@@ -1,6 +1,5 @@
 import type { ImportDto, ImportPreviewDto, ImportResultDto, ImportRowDto, ImportRowState } from '@mantlet/common';
-import { importFieldNames } from '@mantlet/common';
-import type { ImportField } from '@mantlet/common';
+import { importFieldNames, importFields } from '@mantlet/common';
 import { count, formatNumber, joinWords } from '../../lib/format.js';
 
 export const stateNames: Record<ImportRowState, string> = { new: 'New', changed: 'Changed', unchanged: 'Unchanged', wrong: 'Wrong' };
@@ -36,9 +35,11 @@ export function columnName(index: number): string {
   return index < 26 ? letter : columnName(Math.floor(index / 26) - 1) + letter;
 }
 
-/** The values of a row that say what it is, in one line. */
-export const rowInWords = (row: ImportRowDto): string =>
-  (Object.entries(row.values) as [ImportField, string][]).filter(([field, value]) => field !== 'mark' && value !== '').map(([field, value]) => `${importFieldNames[field]} ${value}`).join(' · ');
+/** The values of a row that say what it is, in one line and always in the same order. A member already there as the file has it needs none. */
+export function rowInWords({ state, values }: Pick<ImportRowDto, 'state' | 'values'>): string {
+  if (state === 'unchanged') return 'As it stands';
+  return importFields.filter((field) => field !== 'mark' && values[field]).map((field) => `${importFieldNames[field]} ${values[field] ?? ''}`).join(' · ');
+}
 
 const limitMb = 10;
 /** What can be said of a file before sending it; the server looks at its content. Null: nothing against it. */

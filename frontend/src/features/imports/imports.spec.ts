@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { columnName, doneHeading, fileProblem, previewHeading, stepOf } from './import-words.js';
-import { fieldOfColumn, mappingProblem, readableFields, readColumnAs } from './mapping.js';
+import { columnName, doneHeading, fileProblem, previewHeading, rowInWords, stepOf } from './import-words.js';
+import { fieldOfColumn, mappingProblem, readableFields, readColumnAs, rowsFromHeader } from './mapping.js';
 
 describe('columns', () => {
   it('reads one field from one column and one column as one field', () => {
@@ -23,7 +23,20 @@ describe('columns', () => {
   it.each([[0, 'A'], [25, 'Z'], [26, 'AA'], [51, 'AZ'], [52, 'BA'], [701, 'ZZ'], [702, 'AAA']])('column %d is %s', (index, name) => expect(columnName(index)).toBe(name));
 });
 
+describe('the first rows of the file', () => {
+  const sheet = { headerRow: 2, headers: ['Mark', 'Section'], firstRows: [['Steel list'], ['Mark', 'Section'], ['B1', 'IPE 200'], ['B2', 'IPE 240']] };
+  it('stand below the headers under their own numbers', () => {
+    expect(rowsFromHeader(sheet, 2)).toEqual({ headers: ['Mark', 'Section'], rows: [{ number: 3, cells: ['B1', 'IPE 200'] }, { number: 4, cells: ['B2', 'IPE 240'] }] });
+  });
+  it('follow another row of headers', () => expect(rowsFromHeader(sheet, 3)).toMatchObject({ headers: ['B1', 'IPE 200'], rows: [{ number: 4 }] }));
+});
+
 describe('steps and words', () => {
+  it('says a new row in a fixed order, and nothing of one that stays as it is', () => {
+    const values = { note: 'Trimmer', section: 'IPE 240', zone: 'Z01', mark: 'B1', grade: '' };
+    expect(rowInWords({ state: 'new', values })).toMatch(/Z01 · .*IPE 240 · .*Trimmer$/);
+    expect(rowInWords({ state: 'unchanged', values })).toBe('As it stands');
+  });
   it('stands where the server left it, and goes back to the columns until it is confirmed', () => {
     expect([stepOf(null, false), stepOf('mapping', false), stepOf('previewed', false), stepOf('previewed', true), stepOf('confirmed', true), stepOf('abandoned', false)])
       .toEqual(['upload', 'columns', 'preview', 'columns', 'done', 'upload']);

@@ -1,6 +1,6 @@
 import type { Evidence, ProductKind, ProductSummaryDto, RegressionFit, ThicknessTable } from '@mantlet/common';
 import { productKindNames } from '@mantlet/common';
-import { count, countWord, formatNumber, joinWords } from '../../lib/format.js';
+import { count, countWord, formatNumber } from '../../lib/format.js';
 import type { StatusKind } from '../../ui/status-word.js';
 
 export const thicknessUnitOf = (kind: ProductKind): 'µm' | 'mm' => (kind === 'coating' ? 'µm' : 'mm');
@@ -76,7 +76,8 @@ export function libraryWords(products: readonly ProductSummaryDto[], shared: boo
   if (products.length === 0) {
     return { heading: 'No products yet', sub: shared ? 'Products with their assessed data, for every project.' : 'A zone’s system is chosen from the products here.' };
   }
-  const kinds = joinWords([...new Set(products.map((p) => productKindNames[p.kind].toLowerCase()))]);
+  // names of kinds hold commas of their own
+  const kinds = [...new Set(products.map((p) => productKindNames[p.kind].toLowerCase()))].join('; ');
   const expired = products.filter((p) => p.expired);
   const used = products.filter((p) => p.usedByZones > 0).length;
   return {

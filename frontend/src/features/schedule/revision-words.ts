@@ -23,7 +23,7 @@ export function nextStep(revision: RevisionDto, held: readonly Role[], myId: str
   const refused = may(held, 'edit-revisions') ? null : whyNot('edit-revisions');
   if (revision.state === 'draft') {
     const blockers = readiness?.blockers.length ?? 0;
-    const why = refused ?? (blockers > 0 ? `${countWord(blockers)} ${blockers === 1 ? 'item keeps' : 'items keep'} it from being prepared; the Schedule page lists them under Readiness.` : null);
+    const why = refused ?? (blockers > 0 ? `${countWord(blockers)} ${blockers === 1 ? 'item keeps' : 'items keep'} it from being prepared; see Readiness on the Schedule page.` : null);
     return { step: 'prepare', text: 'Prepare', why };
   }
   if (revision.state === 'prepared') {

@@ -10,7 +10,7 @@ import { useCurrentProject } from '../../projects/project-context.js';
 import { useZones } from '../../zones/api/zones.js';
 import { useSetMapping } from '../api/imports.js';
 import { columnName } from '../import-words.js';
-import { fieldOfColumn, mappingProblem, readableFields, readColumnAs } from '../mapping.js';
+import { fieldOfColumn, mappingProblem, readableFields, readColumnAs, rowsFromHeader } from '../mapping.js';
 
 function Labelled({ label, children }: { label: string; children: (id: string) => ReactNode }) {
   const id = useId();
@@ -27,9 +27,10 @@ function Pick<T extends string>({ label, value, options, onChange }: PickProps<T
 }
 
 /** The first rows of the file with a choice above each column. */
-function FirstRows({ sheet, columns, fields, onChange }: { sheet: ImportSheetDto; columns: ImportMapping['columns']; fields: readonly ImportField[]; onChange: (next: ImportMapping['columns']) => void }) {
+function FirstRows({ sheet, headerRow, columns, fields, onChange }: { sheet: ImportSheetDto; headerRow: number; columns: ImportMapping['columns']; fields: readonly ImportField[]; onChange: (next: ImportMapping['columns']) => void }) {
   const width = Math.max(sheet.headers.length, ...sheet.firstRows.map((r) => r.length));
   const indices = Array.from({ length: width }, (_, i) => i);
+  const { headers, rows } = rowsFromHeader(sheet, headerRow);
   const options = fields.map((value) => ({ value, label: importFieldNames[value] }));
   return (
     <div className="mt-first-rows" role="region" aria-label="First rows of the file" tabIndex={0}>
@@ -42,17 +43,17 @@ function FirstRows({ sheet, columns, fields, onChange }: { sheet: ImportSheetDto
               return (
                 <th key={i} scope="col" data-read={field !== null}>
                   <Select<ImportField>
-                    size="small" value={field as ImportField} placeholder="Not read" allowClear style={{ width: '100%', minWidth: 138 }} aria-label={`Column ${columnName(i)}, ${sheet.headers[i] ?? 'without a header'}, is read as`}
+                    size="small" value={field as ImportField} placeholder="Not read" allowClear style={{ width: '100%', minWidth: 138 }} aria-label={`Column ${columnName(i)}, ${headers[i] || 'without a header'}, is read as`}
                     options={options} onChange={(next?: ImportField) => onChange(readColumnAs(columns, i, next ?? null))}
                   />
                 </th>
               );
             })}
           </tr>
-          <tr><th scope="row">{sheet.headerRow}</th>{indices.map((i) => <th key={i} scope="col">{sheet.headers[i] || <span className="mt-sub">column {columnName(i)}</span>}</th>)}</tr>
+          <tr><th scope="row">{headerRow}</th>{indices.map((i) => <th key={i} scope="col">{headers[i] || <span className="mt-sub">column {columnName(i)}</span>}</th>)}</tr>
         </thead>
         <tbody>
-          {sheet.firstRows.map((row, r) => <tr key={r}><th scope="row">{sheet.headerRow + 1 + r}</th>{indices.map((i) => <td key={i} data-read={fieldOfColumn(columns, i) !== null}>{row[i] ?? ''}</td>)}</tr>)}
+          {rows.map(({ number, cells }) => <tr key={number}><th scope="row">{number}</th>{indices.map((i) => <td key={i} data-read={fieldOfColumn(columns, i) !== null}>{cells[i] ?? ''}</td>)}</tr>)}
         </tbody>
       </table>
     </div>
@@ -104,7 +105,7 @@ export function ColumnsStep({ projectId, data, onChecked, onAbandon }: { project
       {data.notes.length > 0 && <Alert type="warning" title="Worth a look" description={<ul className="mt-notes">{data.notes.map((note) => <li key={note}>{note}</li>)}</ul>} />}
       <Panel title={data.fileName} sub="Say what each column holds. A column left empty is not read.">
         <Reading data={data} mapping={mapping} set={set} chooseSheet={chooseSheet} />
-        {sheet && <FirstRows sheet={sheet} columns={mapping.columns} fields={readableFields(project.roles.includes('structural-engineer'))} onChange={(columns) => set({ columns })} />}
+        {sheet && <FirstRows sheet={sheet} headerRow={mapping.headerRow} columns={mapping.columns} fields={readableFields(project.roles.includes('structural-engineer'))} onChange={(columns) => set({ columns })} />}
       </Panel>
       <Defaults projectId={projectId} mapping={mapping} set={(change) => set({ defaults: { ...mapping.defaults, ...change } })} />
       <FailedSave error={save.error} />

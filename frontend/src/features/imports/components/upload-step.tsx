@@ -1,6 +1,6 @@
-import { Spin, Upload } from 'antd';
+import { Alert, Spin, Upload } from 'antd';
 import { useState } from 'react';
-import { FailedSave } from '../../../ui/form/failed-save.js';
+import { ApiError } from '../../../lib/api-client.js';
 import { Panel } from '../../../ui/panel.js';
 import { useUpload } from '../api/imports.js';
 import { fileProblem } from '../import-words.js';
@@ -19,7 +19,7 @@ export function UploadStep({ projectId, onRead }: { projectId: string; onRead: (
   return (
     <Panel title="Choose the steel schedule" sub="CSV or XLSX, to 10 MB, one row a mark. Columns are found by their headers; you check them next. Nothing is written before you confirm.">
       {problem && <p className="mt-field-error" role="alert">{problem}</p>}
-      <FailedSave error={upload.error} />
+      {upload.error && <Alert type="error" role="alert" title="The file was not read" description={upload.error instanceof ApiError ? upload.error.message : 'Something went wrong in this page. Choose the file again.'} />}
       <Upload.Dragger accept=".csv,.txt,.xlsx" multiple={false} showUploadList={false} beforeUpload={take} disabled={upload.isPending} className="mt-drop">
         {upload.isPending
           ? <p role="status"><Spin size="small" /> Reading {upload.variables.name}…</p>

@@ -36,7 +36,7 @@ function facts(sheet: MemberSheetDto): [string, ReactNode][] {
     ['Heated girth', girth(result?.heatedPerimeterMm)],
     ['Coated girth', girth(result?.coatedGirthMm)],
     ['Area to protect', orMissing(formatArea(areaM2))],
-    ['How the temperature comes about', `${wayNames[member.basis.way]}${result?.method ? `: ${result.method}` : ''}`],
+    ['How the temperature comes about', `${wayNames[member.basis.way]}${result?.method && result.method.toLowerCase() !== wayNames[member.basis.way].toLowerCase() ? `: ${result.method}` : ''}`],
     ['Utilisation in fire', result?.utilisation == null ? 'not calculated' : formatNumber(result.utilisation, 2)],
     [`Bare steel at ${sheet.zone.periodMin} min`, orMissing(formatTemperature(bareAtEnd(sheet)))],
     ['Bare steel holds', bareWords(result)],

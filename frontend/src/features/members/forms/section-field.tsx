@@ -37,10 +37,13 @@ export function SectionField<T extends { sectionId?: string | null }>({ control,
   // taken apart here: the field's ref is a callback for the input, the rest are plain values
   const { ref, value, onBlur, onChange } = field;
   const [typed, setTyped] = useState('');
+  const [taken, setTaken] = useState<SectionDto | null>(current);
   const search = usePaused(typed.trim());
   const found = useSections(projectId, search, search.length > 0);
   const items = search.length > 0 ? found.data?.items ?? [] : [];
-  const known = current && !items.some((s) => s.id === current.id) ? [current, ...items] : items;
+  // the section it has stands first only while nothing is looked for: Enter must take what was found
+  const held = current ?? (taken?.id === value ? taken : null);
+  const known = held && (search.length === 0 || typed.trim().length === 0) ? [held] : items;
   const error = fieldState.error?.message;
   const words = help ?? 'Type its name: UB 457x191x67, 254 x 146 x 31 UB, IPE300, SHS 150x150x6.3.';
   const none = search.length === 0 ? 'Type the name of a section' : found.isFetching ? 'Searching…' : found.error ? 'The sections could not be searched. Try again.' : `No section is called "${search}"`;
@@ -55,6 +58,7 @@ export function SectionField<T extends { sectionId?: string | null }>({ control,
           onChange(next ?? null);
           setTyped('');
           const section = known.find((s) => s.id === next);
+          setTaken(section ?? null);
           if (section) onChosen?.(section);
         }}
       />

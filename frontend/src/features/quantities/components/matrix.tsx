@@ -40,7 +40,7 @@ export function Matrix({ data, rows, columns, measure }: TableProps & { measure:
     <ScheduleTable<Row>
       caption={`${labelOf(measure, currency)}, ${splitKeyNames[rows].toLowerCase()} by ${splitKeyNames[columns].toLowerCase()}`} rows={rowsOf(data, rows)} rowKey={(r) => r.key} rowClassName={totalClass} minWidth={320 + keys.length * 122} sticky={false}
       columns={[
-        { title: splitKeyNames[rows], key: 'name', width: 200, foldLabel: '', render: (_, r) => r.name },
+        { title: splitKeyNames[rows], key: 'name', width: 200, className: 'mt-fold-head', foldLabel: '', render: (_, r) => r.name },
         ...cellColumns,
         { title: 'Total', key: 'sum', numeric: true, width: 120, render: (_, r) => <span className="mt-strong"><Amount totals={r.total} measure={measure} currency={currency} where={r.name} /></span> },
       ]}
@@ -55,7 +55,7 @@ export function AllMeasures({ data, rows }: Pick<TableProps, 'data' | 'rows'>) {
     <ScheduleTable<Row>
       caption={`All quantities by ${splitKeyNames[rows].toLowerCase()}`} rows={rowsOf(data, rows)} rowKey={(r) => r.key} rowClassName={totalClass} minWidth={900} sticky={false}
       columns={[
-        { title: splitKeyNames[rows], key: 'name', width: 200, foldLabel: '', render: (_, r) => r.name },
+        { title: splitKeyNames[rows], key: 'name', width: 200, className: 'mt-fold-head', foldLabel: '', render: (_, r) => r.name },
         { title: 'Pieces', key: 'pieces', numeric: true, width: 80, render: (_, r) => <Quantity value={r.total.pieces} what={`Pieces of steel, ${r.name}`} /> },
         ...measureKeys.map((measure): ScheduleColumn<Row> => ({ title: labelOf(measure, currency), key: measure, numeric: true, width: 118, render: (_, r) => <Amount totals={r.total} measure={measure} currency={currency} where={r.name} /> })),
       ]}

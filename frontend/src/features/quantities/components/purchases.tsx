@@ -37,7 +37,7 @@ export function Purchases({ data }: { data: QuantitiesDto }) {
     <ScheduleTable<OrderLine>
       caption="What to order" rows={lines} rowKey={(l) => l.key} sticky={false}
       columns={[
-        { title: 'Product', key: 'product', render: (_, l) => l.product },
+        { title: 'Product', foldLabel: '', className: 'mt-fold-head', key: 'product', render: (_, l) => l.product },
         ...(byLevel ? [{ title: 'Delivery', key: 'delivery', render: (_: unknown, l: OrderLine) => l.delivery }] : []),
         { title: 'Order', key: 'what', render: (_, l) => l.what ? <span className="mt-strong">{l.what}</span> : <span className="mt-attention">{l.reason || 'Not determined'}</span> },
         { title: 'Net', key: 'net', numeric: true, render: (_, l) => <Quantity value={l.net.value} unit={l.net.unit} decimals={l.net.decimals} what="Net" reason={l.reason || 'not counted for this kind'} /> },

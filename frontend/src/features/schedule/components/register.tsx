@@ -26,7 +26,7 @@ export function Register({ revisions, projectId }: { revisions: readonly Revisio
           { title: 'Issued', key: 'issued', width: 130, render: (_, r) => <Signature signed={r.issued} /> },
           { title: 'Members', key: 'members', numeric: true, width: 84, render: (_, r) => <Quantity value={r.members} what="Members" reason="frozen when prepared" /> },
           { title: 'Area m²', key: 'area', numeric: true, width: 96, render: (_, r) => <Quantity value={r.protectedAreaM2} decimals={1} unit="m²" bare what="Protected area" reason="frozen when prepared" /> },
-          { title: 'PDF', key: 'pdf', width: 150, render: (_, r) => r.pdfSha256 ? <><a href={pdfUrl(projectId, r.id, true)} aria-label={`Download the PDF of ${r.code}`}>Download</a><div className="mt-sub mt-small" title={`SHA-256 ${r.pdfSha256}`}>SHA-256 {shortDigest(r.pdfSha256)}</div></> : <span className="mt-sub">made on issue</span> },
+          { title: 'PDF, SHA-256', key: 'pdf', width: 130, render: (_, r) => r.pdfSha256 ? <><a href={pdfUrl(projectId, r.id, true)} aria-label={`Download the PDF of ${r.code}`}>Download</a><div className="mt-sub mt-small" title={`SHA-256 ${r.pdfSha256}`}>{shortDigest(r.pdfSha256)}</div></> : <span className="mt-sub">made on issue</span> },
         ]}
       />
     </Panel>
