@@ -5,8 +5,6 @@ import type { NestExpressApplication } from '@nestjs/platform-express';
 import request from 'supertest';
 import { DataSource } from 'typeorm';
 import { createApp } from '../../src/create-app.js';
-import { dataSourceOptions } from '../../src/database/data-source-options.js';
-import { seedCatalogue } from '../../src/database/seed-catalogue.js';
 import { Membership } from '../../src/features/memberships/membership.entity.js';
 import { Project } from '../../src/features/projects/project.entity.js';
 import { PasswordService } from '../../src/features/users/password.service.js';
@@ -28,11 +26,7 @@ export class TestApp {
   ) {}
 
   static async start(options: { catalogue?: boolean; secureCookies?: boolean } = {}): Promise<TestApp> {
-    const database = await createTestDatabase();
-    const migrating = await new DataSource(dataSourceOptions(database.url)).initialize();
-    await migrating.runMigrations();
-    if (options.catalogue) await seedCatalogue(migrating);
-    await migrating.destroy();
+    const database = await createTestDatabase(options.catalogue ? 'catalogue' : 'migrated');
     const app = await createApp({ databaseUrl: database.url, sessionSecret: 'test secret', secureCookies: options.secureCookies ?? false, quiet: true });
     await app.init();
     return new TestApp(app, app.get(DataSource), database.drop);

@@ -1,22 +1,80 @@
-import { randomBytes } from 'node:crypto';
+import { createHash, randomBytes } from 'node:crypto';
+import { readdirSync, statSync } from 'node:fs';
+import { join } from 'node:path';
 import { Client } from 'pg';
+import { DataSource } from 'typeorm';
+import { dataSourceOptions } from '../../src/database/data-source-options.js';
+import { seedCatalogue } from '../../src/database/seed-catalogue.js';
 
-/** A database of its own for one spec file, on the throw-away server that the test command started. */
-export async function createTestDatabase(): Promise<{ url: string; drop: () => Promise<void> }> {
+export interface TestDatabase {
+  url: string;
+  drop: () => Promise<void>;
+}
+/** empty: nothing at all · migrated: the schema · catalogue: the schema and the section catalogue */
+export type Filling = 'empty' | 'migrated' | 'catalogue';
+
+function serverUrl(): string {
   const server = process.env['MANTLET_TEST_DATABASE_URL'];
   if (!server) throw new Error('MANTLET_TEST_DATABASE_URL is not set: run the tests through `npm test`, or point it at a throw-away PostgreSQL.');
-  const name = `test_${randomBytes(6).toString('hex')}`;
-  await administer(server, `CREATE DATABASE ${name}`);
-  const url = new URL(server);
+  return server;
+}
+function urlOf(name: string): string {
+  const url = new URL(serverUrl());
   url.pathname = `/${name}`;
-  return { url: url.toString(), drop: () => administer(server, `DROP DATABASE IF EXISTS ${name} WITH (FORCE)`) };
+  return url.toString();
 }
 
-async function administer(server: string, statement: string): Promise<void> {
-  const client = new Client({ connectionString: server });
+/** A database of its own for one spec file, on the throw-away server that the test command started. */
+export async function createTestDatabase(filling: Filling = 'empty'): Promise<TestDatabase> {
+  const name = `test_${randomBytes(6).toString('hex')}`;
+  await administer(async (client) => {
+    const template = filling === 'empty' ? null : await ensureTemplate(client, filling);
+    await client.query(`CREATE DATABASE ${name}${template ? ` TEMPLATE ${template}` : ''}`);
+  });
+  return { url: urlOf(name), drop: () => administer(async (client) => void (await client.query(`DROP DATABASE IF EXISTS ${name} WITH (FORCE)`))) };
+}
+
+/** Filled once per state of the migrations and seeds, then copied: a copy takes a tenth of a second, filling takes several. */
+async function ensureTemplate(client: Client, filling: Exclude<Filling, 'empty'>): Promise<string> {
+  const name = `filled_${filling}_${fingerprint()}`;
+  await client.query('SELECT pg_advisory_lock(4711)');
+  try {
+    const known = await client.query('SELECT 1 FROM pg_database WHERE datname = $1', [name]);
+    if (known.rowCount) return name;
+    const making = `${name}_making`;
+    await client.query(`DROP DATABASE IF EXISTS ${making} WITH (FORCE)`);
+    await client.query(`CREATE DATABASE ${making}`);
+    const source = await new DataSource(dataSourceOptions(urlOf(making))).initialize();
+    try {
+      await source.runMigrations();
+      if (filling === 'catalogue') await seedCatalogue(source);
+    } finally {
+      await source.destroy();
+    }
+    await client.query(`ALTER DATABASE ${making} RENAME TO ${name}`);
+    return name;
+  } finally {
+    await client.query('SELECT pg_advisory_unlock(4711)');
+  }
+}
+
+let known: string | null = null;
+function fingerprint(): string {
+  if (known) return known;
+  const backend = join(__dirname, '..', '..');
+  const folders = [join(backend, 'src/database'), join(backend, 'src/database/migrations'), join(backend, 'src/calc/sections'), join(backend, '../seeds/sections')];
+  const files = folders.flatMap((folder) => readdirSync(folder).map((file) => join(folder, file)));
+  const digest = createHash('sha256');
+  for (const file of files) digest.update(`${file} ${statSync(file).mtimeMs}\n`);
+  known = digest.digest('hex').slice(0, 12);
+  return known;
+}
+
+async function administer(work: (client: Client) => Promise<void>): Promise<void> {
+  const client = new Client({ connectionString: serverUrl() });
   await client.connect();
   try {
-    await client.query(statement);
+    await work(client);
   } finally {
     await client.end();
   }
