@@ -29,7 +29,7 @@ export function memberColumns(projectId: string, filter: MemberFilter, search: s
     { ...sorted('mark'), title: 'Mark', width: 96, render: (_, r) => <Link className="mt-strong" to={`/projects/${projectId}/members/${r.id}`} state={{ list: search }}>{r.mark}</Link> },
     { ...sorted('level'), title: 'Level', width: 66, render: (_, r) => r.levelCode },
     { ...sorted('zone'), title: 'Zone', width: 66, render: (_, r) => r.zoneCode },
-    { ...sorted('type'), title: 'Type', width: 116, render: (_, r) => memberTypeNames[r.memberType] },
+    { ...sorted('type'), title: 'Type', width: 124, render: (_, r) => memberTypeNames[r.memberType] },
     { ...sorted('section'), title: 'Section', width: 134, render: (_, r) => r.section },
     { key: 'grade', title: 'Grade', width: 62, className: 'mt-sub', render: (_, r) => r.grade },
     { ...sorted('length'), title: 'Length, m', foldLabel: 'Length, m', numeric: true, width: 88, render: (_, r) => <Quantity value={r.lengthMm / 1000} decimals={3} unit="m" bare what="Length" /> },
