@@ -27,7 +27,7 @@ const inside = (box: Box, bounds: Box): boolean =>
   box.x >= bounds.x - 1e-6 && box.y >= bounds.y - 1e-6 && box.x + box.width <= bounds.x + bounds.width + 1e-6 && box.y + box.height <= bounds.y + bounds.height + 1e-6;
 
 /** How far a label moves to keep off a line. */
-const nearPx = 18;
+const nearPx = 30;
 /** The place asked for and, where that is taken, others ever further above and below it. */
 function* candidates(wish: LabelWish, reach: number): Generator<Place> {
   yield* wish.places;

@@ -35,7 +35,7 @@ function facts(sheet: MemberSheetDto): [string, ReactNode][] {
     ['Section factor', orMissing(formatSectionFactor(result?.sectionFactorPerM)).replace('1/m', 'm⁻¹')],
     ['Heated girth', girth(result?.heatedPerimeterMm)],
     ['Coated girth', girth(result?.coatedGirthMm)],
-    ['Area to protect', orMissing(formatArea(areaM2))],
+    ['Area to protect', result?.verdict === 'bare' ? 'none' : orMissing(formatArea(areaM2))],
     ['How the temperature comes about', `${wayNames[member.basis.way]}${result?.method && result.method.toLowerCase() !== wayNames[member.basis.way].toLowerCase() ? `: ${result.method}` : ''}`],
     ['Utilisation in fire', result?.utilisation == null ? 'not calculated' : formatNumber(result.utilisation, 2)],
     [`Bare steel at ${sheet.zone.periodMin} min`, orMissing(formatTemperature(bareAtEnd(sheet)))],
