@@ -1,6 +1,6 @@
 import { App, Button, Drawer } from 'antd';
 import type { FormEventHandler, ReactNode } from 'react';
-import { useId, useRef } from 'react';
+import { useEffect, useId, useRef, useState } from 'react';
 import { FailedSave } from './failed-save.js';
 import { useUnsavedChanges } from './use-unsaved-changes.js';
 
@@ -21,6 +21,21 @@ interface FormDrawerProps {
   children: ReactNode;
 }
 
+/** A drawer that leaves the page as it closes would leave the focus nowhere: it goes back to what opened it, or to the page. */
+function useFocusBack(open: boolean): void {
+  const [opener] = useState(() => document.activeElement);
+  useEffect(() => {
+    if (!open) return;
+    return () => {
+      setTimeout(() => {
+        if (document.activeElement !== document.body) return;
+        const back = opener?.isConnected && opener !== document.body ? opener : document.getElementById('main');
+        (back as HTMLElement | null)?.focus();
+      });
+    };
+  }, [open, opener]);
+}
+
 /** A form at the side of the page. Closing with unsaved changes asks first; a failed save keeps the form as it is. */
 export function FormDrawer({ title, open, onClose, onSubmit, dirty, saving, error, onReload, saveText = 'Save', extra, size = 520, children }: FormDrawerProps) {
   const { modal } = App.useApp();
@@ -32,6 +47,7 @@ export function FormDrawer({ title, open, onClose, onSubmit, dirty, saving, erro
     form.current?.querySelector<HTMLElement>('input:not(:disabled), textarea:not(:disabled)')?.focus();
   };
   useUnsavedChanges(open && dirty && !saving);
+  useFocusBack(open);
   const close = () => {
     if (!dirty) return onClose();
     modal.confirm({ title: 'Close without saving?', content: 'What you typed is not saved yet.', icon: null, okText: 'Close', cancelText: 'Go on editing', onOk: onClose });
