@@ -15,7 +15,8 @@ export const memberInputSchema = z.object({
   memberType: z.enum(memberTypes),
   sectionId: idSchema,
   grade: z.enum(steelGrades),
-  lengthMm: positiveSchema.max(100_000, 'is more than 100 m'),
+  // 7.5 or 12 typed for metres is a slip, not a member
+  lengthMm: positiveSchema.min(50, 'is less than 50 mm; lengths are in mm').max(100_000, 'is more than 100 m'),
   quantity: z.number({ error: 'must be a whole number' }).int('must be a whole number').min(1, 'must be at least 1').max(10_000, 'must be at most 10000'),
   exposure: exposureSchema,
   protectionForm: z.enum(protectionForms),

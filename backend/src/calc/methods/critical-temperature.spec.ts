@@ -65,6 +65,9 @@ describe('bending', () => {
     const result = criticalTemperature(member(calculatedBasis({ momentYKnm: moment }), { exposure: { arrangement: 'three-sides', reason: '' } }));
     expect(result).toMatchObject({ kind: 'under-strength', governing: 'bending' });
     expect(reason(result)).toContain('utilisation 1.01');
+    const { working } = explainCriticalTemperature(member(calculatedBasis({ momentYKnm: moment }), { exposure: { arrangement: 'three-sides', reason: '' } }));
+    const utilisation = working.find((step) => step.what === 'Degree of utilisation in bending');
+    expect(utilisation).toMatchObject({ value: expect.closeTo(1.01, 10), note: 'above 1: fails before any fire' });
   });
 
   it('loses resistance beside high shear (EN 1993-1-1 6.2.8)', () => {

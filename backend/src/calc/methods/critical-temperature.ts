@@ -118,6 +118,7 @@ function calculated(c: CriticalTemperatureCase, design: MemberDesign, working: W
   const limitStates = states.map(resultOf);
   const worst = limitStates.reduce((a, b) => (b.utilisation > a.utilisation ? b : a));
   if (worst.utilisation > 1) {
+    if (working) explainCold(states, limitStates, working);
     const reason = message('assessment.under-strength', {
       state: worst.name, effect: worst.effect, resistance: worst.resistanceCold, unit: worst.unit, utilisation: worst.utilisation,
     });
@@ -136,15 +137,31 @@ function calculated(c: CriticalTemperatureCase, design: MemberDesign, working: W
   };
 }
 
+function explainAt(state: LimitState, temperatureC: number, where: string, working: WorkingStep[]): void {
+  const own: WorkingStep[] = [];
+  state.explainAt(temperatureC, own);
+  working.push(...own.map((step) => ({ ...step, what: `${step.what}, ${where}` })));
+}
+
+/** A member that fails cold: each resistance at 20 °C and how far the effect goes beyond it. */
+function explainCold(states: LimitState[], results: LimitStateResult[], working: WorkingStep[]): void {
+  states.forEach((state, i) => {
+    const { effect, resistanceCold, utilisation, unit, name } = results[i]!;
+    explainAt(state, 20, 'at 20 °C', working);
+    working.push({
+      what: `Degree of utilisation in ${name}`, equation: 'μ_0 = E_fi,d/R_fi,d,0',
+      inputs: [{ symbol: 'E_fi,d', value: effect, unit }, { symbol: 'R_fi,d,0', value: resistanceCold, unit }],
+      value: utilisation, unit: '', source: `EN 1993-1-2:2005 4.2.4(3) with ${state.clause}`, ...(utilisation > 1 ? { note: 'above 1: fails before any fire' } : {}),
+    });
+  });
+}
+
 /** Per limit state: its resistance cold and at its own critical temperature, where it equals the effect. */
 function explainStates(states: LimitState[], results: LimitStateResult[], working: WorkingStep[]): void {
   states.forEach((state, i) => {
     const result = results[i]!;
-    for (const [where, temperatureC] of [['at 20 °C', 20], ['at its critical temperature', result.temperatureC]] as const) {
-      const own: WorkingStep[] = [];
-      state.explainAt(temperatureC, own);
-      working.push(...own.map((step) => ({ ...step, what: `${step.what}, ${where}` })));
-    }
+    explainAt(state, 20, 'at 20 °C', working);
+    explainAt(state, result.temperatureC, 'at its critical temperature', working);
     working.push({
       what: `Critical temperature in ${state.name}`, equation: 'highest θ with E_fi,d ≤ R_fi,d,θ',
       inputs: [{ symbol: 'E_fi,d', value: result.effect, unit: result.unit }], value: result.temperatureC, unit: '°C', source: `EN 1993-1-2:2005 4.2.4(1) with ${state.clause}`,

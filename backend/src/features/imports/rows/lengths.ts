@@ -5,6 +5,8 @@ import type { DecimalSign, Reading } from './numbers.js';
 
 export type ImportLengthUnit = 'mm' | 'm' | 'cm' | 'ft' | 'ft-in' | 'in';
 const longestMm = 100_000;
+/** shorter is a slip of units, as the contract of a member says too */
+const shortestMm = 50;
 
 const unitWords: Record<string, LengthUnit> = {
   mm: 'mm', cm: 'cm', m: 'm', metre: 'm', metres: 'm', meter: 'm', meters: 'm', in: 'in', inch: 'in', inches: 'in', '"': 'in', '″': 'in', '”': 'in',
@@ -20,7 +22,7 @@ export function readLength(text: string, field: string, unit: ImportLengthUnit, 
   if (word && !own) return refuse(message('import.row-not-a-number', { text, field }));
   if (!own && unit === 'ft-in') return refuse(message('import.row-feet-inches', { text }));
   const used = own ?? (unit as LengthUnit);
-  const value = readNumber(number, field, sign, (n) => n > 0 && lengthToMm(n, used) <= longestMm);
+  const value = readNumber(number, field, sign, (n) => lengthToMm(n, used) >= shortestMm && lengthToMm(n, used) <= longestMm);
   return value.ok ? inRange(lengthToMm(value.value, used), field, text) : value;
 }
 
@@ -38,7 +40,7 @@ function feetAndInches(text: string): number | null {
 
 function inRange(lengthMm: number, field: string, text: string): Reading<number> {
   if (lengthMm <= 0) return refuse(message('import.row-not-above-zero', { field, text }));
-  if (lengthMm > longestMm) return refuse(message('import.row-outside', { field, text, least: '0', greatest: '100 m' }));
+  if (lengthMm < shortestMm || lengthMm > longestMm) return refuse(message('import.row-outside', { field, text, least: '50 mm', greatest: '100 m' }));
   // binary noise of the conversion, far below any tolerance of fabrication
   return read(Number(lengthMm.toFixed(6)));
 }

@@ -92,8 +92,8 @@ describe('rows of a schedule', () => {
   it('take the decimal sign that other rows prove', () => {
     const read = readRows([headers, row({ 6: '6,500' }), row({ 0: 'B2', 6: '7,25' })], { ...context, mapping: { ...mapping, lengthUnit: 'm' } });
     expect(read.rows.map((r) => r.draft.lengthMm)).toEqual([6500, 7250]);
-    expect(readRows([headers, row({ 6: '6,500' })], context).rows[0]!.problems.map((p) => sentence(p.reason))).toEqual([
-      '"6,500" may mean 6500 or 6.5. Write it without a thousands separator.',
+    expect(readRows([headers, row({ 6: '62,500' })], context).rows[0]!.problems.map((p) => sentence(p.reason))).toEqual([
+      '"62,500" may mean 62500 or 62.5. Write it without a thousands separator.',
     ]);
   });
 });
