@@ -17,7 +17,7 @@ export const projectInputSchema = z.object({
 });
 export type ProjectInput = z.infer<typeof projectInputSchema>;
 /** Whoever starts a project says which roles they take on it. */
-export const projectCreateSchema = projectInputSchema.extend({ roles: z.array(z.enum(roles)).min(1, 'take at least one role') });
+export const projectCreateSchema = projectInputSchema.extend({ roles: z.array(z.enum(roles)).min(1, 'Choose at least one role.') });
 export type ProjectCreate = z.infer<typeof projectCreateSchema>;
 export const projectUpdateSchema = projectInputSchema.extend({ version: versionSchema });
 export type ProjectUpdate = z.infer<typeof projectUpdateSchema>;

@@ -13,10 +13,10 @@ function useLeave() {
   const signOut = useSignOut();
   const navigate = useNavigate();
   const { message } = App.useApp();
-  return () => signOut.mutate(undefined, {
-    onSuccess: () => { void navigate('/sign-in'); },
-    onError: (error) => { void message.error(error.message); },
-  });
+  // by the promise: this menu is gone by then, and whoever signs in next is not sent to the page that was open
+  return () => {
+    signOut.mutateAsync().then(() => navigate('/sign-in', { replace: true }), (error: Error) => { void message.error(error.message); });
+  };
 }
 
 /** At the right of the strip: who is signed in, and what they may set for themselves. */

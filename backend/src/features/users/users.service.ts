@@ -86,7 +86,7 @@ export class UsersService {
   /** Ends the person's other sessions too. */
   async changePassword(actor: Actor, input: PasswordChange, sessionId: string): Promise<void> {
     if (!(await this.authenticate(actor.email, input.current))) {
-      throw new Refusal(HttpStatus.UNPROCESSABLE_ENTITY, message('account.sign-in-failed', {}), { issues: [{ path: 'current', message: 'is not your present password' }] });
+      throw new Refusal(HttpStatus.UNPROCESSABLE_ENTITY, message('account.sign-in-failed', {}), { issues: [{ path: 'current', message: 'This is not your present password.' }] });
     }
     const passwordHash = await this.passwords.hash(input.next);
     await this.dataSource.transaction(async (manager) => {
