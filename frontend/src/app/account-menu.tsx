@@ -1,6 +1,5 @@
 import { App, Button, Dropdown, Radio } from 'antd';
 import { useState } from 'react';
-import { useNavigate } from 'react-router-dom';
 import type { MeDto } from '@mantlet/common';
 import { useSignOut } from '../features/session/api/session.js';
 import { PasswordDrawer } from '../features/session/components/password-drawer.js';
@@ -11,11 +10,10 @@ const themeNames: Record<ThemeChoice, string> = { system: 'As the system', light
 
 function useLeave() {
   const signOut = useSignOut();
-  const navigate = useNavigate();
   const { message } = App.useApp();
-  // by the promise: this menu is gone by then, and whoever signs in next is not sent to the page that was open
+  // the document is loaded anew: whoever signs in next finds nothing of this session, not even the address that was open
   return () => {
-    signOut.mutateAsync().then(() => navigate('/sign-in', { replace: true }), (error: Error) => { void message.error(error.message); });
+    signOut.mutateAsync().then(() => window.location.replace('/sign-in'), (error: Error) => { void message.error(error.message); });
   };
 }
 
