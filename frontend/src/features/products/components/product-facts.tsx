@@ -44,12 +44,14 @@ export function supplyFacts(kind: ProductDto['kind'], s: ProductSupply, currency
   return [['Bag', s.bagKg === null ? null : `${s.bagKg} kg`], ['Yield of a bag', s.bagYieldM3 === null ? null : `${s.bagYieldM3} m³ in place`], loss, ['Material', money(s.materialRate, 'm³')], labour];
 }
 
-export function SupplyFacts({ product, currency }: { product: ProductDto; currency: string | null }) {
+/** `withheld`: in the shared library rates are the administrator's to see; a project shows them to its design team. */
+export function SupplyFacts({ product, currency, withheld }: { product: ProductDto; currency: string | null; withheld: boolean }) {
+  const missing = (what: string) => (withheld && (what === 'Material' || what === 'Labour') ? 'Shown in projects, to those who design' : 'Not given');
   return (
     <Panel title="Buying and applying">
       <dl className="mt-facts">
         {supplyFacts(product.kind, product.supply, currency).map(([what, value]) => (
-          <div key={what} style={{ display: 'contents' }}><dt>{what}</dt><dd>{value ?? <span className="mt-sub">Not given</span>}</dd></div>
+          <div key={what} style={{ display: 'contents' }}><dt>{what}</dt><dd>{value ?? <span className="mt-sub">{missing(what)}</span>}</dd></div>
         ))}
       </dl>
     </Panel>

@@ -68,7 +68,7 @@ function Product({ library, productId, at, projectName, currency, editsOwn }: Pr
             <div className="mt-stack">
               <EvidenceFacts product={p} />
               <EvidenceFile product={p} library={library} canEdit={canEdit} />
-              <SupplyFacts product={p} currency={currency} />
+              <SupplyFacts product={p} currency={currency} withheld={library === null && !canEdit} />
             </div>
           </div>
         )}
