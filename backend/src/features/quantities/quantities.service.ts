@@ -1,5 +1,5 @@
 import { Injectable } from '@nestjs/common';
-import { formatDecimal, formatNumber, sumDecimals } from '@mantlet/common';
+import { Decimal, formatDecimal, formatNumber, sumDecimals } from '@mantlet/common';
 import type { ProductKind, PurchaseDto, QuantitiesDto, QuantityLineDto, QuantityQuery, SnapshotQuantities } from '@mantlet/common';
 import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource } from 'typeorm';
@@ -110,7 +110,7 @@ export function namesOf(inputs: ProjectInputs): Record<string, string> {
 
 /** What to buy of a product, in words; null where its supply data lack something. */
 export function inWords(purchase: PurchaseDto, lines: readonly QuantityLineDto[]): string | null {
-  if (purchase.kind === 'coating') return purchase.litres && `${formatDecimal(purchase.litres)} L`;
+  if (purchase.kind === 'coating') return purchase.litres && `${formatDecimal(new Decimal(purchase.litres).toFixed(0, Decimal.ROUND_UP))} L`;
   if (purchase.kind === 'board') return purchase.boards.length === 0 ? null : `${formatNumber(purchase.boards.reduce((sum, plan) => sum + plan.sheets, 0))} sheets`;
   const own = lines.filter((line) => line.productId === purchase.productId);
   return `${formatDecimal(sumDecimals(own.map((line) => line.volumeM3)).toFixed(2))} m³`;

@@ -3,6 +3,7 @@ import { useEffect, useId } from 'react';
 import { Link, useLocation, useSearchParams } from 'react-router-dom';
 import type { ProjectDto, SiteDto, SiteLevelDto } from '@mantlet/common';
 import { formatDate } from '../../../lib/format.js';
+import { LinkButton } from '../../../ui/link-button.js';
 import { Page } from '../../../ui/page.js';
 import { Panel } from '../../../ui/panel.js';
 import { EmptyState, QueryState } from '../../../ui/states.js';
@@ -69,7 +70,7 @@ function Nothing({ projectId }: { projectId: string }) {
   const design = useMay()('see-design');
   return (
     <Panel label="Site">
-      <EmptyState title="Nothing has been issued yet" action={design ? <Link to={`/projects/${projectId}/schedule`}><Button type="primary">Go to the schedule</Button></Link> : null}>
+      <EmptyState title="Nothing has been issued yet" action={design ? <LinkButton to={`/projects/${projectId}/schedule`} type="primary">Go to the schedule</LinkButton> : null}>
         {design ? 'The site reads issued revisions only. Prepare, check and issue the schedule; it then stands here floor by floor.' : 'Nothing is to be applied before a specifier issues the schedule. What to apply where then stands here, floor by floor.'}
       </EmptyState>
     </Panel>
