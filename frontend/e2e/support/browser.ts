@@ -79,8 +79,15 @@ export async function goTo(page: Page, name: string): Promise<void> {
 
 /** Opens a select by its label and takes the choice with this text. */
 export async function choose(page: Page, within: Page | Locator, label: string | RegExp, text: string | RegExp): Promise<void> {
-  await within.getByRole('combobox', { name: label }).click();
-  await page.locator('.ant-select-dropdown:visible').getByTitle(text, { exact: true }).click();
+  const box = within.getByRole('combobox', { name: label });
+  const taken = within.locator('.ant-select').filter({ has: page.getByRole('combobox', { name: label }) }).filter({ hasText: text });
+  // a list that is still opening on a busy machine may swallow the click
+  for (let attempt = 0; attempt < 3 && (await taken.count()) === 0; attempt += 1) {
+    await box.click();
+    await page.locator('.ant-select-dropdown:visible').getByTitle(text, { exact: true }).click();
+    await taken.waitFor({ timeout: 5000 }).catch(() => undefined);
+  }
+  await taken.waitFor();
 }
 
 export const heading = (page: Page): Locator => page.getByRole('heading', { level: 1 });
