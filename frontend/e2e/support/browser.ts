@@ -37,7 +37,7 @@ export class People {
   async visitor(options: { empty?: boolean; dark?: boolean } = {}): Promise<Page> {
     const context = await this.browser.newContext({
       baseURL: required(options.empty ? 'MANTLET_E2E_EMPTY_URL' : 'MANTLET_E2E_URL'), viewport: { width: 1440, height: 920 }, locale: 'en-GB',
-      acceptDownloads: true, colorScheme: options.dark ? 'dark' : 'light', reducedMotion: 'reduce',
+      acceptDownloads: true, colorScheme: options.dark ? 'dark' : 'light',
     });
     this.contexts.push(context);
     context.setDefaultTimeout(30_000);
@@ -81,11 +81,11 @@ export async function goTo(page: Page, name: string): Promise<void> {
 export async function choose(page: Page, within: Page | Locator, label: string | RegExp, text: string | RegExp): Promise<void> {
   const box = within.getByRole('combobox', { name: label });
   const taken = within.locator('.ant-select').filter({ has: page.getByRole('combobox', { name: label }) }).filter({ hasText: text });
-  // a list that is still opening on a busy machine may swallow the click
-  for (let attempt = 0; attempt < 3 && (await taken.count()) === 0; attempt += 1) {
+  // on a busy machine a list may open off the page or lose the click; a person opens it again
+  for (let attempt = 0; attempt < 6 && (await taken.count()) === 0; attempt += 1) {
     await box.click();
-    await page.locator('.ant-select-dropdown:visible').getByTitle(text, { exact: true }).click();
-    await taken.waitFor({ timeout: 5000 }).catch(() => undefined);
+    const option = page.locator('.ant-select-dropdown:visible').getByTitle(text, { exact: true });
+    await option.click({ timeout: 4000 }).then(() => taken.waitFor({ timeout: 4000 })).catch(() => undefined);
   }
   await taken.waitFor();
 }
