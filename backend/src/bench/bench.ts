@@ -42,7 +42,7 @@ async function run(connectionString: string): Promise<void> {
     const plain: number[] = [];
     const store: number[] = [];
     for (let round = 0; round < rounds; round += 1) {
-      // other members in every round: nothing remembered from the last one helps
+      // other members in every round: no answer of the last one helps; the fields that its first members filled are kept, as in a running server
       const cases = generatedMembers(count, 20_261 + round);
       const assessed = timed(() => assessMembers(cases));
       assess.push(assessed.ms);

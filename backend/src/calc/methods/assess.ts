@@ -54,17 +54,20 @@ export interface Solvers {
 /** Nearer than this to the limit the member is integrated itself; the field is read to within a quarter of it. */
 const nearLimitK = 2;
 
+function integrated(heating: UnprotectedHeating, minutes: number): number {
+  return unprotectedTemperature({ ...heating, minutes });
+}
+
 /**
  * Bare steel under a nominal curve is read from the field of histories, within 0.5 K. Where that is too near the limit to tell bare
  * from protected, and in natural fires, the member is integrated by (4.25) in steps of 5 s.
  */
 export const solveBare: BareSolver = (heating, periodMin, limitC) => {
-  const integrated = () => unprotectedTemperature({ ...heating, minutes: periodMin });
-  if (heating.curve.kind === 'parametric') return { temperatureC: integrated(), minutes: bareMinutes({ ...heating, targetC: limitC }) };
+  if (heating.curve.kind === 'parametric') return { temperatureC: integrated(heating, periodMin), minutes: bareMinutes({ ...heating, targetC: limitC }) };
   const field = bareField(heating.curve.kind, heating.emissivity);
   const read = field.temperatureC(heating.sectionFactorPerM, heating.shadowFactor, periodMin);
   return {
-    temperatureC: Math.abs(read - limitC) < nearLimitK ? integrated() : read,
+    temperatureC: Math.abs(read - limitC) < nearLimitK ? integrated(heating, periodMin) : read,
     minutes: field.minutesTo(heating.sectionFactorPerM, heating.shadowFactor, limitC),
   };
 };

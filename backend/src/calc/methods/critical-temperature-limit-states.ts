@@ -81,13 +81,13 @@ function bucklingTemperature(share: number, slenderness: number, imperfection: n
 }
 
 export function compression(
-  c: CriticalTemperatureCase, design: MemberDesign & { bucklingLengthYMm: number; bucklingLengthZMm: number }, effect: number, { fy, gamma }: Material, working: WorkingStep[] | null,
+  c: CriticalTemperatureCase, rule: MemberDesign['bucklingRule'], systemLengthMm: { y: number; z: number }, effect: number, { fy, gamma }: Material, working: WorkingStep[] | null,
 ): LimitState {
   const { areaMm2, iyMm4, izMm4 } = c.properties;
-  const factor = bracedLengthFactor[design.bucklingRule];
+  const factor = bracedLengthFactor[rule];
   const about = (axis: 'y' | 'z') => {
     const input = {
-      areaMm2, yieldStrengthMPa: fy, lengthMm: factor * (axis === 'y' ? design.bucklingLengthYMm : design.bucklingLengthZMm),
+      areaMm2, yieldStrengthMPa: fy, lengthMm: factor * systemLengthMm[axis],
       secondMomentMm4: axis === 'y' ? iyMm4 : izMm4, modulusMPa: ELASTIC_MODULUS_MPA,
     };
     if (working) {

@@ -93,7 +93,7 @@ function limitStatesOf(c: CriticalTemperatureCase, design: MemberDesign, working
   const states: LimitState[] = [];
   if (effect.tensionN > 0) states.push(tension(c, effect.tensionN, material));
   if (effect.compressionN > 0 && bucklingLengthYMm !== null && bucklingLengthZMm !== null) {
-    states.push(compression(c, { ...design, bucklingLengthYMm, bucklingLengthZMm }, effect.compressionN, material, working));
+    states.push(compression(c, design.bucklingRule, { y: bucklingLengthYMm, z: bucklingLengthZMm }, effect.compressionN, material, working));
   }
   if (effect.momentYNmm > 0) states.push(bending(c, design, effect, found.value ?? 3, material));
   if (effect.shearZN > 0) states.push(shear(c, effect.shearZN, material));

@@ -19,8 +19,7 @@ const names: Record<keyof Effects, { what: string; unit: string }> = {
 };
 
 /** Largest and smallest value of one effect over the combinations with and without each variable action. */
-function envelope(actions: Actions, design: DesignBasis, key: keyof Effects, working: WorkingStep[] | null): [number, number] {
-  if (actions.given === 'fire-effect') return [actions.effect[key], actions.effect[key]];
+function envelope(actions: Exclude<Actions, { given: 'fire-effect' }>, design: DesignBasis, key: keyof Effects, working: WorkingStep[] | null): [number, number] {
   const permanent = actions.permanent[key];
   const { leading } = actions;
   const first = leading ? design.psi[leading.category][design.psiFi] * leading[key] : 0;
@@ -47,6 +46,10 @@ function envelope(actions: Actions, design: DesignBasis, key: keyof Effects, wor
  * A variable action that acts favourably is left out, per effect.
  */
 export function fireEffect(actions: Actions, design: DesignBasis, working: WorkingStep[] | null = null): FireEffect {
+  if (actions.given === 'fire-effect') {
+    const { axialKn, momentYKnm, shearZKn } = actions.effect;
+    return { compressionN: Math.max(axialKn, 0) * 1e3, tensionN: Math.max(-axialKn, 0) * 1e3, momentYNmm: Math.abs(momentYKnm) * 1e6, shearZN: Math.abs(shearZKn) * 1e3 };
+  }
   const [most, least] = envelope(actions, design, 'axialKn', working);
   const [momentMost, momentLeast] = envelope(actions, design, 'momentYKnm', working);
   const [shearMost, shearLeast] = envelope(actions, design, 'shearZKn', working);

@@ -30,12 +30,21 @@ const NODE_MIN = (STEP_S * KEEP_EVERY) / 60;
 const FILL_AHEAD = 200;
 export const FIELD_HORIZON_MIN = 240;
 
+/** marks of the search for a temperature, K apart */
+const MARK_K = 10;
+const MARKS = 140;
+const NEVER = 0xffff;
+
 /** The history of one k_sh·A_m/V, integrated only as far as anybody has asked. */
 interface Row {
   rate: number;
   /** °C at each node; known up to and including `filled` */
   nodesC: Float64Array;
   filled: number;
+  /** first node at or above each multiple of MARK_K; NEVER where none is filled yet */
+  reached: Uint16Array;
+  /** the next mark to be reached */
+  mark: number;
 }
 
 class Field implements BareField {
@@ -57,7 +66,7 @@ class Field implements BareField {
     let row = this.rows[index];
     if (!row) {
       const rate = (LEAST * Math.exp(index * RATIO) * STEP_S) / STEEL_DENSITY_KG_PER_M3;
-      row = { rate, nodesC: new Float64Array(this.nodes), filled: 0 };
+      row = { rate, nodesC: new Float64Array(this.nodes), filled: 0, reached: new Uint16Array(MARKS).fill(NEVER), mark: 0 };
       row.nodesC[0] = START_C;
       this.rows[index] = row;
     }
@@ -69,6 +78,7 @@ class Field implements BareField {
     const { rate, nodesC } = row;
     const { convection, radiation } = this;
     let steelC = nodesC[row.filled]!;
+    if (row.filled === 0) for (; row.mark * MARK_K <= steelC; row.mark += 1) row.reached[row.mark] = 0;
     for (let node = row.filled + 1, i = row.filled * KEEP_EVERY; node <= upTo; node += 1) {
       for (let k = 0; k < KEEP_EVERY; k += 1, i += 1) {
         const kelvin = steelC + 273;
@@ -76,6 +86,7 @@ class Field implements BareField {
         steelC += (rate * (convection * (middleC[i]! - steelC) + radiation * (middle4[i]! - square * square))) / steelSpecificHeat(steelC);
       }
       nodesC[node] = steelC;
+      for (; row.mark * MARK_K <= steelC; row.mark += 1) row.reached[row.mark] = node;
     }
     row.filled = Math.max(row.filled, upTo);
   }
@@ -115,7 +126,10 @@ class Field implements BareField {
       if (high.filled < until) this.fill(high, until);
     }
     if (between(low, high, until, share) < targetC) return null;
-    let from = 0;
+    // the hotter row has passed the mark below before both together do, and the cooler one passes the mark above after them
+    const mark = Math.floor(targetC / MARK_K);
+    let from = Math.max(high.reached[mark]! - 1, 0);
+    until = Math.min(until, low.reached[mark + 1]!);
     while (until - from > 1) {
       const middle = (from + until) >> 1;
       if (between(low, high, middle, share) < targetC) from = middle;

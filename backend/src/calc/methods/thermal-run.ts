@@ -4,7 +4,7 @@ import { STEEL_DENSITY_KG_PER_M3, steelSpecificHeat } from '../standards/en-1993
 import { gasHistory } from './heating-gas.js';
 import { conductivityAt } from './heating-protected.js';
 
-const startC = 20;
+export const START_C = 20;
 const dwellC = 100;
 const stepS = GREATEST_PROTECTED_STEP_S;
 
@@ -29,7 +29,7 @@ interface Lines {
 }
 const linesOf = new WeakMap<ThermalProperties, Lines>();
 
-function conductivityLines(p: ThermalProperties): Lines {
+export function conductivityLines(p: ThermalProperties): Lines {
   const known = linesOf.get(p);
   if (known) return known;
   const rows = typeof p.conductivityWPerMK === 'number' ? [] : p.conductivityWPerMK;
@@ -47,7 +47,7 @@ function conductivityLines(p: ThermalProperties): Lines {
 }
 
 /** What one thickness brings into (4.27), worked out once: flow without λ, and φ·c_a/3 and φ·c_a/10, which do not change. */
-function constantsOf(p: ThermalProperties, sectionFactorPerM: number, thicknessMm: number) {
+export function constantsOf(p: ThermalProperties, sectionFactorPerM: number, thicknessMm: number) {
   const thicknessM = thicknessMm / 1000;
   const ratio = (p.specificHeatJPerKgK * p.densityKgPerM3 * thicknessM * sectionFactorPerM) / STEEL_DENSITY_KG_PER_M3;
   const dwellMin = p.moisturePercent === 0 ? 0 : moistureDwellFormula.evaluate({
@@ -57,14 +57,14 @@ function constantsOf(p: ThermalProperties, sectionFactorPerM: number, thicknessM
 }
 
 /** (4.27) over one step; c_a·(1 + φ/3) is written c_a + φ·c_a/3 */
-function riseOf(gasC: number, gasRise: number, steelC: number, lambdaFlow: number, third: number, tenth: number): number {
+export function riseOf(gasC: number, gasRise: number, steelC: number, lambdaFlow: number, third: number, tenth: number): number {
   const heat = steelSpecificHeat(steelC);
   const rise = (lambdaFlow * (gasC - steelC)) / (heat + third) - expm1(tenth / heat) * gasRise;
   return gasRise > 0 && rise < 0 ? 0 : rise;
 }
 
 /** Share of a step for which water holds the steel at 100 °C on its way up. */
-function heldShare(dwellSteps: number, steelC: number, rise: number): number {
+export function heldShare(dwellSteps: number, steelC: number, rise: number): number {
   return dwellSteps > 0 && rise > 0 && steelC + rise > dwellC ? Math.min(dwellSteps, 1 - (dwellC - steelC) / rise) : 0;
 }
 
@@ -86,8 +86,8 @@ export function thermalRuns(
   let lineB = 0;
   let { dwellSteps: dwellA } = a;
   let { dwellSteps: dwellB } = b;
-  let steelA = startC;
-  let steelB = startC;
+  let steelA = START_C;
+  let steelB = START_C;
   let passedA = -1;
   for (let i = 0; i < steps; i += 1) {
     const gasC = middleC[i] as number;

@@ -5,6 +5,7 @@ import { stacksOf } from '../standards/en-13381/stacks.js';
 import type { Determined, RequiredThickness, ThicknessRequest } from '../types.js';
 import type { Stack } from '../standards/en-13381/stacks.js';
 import { protectedTemperature } from './heating.js';
+import { thermalField } from './thermal-field.js';
 import { thermalRuns } from './thermal-run.js';
 import type { ThermalRun } from './thermal-run.js';
 
@@ -115,6 +116,28 @@ function guessed(near: Remembered | undefined, place: ThermalPlace, stacks: read
   return indexNear(stacks, near.thicknessMm * factor * ((near.temperatureC - 20) / (place.temperatureC - 20)) ** 1.4);
 }
 
+/** Searches by running, from where an earlier answer near this case suggests. */
+function searched(stacks: readonly Stack[], place: ThermalPlace, curve: FireCurve, periodMin: number): number {
+  let known = remembered.get(place.properties);
+  if (!known) remembered.set(place.properties, (known = new Map()));
+  const key = neighbourhood(place, curve, periodMin);
+  const index = leastThatHolds(stacks, place, curve, periodMin, guessed(known.get(key), place, stacks));
+  if (known.size > mostRemembered) known.clear();
+  const stack = stacks[index];
+  if (stack) known.set(key, { thicknessMm: stack.thicknessMm, sectionFactorPerM: place.sectionFactorPerM, temperatureC: place.temperatureC });
+  return index;
+}
+
+/**
+ * As `leastThatHolds`, read from the field where that leaves no doubt. Where it does, the member's own runs decide, begun at the
+ * thickness read; where the field does not reach (fires other than the smooth nominal curves, periods that are no multiple of 15 min), they do all of it.
+ */
+export function leastIndex(stacks: readonly Stack[], place: ThermalPlace, curve: FireCurve, periodMin: number): number {
+  const read = thermalField(place.properties, stacks, curve)?.leastThatHolds(place.sectionFactorPerM, periodMin, place.temperatureC);
+  if (!read) return searched(stacks, place, curve, periodMin);
+  return read.certain ? read.index : leastThatHolds(stacks, place, curve, periodMin, read.index);
+}
+
 /** Least stocked thickness, stack of layers or step of a spray that holds the design temperature by EN 1993-1-2 (4.27). */
 export function thicknessFromThermal(properties: ThermalProperties, kind: ProductKind, request: ThicknessRequest): Determined<RequiredThickness> {
   const found = placeInThermal(properties, kind, request);
@@ -127,14 +150,8 @@ export function thicknessFromThermal(properties: ThermalProperties, kind: Produc
   const greatest = stacks[stacks.length - 1];
   if (!greatest) return { ok: false, reason: message('product.no-stock', {}) };
   const place = found.value;
-  let known = remembered.get(properties);
-  if (!known) remembered.set(properties, (known = new Map()));
-  const key = neighbourhood(place, curve, periodMin);
-  const index = leastThatHolds(stacks, place, curve, periodMin, guessed(known.get(key), place, stacks));
-  if (known.size > mostRemembered) known.clear();
-  const stack = stacks[index];
+  const stack = stacks[leastIndex(stacks, place, curve, periodMin)];
   if (!stack) return { ok: false, reason: message('product.outside-thickness', { greatest: greatest.thicknessMm, unit: 'mm' }) };
-  known.set(key, { thicknessMm: stack.thicknessMm, sectionFactorPerM: place.sectionFactorPerM, temperatureC: place.temperatureC });
   const layers = stack.layers && stack.layers.length > 1 ? ` in layers of ${stack.layers.join(' + ')} mm` : '';
   const reading = `Thermal properties, (4.27): R ${periodMin}, ${limitInWords(place.temperatureC)}, A/V ${Math.round(place.sectionFactorPerM)}${layers}`;
   return { ok: true, value: { thickness: stack.thicknessMm, layers: stack.layers, reading } };

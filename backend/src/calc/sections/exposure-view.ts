@@ -46,5 +46,10 @@ function seen(faces: number): Determined<ExposureView> {
 
 /** A stretch is heated when fire reaches it through an exposed face and no filling covers it. */
 export function isHeated(segment: ContourSegment, view: ExposureView): boolean {
-  return (segment.faces & view.faces) !== 0 && !(view.filled && segment.recess);
+  return reaches(segment.faces, segment.recess, view);
+}
+
+/** `isHeated` of a stretch known by its faces and whether it lies in a recess. */
+export function reaches(faces: number, recess: boolean, view: ExposureView): boolean {
+  return (faces & view.faces) !== 0 && !(view.filled && recess);
 }

@@ -2,7 +2,7 @@ import type { Exposure, ProtectionForm, SectionProperties, SectionShape } from '
 import type { Determined, SectionFactor } from '../types.js';
 import { faceBits } from './contour.js';
 import type { Contour } from './contour.js';
-import { exposureView, isHeated } from './exposure-view.js';
+import { exposureView, reaches } from './exposure-view.js';
 import type { ExposureView } from './exposure-view.js';
 import { contourOf } from './shape-contour.js';
 
@@ -46,10 +46,12 @@ export function sectionFactor(
 function heatedProfile(contour: Contour, view: ExposureView): { lengthMm: number; recess: boolean } {
   let lengthMm = 0;
   let recess = false;
-  for (const segment of contour.loops[0]!) {
-    if (!isHeated(segment, view)) continue;
-    lengthMm += segment.lengthMm;
-    recess ||= segment.recess;
+  const { lengthsMm, faces, recesses } = contour.girth;
+  for (let i = 0; i < lengthsMm.length; i += 1) {
+    const inRecess = recesses[i] === 1;
+    if (!reaches(faces[i]!, inRecess, view)) continue;
+    lengthMm += lengthsMm[i]!;
+    recess ||= inRecess;
   }
   return { lengthMm, recess };
 }

@@ -1,7 +1,7 @@
 import { message } from '@mantlet/common';
 import type { SectionShape } from '@mantlet/common';
 import type { Determined } from '../types.js';
-import { circleLoop, corner, faceBits, reversed, roundedLoop, taperReferenceMm } from './contour.js';
+import { circleLoop, corner, faceBits, girthOf, reversed, roundedLoop, taperReferenceMm } from './contour.js';
 import type { Contour, ContourSegment } from './contour.js';
 import { rememberByShape } from './remember.js';
 import { shapeFault } from './shape-fault.js';
@@ -112,5 +112,5 @@ export const contourOf = rememberByShape((shape): Determined<Contour> => {
   if (fault) return { ok: false, reason: fault };
   const loops = loopsOf(shape);
   if (loops.some((loop) => loop === null)) return { ok: false, reason: message('section.radii-do-not-fit', {}) };
-  return { ok: true, value: { loops: loops as ContourSegment[][], ...boxSize(shape) } };
+  return { ok: true, value: { loops: loops as ContourSegment[][], girth: girthOf(loops[0] as ContourSegment[]), ...boxSize(shape) } };
 });
