@@ -38,6 +38,8 @@ export class People {
     const context = await this.browser.newContext({
       baseURL: required(options.empty ? 'MANTLET_E2E_EMPTY_URL' : 'MANTLET_E2E_URL'), viewport: { width: 1440, height: 920 }, locale: 'en-GB',
       acceptDownloads: true, colorScheme: options.dark ? 'dark' : 'light',
+      // some people's systems ask for stillness; it also spares the waiting
+      reducedMotion: 'reduce',
     });
     this.contexts.push(context);
     context.setDefaultTimeout(30_000);
@@ -79,15 +81,9 @@ export async function goTo(page: Page, name: string): Promise<void> {
 
 /** Opens a select by its label and takes the choice with this text. */
 export async function choose(page: Page, within: Page | Locator, label: string | RegExp, text: string | RegExp): Promise<void> {
-  const box = within.getByRole('combobox', { name: label });
-  const taken = within.locator('.ant-select').filter({ has: page.getByRole('combobox', { name: label }) }).filter({ hasText: text });
-  // on a busy machine a list may open off the page or lose the click; a person opens it again
-  for (let attempt = 0; attempt < 6 && (await taken.count()) === 0; attempt += 1) {
-    await box.click();
-    const option = page.locator('.ant-select-dropdown:visible').getByTitle(text, { exact: true });
-    await option.click({ timeout: 4000 }).then(() => taken.waitFor({ timeout: 4000 })).catch(() => undefined);
-  }
-  await taken.waitFor();
+  await within.getByRole('combobox', { name: label }).click();
+  await page.locator('.ant-select-dropdown:visible').getByTitle(text, { exact: true }).click();
+  await within.locator('.ant-select').filter({ has: page.getByRole('combobox', { name: label }) }).filter({ hasText: text }).waitFor();
 }
 
 export const heading = (page: Page): Locator => page.getByRole('heading', { level: 1 });
