@@ -36,8 +36,8 @@ describe('site', () => {
     expect(hall.items.map((i) => i.mark)).toEqual(['B0-001', 'B0-002', 'C0-001', 'C0-002']);
     const beam = hall.items[0]!;
     expect(beam).toMatchObject({ section: 'IPE 300', quantity: 4, faces: 'Three sides, slab on top', productName: 'Testcoat', kind: 'coating' });
-    expect(beam.thickness).toMatch(/^[\d,]+ µm$/);
-    expect(beam.wetThickness).toMatch(/^[\d,]+ µm$/);
+    expect(beam.thickness).toMatch(/^[\d\u202f]+ µm$/);
+    expect(beam.wetThickness).toMatch(/^[\d\u202f]+ µm$/);
     expect(beam.coats).toBeGreaterThan(0);
     expect(hall.items[2]!.thickness).toMatch(/^\d+ mm/);
     expect(site.levels[1]!.zones[0]!.bare).toEqual([{ mark: 'B1-003', section: 'HE 300 B', memberType: 'beam', quantity: 1 }]);
@@ -58,6 +58,15 @@ describe('site', () => {
     const coating = site.purchase.find((m) => m.kind === 'coating')!;
     expect(litres.toFixed(2)).toBe(coating.litres);
     expect(coating.containers).toBe(litres.div(20).ceil().toNumber());
+    for (const level of site.levels) {
+      const used = level.materials.find((m) => m.kind === 'coating');
+      const brought = level.purchase.find((m) => m.kind === 'coating');
+      expect(brought?.litres).toBe(used?.litres);
+      expect(brought?.containers).toBe(used ? new Decimal(used.litres!).div(20).ceil().toNumber() : undefined);
+    }
+    const boards = (materials: SiteDto['purchase']): number => materials.reduce((total, m) => total + (m.sheets ?? 0), 0);
+    expect(boards(site.purchase)).toBeGreaterThan(0);
+    expect(site.levels.reduce((total, l) => total + boards(l.purchase), 0)).toBeGreaterThanOrEqual(boards(site.purchase));
     for (const board of site.purchase.filter((m) => m.kind === 'board')) expect(board.sheets).toBeGreaterThan(0);
     expect(site.purchase.find((m) => m.kind === 'spray')!.bags).toBeGreaterThan(0);
   });

@@ -111,5 +111,7 @@ export interface SnapshotQuantities {
   lines: QuantityLineDto[];
   byLevelAndProduct: QuantitySplitDto;
   purchases: PurchaseDto[];
+  /** whole packages where each floor is delivered by itself; absent from records frozen before this was kept */
+  purchasesByLevel?: PurchaseDto[];
   markUpPercent: string; markUp: string | null; totalWithMarkUp: string | null;
 }

@@ -20,7 +20,10 @@ export interface SiteMaterialDto {
 }
 export interface SiteBareDto { mark: string; section: string; memberType: MemberType; quantity: number }
 export interface SiteZoneDto { id: string; code: string; name: string; periodMin: number; items: SiteItemDto[]; bare: SiteBareDto[]; materials: SiteMaterialDto[] }
-export interface SiteLevelDto { id: string; code: string; name: string; elevationM: number; zones: SiteZoneDto[]; materials: SiteMaterialDto[] }
+export interface SiteLevelDto { id: string; code: string; name: string; elevationM: number; zones: SiteZoneDto[]; materials: SiteMaterialDto[];
+  /** whole containers, bags and sheets if this floor is delivered by itself; empty where the frozen record does not say */
+  purchase: SiteMaterialDto[];
+}
 export interface SiteDto {
   project: { number: string; name: string; place: string; currency: string } | null;
   revision: { id: string; code: string; issuedAt: string; pdfSha256: string; pdfAvailable: boolean } | null;

@@ -50,10 +50,11 @@ export class QuantitiesService {
   /** As a snapshot freezes them: by level and product, bought once for the project. */
   async frozen(manager: EntityManager, inputs: ProjectInputs): Promise<SnapshotQuantities> {
     const { lines, purchases } = await this.takeoffOf(manager, inputs, 'project');
+    const { purchases: purchasesByLevel } = await this.takeoffOf(manager, inputs, 'level');
     const byLevelAndProduct = splitQuantities(lines, 'level', 'product');
     const { markUpPercent } = inputs.project.settings;
     const priced = withMarkUp(byLevelAndProduct.total.cost, markUpPercent, MONEY_PLACES);
-    return { lines, byLevelAndProduct, purchases, markUpPercent, markUp: priced.markUp, totalWithMarkUp: priced.total };
+    return { lines, byLevelAndProduct, purchases, purchasesByLevel, markUpPercent, markUp: priced.markUp, totalWithMarkUp: priced.total };
   }
 
   async totalsByProduct(projectId: string): Promise<ProductTotal[]> {

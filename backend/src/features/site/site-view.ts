@@ -12,7 +12,7 @@ function sumOrNull(values: readonly (string | null)[], places: number): string |
   return values.some((v) => v === null) ? null : sumDecimals(values as string[]).toFixed(places);
 }
 
-/** What some lines need, product by product; boards by thickness, because they are fetched from the stack by it. Whole packages are bought once, for the job. */
+/** What some lines need, product by product; boards by thickness, because they are fetched from the stack by it. Whole packages are another matter: `purchased`. */
 function materialsOf(lines: readonly QuantityLineDto[], names: ReadonlyMap<string, string>, prices: boolean): SiteMaterialDto[] {
   const groups = new Map<string, QuantityLineDto[]>();
   for (const line of lines) {
@@ -40,9 +40,9 @@ function materialsOf(lines: readonly QuantityLineDto[], names: ReadonlyMap<strin
 const boardThickness = ({ thickness, layers }: Pick<QuantityLineDto, 'thickness' | 'layers'>): string =>
   formatThickness(thickness, 'mm') + (layers && layers.length > 1 ? ` (${layers.join(' + ')})` : '');
 
-/** What to buy of a product for the whole job: containers, sheets and bags are rounded up here and nowhere else. */
-function purchased(purchase: PurchaseDto, snapshot: ScheduleSnapshot, names: ReadonlyMap<string, string>, prices: boolean): SiteMaterialDto[] {
-  const lines = snapshot.quantities.lines.filter((line) => line.productId === purchase.productId);
+/** What to buy of a product, for the whole job or for the floor that `lines` are of: whole containers, sheets and bags. */
+function purchased(purchase: PurchaseDto, all: readonly QuantityLineDto[], names: ReadonlyMap<string, string>, prices: boolean): SiteMaterialDto[] {
+  const lines = all.filter((line) => line.productId === purchase.productId && (purchase.levelId === null || line.levelId === purchase.levelId));
   const whole: SiteMaterialDto = {
     ...none, productName: names.get(purchase.productId) ?? '', kind: purchase.kind, areaM2: sumDecimals(lines.map((l) => l.netM2)).toFixed(2),
     volumeM3: sumDecimals(lines.map((l) => l.volumeM3)).toFixed(4), litres: purchase.litres, containers: purchase.containers, bags: purchase.bags,
@@ -91,12 +91,14 @@ function zoneOf(zone: SnapshotZone, snapshot: ScheduleSnapshot, lineOf: Readonly
 /** A frozen schedule as the site reads it: from the ground up, zone by zone. Pure. */
 export function siteOf(snapshot: ScheduleSnapshot, prices: boolean): { levels: SiteLevelDto[]; purchase: SiteMaterialDto[] } {
   const names = new Map(snapshot.products.map((p) => [p.id, p.name]));
-  const { lines, purchases } = snapshot.quantities;
+  const { lines, purchases, purchasesByLevel = [] } = snapshot.quantities;
   const lineOf = new Map(lines.flatMap((line) => line.memberIds.map((id): [string, QuantityLineDto] => [id, line])));
   const levels = snapshot.levels.map(({ id, code, name, elevationM }): SiteLevelDto => ({
     id, code, name, elevationM,
     zones: snapshot.zones.filter((zone) => zone.levelId === id).map((zone) => zoneOf(zone, snapshot, lineOf, names, prices)),
     materials: materialsOf(lines.filter((line) => line.levelId === id), names, prices),
+    // without prices: whole sheets for a floor cost more than its share of the job, which is what the lines are priced by
+    purchase: purchasesByLevel.filter((p) => p.levelId === id).flatMap((p) => purchased(p, lines, names, false)),
   }));
-  return { levels: levels.filter((level) => level.zones.length > 0), purchase: purchases.flatMap((p) => purchased(p, snapshot, names, prices)) };
+  return { levels: levels.filter((level) => level.zones.length > 0), purchase: purchases.flatMap((p) => purchased(p, lines, names, prices)) };
 }

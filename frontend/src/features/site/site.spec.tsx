@@ -14,7 +14,7 @@ const material = (more: Partial<SiteMaterialDto> = {}): SiteMaterialDto => ({
 const site: SiteDto = {
   project: { number: 'T-001', name: 'Test house', place: 'Nowhere', currency: 'EUR' }, revision: { id: 'r1', code: 'P02', issuedAt: '2026-05-02T08:00:00Z', pdfSha256: 'ab'.repeat(32), pdfAvailable: true }, prices: false,
   purchase: [material()], levels: [{
-    id: 'l1', code: 'L1', name: 'First', elevationM: 4.2, materials: [material({ containers: null })],
+    id: 'l1', code: 'L1', name: 'First', elevationM: 4.2, materials: [material({ containers: null })], purchase: [],
     zones: [{ id: 'z1', code: 'Z01', name: 'Hall', periodMin: 60, items: [item(), item({ mark: 'B2', thickness: '700 µm', wetThickness: '1000 µm' })], bare: [{ mark: 'B9', section: 'HE 300 B', memberType: 'beam', quantity: 3 }], materials: [] }],
   }],
 };

@@ -15,11 +15,24 @@ import { ZoneWork } from '../components/zone-work.js';
 import { levelName, shownLevels, siteHeading } from '../site-words.js';
 import '../site.css';
 
+/** Whole packages for the floor where the issued record counts them; what is used, otherwise. */
+function LevelMaterials({ level, site }: { level: SiteLevelDto; site: SiteDto }) {
+  const counted = level.purchase.length > 0;
+  const materials = counted ? level.purchase : level.materials;
+  if (materials.length === 0) return null;
+  return (
+    <>
+      {counted && <p className="mt-sub">To bring here if this floor is delivered by itself. Packages are rounded up for each floor, so floors together may come to more than the whole job.</p>}
+      <Materials materials={materials} caption={`Materials for ${level.code}`} currency={site.project?.currency ?? ''} prices={site.prices && !counted} />
+    </>
+  );
+}
+
 function Level({ level, site }: { level: SiteLevelDto; site: SiteDto }) {
   return (
     <section className="mt-panel mt-site-level" id={`level-${level.id}`} aria-labelledby={`level-${level.id}-name`}>
       <h2 id={`level-${level.id}-name`}>{levelName(level)}</h2>
-      {level.materials.length > 0 && <Materials materials={level.materials} caption={`Materials for ${level.code}`} currency={site.project?.currency ?? ''} prices={site.prices} />}
+      <LevelMaterials level={level} site={site} />
       {level.zones.map((zone) => <ZoneWork key={zone.id} zone={zone} />)}
     </section>
   );
