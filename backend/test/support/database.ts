@@ -31,7 +31,19 @@ export async function createTestDatabase(filling: Filling = 'empty'): Promise<Te
     const template = filling === 'empty' ? null : await ensureTemplate(client, filling);
     await client.query(`CREATE DATABASE ${name}${template ? ` TEMPLATE ${template}` : ''}`);
   });
-  return { url: urlOf(name), drop: () => administer(async (client) => void (await client.query(`DROP DATABASE IF EXISTS ${name} WITH (FORCE)`))) };
+  return { url: urlOf(name), drop: () => administer((client) => drop(client, name)) };
+}
+
+/** The server's own vacuum may be at work in it, which nobody but a superuser may interrupt: wait for it. */
+async function drop(client: Client, name: string, attempts = 50): Promise<void> {
+  try {
+    await client.query(`DROP DATABASE IF EXISTS ${name} WITH (FORCE)`);
+  } catch (error) {
+    const busy = ['42501', '55006'].includes((error as { code?: string }).code ?? '');
+    if (!busy || attempts <= 1) throw error;
+    await new Promise((resolve) => setTimeout(resolve, 200));
+    await drop(client, name, attempts - 1);
+  }
 }
 
 /** Filled once per state of the migrations and seeds, then copied: a copy takes a tenth of a second, filling takes several. */
@@ -42,7 +54,7 @@ async function ensureTemplate(client: Client, filling: Exclude<Filling, 'empty'>
     const known = await client.query('SELECT 1 FROM pg_database WHERE datname = $1', [name]);
     if (known.rowCount) return name;
     const making = `${name}_making`;
-    await client.query(`DROP DATABASE IF EXISTS ${making} WITH (FORCE)`);
+    await drop(client, making);
     await client.query(`CREATE DATABASE ${making}`);
     const source = await new DataSource(dataSourceOptions(urlOf(making))).initialize();
     try {
