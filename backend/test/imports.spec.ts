@@ -86,6 +86,7 @@ describe('imports', () => {
     const trail = await app.dataSource.manager.findBy(AuditEntry, { projectId: project.id });
     expect(trail.map((entry) => entry.action).sort()).toEqual(['member imported', 'member imported', 'member imported', 'schedule imported']);
     expect((await confirm(made).expect(409)).body.message).toBe('This import was confirmed already; its members are in the project.');
+    expect((await team.specifier.get(at(`/${made.id}`)).expect(200)).body).toMatchObject({ state: 'confirmed', sheets: [] });
     expect((await app.dataSource.manager.createQueryBuilder(MemberImport, 'i').addSelect('i.cells').where({ id: made.id }).getOneOrFail()).cells).toBeNull();
   });
 
@@ -185,6 +186,7 @@ describe('imports', () => {
     await preview(made);
     await team.specifier.delete(at(`/${made.id}`)).expect(204);
     expect((await confirm(made).expect(409)).body.message).toBe('This import was given up. Upload the file again.');
+    expect((await team.specifier.get(at(`/${made.id}`)).expect(200)).body).toMatchObject({ state: 'abandoned', sheets: [] });
     await team.specifier.put(at(`/${made.id}/mapping`)).send(made.mapping).expect(409);
     expect(await members()).toHaveLength(0);
   });

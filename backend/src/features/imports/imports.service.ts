@@ -120,5 +120,8 @@ function requireNeeded(mapping: ImportMapping, evaluated: Evaluation): void {
 
 function toDto(found: MemberImport, sheets: readonly CellGrid[], scope: ProjectScope): ImportDto {
   const { id, fileName, state, createdAt, mapping, notes } = found;
-  return { id, fileName, state, createdAt: createdAt.toISOString(), mapping, notes, sheets: suggestMapping(sheets, scope.roles.includes('structural-engineer')).sheets };
+  const base = { id, fileName, state, createdAt: createdAt.toISOString(), mapping, notes };
+  // once written or given up, the file's cells are let go
+  if (sheets.length === 0) return { ...base, sheets: [] };
+  return { ...base, sheets: suggestMapping(sheets, scope.roles.includes('structural-engineer')).sheets };
 }
