@@ -5,7 +5,7 @@ import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource } from 'typeorm';
 import type { EntityManager } from 'typeorm';
 import { defaultKerfMm, splitQuantities, takeoff, withMarkUp } from '../../calc/index.js';
-import type { Takeoff } from '../../calc/index.js';
+import type { Takeoff, TakeoffMember } from '../../calc/index.js';
 import type { ProjectInputs } from '../assessment/project-inputs.service.js';
 import { ProjectInputsService } from '../assessment/project-inputs.service.js';
 import { AssessmentService } from '../assessment/assessment.service.js';
@@ -49,8 +49,9 @@ export class QuantitiesService {
 
   /** As a snapshot freezes them: by level and product, bought once for the project. */
   async frozen(manager: EntityManager, inputs: ProjectInputs): Promise<SnapshotQuantities> {
-    const { lines, purchases } = await this.takeoffOf(manager, inputs, 'project');
-    const { purchases: purchasesByLevel } = await this.takeoffOf(manager, inputs, 'level');
+    const members = await this.assessment.takeoffMembers(manager, inputs);
+    const { lines, purchases } = takeoffBy(members, inputs, 'project');
+    const { purchases: purchasesByLevel } = takeoffBy(members, inputs, 'level');
     const byLevelAndProduct = splitQuantities(lines, 'level', 'product');
     const { markUpPercent } = inputs.project.settings;
     const priced = withMarkUp(byLevelAndProduct.total.cost, markUpPercent, MONEY_PLACES);
@@ -83,12 +84,15 @@ export class QuantitiesService {
   }
 
   private async takeoffOf(manager: EntityManager, inputs: ProjectInputs, delivery: QuantityQuery['delivery']): Promise<Takeoff> {
-    const members = await this.assessment.takeoffMembers(manager, inputs);
-    const result = takeoff(members, [...inputs.products.values()], {
-      deductions: inputs.project.settings.deductions, delivery, kerfMm: defaultKerfMm, moneyPlaces: MONEY_PLACES,
-    });
-    return { ...result, lines: sorted(result.lines, inputs) };
+    return takeoffBy(await this.assessment.takeoffMembers(manager, inputs), inputs, delivery);
   }
+}
+
+function takeoffBy(members: readonly TakeoffMember[], inputs: ProjectInputs, delivery: QuantityQuery['delivery']): Takeoff {
+  const result = takeoff(members, [...inputs.products.values()], {
+    deductions: inputs.project.settings.deductions, delivery, kerfMm: defaultKerfMm, moneyPlaces: MONEY_PLACES,
+  });
+  return { ...result, lines: sorted(result.lines, inputs) };
 }
 
 /** From the ground up, then by zone, product and rising thickness. */
