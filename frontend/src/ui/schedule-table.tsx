@@ -2,12 +2,16 @@ import { Table } from 'antd';
 import type { TableProps } from 'antd';
 import type { ColumnType } from 'antd/es/table';
 import type { ReactNode } from 'react';
+import type { TermName } from '../lib/terms.js';
+import { Term } from './term.js';
 
 export interface ScheduleColumn<T> extends ColumnType<T> {
   /** right-aligned, tabular figures */
   numeric?: boolean;
   /** name of the cell when the table folds on a narrow screen; the title if that is text */
   foldLabel?: string;
+  /** the trade word that the title is, explained on it */
+  term?: TermName;
 }
 
 interface ScheduleTableProps<T> extends Omit<TableProps<T>, 'columns' | 'dataSource' | 'rowKey' | 'caption' | 'title'> {
@@ -24,10 +28,11 @@ interface ScheduleTableProps<T> extends Omit<TableProps<T>, 'columns' | 'dataSou
 }
 
 function withSchedule<T>(column: ScheduleColumn<T>): ColumnType<T> {
-  const { numeric, foldLabel, ...rest } = column;
+  const { numeric, foldLabel, term, ...rest } = column;
   const label = foldLabel ?? (typeof column.title === 'string' ? column.title : '');
   return {
     ...rest,
+    ...(term && typeof rest.title !== 'function' ? { title: <Term name={term}>{rest.title}</Term> } : {}),
     ...(numeric ? { align: 'right' as const } : {}),
     className: `${numeric ? 'mt-num ' : ''}${column.className ?? ''}`,
     // the fold shows cells as blocks; explicit roles keep the table a table for assistive technology

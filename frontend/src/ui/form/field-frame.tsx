@@ -1,4 +1,6 @@
 import type { ReactNode } from 'react';
+import type { TermName } from '../../lib/terms.js';
+import { Term } from '../term.js';
 
 const bounds = { '<=': 'at most', '>=': 'at least', '<': 'below', '>': 'above' } as const;
 
@@ -22,6 +24,8 @@ export interface FieldCommon {
   disabled?: boolean;
   /** also shown after the label for numbers */
   unit?: string | undefined;
+  /** the trade word that the label is, explained on it */
+  term?: TermName | undefined;
 }
 
 interface FrameProps extends FieldCommon { id: string; error: string | undefined; group?: boolean; children: ReactNode }
@@ -31,8 +35,8 @@ export const describedBy = (id: string, help: unknown, error: unknown) =>
   [help ? helpId(id) : '', error ? errorId(id) : ''].filter(Boolean).join(' ') || undefined;
 
 /** Label, input, help and error in one block, tied together for assistive technology. */
-export function FieldFrame({ id, label, unit, help, error, group = false, children }: FrameProps) {
-  const name = <>{label}{unit ? <span className="mt-unit"> ({unit})</span> : null}</>;
+export function FieldFrame({ id, label, unit, term, help, error, group = false, children }: FrameProps) {
+  const name = <>{term ? <Term name={term}>{label}</Term> : label}{unit ? <span className="mt-unit"> ({unit})</span> : null}</>;
   return (
     <div className="mt-field">
       {group ? <span className="mt-label" id={`${id}-label`}>{name}</span> : <label className="mt-label" htmlFor={id}>{name}</label>}

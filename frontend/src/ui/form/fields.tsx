@@ -19,7 +19,7 @@ function useField<T extends FieldValues>({ control, name, help }: FieldProps<T>)
   const { ref, name: path, value, onBlur, onChange } = field;
   return { id, ref, path, value, onBlur, onChange, error, aria, status: error ? ('error' as const) : ('' as const) };
 }
-const frame = <T extends FieldValues>(p: FieldProps<T>) => ({ label: p.label, help: p.help, unit: p.unit });
+const frame = <T extends FieldValues>(p: FieldProps<T>) => ({ label: p.label, help: p.help, unit: p.unit, term: p.term });
 
 export function TextField<T extends FieldValues>(props: FieldProps<T> & { type?: 'text' | 'email' | 'password' | 'date'; autoComplete?: string; placeholder?: string; autoFocus?: boolean; rows?: number }) {
   const { id, ref, path, value, onBlur, onChange, error, aria, status } = useField(props);
