@@ -25,7 +25,3 @@ export const userUpdateSchema = z.object({ name: nameSchema, administrator: z.bo
 export type UserUpdate = z.infer<typeof userUpdateSchema>;
 export const passwordChangeSchema = z.object({ current: z.string().min(1, 'is needed').max(200), next: passwordSchema });
 export type PasswordChange = z.infer<typeof passwordChangeSchema>;
-
-export interface MeDto { id: string; name: string; email: string; administrator: boolean }
-export interface SessionDto { user: MeDto | null; /** nobody has an account yet */ needsSetUp: boolean }
-export interface UserDto extends MeDto { disabled: boolean; lastSignedInAt: string | null }

@@ -65,6 +65,7 @@ export const criticalTemperatureBasisSchema = z.discriminatedUnion('way', [
   z.object({ way: z.literal('none') }),
 ]);
 export type CriticalTemperatureBasis = z.infer<typeof criticalTemperatureBasisSchema>;
+export const criticalTemperatureWays = ['declared', 'utilisation', 'ambient-utilisation', 'calculated', 'assumed', 'none'] as const satisfies readonly CriticalTemperatureBasis['way'][];
 export type CriticalTemperatureWay = CriticalTemperatureBasis['way'];
 
 export const wayNames: Record<CriticalTemperatureWay, string> = {

@@ -24,6 +24,7 @@ export const fireCurveSchema = z.discriminatedUnion('kind', [
 ]);
 export type FireCurve = z.infer<typeof fireCurveSchema>;
 
+export const fireCurveKinds = [...nominalCurves, 'parametric'] as const satisfies readonly FireCurve['kind'][];
 export const fireCurveNames: Record<FireCurve['kind'], string> = {
   standard: 'Standard fire',
   external: 'External fire',

@@ -38,44 +38,10 @@ export type ImportMapping = z.infer<typeof importMappingSchema>;
 export const importConfirmSchema = z.object({ leaveOutWrongRows: z.boolean().default(false) });
 export type ImportConfirm = z.infer<typeof importConfirmSchema>;
 
-export interface ImportSheetDto {
-  name: string;
-  /** up to the last one with content */
-  rows: number;
-  /** 1-based, as understood */
-  headerRow: number;
-  headers: string[];
-  /** what this sheet's headers were taken to mean */
-  columns: ImportMapping['columns'];
-  /** the first 20 rows as they stand, titles and headers included: [0] is row 1 */
-  firstRows: string[][];
-}
-export interface ImportDto {
-  id: string; fileName: string; state: 'mapping' | 'previewed' | 'confirmed' | 'abandoned'; createdAt: string;
-  sheets: ImportSheetDto[];
-  mapping: ImportMapping;
-  /** what was understood of the headers, and what was not */
-  notes: string[];
-}
-export type ImportRowState = 'new' | 'changed' | 'unchanged' | 'wrong';
-export interface ImportRowDto {
-  row: number;
-  state: ImportRowState;
-  mark: string;
-  values: Partial<Record<ImportField, string>>;
-  problems: { column: string; sentence: string }[];
-  changes: { field: ImportField; old: string; new: string }[];
-}
-export interface ImportPreviewDto {
-  /** what was skipped or ignored, in sentences */
-  notes: string[];
-  counts: Record<ImportRowState, number>;
-  rows: ImportRowDto[];
-  total: number; page: number; pageSize: number;
-}
+export const importRowStates = ['new', 'changed', 'unchanged', 'wrong'] as const;
+export type ImportRowState = (typeof importRowStates)[number];
 export const importPreviewQuerySchema = z.object({
-  state: z.enum(['new', 'changed', 'unchanged', 'wrong']).optional(),
+  state: z.enum(importRowStates).optional(),
   page: z.coerce.number().int().min(1).default(1),
   pageSize: z.coerce.number().int().min(1).max(500).default(100),
 });
-export interface ImportResultDto { added: number; changed: number; unchanged: number; leftOut: number }

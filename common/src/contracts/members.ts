@@ -1,8 +1,4 @@
 import { z } from 'zod';
-import type { AuditEntryDto } from './projects.js';
-import type { SectionDto, SectionOutline } from './sections.js';
-import type { CriticalTemperatureBasis, CriticalTemperatureWay, MemberType } from './actions.js';
-import type { MemberResultDto, VerdictKind, WorkingStepDto } from './assessment.js';
 import { verdictKinds } from './assessment.js';
 import { criticalTemperatureBasisSchema, memberTypes, steelGrades } from './actions.js';
 import { exposureSchema, protectionForms } from './fire.js';
@@ -56,7 +52,6 @@ export const acceptanceSchema = z.object({
 export type Acceptance = z.infer<typeof acceptanceSchema>;
 export const acceptanceWithdrawalSchema = acceptanceSchema.omit({ reason: true });
 export type AcceptanceWithdrawal = z.infer<typeof acceptanceWithdrawalSchema>;
-export interface AcceptanceDto { kind: (typeof acceptanceKinds)[number]; valueC: number | null; reason: string; by: string; at: string; stillHolds: boolean }
 
 export const memberSortKeys = ['mark', 'level', 'zone', 'type', 'section', 'sectionFactor', 'criticalTemperature', 'thickness', 'verdict', 'quantity', 'length'] as const;
 const list = <T extends z.ZodType>(item: T) => z.preprocess((v) => (typeof v === 'string' ? v.split(',').filter(Boolean) : v), z.array(item)).optional();
@@ -76,48 +71,3 @@ export const memberQuerySchema = z.object({
   pageSize: z.coerce.number().int().min(1).max(500).default(100),
 });
 export type MemberQuery = z.infer<typeof memberQuerySchema>;
-
-export interface MemberRowDto {
-  id: string; mark: string; zoneId: string; zoneCode: string; levelCode: string; memberType: MemberType;
-  sectionId: string; section: string; grade: string; lengthMm: number; quantity: number;
-  exposure: z.infer<typeof exposureSchema>['arrangement']; protectionForm: (typeof protectionForms)[number];
-  way: CriticalTemperatureWay; verdict: VerdictKind | null;
-  sectionFactorPerM: number | null; criticalTemperatureC: number | null; assumed: boolean;
-  requiredThickness: number | null; appliedThickness: number | null; thicknessUnit: 'µm' | 'mm' | null;
-  productName: string | null; areaM2: number | null; open: boolean;
-  /** the result as a sentence */
-  sentence: string;
-  version: number;
-}
-export interface MemberDto extends MemberInput {
-  id: string; version: number;
-  basis: CriticalTemperatureBasis; basisSetBy: string | null; basisSetAt: string | null;
-  acceptances: AcceptanceDto[];
-}
-export interface ChartSeries { name: string; points: [number, number][] }
-export interface MemberChartsDto {
-  /** resistance against steel temperature, one series a limit state; effect in the same unit */
-  resistance: { limitState: string; unit: 'kN' | 'kNm'; effect: number; points: [number, number][] }[];
-  /** °C against minutes */
-  fire: [number, number][];
-  bare: [number, number][];
-  /** null where the evidence holds no thermal properties: tables and regressions say thickness, not temperature */
-  protected: [number, number][] | null;
-  periodMin: number;
-}
-export interface MemberSheetDto {
-  member: MemberDto;
-  section: SectionDto;
-  zone: { id: string; code: string; name: string; periodMin: number; curve: string };
-  level: { id: string; code: string; name: string };
-  productName: string | null;
-  result: MemberResultDto | null;
-  sentence: string;
-  areaM2: number | null;
-  outline: SectionOutline | null;
-  working: WorkingStepDto[];
-  charts: MemberChartsDto | null;
-  history: AuditEntryDto[];
-  previousId: string | null;
-  nextId: string | null;
-}

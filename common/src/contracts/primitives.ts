@@ -26,3 +26,7 @@ export interface Page<T> {
   page: number;
   pageSize: number;
 }
+export const pageSchema = <T extends z.ZodType>(item: T) => z.object({ items: z.array(item), total: z.number(), page: z.number(), pageSize: z.number() });
+
+/** µm for coatings, mm for boards and sprays */
+export const thicknessUnits = ['µm', 'mm'] as const;

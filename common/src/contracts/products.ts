@@ -1,7 +1,6 @@
 import { z } from 'zod';
 import { dateSchema, decimalSchema, idSchema, nameSchema, noteSchema, nonNegativeSchema, positiveSchema, versionSchema } from './primitives.js';
 import { nominalCurves, periodSchema } from './fire.js';
-import type { Message } from '../errors/message.js';
 
 export const productKinds = ['coating', 'board', 'spray'] as const;
 export type ProductKind = (typeof productKinds)[number];
@@ -77,6 +76,7 @@ export const evidenceSchema = z.discriminatedUnion('form', [
   z.object({ form: z.literal('thermal'), properties: thermalPropertiesSchema }),
 ]);
 export type Evidence = z.infer<typeof evidenceSchema>;
+export const evidenceForms = ['table', 'regression', 'thermal'] as const satisfies readonly Evidence['form'][];
 
 /** What buying and applying needs. Money is a decimal string in the project's currency. */
 export const productSupplySchema = z.object({
@@ -126,15 +126,6 @@ export type ProductInput = z.infer<typeof productInputSchema>;
 export const productUpdateSchema = productInputSchema.extend({ version: versionSchema });
 export type ProductUpdate = z.infer<typeof productUpdateSchema>;
 
-export interface ProductDto extends ProductInput {
-  id: string;
-  projectId: string | null;
-  version: number;
-  expired: boolean;
-  /** name, size and digest of the uploaded evidence file, if any */
-  evidenceFile: { name: string; bytes: number; sha256: string } | null;
-}
-export type ProductSummaryDto = Omit<ProductDto, 'evidence'> & { form: Evidence['form']; usedByZones: number };
 export const productIdSchema = idSchema;
 
 /** Sent with the file of one thickness table, as form fields: first row temperatures, first column section factors. */
@@ -147,5 +138,3 @@ export const readTableSchema = z.object({
   fileUnit: z.enum(['µm', 'mm']).optional(),
 });
 export type ReadTable = z.infer<typeof readTableSchema>;
-/** messages: what keeps the table from being used as it stands; empty where nothing does */
-export interface ReadTableDto { table: ThicknessTable; messages: Message[] }

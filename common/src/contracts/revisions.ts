@@ -1,13 +1,13 @@
 import { z } from 'zod';
-import type { MemberResultDto } from './assessment.js';
+import type { MemberResultDto } from './assessment.responses.js';
 import type { CriticalTemperatureBasis, MemberType } from './actions.js';
 import type { Exposure, FireCurve, NominalCurve, ProtectionForm } from './fire.js';
-import type { AcceptanceDto } from './members.js';
+import type { AcceptanceDto } from './members.responses.js';
 import type { Evidence, ProductKind, ProductSupply } from './products.js';
-import type { OpenItemDto } from './projects.js';
-import type { PurchaseDto, QuantityLineDto, QuantitySplitDto } from './quantities.js';
+import type { OpenItemDto } from './projects.responses.js';
+import type { PurchaseDto, QuantityLineDto, QuantitySplitDto } from './quantities.responses.js';
 import type { ProjectSettings, TargetPolicy } from './settings.js';
-import type { ZoneTargetDto } from './zones.js';
+import type { ZoneTargetDto } from './zones.responses.js';
 import { codeSchema, noteSchema } from './primitives.js';
 
 export const revisionStates = ['draft', 'prepared', 'checked', 'issued', 'superseded'] as const;
@@ -19,37 +19,6 @@ export const revisionInputSchema = z.object({ code: codeSchema, purpose: noteSch
 export type RevisionInput = z.infer<typeof revisionInputSchema>;
 export const returnSchema = z.object({ comment: z.string().trim().min(3, 'say what must change').max(2000) });
 export type ReturnInput = z.infer<typeof returnSchema>;
-/** userId tells two people of one name apart */
-export interface SignatureDto { userId: string; name: string; at: string }
-export interface RevisionDto {
-  id: string; code: string; purpose: string; state: RevisionState; createdAt: string;
-  prepared: SignatureDto | null; checked: SignatureDto | null; issued: SignatureDto | null;
-  returnedComment: string | null;
-  snapshotSha256: string | null; pdfSha256: string | null; pdfBytes: number | null;
-  members: number | null; protectedAreaM2: number | null;
-}
-/** current says whether results are up to date with their inputs */
-export interface ReadinessDto { ready: boolean; current: boolean; blockers: OpenItemDto[]; warnings: OpenItemDto[] }
-/** What the frozen snapshot of a revision holds, in short. */
-export interface RevisionSummaryDto {
-  levels: number;
-  zones: number;
-  members: number;
-  pieces: number;
-  bareMembers: number;
-  protectedAreaM2: number;
-  products: {
-    id: string; name: string; kind: ProductKind; invented: boolean; evidenceReference: string; evidenceEdition: string; evidenceExpiresOn: string;
-    members: number; areaM2: string;
-    /** what to buy, in words; null where the supply data lack something */
-    purchase: string | null;
-  }[];
-  /** what stood unsettled, though not in the way, when it was prepared */
-  warnings: OpenItemDto[];
-}
-/** summary is null while a revision is in draft: nothing is frozen yet */
-export interface RevisionDetailDto extends RevisionDto { summary: RevisionSummaryDto | null }
-export interface RevisionVerificationDto { pdfMatches: boolean | null; snapshotMatches: boolean | null }
 
 /** The next code after those in use: the last number counted up in the same pattern, P01 for the first. */
 export function suggestRevisionCode(codes: readonly string[]): string {

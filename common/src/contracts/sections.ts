@@ -35,38 +35,8 @@ export const sectionFamilies = [
 ] as const;
 export type SectionFamily = (typeof sectionFamilies)[number];
 
-/** y is the strong axis, z the weak one, as in EN 1993-1-1. For angles y and z are the axes parallel to the legs. */
-export interface SectionProperties {
-  areaMm2: number;
-  massKgPerM: number;
-  /** full outer perimeter: every steel surface */
-  perimeterMm: number;
-  iyMm4: number;
-  izMm4: number;
-  welYMm3: number;
-  welZMm3: number;
-  wplYMm3: number;
-  wplZMm3: number;
-  /** null where the shape's constant is not computed here */
-  itMm4: number | null;
-  iwMm6: number | null;
-  /** shear area for a shear force parallel to the web (EN 1993-1-1 6.2.6) */
-  shearAreaZMm2: number;
-}
-
 export const customSectionSchema = z.object({ designation: codeSchema, shape: sectionShapeSchema });
 export type CustomSection = z.infer<typeof customSectionSchema>;
-
-export interface SectionDto {
-  id: string;
-  projectId: string | null;
-  family: SectionFamily;
-  designation: string;
-  otherNames: string[];
-  standard: string;
-  shape: SectionShape;
-  properties: SectionProperties;
-}
 
 export const sectionQuerySchema = z.object({
   search: nameSchema.optional(),
@@ -76,25 +46,3 @@ export const sectionQuerySchema = z.object({
   pageSize: z.coerce.number().int().min(1).max(200).default(50),
 });
 export type SectionQuery = z.infer<typeof sectionQuerySchema>;
-
-/** One stretch of the outline, in mm, x to the right and y upwards, origin at the middle of the bounding box. */
-export interface OutlineSegment {
-  from: [number, number];
-  to: [number, number];
-  /** present for an arc; positive sweeps anticlockwise from `from` to `to` */
-  arc?: { centre: [number, number]; radiusMm: number; anticlockwise: boolean };
-  lengthMm: number;
-  /** receives fire */
-  heated: boolean;
-  /** carries coating or spray */
-  coated: boolean;
-}
-/** What the drawing shows and what the section factor sums: one source for both. */
-export interface SectionOutline {
-  /** closed loops: the outer one first, inner ones (hollow) after, never heated */
-  loops: OutlineSegment[][];
-  /** the enclosing box when protection is boxed, else null */
-  box: OutlineSegment[] | null;
-  widthMm: number;
-  heightMm: number;
-}

@@ -37,4 +37,5 @@ export const targetPolicySchema = z.discriminatedUnion('policy', [
   z.object({ policy: z.literal('one') }),
 ]);
 export type TargetPolicy = z.infer<typeof targetPolicySchema>;
+export const targetPolicies = ['own', 'bands', 'one'] as const satisfies readonly TargetPolicy['policy'][];
 export const thicknessUnit = { coating: 'µm', board: 'mm', spray: 'mm' } as const;

@@ -1,0 +1,75 @@
+import { z } from 'zod';
+import { criticalTemperatureBasisSchema, criticalTemperatureWays, memberTypes } from './actions.js';
+import { verdictKinds } from './assessment.js';
+import { memberResultDtoSchema, workingStepDtoSchema } from './assessment.responses.js';
+import { exposureArrangements, protectionForms } from './fire.js';
+import { acceptanceKinds, memberInputSchema } from './members.js';
+import { idSchema, thicknessUnits } from './primitives.js';
+import { auditEntryDtoSchema } from './projects.responses.js';
+import { sectionDtoSchema, sectionOutlineSchema } from './sections.responses.js';
+
+export const acceptanceDtoSchema = z.object({
+  kind: z.enum(acceptanceKinds), valueC: z.number().nullable(), reason: z.string(), by: z.string(), at: z.string(), stillHolds: z.boolean(),
+});
+export type AcceptanceDto = z.infer<typeof acceptanceDtoSchema>;
+
+export const memberRowDtoSchema = z.object({
+  id: idSchema, mark: z.string(), zoneId: idSchema, zoneCode: z.string(), levelCode: z.string(), memberType: z.enum(memberTypes),
+  sectionId: idSchema, section: z.string(), grade: z.string(), lengthMm: z.number(), quantity: z.number(),
+  exposure: z.enum(exposureArrangements), protectionForm: z.enum(protectionForms),
+  way: z.enum(criticalTemperatureWays), verdict: z.enum(verdictKinds).nullable(),
+  sectionFactorPerM: z.number().nullable(), criticalTemperatureC: z.number().nullable(), assumed: z.boolean(),
+  requiredThickness: z.number().nullable(), appliedThickness: z.number().nullable(), thicknessUnit: z.enum(thicknessUnits).nullable(),
+  productName: z.string().nullable(), areaM2: z.number().nullable(), open: z.boolean(),
+  /** the result as a sentence */
+  sentence: z.string(),
+  version: z.number(),
+});
+export type MemberRowDto = z.infer<typeof memberRowDtoSchema>;
+export const memberDtoSchema = memberInputSchema.extend({
+  id: idSchema, version: z.number(),
+  basis: criticalTemperatureBasisSchema, basisSetBy: z.string().nullable(), basisSetAt: z.string().nullable(),
+  acceptances: z.array(acceptanceDtoSchema),
+});
+export type MemberDto = z.infer<typeof memberDtoSchema>;
+
+const points = z.array(z.tuple([z.number(), z.number()]));
+export interface ChartSeries { name: string; points: z.infer<typeof points> }
+export const memberChartsDtoSchema = z.object({
+  /** resistance against steel temperature, one series a limit state; effect in the same unit */
+  resistance: z.array(z.object({ limitState: z.string(), unit: z.enum(['kN', 'kNm']), effect: z.number(), points })),
+  /** °C against minutes */
+  fire: points,
+  bare: points,
+  /** null where the evidence holds no thermal properties: tables and regressions say thickness, not temperature */
+  protected: points.nullable(),
+  periodMin: z.number(),
+});
+export type MemberChartsDto = z.infer<typeof memberChartsDtoSchema>;
+export const memberSheetDtoSchema = z.object({
+  member: memberDtoSchema,
+  section: sectionDtoSchema,
+  zone: z.object({ id: idSchema, code: z.string(), name: z.string(), periodMin: z.number(), curve: z.string() }),
+  level: z.object({ id: idSchema, code: z.string(), name: z.string() }),
+  productName: z.string().nullable(),
+  result: memberResultDtoSchema.nullable(),
+  sentence: z.string(),
+  areaM2: z.number().nullable(),
+  outline: sectionOutlineSchema.nullable(),
+  working: z.array(workingStepDtoSchema),
+  charts: memberChartsDtoSchema.nullable(),
+  history: z.array(auditEntryDtoSchema),
+  previousId: idSchema.nullable(),
+  nextId: idSchema.nullable(),
+});
+export type MemberSheetDto = z.infer<typeof memberSheetDtoSchema>;
+
+/** How many members a change of several touched. */
+export const membersChangedDtoSchema = z.object({ changed: z.number() });
+export type MembersChangedDto = z.infer<typeof membersChangedDtoSchema>;
+export const membersDeletedDtoSchema = z.object({ deleted: z.number() });
+export type MembersDeletedDto = z.infer<typeof membersDeletedDtoSchema>;
+export const membersAcceptedDtoSchema = z.object({ accepted: z.number() });
+export type MembersAcceptedDto = z.infer<typeof membersAcceptedDtoSchema>;
+export const acceptancesWithdrawnDtoSchema = z.object({ withdrawn: z.number() });
+export type AcceptancesWithdrawnDto = z.infer<typeof acceptancesWithdrawnDtoSchema>;
