@@ -38,7 +38,8 @@ describe('levels', () => {
     const first = await team['fire-engineer'].patch(at(`/${body.id as string}`)).send(edit('Entrance')).expect(200);
     expect(first.body).toMatchObject({ name: 'Entrance', version: 2 });
     const second = await team['fire-engineer'].patch(at(`/${body.id as string}`)).send(edit('Foyer')).expect(409);
-    expect(second.body).toMatchObject({ code: 'shared.stale', current: { name: 'Entrance', version: 2 } });
+    expect(second.body).toMatchObject({ code: 'shared.stale', current: { name: 'Entrance', version: 2 }, by: 'The fire-engineer' });
+    expect(Date.now() - Date.parse((second.body as { at: string }).at)).toBeLessThan(60_000);
     const trail = await team.specifier.get(`/api/projects/${project.id}/audit`).query({ entity: 'level' }).expect(200);
     expect(trail.body.items[0]).toMatchObject({ action: 'level changed', changes: [{ field: 'name', old: 'Ground floor', new: 'Entrance' }] });
     expect(trail.body.total).toBe(2);

@@ -144,7 +144,7 @@ describe('members', () => {
     const made = await make();
     await team.specifier.patch(at(`/${made.id}`)).send({ ...input({ lengthMm: 7000 }), version: 1 }).expect(200);
     const stale = await team.specifier.patch(at(`/${made.id}`)).send({ ...input({ lengthMm: 8000 }), version: 1 }).expect(409);
-    expect(stale.body).toMatchObject({ code: 'shared.stale', current: { lengthMm: 7000, version: 2 } });
+    expect(stale.body).toMatchObject({ code: 'shared.stale', current: { lengthMm: 7000, version: 2, designation: expect.any(String) }, by: expect.any(String), at: expect.any(String) });
     await team['structural-engineer'].put(at(`/${made.id}/structural`)).send({ basis: { way: 'assumed' }, version: 1 }).expect(409);
     await team.specifier.delete(at(`/${made.id}?version=1`)).expect(409);
     // the same content again is no change and raises no version

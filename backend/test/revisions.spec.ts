@@ -102,6 +102,8 @@ describe('revisions', () => {
     const second = (await p.team.specifier.post(p.url('revisions')).send({ code: 'P02' }).expect(409)).body;
     expect(second.message).toBe('Revision P01 is still draft. Issue it, or go on with it, before starting another.');
     expect((await p.team.specifier.patch(p.url(`revisions/${id}`)).send({ code: 'T01', purpose: 'For tender' }).expect(200)).body).toMatchObject({ code: 'T01', purpose: 'For tender' });
+    const stale = await p.team.specifier.patch(p.url(`revisions/${id}`)).send({ code: 'T01', purpose: 'For comment', was: { code: 'P01', purpose: '' } }).expect(409);
+    expect(stale.body).toMatchObject({ code: 'shared.stale', current: { code: 'T01', purpose: 'For tender' }, by: expect.any(String) });
     await step(p, p.team.specifier, id, 'prepare').expect(200);
     expect((await p.team.specifier.patch(p.url(`revisions/${id}`)).send({ code: 'X', purpose: '' }).expect(409)).body.code).toBe('schedule.not-draft');
     await step(p, p.checker, id, 'check').expect(200);

@@ -76,6 +76,17 @@ describe('the team of a project', () => {
     ]);
   });
 
+  it('refuses roles set over somebody else’s, and shows who set them', async () => {
+    const user = await app.makeUser('Twice set');
+    await app.join(project, user, 'reader');
+    // the same person on another project, whose trail is nobody's business here
+    await app.join(await app.makeProject(), user, 'inspector');
+    await lead.put(at(`/${user.id}`)).send({ roles: ['inspector'], was: { roles: ['reader'] } }).expect(200);
+    const stale = await lead.put(at(`/${user.id}`)).send({ roles: ['contractor'], was: { roles: ['reader'] } }).expect(409);
+    expect(stale.body).toMatchObject({ code: 'shared.stale', current: { roles: ['inspector'] }, by: expect.any(String), at: expect.any(String) });
+    await lead.put(at(`/${user.id}`)).send({ roles: ['contractor'], was: { roles: ['inspector'] } }).expect(200);
+  });
+
   it('never loses the last who can change it', async () => {
     const reader = await app.makeUser('Reading');
     await app.join(project, reader, 'reader');

@@ -11,13 +11,20 @@ export interface ErrorBody {
   message: string;
   code: string;
   issues?: Issue[];
-  /** the version on the server, where a stale one was sent */
+  /** the version on the server, where a stale one was sent; who saved it, and when */
   current?: unknown;
+  by?: string;
+  at?: string;
+}
+/** Who made a change, and when (ISO 8601). */
+export interface Trace {
+  by: string;
+  at: string;
 }
 
 /** A refusal with a sentence for people. */
 export class Refusal extends HttpException {
-  constructor(status: HttpStatus, reason: Message, extra: Pick<ErrorBody, 'issues' | 'current'> = {}) {
+  constructor(status: HttpStatus, reason: Message, extra: Pick<ErrorBody, 'issues' | 'current' | 'by' | 'at'> = {}) {
     super({ message: sentence(reason), code: reason.code, ...extra } satisfies ErrorBody, status);
   }
 }
@@ -27,9 +34,6 @@ export const conflict = (reason: Message): Refusal => new Refusal(HttpStatus.CON
 export const unprocessable = (reason: Message, issues?: Issue[]): Refusal =>
   new Refusal(HttpStatus.UNPROCESSABLE_ENTITY, reason, issues ? { issues } : {});
 
-/** Refuses an edit of something that was saved by another meanwhile, and shows the version that stands. */
-export function requireVersion(what: string, standing: { version: number }, sent: number, current: unknown = standing): void {
-  if (standing.version !== sent) {
-    throw new Refusal(HttpStatus.CONFLICT, message('shared.stale', { what }), { current });
-  }
-}
+/** An edit of something that was saved by another meanwhile: shows what stands, and who saved it. */
+export const stale = (what: string, current: unknown, trace: Trace | null): Refusal =>
+  new Refusal(HttpStatus.CONFLICT, message('shared.stale', { what }), { current, ...trace });

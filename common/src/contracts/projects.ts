@@ -27,7 +27,8 @@ export type TakeoffSettingsUpdate = z.infer<typeof takeoffSettingsUpdateSchema>;
 
 export const membershipInputSchema = z.object({ email: emailSchema, roles: z.array(z.enum(roles)).min(1, 'give at least one role') });
 export type MembershipInput = z.infer<typeof membershipInputSchema>;
-export const membershipRolesSchema = membershipInputSchema.pick({ roles: true });
+/** was: what the form showed when it was opened; refused where that no longer stands. */
+export const membershipRolesSchema = membershipInputSchema.pick({ roles: true }).extend({ was: membershipInputSchema.pick({ roles: true }).optional() });
 export type MembershipRoles = z.infer<typeof membershipRolesSchema>;
 
 export const levelInputSchema = z.object({

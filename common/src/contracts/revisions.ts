@@ -17,6 +17,9 @@ export const revisionStateNames: Record<RevisionState, string> = {
 };
 export const revisionInputSchema = z.object({ code: codeSchema, purpose: noteSchema.default('') });
 export type RevisionInput = z.infer<typeof revisionInputSchema>;
+/** was: what the form showed when it was opened; refused where that no longer stands. */
+export const revisionUpdateSchema = revisionInputSchema.extend({ was: revisionInputSchema.optional() });
+export type RevisionUpdate = z.infer<typeof revisionUpdateSchema>;
 export const returnSchema = z.object({ comment: z.string().trim().min(3, 'say what must change').max(2000) });
 export type ReturnInput = z.infer<typeof returnSchema>;
 

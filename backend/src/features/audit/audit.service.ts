@@ -2,9 +2,11 @@ import { Injectable } from '@nestjs/common';
 import type { AuditEntryDto, AuditQuery, Page } from '@mantlet/common';
 import { InjectRepository } from '@nestjs/typeorm';
 import type { EntityManager } from 'typeorm';
-import { Repository } from 'typeorm';
+import { Raw, Repository } from 'typeorm';
 import type { Actor } from '../../shared/access.js';
 import { canonicalJson } from '../../shared/canonical-json.js';
+import { stale } from '../../shared/refusal.js';
+import type { Trace } from '../../shared/refusal.js';
 import { AuditEntry } from './audit-entry.entity.js';
 
 export interface Change {
@@ -36,6 +38,9 @@ const insertStatement = `INSERT INTO audit_entries (project_id, user_id, user_na
   FROM ROWS FROM (jsonb_to_recordset($1::jsonb) AS (project_id uuid, user_id uuid, user_name text, action text, entity text, entity_id uuid, label text, changes jsonb, why text))
   WITH ORDINALITY AS r(project_id, user_id, user_name, action, entity, entity_id, label, changes, why, place) ORDER BY r.place`;
 
+/** acts told of a thing that leave its version as it is, so that nobody's open form goes stale */
+const besideVersion = '(accepted|evidence file stored)$';
+
 @Injectable()
 export class AuditService {
   constructor(@InjectRepository(AuditEntry) private readonly entries: Repository<AuditEntry>) {}
@@ -47,6 +52,24 @@ export class AuditService {
       entity_id: entry.entityId, label: entry.label, changes: entry.changes ?? [], why: entry.why ?? null,
     }));
     for (let at = 0; at < rows.length; at += 2000) await manager.query(insertStatement, [JSON.stringify(rows.slice(at, at + 2000))]);
+  }
+
+  /** Refuses an edit of something that was saved by another meanwhile, and shows the version that stands, who saved it and when. */
+  async requireVersion(manager: EntityManager, entity: string, standing: { id: string; version: number }, sent: number, show: () => unknown): Promise<void> {
+    if (standing.version === sent) return;
+    throw stale(entity, await show(), await this.lastChange(manager, entity, standing.id));
+  }
+
+  /** The same for what has no version of its own: the form says what it showed when it was opened. */
+  async requireUnchanged(manager: EntityManager, of: { projectId: string; entity: string; entityId: string; what: string }, standing: object, was: object): Promise<void> {
+    if (canonicalJson(standing) !== canonicalJson(was)) throw stale(of.what, standing, await this.lastChange(manager, of.entity, of.entityId, of.projectId));
+  }
+
+  /** Who last changed what an edit of this thing could overwrite. */
+  async lastChange(manager: EntityManager, entity: string, entityId: string, projectId?: string): Promise<Trace | null> {
+    const action = Raw((column) => `${column} !~ :besideVersion`, { besideVersion });
+    const [entry] = await manager.find(AuditEntry, { where: { entity, entityId, action, ...(projectId && { projectId }) }, order: { id: 'DESC' }, take: 1 });
+    return entry ? { by: entry.userName, at: entry.at.toISOString() } : null;
   }
 
   async list(projectId: string, query: AuditQuery): Promise<Page<AuditEntryDto>> {

@@ -6,7 +6,7 @@ import { DataSource } from 'typeorm';
 import type { EntityManager } from 'typeorm';
 import type { ProjectScope } from '../../shared/access.js';
 import { lockProject } from '../../shared/project-lock.js';
-import { conflict, notFound, requireVersion } from '../../shared/refusal.js';
+import { conflict, notFound } from '../../shared/refusal.js';
 import { AuditService, changesBetween } from '../audit/audit.service.js';
 import { Zone } from '../zones/zone.entity.js';
 import { Level } from './level.entity.js';
@@ -40,7 +40,7 @@ export class LevelsService {
   async update(scope: ProjectScope, levelId: string, { version, ...input }: LevelUpdate): Promise<LevelDto> {
     return this.dataSource.transaction(async (manager) => {
       const level = await this.lock(manager, scope.projectId, levelId);
-      requireVersion('level', level, version, toLevelDto(level));
+      await this.audit.requireVersion(manager, 'level', level, version, () => toLevelDto(level));
       const changes = changesBetween<LevelInput>(level, input, fields);
       if (!changes.length) return toLevelDto(level);
       await this.requireFreeCode(manager, scope.projectId, input.code, levelId);

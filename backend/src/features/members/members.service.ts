@@ -5,9 +5,10 @@ import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource, In } from 'typeorm';
 import type { EntityManager } from 'typeorm';
 import type { ProjectScope } from '../../shared/access.js';
-import { conflict, notFound, requireVersion } from '../../shared/refusal.js';
+import { conflict, notFound } from '../../shared/refusal.js';
 import { AssessmentService } from '../assessment/assessment.service.js';
 import { AuditService } from '../audit/audit.service.js';
+import { Section } from '../sections/section.entity.js';
 import { toMemberDto } from './member-mapper.js';
 import { MemberWriterService } from './member-writer.service.js';
 import { Member } from './member.entity.js';
@@ -62,12 +63,18 @@ export class MembersService {
       await this.writer.lock(manager, scope.projectId);
       const before = await manager.findOneBy(Member, { id: memberId, projectId: scope.projectId });
       if (!before) throw notFound('member');
-      requireVersion('member', before, version, await this.find(manager, scope.projectId, memberId));
+      await this.audit.requireVersion(manager, 'member', before, version, () => this.standing(manager, before));
       const set = await decide(manager);
       const changed = await this.writer.update(manager, scope, [{ before, set }], action);
       if (changed) await this.writer.settle(manager, scope.projectId, [before.zoneId, set.zoneId ?? before.zoneId]);
       return this.find(manager, scope.projectId, memberId);
     });
+  }
+
+  /** A member as a stale form is shown it: its section by name too, since the form may never have seen it. */
+  private async standing(manager: EntityManager, { id, projectId, sectionId }: Member): Promise<MemberDto & { designation: string }> {
+    const section = await manager.findOneByOrFail(Section, { id: sectionId });
+    return { ...(await this.find(manager, projectId, id)), designation: section.designation };
   }
 
   /** The same fields for all; all or none. */
@@ -87,7 +94,7 @@ export class MembersService {
       await this.writer.lock(manager, scope.projectId);
       const member = await manager.findOneBy(Member, { id: memberId, projectId: scope.projectId });
       if (!member) throw notFound('member');
-      requireVersion('member', member, version, await this.find(manager, scope.projectId, memberId));
+      await this.audit.requireVersion(manager, 'member', member, version, () => this.standing(manager, member));
       await this.erase(manager, scope, [member]);
     });
   }

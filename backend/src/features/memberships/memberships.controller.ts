@@ -25,7 +25,7 @@ export class MembershipsController {
   @Put(':userId')
   @Roles('fire-engineer', 'specifier')
   setRoles(@Scope() scope: ProjectScope, @Param('userId', idParam) userId: string, @Body({ schema: membershipRolesSchema }) input: MembershipRoles): Promise<MembershipDto> {
-    return this.memberships.setRoles(scope, userId, input.roles);
+    return this.memberships.setRoles(scope, userId, input);
   }
 
   @Delete(':userId')

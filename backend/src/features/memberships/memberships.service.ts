@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { message, roles as allRoles } from '@mantlet/common';
-import type { MembershipDto, MembershipInput, Role } from '@mantlet/common';
+import type { MembershipDto, MembershipInput, MembershipRoles, Role } from '@mantlet/common';
 import { InjectDataSource, InjectRepository } from '@nestjs/typeorm';
 import { DataSource, Repository } from 'typeorm';
 import type { EntityManager } from 'typeorm';
@@ -63,10 +63,11 @@ export class MembershipsService {
     });
   }
 
-  async setRoles(scope: ProjectScope, userId: string, roles: Role[]): Promise<MembershipDto> {
+  async setRoles(scope: ProjectScope, userId: string, { roles, was }: MembershipRoles): Promise<MembershipDto> {
     return this.dataSource.transaction(async (manager) => {
       await this.lockTeam(manager, scope.projectId);
       const membership = await this.find(manager, scope.projectId, userId);
+      if (was) await this.audit.requireUnchanged(manager, { projectId: scope.projectId, entity: 'membership', entityId: userId, what: 'team membership' }, { roles: inOrder(membership.roles) }, { roles: inOrder(was.roles) });
       const next = inOrder(roles);
       await this.requireLeadWithout(manager, scope.projectId, userId, next);
       const before = membership.roles;

@@ -6,7 +6,7 @@ import { DataSource, IsNull, Not } from 'typeorm';
 import type { EntityManager, FindOptionsWhere } from 'typeorm';
 import { checkEvidence } from '../../calc/index.js';
 import type { Actor } from '../../shared/access.js';
-import { Refusal, conflict, notFound, requireVersion, unprocessable } from '../../shared/refusal.js';
+import { Refusal, conflict, notFound, unprocessable } from '../../shared/refusal.js';
 import { AssessmentService } from '../assessment/assessment.service.js';
 import { AuditService } from '../audit/audit.service.js';
 import type { Change, Recorded } from '../audit/audit.service.js';
@@ -72,7 +72,7 @@ export class ProductsService {
     requireSoundEvidence(input);
     return this.dataSource.transaction(async (manager) => {
       const product = await this.lock(manager, owner, productId, 'for_no_key_update');
-      requireVersion('product', product, version, toProductDto(product));
+      await this.audit.requireVersion(manager, 'product', product, version, () => toProductDto(product));
       const changes = productChanges(product, input);
       if (!changes.length) return toProductDto(product);
       await this.requireFreeName(manager, owner.projectId, input, productId);

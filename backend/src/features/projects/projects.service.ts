@@ -6,7 +6,7 @@ import { DataSource } from 'typeorm';
 import type { EntityManager } from 'typeorm';
 import type { Actor, ProjectScope } from '../../shared/access.js';
 import { lockProject } from '../../shared/project-lock.js';
-import { conflict, notFound, requireVersion } from '../../shared/refusal.js';
+import { conflict, notFound } from '../../shared/refusal.js';
 import { AssessmentService } from '../assessment/assessment.service.js';
 import { AuditService, changesBetween } from '../audit/audit.service.js';
 import type { Change } from '../audit/audit.service.js';
@@ -76,7 +76,7 @@ export class ProjectsService {
       const project = await manager.findOneBy(Project, { id: scope.projectId });
       if (!project) throw notFound('project');
       const { settings, number, name, place, currency, note } = project;
-      requireVersion('project', project, version, { number, name, place, currency, note, settings, version: project.version });
+      await this.audit.requireVersion(manager, 'project', project, version, () => ({ number, name, place, currency, note, settings, version: project.version }));
       const { action, changes, assessed } = await edit(manager, project);
       if (!changes.length) return;
       await manager.save(project);

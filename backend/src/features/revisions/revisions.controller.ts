@@ -1,6 +1,6 @@
 import { Body, Controller, Get, HttpCode, Param, Patch, Post, Query, Res, StreamableFile } from '@nestjs/common';
-import { returnSchema, revisionInputSchema } from '@mantlet/common';
-import type { ReadinessDto, ReturnInput, RevisionDetailDto, RevisionDto, RevisionInput, RevisionVerificationDto } from '@mantlet/common';
+import { returnSchema, revisionInputSchema, revisionUpdateSchema } from '@mantlet/common';
+import type { ReadinessDto, ReturnInput, RevisionDetailDto, RevisionDto, RevisionInput, RevisionUpdate, RevisionVerificationDto } from '@mantlet/common';
 import type { Response } from 'express';
 import { z } from 'zod';
 import { AnyRole, DesignTeam, Roles, Scope } from '../../shared/access.js';
@@ -41,7 +41,7 @@ export class RevisionsController {
 
   @Patch('revisions/:revisionId')
   @Roles('specifier')
-  update(@Scope() scope: ProjectScope, @Param('revisionId', idParam) id: string, @Body({ schema: revisionInputSchema }) input: RevisionInput): Promise<RevisionDto> {
+  update(@Scope() scope: ProjectScope, @Param('revisionId', idParam) id: string, @Body({ schema: revisionUpdateSchema }) input: RevisionUpdate): Promise<RevisionDto> {
     return this.revisions.update(scope, id, input);
   }
 

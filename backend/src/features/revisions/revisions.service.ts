@@ -2,7 +2,7 @@ import { isDeepStrictEqual } from 'node:util';
 import { Injectable } from '@nestjs/common';
 import { message, revisionStateNames } from '@mantlet/common';
 import type {
-  OpenItemDto, ReadinessDto, ReturnInput, RevisionDetailDto, RevisionDto, RevisionInput, RevisionState, RevisionVerificationDto, ScheduleSnapshot,
+  OpenItemDto, ReadinessDto, ReturnInput, RevisionDetailDto, RevisionDto, RevisionInput, RevisionUpdate, RevisionState, RevisionVerificationDto, ScheduleSnapshot,
 } from '@mantlet/common';
 import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource, In } from 'typeorm';
@@ -74,9 +74,11 @@ export class RevisionsService {
     });
   }
 
-  async update(scope: ProjectScope, id: string, input: RevisionInput): Promise<RevisionDto> {
+  async update(scope: ProjectScope, id: string, { was, ...input }: RevisionUpdate): Promise<RevisionDto> {
     return this.inState(scope, id, async (manager, revision) => {
       requireDraft(revision);
+      const standing = { code: revision.code, purpose: revision.purpose };
+      if (was) await this.audit.requireUnchanged(manager, { projectId: scope.projectId, entity: 'revision', entityId: id, what: 'revision' }, standing, was);
       if (input.code !== revision.code) await this.requireFreeCode(manager, scope.projectId, input.code);
       await manager.update(Revision, id, { code: input.code, purpose: input.purpose });
       await this.record(manager, scope, id, input.code, 'revision changed', { changes: changesBetween<RevisionInput>(revision, input, ['code', 'purpose']) });

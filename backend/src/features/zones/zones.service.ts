@@ -6,7 +6,7 @@ import { DataSource, In } from 'typeorm';
 import type { EntityManager } from 'typeorm';
 import type { ProjectScope } from '../../shared/access.js';
 import { lockProject } from '../../shared/project-lock.js';
-import { conflict, notFound, requireVersion, unprocessable } from '../../shared/refusal.js';
+import { conflict, notFound, unprocessable } from '../../shared/refusal.js';
 import { AssessmentService } from '../assessment/assessment.service.js';
 import { AuditService, changesBetween } from '../audit/audit.service.js';
 import type { Change } from '../audit/audit.service.js';
@@ -151,8 +151,8 @@ export class ZonesService {
     return zone;
   }
 
-  private async requireCurrent(manager: EntityManager, zone: Zone, version: number): Promise<void> {
-    if (zone.version !== version) requireVersion('zone', zone, version, await this.dto(manager, zone.projectId, zone.id));
+  private requireCurrent(manager: EntityManager, zone: Zone, version: number): Promise<void> {
+    return this.audit.requireVersion(manager, 'zone', zone, version, () => this.dto(manager, zone.projectId, zone.id));
   }
 
   private async requireLevel(manager: EntityManager, projectId: string, levelId: string): Promise<void> {
