@@ -21,6 +21,7 @@ export const accessTable: Record<string, string> = {
   'PATCH /api/projects/:projectId': 'fire-engineer, specifier',
   'PUT /api/projects/:projectId/design-basis': 'fire-engineer',
   'PUT /api/projects/:projectId/takeoff-settings': 'specifier',
+  'GET /api/projects/:projectId/events': 'team',
   'GET /api/projects/:projectId/building': 'design team',
   'GET /api/projects/:projectId/audit': 'design team',
   'GET /api/projects/:projectId/memberships': 'team',

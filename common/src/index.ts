@@ -25,5 +25,7 @@ export * from './contracts/accounts.js';
 export * from './contracts/accounts.responses.js';
 export * from './contracts/quantities.js';
 export * from './contracts/quantities.responses.js';
+export * from './contracts/live.js';
+export * from './contracts/jobs.js';
 export * from './errors/index.js';
 export * from './units/index.js';

@@ -2,6 +2,7 @@ import { MemberResult } from '../features/assessment/member-result.entity.js';
 import { ZoneResult } from '../features/assessment/zone-result.entity.js';
 import { AuditEntry } from '../features/audit/audit-entry.entity.js';
 import { MemberImport } from '../features/imports/member-import.entity.js';
+import { Job } from '../features/jobs/job.entity.js';
 import { Level } from '../features/levels/level.entity.js';
 import { MemberAcceptance } from '../features/members/member-acceptance.entity.js';
 import { Member } from '../features/members/member.entity.js';
@@ -16,5 +17,5 @@ import { Zone } from '../features/zones/zone.entity.js';
 
 export const entities = [
   User, Project, Membership, Level, Zone, ZoneSystem, Section, Product, Member, MemberAcceptance, MemberResult, ZoneResult,
-  Revision, MemberImport, AuditEntry,
+  Revision, MemberImport, AuditEntry, Job,
 ];

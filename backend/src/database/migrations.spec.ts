@@ -1,6 +1,7 @@
 import { DataSource } from 'typeorm';
 import { createTestDatabase } from '../../test/support/database.js';
 import { dataSourceOptions } from './data-source-options.js';
+import { migrations } from './migrations/index.js';
 
 describe('migrations', () => {
   it('leave the schema as the entities describe it, and can be undone', async () => {
@@ -10,7 +11,7 @@ describe('migrations', () => {
       await dataSource.runMigrations();
       const drift = await dataSource.driver.createSchemaBuilder().log();
       expect(drift.upQueries.map((q) => q.query)).toEqual([]);
-      await dataSource.undoLastMigration();
+      for (const _ of migrations) await dataSource.undoLastMigration();
       const tables: { n: string }[] = await dataSource.query(
         `SELECT count(*) AS n FROM information_schema.tables WHERE table_schema = 'public' AND table_name NOT IN ('migrations', 'typeorm_metadata')`,
       );

@@ -4,6 +4,7 @@ import { join } from 'node:path';
 import { Client } from 'pg';
 import { DataSource } from 'typeorm';
 import { dataSourceOptions } from '../../src/database/data-source-options.js';
+import { migrateQueue } from '../../src/database/migrate-queue.js';
 import { seedCatalogue } from '../../src/database/seed-catalogue.js';
 
 export interface TestDatabase {
@@ -59,6 +60,7 @@ async function ensureTemplate(client: Client, filling: Exclude<Filling, 'empty'>
     const source = await new DataSource(dataSourceOptions(urlOf(making))).initialize();
     try {
       await source.runMigrations();
+      await migrateQueue(urlOf(making));
       if (filling === 'catalogue') await seedCatalogue(source);
     } finally {
       await source.destroy();

@@ -1,6 +1,7 @@
 import { accountMessages } from './account.messages.js';
 import { assessmentMessages } from './assessment.messages.js';
 import { intakeMessages } from './intake.messages.js';
+import { liveMessages } from './live.messages.js';
 import { productMessages } from './product.messages.js';
 import { projectMessages } from './project.messages.js';
 import { scheduleMessages } from './schedule.messages.js';
@@ -12,6 +13,7 @@ export const messages = {
   ...accountMessages,
   ...assessmentMessages,
   ...intakeMessages,
+  ...liveMessages,
   ...productMessages,
   ...projectMessages,
   ...scheduleMessages,

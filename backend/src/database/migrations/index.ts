@@ -1,3 +1,4 @@
 import { InitialSchema1764547200000 } from './1764547200000-initial-schema.js';
+import { Jobs1764633700000 } from './1764633700000-jobs.js';
 
-export const migrations = [InitialSchema1764547200000];
+export const migrations = [InitialSchema1764547200000, Jobs1764633700000];

@@ -5,9 +5,11 @@ import type { EntityManager } from 'typeorm';
 import { Raw, Repository } from 'typeorm';
 import type { Actor } from '../../shared/access.js';
 import { canonicalJson } from '../../shared/canonical-json.js';
+import { publish } from '../../shared/project-events.js';
 import { stale } from '../../shared/refusal.js';
 import type { Trace } from '../../shared/refusal.js';
 import { AuditEntry } from './audit-entry.entity.js';
+import { eventsOf } from './audit-events.js';
 
 export interface Change {
   field: string;
@@ -45,13 +47,14 @@ const besideVersion = '(accepted|evidence file stored)$';
 export class AuditService {
   constructor(@InjectRepository(AuditEntry) private readonly entries: Repository<AuditEntry>) {}
 
-  /** Writes in the caller's transaction, so that a change and its trace stand or fall together. */
+  /** Writes in the caller's transaction, so that a change and its trace stand or fall together; open pages learn of it when it is committed. */
   async record(manager: EntityManager, ...recorded: Recorded[]): Promise<void> {
     const rows = recorded.map((entry) => ({
       project_id: entry.projectId, user_id: entry.actor.id, user_name: entry.actor.name, action: entry.action, entity: entry.entity,
       entity_id: entry.entityId, label: entry.label, changes: entry.changes ?? [], why: entry.why ?? null,
     }));
     for (let at = 0; at < rows.length; at += 2000) await manager.query(insertStatement, [JSON.stringify(rows.slice(at, at + 2000))]);
+    await publish(manager, eventsOf(recorded));
   }
 
   /** Refuses an edit of something that was saved by another meanwhile, and shows the version that stands, who saved it and when. */

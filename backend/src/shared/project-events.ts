@@ -1,0 +1,24 @@
+import type { ProjectEventDto } from '@mantlet/common';
+import type { EntityManager } from 'typeorm';
+
+/** PostgreSQL's channels: changes of projects, and changes of who may see them (sent by triggers on sessions, accounts and teams). */
+export const CHANGES_CHANNEL = 'mantlet_changes';
+export const ACCESS_CHANNEL = 'mantlet_access';
+
+/** Who may learn of a change: everybody on the team, or those who see work in progress. */
+export type Audience = 'team' | 'design-team';
+export interface PublishedEvent extends ProjectEventDto {
+  projectId: string;
+  audience: Audience;
+}
+
+/** a notification holds 8000 bytes; labels are people's words of any length */
+const LONGEST_TEXT = 400;
+
+/** Told to every server process when the caller's transaction is committed, and not at all when it is not. */
+export async function publish(manager: Pick<EntityManager, 'query'>, events: readonly PublishedEvent[]): Promise<void> {
+  for (const event of events) {
+    const text = event.text && event.text.length > LONGEST_TEXT ? `${event.text.slice(0, LONGEST_TEXT)}…` : event.text;
+    await manager.query('SELECT pg_notify($1, $2)', [CHANGES_CHANNEL, JSON.stringify({ ...event, text })]);
+  }
+}

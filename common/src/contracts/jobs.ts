@@ -1,0 +1,33 @@
+import { z } from 'zod';
+import { idSchema } from './primitives.js';
+
+export const jobKinds = ['recalculation'] as const;
+export type JobKind = (typeof jobKinds)[number];
+export const jobStates = ['waiting', 'running', 'failed', 'done'] as const;
+export type JobState = (typeof jobStates)[number];
+
+/** Work that goes on in the background and is not over, or failed. */
+export const jobDtoSchema = z.object({
+  id: idSchema,
+  kind: z.enum(jobKinds),
+  state: z.enum(jobStates),
+  /** members to be worked out, and how many of them are */
+  total: z.number().int(),
+  done: z.number().int(),
+  /** what is expected to be left, from what was done so far; null before anything is */
+  secondsLeft: z.number().nullable(),
+  /** nobody works off the queue at present */
+  withoutWorker: z.boolean(),
+  /** why it failed, and what to do */
+  error: z.string().nullable(),
+});
+export type JobDto = z.infer<typeof jobDtoSchema>;
+
+/** Answer to a request for new results: worked out at once, or put to the queue where there are many. */
+export const recalculatedDtoSchema = z.object({
+  members: z.number().int(),
+  /** members whose result is another than before; 0 where the work is put to the queue */
+  changed: z.number().int(),
+  queued: z.boolean(),
+});
+export type RecalculatedDto = z.infer<typeof recalculatedDtoSchema>;
