@@ -1,5 +1,6 @@
 import { App, Button, Dropdown, Radio } from 'antd';
 import { useState } from 'react';
+import { useNavigate } from 'react-router-dom';
 import type { MeDto } from '@mantlet/common';
 import { useSignOut } from '../features/session/api/session.js';
 import { PasswordDrawer } from '../features/session/components/password-drawer.js';
@@ -21,6 +22,7 @@ function useLeave() {
 export function AccountMenu({ user, roles }: { user: MeDto | null; roles: string }) {
   const { choice, choose } = useTheme();
   const leave = useLeave();
+  const navigate = useNavigate();
   const [password, setPassword] = useState(false);
   if (!user) return null;
   return (
@@ -30,7 +32,7 @@ export function AccountMenu({ user, roles }: { user: MeDto | null; roles: string
         menu={{
           selectable: true, selectedKeys: [choice],
           items: [
-            { type: 'group', label: user.email, children: [{ key: 'password', label: 'Change password' }] },
+            { type: 'group', label: user.email, children: [{ key: 'password', label: 'Change password' }, { key: 'help', label: 'Help' }] },
             { type: 'group', label: 'Ground', children: themeChoices.map((c) => ({ key: c, label: `${themeNames[c]}${c === choice ? ' (chosen)' : ''}` })) },
             { type: 'divider' },
             { key: 'leave', label: 'Sign out' },
@@ -38,6 +40,7 @@ export function AccountMenu({ user, roles }: { user: MeDto | null; roles: string
           onClick: ({ key }) => {
             if (key === 'leave') leave();
             else if (key === 'password') setPassword(true);
+            else if (key === 'help') void navigate('/help');
             else choose(key as ThemeChoice);
           },
         }}

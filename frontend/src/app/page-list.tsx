@@ -37,10 +37,12 @@ export function generalEntries(administrator: boolean): Entry[][] {
   ]];
 }
 
+const help: Entry = { to: '/help', label: 'Help' };
+
 export function PageList({ project, administrator, onGo }: { project: ProjectDto | undefined; administrator: boolean; onGo?: () => void }) {
   const groups = project
-    ? [...projectEntries(project), [{ to: '/projects', label: 'All projects', end: true }]]
-    : generalEntries(administrator);
+    ? [...projectEntries(project), [{ to: '/projects', label: 'All projects', end: true }, help]]
+    : [...generalEntries(administrator), [help]];
   return (
     <nav className="mt-nav" aria-label="Pages">
       {groups.map((group) => (

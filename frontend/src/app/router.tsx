@@ -48,6 +48,7 @@ export const routes: RouteObject[] = [
               page('/projects', () => import('../features/projects/pages/projects-page.js')),
               page('/products', () => import('../features/products/pages/products-page.js')),
               page('/products/:productId', () => import('../features/products/pages/product-page.js')),
+              page('/help', () => import('../features/help/pages/help-page.js')),
               page('/accounts', () => import('../features/team/pages/accounts-page.js')),
               { path: '*', element: <NotFound /> },
             ])],

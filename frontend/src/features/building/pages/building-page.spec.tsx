@@ -26,9 +26,10 @@ describe('the building page', () => {
     expect(document.title).toBe('Building · Test house · Mantlet');
   });
   it('says what to do first in an empty project', async () => {
-    serve({ [path]: { body: { members: 0, settled: 0, open: 0, levels: [], openItems: [], protection: [] } satisfies BuildingDto } });
+    serve({ [path]: { body: { members: 0, settled: 0, open: 0, levels: [], openItems: [], protection: [] } satisfies BuildingDto }, [`GET /projects/${projectId}/zones`]: { body: [] } });
     renderPage(<BuildingPage />, { project: testProject(['fire-engineer']) });
-    expect(await screen.findByText('Draw up the levels and zones first')).toBeInTheDocument();
+    expect(await screen.findByRole('heading', { name: 'Draw up the levels' })).toBeInTheDocument();
+    expect(screen.getByRole('heading', { level: 1, name: 'No levels yet' })).toBeInTheDocument();
   });
   it('shows a failure as a sentence with a way to try again', async () => {
     serve({ [path]: { status: 400, body: { message: 'The building cannot be drawn.' } } });

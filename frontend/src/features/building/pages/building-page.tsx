@@ -2,10 +2,10 @@ import { Navigate } from 'react-router-dom';
 import type { BuildingDto, ProjectDto } from '@mantlet/common';
 import { countWord, formatNumber } from '../../../lib/format.js';
 import { BuildingElevation } from '../../../ui/drawing/building-elevation.js';
-import { LinkButton } from '../../../ui/link-button.js';
 import { Page } from '../../../ui/page.js';
 import { Panel } from '../../../ui/panel.js';
-import { EmptyState, QueryState } from '../../../ui/states.js';
+import { QueryState } from '../../../ui/states.js';
+import { FirstSteps } from '../../projects/components/first-steps.js';
 import { useCurrentProject, useMay } from '../../projects/project-context.js';
 import { useBuilding } from '../api/building.js';
 import { OpenItems } from '../components/open-items.js';
@@ -22,46 +22,29 @@ export function buildingWords({ members, settled, open, levels }: BuildingDto): 
   };
 }
 
-function FirstStep({ building, at }: { building: BuildingDto; at: string }) {
-  const may = useMay();
-  if (building.levels.length === 0) {
-    return (
-      <EmptyState title="Draw up the levels and zones first" action={<LinkButton to={`${at}/zones`} type={may('edit-levels') ? 'primary' : 'default'}>Go to the zones</LinkButton>}>
-        {may('edit-levels') ? 'Give each level its height above the datum, and each zone its period and fire curve.' : 'The fire engineer gives each level its height and each zone its period.'}
-      </EmptyState>
-    );
-  }
-  if (building.members > 0) return null;
-  return (
-    <EmptyState title="Bring in the member schedule next" action={may('import-members') ? <LinkButton to={`${at}/members/import`} type="primary">Import members</LinkButton> : null}>
-      {may('import-members') ? 'Upload the steel schedule as CSV or XLSX, or type members in one by one.' : 'The specifier imports or types in the members.'}
-    </EmptyState>
-  );
-}
-
 function Content({ building, project }: { building: BuildingDto; project: ProjectDto }) {
   const at = `/projects/${project.id}`;
   const zoneHref = (zone: { id: string }) => `${at}/zones?zone=${zone.id}`;
   const words = buildingWords(building);
+  const steps = <FirstSteps project={project} building={building} />;
+  if (building.levels.length === 0) return steps;
   return (
-    <div className="mt-columns">
-      <Panel flush label="Elevation">
-        <FirstStep building={building} at={at} />
-        {building.levels.length > 0 && (
-          <>
-            <BuildingElevation levels={building.levels} zoneHref={zoneHref} label={`Elevation of ${project.name}. ${words.heading}.`} />
-            <p className="mt-drawing-note">
-              Heights to scale, level marks in metres. Within a level, widths follow protected area. Bar: share of members settled. Line above it: share issued. Hatch: share still open.
-            </p>
-            <ZoneList levels={building.levels} zoneHref={zoneHref} />
-          </>
-        )}
-      </Panel>
-      <div className="mt-stack">
-        {building.members > 0 && <OpenItems items={building.openItems} projectId={project.id} held={project.roles} />}
-        <ProtectionTotals lines={building.protection} />
+    <>
+      {steps}
+      <div className="mt-columns">
+        <Panel flush label="Elevation">
+          <BuildingElevation levels={building.levels} zoneHref={zoneHref} label={`Elevation of ${project.name}. ${words.heading}.`} />
+          <p className="mt-drawing-note">
+            Heights to scale, level marks in metres. Within a level, widths follow protected area. Bar: share of members settled. Line above it: share issued. Hatch: share still open.
+          </p>
+          <ZoneList levels={building.levels} zoneHref={zoneHref} />
+        </Panel>
+        <div className="mt-stack">
+          {building.members > 0 && <OpenItems items={building.openItems} projectId={project.id} held={project.roles} />}
+          <ProtectionTotals lines={building.protection} />
+        </div>
       </div>
-    </div>
+    </>
   );
 }
 

@@ -10,10 +10,11 @@ import { Panel } from '../../../ui/panel.js';
 import { Quantity } from '../../../ui/quantity.js';
 import { ScheduleTable } from '../../../ui/schedule-table.js';
 import type { ScheduleColumn } from '../../../ui/schedule-table.js';
-import { EmptyState, QueryState } from '../../../ui/states.js';
+import { QueryState } from '../../../ui/states.js';
 import { StatusWord } from '../../../ui/status-word.js';
 import { useProjects } from '../api/projects.js';
 import { CreateProjectDrawer } from '../components/create-project-drawer.js';
+import { FirstVisit } from '../components/first-visit.js';
 
 const notIssued = 'nothing is issued yet';
 
@@ -54,9 +55,7 @@ export default function ProjectsPage() {
         {(rows) => (
           <Panel flush label="Projects">
             {rows.length === 0 ? (
-              <EmptyState title="Start with a project" action={start}>
-                Then draw up its levels and zones, add the team, and bring in the member schedule. Projects you are added to appear here by themselves.
-              </EmptyState>
+              <FirstVisit start={start} />
             ) : (
               <ScheduleTable
                 caption="Projects" columns={columns} rows={rows} rowKey={(p) => p.id}

@@ -12,7 +12,7 @@ export const useLevels = (projectId: string) => useQuery(levelsQuery(projectId))
 
 export const zonesQuery = (projectId: string) =>
   queryOptions({ queryKey: projectKey(projectId, 'zones'), queryFn: ({ signal }) => api.get<ZoneDto[]>(`${at(projectId)}/zones`, undefined, signal) });
-export const useZones = (projectId: string) => useQuery(zonesQuery(projectId));
+export const useZones = (projectId: string, enabled = true) => useQuery({ ...zonesQuery(projectId), enabled });
 
 /** The products a zone's systems may be chosen from: the shared library and the project's own. */
 export const zoneProductsQuery = (projectId: string) =>
