@@ -22,3 +22,7 @@ export async function publish(manager: Pick<EntityManager, 'query'>, events: rea
     await manager.query('SELECT pg_notify($1, $2)', [CHANGES_CHANNEL, JSON.stringify({ ...event, text })]);
   }
 }
+
+/** New results; who caused them is told with the change itself. */
+export const resultsEvent = (projectId: string, topics: PublishedEvent['topics'] = ['results']): PublishedEvent =>
+  ({ projectId, audience: 'design-team', topics, entityIds: [], by: null, at: new Date().toISOString(), text: null });

@@ -9,7 +9,7 @@ import { PageList } from './page-list.js';
 import { TitleStrip } from './title-strip.js';
 
 /** The title strip above, the list of pages at the left, the page between them and the standing caution. */
-export function Shell({ project, children }: { project?: ProjectDto; children?: ReactNode }) {
+export function Shell({ project, notice, children }: { project?: ProjectDto; notice?: ReactNode; children?: ReactNode }) {
   const user = useSession().data?.user;
   const [menuOpen, setMenuOpen] = useState(false);
   const main = useRef<HTMLElement>(null);
@@ -21,6 +21,7 @@ export function Shell({ project, children }: { project?: ProjectDto; children?: 
       <TitleStrip project={project} user={user ?? null} onMenu={() => setMenuOpen(true)} />
       <div className="mt-side"><PageList project={project} administrator={administrator} /></div>
       <main id="main" className="mt-main" ref={main} tabIndex={-1} aria-busy={going}>
+        {notice}
         {children ?? <Outlet />}
         {project && (
           <p className="mt-foot">

@@ -6,6 +6,7 @@ import type { EntityManager } from 'typeorm';
 import { determineSectionOutline, explainMember } from '../../calc/index.js';
 import type { TakeoffMember } from '../../calc/index.js';
 import { lockProject } from '../../shared/project-lock.js';
+import { publish, resultsEvent } from '../../shared/project-events.js';
 import { notFound } from '../../shared/refusal.js';
 import { acceptanceHolds, inputHashes, resolveCases, withSteelReason } from './member-case.js';
 import type { InputAcceptance, ProjectInputs } from './project-inputs.service.js';
@@ -51,6 +52,7 @@ export class AssessmentService {
     const outcome = assessInputs(inputs);
     const changed = await storeOutcomes(manager, inputs.zones.map((zone) => zone.id), outcome.members);
     await storeZones(manager, outcome.zones);
+    await publish(manager, [resultsEvent(projectId)]);
     return { members: outcome.members.length, changed };
   }
 

@@ -3,9 +3,9 @@ import type { ProjectCreate, ProjectDto, ProjectListItemDto } from '@mantlet/com
 import { api } from '../../../lib/api-client.js';
 import { projectKey } from '../../../lib/query-client.js';
 
-const listKey = ['project-list'] as const;
+export const projectListKey = ['project-list'] as const;
 export const projectsQuery = () =>
-  queryOptions({ queryKey: listKey, queryFn: ({ signal }) => api.get<ProjectListItemDto[]>('/projects', undefined, signal) });
+  queryOptions({ queryKey: projectListKey, queryFn: ({ signal }) => api.get<ProjectListItemDto[]>('/projects', undefined, signal) });
 export const useProjects = () => useQuery(projectsQuery());
 
 export const projectQuery = (projectId: string) =>
@@ -16,7 +16,7 @@ export function useCreateProject() {
   const client = useQueryClient();
   return useMutation({
     mutationFn: (body: ProjectCreate) => api.post<ProjectDto>('/projects', body),
-    onSuccess: () => client.invalidateQueries({ queryKey: listKey }),
+    onSuccess: () => client.invalidateQueries({ queryKey: projectListKey }),
   });
 }
 
@@ -29,7 +29,7 @@ export function useProjectMutation<Body, Result = void>(projectId: string, send:
   return useMutation({
     mutationFn: send,
     onSuccess: async () => {
-      void client.invalidateQueries({ queryKey: listKey });
+      void client.invalidateQueries({ queryKey: projectListKey });
       await client.invalidateQueries({ queryKey: projectKey(projectId) });
     },
   });
