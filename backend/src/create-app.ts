@@ -8,6 +8,7 @@ import { AppModule } from './app.module.js';
 import { useSessions } from './features/auth/session.js';
 import { serveClient } from './client.js';
 import { ErrorFilter } from './shared/error.filter.js';
+import { serveDocs } from './shared/openapi/serve-docs.js';
 import { validationPipe } from './shared/validation.js';
 
 export interface AppOptions {
@@ -58,6 +59,7 @@ export async function createApp(options: AppOptions): Promise<NestExpressApplica
   app.useBodyParser('json', { limit: '4mb' });
   const sessions = useSessions(app, { url: options.databaseUrl, secret: options.sessionSecret, secure: options.secureCookies ?? false });
   app.setGlobalPrefix('api');
+  serveDocs(app);
   app.useGlobalPipes(validationPipe());
   app.useGlobalFilters(new ErrorFilter());
   const close = app.close.bind(app);

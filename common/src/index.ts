@@ -1,5 +1,6 @@
 export * from './contracts/primitives.js';
 export * from './contracts/messages.responses.js';
+export * from './contracts/errors.responses.js';
 export * from './contracts/sections.js';
 export * from './contracts/sections.responses.js';
 export * from './contracts/fire.js';

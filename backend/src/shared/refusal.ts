@@ -1,21 +1,9 @@
 import { HttpException, HttpStatus } from '@nestjs/common';
 import { message, sentence } from '@mantlet/common';
-import type { Message } from '@mantlet/common';
+import type { ErrorDto, Message } from '@mantlet/common';
 
-export interface Issue {
-  path: string;
-  message: string;
-}
-/** What every error answer carries: a sentence, its code, and the fields it concerns. */
-export interface ErrorBody {
-  message: string;
-  code: string;
-  issues?: Issue[];
-  /** the version on the server, where a stale one was sent; who saved it, and when */
-  current?: unknown;
-  by?: string;
-  at?: string;
-}
+export type ErrorBody = ErrorDto;
+export type Issue = NonNullable<ErrorDto['issues']>[number];
 /** Who made a change, and when (ISO 8601). */
 export interface Trace {
   by: string;

@@ -1,6 +1,8 @@
 import { Controller, HttpCode, Post } from '@nestjs/common';
+import { recalculationDtoSchema } from '@mantlet/common';
 import { DesignTeam, Scope } from '../../shared/access.js';
 import type { ProjectScope } from '../../shared/access.js';
+import { Returns } from '../../shared/openapi/returns.js';
 import { AssessmentService } from './assessment.service.js';
 
 @Controller('projects/:projectId')
@@ -11,6 +13,7 @@ export class AssessmentController {
   @Post('recalculate')
   @HttpCode(200)
   @DesignTeam()
+  @Returns(recalculationDtoSchema, 'Assesses every member anew; says how many there are and how many came out differently.')
   recalculate(@Scope() scope: ProjectScope): Promise<{ members: number; changed: number }> {
     return this.assessment.recalculate(scope.projectId);
   }

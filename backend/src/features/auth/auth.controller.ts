@@ -1,9 +1,10 @@
 import { Body, Controller, Delete, Get, HttpCode, Post, Put, Req, Res, UseGuards } from '@nestjs/common';
-import { passwordChangeSchema, setUpSchema, signInSchema } from '@mantlet/common';
+import { passwordChangeSchema, sessionDtoSchema, setUpSchema, signInSchema } from '@mantlet/common';
 import type { PasswordChange, SessionDto, SetUp, SignIn } from '@mantlet/common';
 import type { Response } from 'express';
 import { CurrentActor, Public, SignedIn } from '../../shared/access.js';
 import type { Actor, ScopedRequest } from '../../shared/access.js';
+import { Returns, ReturnsNothing } from '../../shared/openapi/returns.js';
 import { UsersService } from '../users/users.service.js';
 import { LocalAuthGuard } from './local-auth.guard.js';
 import { SESSION_COOKIE } from './session.js';
@@ -16,6 +17,7 @@ export class AuthController {
   /** Who is signed in, if anybody; and whether the installation still waits for its first account. */
   @Get('session')
   @Public()
+  @Returns(sessionDtoSchema, 'Who is signed in, if anybody; and whether the installation still waits for its first account.')
   async session(@Req() request: ScopedRequest): Promise<SessionDto> {
     return { user: request.user ?? null, needsSetUp: !request.user && (await this.users.isEmpty()) };
   }
@@ -23,6 +25,7 @@ export class AuthController {
   @Post('session')
   @HttpCode(200)
   @Public()
+  @Returns(sessionDtoSchema, 'Signs in and sets the session cookie.')
   @UseGuards(SignInThrottlerGuard, LocalAuthGuard)
   signIn(@Body({ schema: signInSchema }) _input: SignIn, @Req() request: ScopedRequest): SessionDto {
     return { user: request.user ?? null, needsSetUp: false };
@@ -31,6 +34,7 @@ export class AuthController {
   @Delete('session')
   @HttpCode(204)
   @SignedIn()
+  @ReturnsNothing('Signs out.')
   async signOut(@Req() request: ScopedRequest, @Res({ passthrough: true }) response: Response): Promise<void> {
     await new Promise<void>((done, fail) => request.logout((error: unknown) => (error ? fail(error) : done())));
     await new Promise<void>((done, fail) => request.session.destroy((error: unknown) => (error ? fail(error) : done())));
@@ -39,6 +43,7 @@ export class AuthController {
 
   @Post('set-up')
   @Public()
+  @Returns(sessionDtoSchema, 'Makes the first account of an empty installation, the administrator, and signs in.')
   @UseGuards(SignInThrottlerGuard)
   async setUp(@Body({ schema: setUpSchema }) input: SetUp, @Req() request: ScopedRequest): Promise<SessionDto> {
     const user = await this.users.setUp(input);
@@ -49,6 +54,7 @@ export class AuthController {
   @Put('session/password')
   @HttpCode(204)
   @SignedIn()
+  @ReturnsNothing('Changes the password of the caller; their other sessions end.')
   changePassword(@Body({ schema: passwordChangeSchema }) input: PasswordChange, @CurrentActor() actor: Actor, @Req() request: ScopedRequest): Promise<void> {
     return this.users.changePassword(actor, input, request.sessionID);
   }

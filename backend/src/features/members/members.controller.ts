@@ -1,13 +1,15 @@
 import { Body, Controller, Delete, Get, HttpCode, HttpStatus, Param, Patch, Post, Put, Query } from '@nestjs/common';
 import {
-  acceptanceSchema, acceptanceWithdrawalSchema, bulkMemberSchema, memberDeleteQuerySchema, memberIdsSchema, memberInputSchema, memberQuerySchema,
-  memberStructuralSchema, memberUpdateSchema,
+  acceptanceSchema, acceptancesWithdrawnDtoSchema, acceptanceWithdrawalSchema, bulkMemberSchema, memberDeleteQuerySchema, memberDtoSchema,
+  memberIdsSchema, memberInputSchema, memberQuerySchema, memberRowDtoSchema, membersAcceptedDtoSchema, membersChangedDtoSchema,
+  membersDeletedDtoSchema, memberSheetDtoSchema, memberStructuralSchema, memberUpdateSchema, pageSchema,
 } from '@mantlet/common';
 import type {
   Acceptance, AcceptanceWithdrawal, BulkMember, MemberDto, MemberInput, MemberQuery, MemberRowDto, MemberSheetDto, MemberStructural, MemberUpdate, Page,
 } from '@mantlet/common';
 import { DesignTeam, Roles, Scope } from '../../shared/access.js';
 import type { ProjectScope } from '../../shared/access.js';
+import { Returns, ReturnsNothing } from '../../shared/openapi/returns.js';
 import { idParam } from '../../shared/validation.js';
 import { AcceptancesService } from './acceptances.service.js';
 import { MemberListService } from './member-list.service.js';
@@ -25,18 +27,21 @@ export class MembersController {
 
   @Get()
   @DesignTeam()
+  @Returns(pageSchema(memberRowDtoSchema), 'Members, filtered, sorted and paged; A/V in 1/m, temperatures in °C, lengths in mm, thickness in its unit.')
   list(@Scope() scope: ProjectScope, @Query({ schema: memberQuerySchema }) query: MemberQuery): Promise<Page<MemberRowDto>> {
     return this.lists.list(scope.projectId, query);
   }
 
   @Get(':memberId')
   @DesignTeam()
+  @Returns(memberSheetDtoSchema, 'One member with its result, drawing, working, charts and history.')
   sheet(@Scope() scope: ProjectScope, @Param('memberId', idParam) memberId: string): Promise<MemberSheetDto> {
     return this.sheets.sheet(scope.projectId, memberId);
   }
 
   @Post()
   @Roles('specifier')
+  @Returns(memberDtoSchema, 'Adds a member; lengths in mm.')
   create(@Scope() scope: ProjectScope, @Body({ schema: memberInputSchema }) input: MemberInput): Promise<MemberDto> {
     return this.members.create(scope, input);
   }
@@ -45,6 +50,7 @@ export class MembersController {
   @Post('bulk')
   @HttpCode(HttpStatus.OK)
   @Roles('specifier')
+  @Returns(membersChangedDtoSchema, 'Sets the same fields of several members, all or none.')
   setMany(@Scope() scope: ProjectScope, @Body({ schema: bulkMemberSchema }) input: BulkMember): Promise<{ changed: number }> {
     return this.members.setMany(scope, input);
   }
@@ -52,18 +58,21 @@ export class MembersController {
   @Post('delete')
   @HttpCode(HttpStatus.OK)
   @Roles('specifier')
+  @Returns(membersDeletedDtoSchema, 'Removes several members, all or none.')
   removeMany(@Scope() scope: ProjectScope, @Body({ schema: memberIdsSchema }) { memberIds }: { memberIds: string[] }): Promise<{ deleted: number }> {
     return this.members.removeMany(scope, memberIds);
   }
 
   @Patch(':memberId')
   @Roles('specifier')
+  @Returns(memberDtoSchema, 'Changes what the specifier decides of a member; needs the version that was read.')
   update(@Scope() scope: ProjectScope, @Param('memberId', idParam) memberId: string, @Body({ schema: memberUpdateSchema }) input: MemberUpdate): Promise<MemberDto> {
     return this.members.update(scope, memberId, input);
   }
 
   @Put(':memberId/structural')
   @Roles('structural-engineer')
+  @Returns(memberDtoSchema, 'Sets where the critical temperature comes from: declared (°C), utilisation, actions (kN, kNm), assumed.')
   setStructural(
     @Scope() scope: ProjectScope, @Param('memberId', idParam) memberId: string, @Body({ schema: memberStructuralSchema }) input: MemberStructural,
   ): Promise<MemberDto> {
@@ -73,6 +82,7 @@ export class MembersController {
   @Delete(':memberId')
   @HttpCode(HttpStatus.NO_CONTENT)
   @Roles('specifier')
+  @ReturnsNothing('Removes a member; needs the version that was read.')
   remove(@Scope() scope: ProjectScope, @Param('memberId', idParam) memberId: string, @Query({ schema: memberDeleteQuerySchema }) { version }: { version: number }): Promise<void> {
     return this.members.remove(scope, memberId, version);
   }
@@ -86,12 +96,14 @@ export class AcceptancesController {
   @Post()
   @HttpCode(HttpStatus.OK)
   @Roles('fire-engineer')
+  @Returns(membersAcceptedDtoSchema, 'Signs an assumed or high critical temperature, or bare steel, of several members.')
   accept(@Scope() scope: ProjectScope, @Body({ schema: acceptanceSchema }) input: Acceptance): Promise<{ accepted: number }> {
     return this.acceptances.accept(scope, input);
   }
 
   @Delete()
   @Roles('fire-engineer')
+  @Returns(acceptancesWithdrawnDtoSchema, 'Withdraws signatures from several members.')
   withdraw(@Scope() scope: ProjectScope, @Body({ schema: acceptanceWithdrawalSchema }) input: AcceptanceWithdrawal): Promise<{ withdrawn: number }> {
     return this.acceptances.withdraw(scope, input);
   }
