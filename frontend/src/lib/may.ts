@@ -3,7 +3,7 @@ import type { Role } from '@mantlet/common';
 import { joinWords } from './format.js';
 
 /** What may be done on a project, and by whom. The server decides; the client only avoids offering what it would refuse. */
-const rights = {
+export const rights = {
   'see-design': { roles: designRoles, what: 'see work in progress' },
   'edit-project': { roles: ['fire-engineer', 'specifier'], what: "change the project's title and place" },
   'edit-team': { roles: ['fire-engineer', 'specifier'], what: 'change the team' },

@@ -23,7 +23,7 @@ export function nextStep(revision: RevisionDto, held: readonly Role[], myId: str
   const refused = may(held, 'edit-revisions') ? null : whyNot('edit-revisions');
   if (revision.state === 'draft') {
     const blockers = readiness?.blockers.length ?? 0;
-    const why = refused ?? (blockers > 0 ? `${countWord(blockers)} ${blockers === 1 ? 'item keeps' : 'items keep'} it from being prepared; see Readiness on the Schedule page.` : null);
+    const why = refused ?? (blockers > 0 ? `${countWord(blockers)} ${blockers === 1 ? 'item keeps' : 'items keep'} it from being prepared.` : null);
     return { step: 'prepare', text: 'Prepare', why };
   }
   if (revision.state === 'prepared') {
@@ -43,8 +43,14 @@ export function revisionHeading(r: RevisionDto): string {
   return `${r.code} is superseded; a later revision replaces it`;
 }
 
+/** What the issued revision is to those who see nothing else. */
+const inForce = (held: readonly Role[]): string =>
+  held.includes('contractor') ? 'Apply what this revision says; what came before it is superseded.'
+    : held.includes('inspector') ? 'Inspect against this revision; what came before it is superseded.'
+      : 'This is the revision in force; what came before it is superseded.';
+
 /** The heading of the schedule page. */
-export function scheduleWords(revisions: readonly RevisionDto[], readiness: ReadinessDto | undefined): { heading: string; sub: string | undefined } {
+export function scheduleWords(revisions: readonly RevisionDto[], readiness: ReadinessDto | undefined, held: readonly Role[] = []): { heading: string; sub: string | undefined } {
   const open = revisions.find((r) => isOpen(r.state));
   const issued = revisions.find((r) => r.state === 'issued');
   const issuedWords = issued ? `${issued.code} is issued${issued.issued ? `, ${formatDate(issued.issued.at)}` : ''}.` : 'Nothing has been issued yet.';
@@ -53,6 +59,7 @@ export function scheduleWords(revisions: readonly RevisionDto[], readiness: Read
     return { heading: n === 0 ? `${open.code} can be prepared` : `${countWord(n)} ${n === 1 ? 'item keeps' : 'items keep'} ${open.code} from being prepared`, sub: issuedWords };
   }
   if (open) return { heading: revisionHeading(open), sub: issuedWords };
+  if (issued && !may(held, 'see-design')) return { heading: issuedWords.replace(/\.$/, ''), sub: inForce(held) };
   if (issued) return { heading: issuedWords.replace(/\.$/, ''), sub: 'No revision is in work. What changes from here belongs to the next one.' };
   return { heading: 'No revision yet', sub: readiness ? 'The first revision starts as a draft; preparing it freezes the schedule.' : 'Nothing has been issued yet.' };
 }

@@ -44,6 +44,13 @@ describe('the schedule in words', () => {
     expect(scheduleWords([revision({ state: 'issued', issued: signed('Ben') })], ready).heading).toBe('P01 is issued, 2 May 2026');
     expect(scheduleWords([], undefined).heading).toBe('No revision yet');
   });
+  it('tells those who see issued work only what it is to them, and nothing of work that they cannot see', () => {
+    const issued = [revision({ state: 'issued', issued: signed('Ben') })];
+    expect(scheduleWords(issued, undefined, ['contractor']).sub).toMatch(/^Apply what this revision says/);
+    expect(scheduleWords(issued, undefined, ['inspector', 'reader']).sub).toMatch(/^Inspect against this revision/);
+    expect(scheduleWords(issued, undefined, ['reader']).sub).toMatch(/^This is the revision in force/);
+    expect(scheduleWords(issued, ready, ['specifier']).sub).toMatch(/^No revision is in work/);
+  });
   it('groups by who must act, blockers first', () => {
     const groups = groupByRole(blocked);
     expect(groups.map(roleTally)).toEqual(['Structural engineer: 1 blocker, 1 worth a look', 'Specifier: 1 blocker']);
@@ -76,10 +83,12 @@ describe('the schedule page', () => {
     await userEvent.click(buttons[buttons.length - 1] as HTMLElement);
     await waitFor(() => expect(calls.some((c) => c.method === 'POST' && c.path === `${at}/revisions/r1/issue`)).toBe(true));
   });
-  it('asks nothing of work in progress for a contractor', async () => {
-    const calls = serve({ ...session, [`GET ${at}/revisions`]: { body: [] } });
+  it('asks nothing of work in progress for a contractor, and says from whom it is awaited', async () => {
+    const team = [{ userId: 'a', name: 'Ada', email: 'a@x.test', roles: ['specifier'] }, { userId: 'b', name: 'Ben', email: 'b@x.test', roles: ['fire-engineer', 'specifier'] }, { userId: 'c', name: 'Cy', email: 'c@x.test', roles: ['reader'] }];
+    const calls = serve({ ...session, [`GET ${at}/revisions`]: { body: [] }, [`GET ${at}/memberships`]: { body: team } });
     renderPage(<SchedulePage />, { project: testProject(['contractor']) });
-    expect(await screen.findByText('Revisions appear here once a specifier issues the schedule.')).toBeInTheDocument();
+    expect(await screen.findByText(/Revisions appear here once a specifier issues the schedule/)).toBeInTheDocument();
+    expect(await screen.findByText(/It is awaited from Ada and Ben\./)).toBeInTheDocument();
     expect(calls.some((c) => c.path.endsWith('/readiness'))).toBe(false);
     expect(screen.queryByRole('button')).toBeNull();
   });

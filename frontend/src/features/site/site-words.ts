@@ -1,5 +1,5 @@
 import { sumDecimals } from '@mantlet/common';
-import type { SiteDto, SiteItemDto, SiteLevelDto, SiteMaterialDto } from '@mantlet/common';
+import type { Role, SiteDto, SiteItemDto, SiteLevelDto, SiteMaterialDto } from '@mantlet/common';
 import { count, formatLevel, formatNumber } from '../../lib/format.js';
 
 /** Members of a zone that get the same: one product at one thickness. */
@@ -46,9 +46,21 @@ export function materialWords(m: SiteMaterialDto): string {
   return parts.filter((p) => typeof p === 'string').join(', ') || 'not determined';
 }
 
-/** The heading: what there is to apply in all. */
-export function siteHeading(site: SiteDto): string {
+/** Somebody who looks at the work and neither buys nor applies. */
+export const onlyInspects = (held: readonly Role[]): boolean => held.includes('inspector') && !held.some((r) => r !== 'inspector' && r !== 'reader');
+
+/** What an inspector goes to see. */
+function inspectionHeading(code: string, levels: readonly SiteLevelDto[]): string {
+  const zones = levels.flatMap((l) => l.zones);
+  const pieces = zones.flatMap((z) => z.items).reduce((sum, i) => sum + i.quantity, 0);
+  const bare = zones.flatMap((z) => z.bare).reduce((sum, b) => sum + b.quantity, 0);
+  return `${code}: ${count(pieces, 'piece')} protected in ${count(zones.filter((z) => z.items.length > 0).length, 'zone')}${bare ? `, ${formatNumber(bare)} left bare` : ''}`;
+}
+
+/** The heading: what there is to apply in all, or to inspect. */
+export function siteHeading(site: SiteDto, held: readonly Role[] = []): string {
   if (!site.revision) return 'Nothing has been issued yet';
+  if (onlyInspects(held)) return inspectionHeading(site.revision.code, site.levels);
   const litres = site.purchase.filter((m) => m.kind === 'coating').map((m) => m.litres).filter((l) => l !== null);
   const sheets = site.purchase.reduce((sum, m) => sum + (m.sheets ?? 0), 0);
   const spray = site.purchase.filter((m) => m.kind === 'spray').map((m) => m.volumeM3).filter((v) => v !== null);

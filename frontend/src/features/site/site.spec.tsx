@@ -60,6 +60,20 @@ describe('the site page', () => {
     expect(screen.getByRole('link', { name: 'Specification PDF' })).toHaveAttribute('href', `/api/projects/${projectId}/revisions/r1/pdf?download=1`);
     expect(screen.queryByRole('columnheader', { name: 'EUR' })).toBeNull();
   });
+  it('shows an inspector what to hold the work against, and nothing to buy', async () => {
+    serve({ [`GET /projects/${projectId}/site`]: { body: site } });
+    renderPage(<SitePage />, { project: testProject(['inspector']) });
+    expect(await screen.findByRole('heading', { level: 1, name: 'P02: 4 pieces protected in 1 zone, 3 left bare' })).toBeInTheDocument();
+    expect(screen.queryByText('To buy for the whole job')).toBeNull();
+    expect(screen.getByText(/coating found on them is a deviation to report/)).toBeInTheDocument();
+  });
+  it('prints what is shown', async () => {
+    const two = { ...site, levels: [...site.levels, { ...site.levels[0] as SiteDto['levels'][number], id: 'l2', code: 'L2' }] };
+    serve({ [`GET /projects/${projectId}/site`]: { body: two } });
+    renderPage(<SitePage />, { project: testProject(['contractor']), at: `/projects/${projectId}/site?level=l2` });
+    expect(await screen.findByRole('button', { name: 'Print this floor' })).toBeInTheDocument();
+    expect(screen.getAllByRole('heading', { level: 2 }).map((h) => h.textContent)).toEqual(['L2 First, +4.200 m']);
+  });
   it('says that nothing has been issued, and sends no contractor to pages that are not theirs', async () => {
     serve({ [`GET /projects/${projectId}/site`]: { body: empty } });
     renderPage(<SitePage />, { project: testProject(['contractor']) });

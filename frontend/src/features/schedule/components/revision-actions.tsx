@@ -1,5 +1,6 @@
 import { Alert, App, Button } from 'antd';
 import { useState } from 'react';
+import type { ReactNode } from 'react';
 import type { ReadinessDto, RevisionDto, Role } from '@mantlet/common';
 import { ApiError } from '../../../lib/api-client.js';
 import { may } from '../../../lib/may.js';
@@ -15,10 +16,10 @@ const questions: Record<Step, (code: string) => { title: string; content: string
   issue: (code) => ({ title: `Issue ${code}?`, content: `The PDF is made once and kept with its digest, the site reads ${code} from now on, and an earlier issued revision is superseded. An issued revision cannot be changed afterwards, nor taken back: corrections go into the next one.`, okText: 'Issue' }),
 };
 
-interface RevisionActionsProps { projectId: string; revision: RevisionDto; held: readonly Role[]; readiness: ReadinessDto | undefined }
+interface RevisionActionsProps { projectId: string; revision: RevisionDto; held: readonly Role[]; readiness: ReadinessDto | undefined; /** where what is open is listed */ listed: ReactNode }
 
 /** What can be done with a revision now, by this person; what cannot says why. */
-export function RevisionActions({ projectId, revision, held, readiness }: RevisionActionsProps) {
+export function RevisionActions({ projectId, revision, held, readiness, listed }: RevisionActionsProps) {
   const { modal } = App.useApp();
   const myId = useSession().data?.user?.id ?? null;
   const take = useTakeStep(projectId, revision.id);
@@ -34,7 +35,7 @@ export function RevisionActions({ projectId, revision, held, readiness }: Revisi
         {edits && revision.state === 'draft' && <Button onClick={() => setDrawer('change')}>Edit code and purpose</Button>}
         {edits && revision.state !== 'draft' && <Button onClick={() => setDrawer('return')}>Return with a comment</Button>}
       </div>
-      {offer.why && <p className="mt-sub">{offer.why}</p>}
+      {offer.why && <p className="mt-sub">{offer.why}{offer.step === 'prepare' && edits && <> {listed}</>}</p>}
       {take.error && (
         <Alert
           type="error" role="alert" title="Left as it was"

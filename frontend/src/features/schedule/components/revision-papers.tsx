@@ -7,6 +7,7 @@ import { Panel } from '../../../ui/panel.js';
 import { Quantity } from '../../../ui/quantity.js';
 import { ScheduleTable } from '../../../ui/schedule-table.js';
 import { StatusWord } from '../../../ui/status-word.js';
+import { Term } from '../../../ui/term.js';
 import { pdfUrl, useVerify } from '../api/revisions.js';
 import { isOpen, shortDigest, verificationWords } from '../revision-words.js';
 
@@ -15,7 +16,7 @@ export function Digests({ revision, projectId }: { revision: RevisionDto; projec
   const verify = useVerify(projectId, revision.id);
   const found = verify.data && verificationWords(verify.data);
   return (
-    <Panel title="Digests">
+    <Panel title={<Term name="digest">Digests</Term>} sub="Verify reads the stored files again and compares.">
       <dl className="mt-facts">
         <dt>Frozen schedule</dt><dd title={revision.snapshotSha256 ?? undefined}>{shortDigest(revision.snapshotSha256)}</dd>
         <dt>PDF</dt><dd title={revision.pdfSha256 ?? undefined}>{shortDigest(revision.pdfSha256)}{revision.pdfBytes !== null && <span className="mt-sub">, {formatNumber(revision.pdfBytes / 1000)} kB</span>}</dd>
@@ -36,10 +37,16 @@ export function PdfPreview({ revision, projectId }: { revision: RevisionDto; pro
       title="PDF" sub={draft ? 'A preview with a watermark, made as the schedule stands now. The PDF that counts is made once, on issue.' : 'Made once on issue and kept; this is the very file.'}
       actions={<>
         <Button onClick={() => setShown(!shown)} aria-expanded={shown}>{shown ? 'Hide the preview' : 'Show it here'}</Button>
+        <Button href={pdfUrl(projectId, revision.id)} target="_blank" rel="noopener">Open in a tab</Button>
         <Button href={pdfUrl(projectId, revision.id, true)} download>{draft ? 'Download the preview' : 'Download'}</Button>
       </>}
     >
-      {shown && <iframe className="mt-pdf" title={`PDF of ${revision.code}`} src={pdfUrl(projectId, revision.id)} />}
+      {shown && (
+        <>
+          <iframe className="mt-pdf" title={`PDF of ${revision.code}`} src={pdfUrl(projectId, revision.id)} />
+          <p className="mt-sub">Nothing to see? Some browsers, on phones above all, show no PDF within a page: open it in a tab.</p>
+        </>
+      )}
     </Panel>
   );
 }

@@ -27,7 +27,7 @@ export default function RevisionPage() {
           <>
             <LifeLine revision={r} />
             {r.returnedComment && <p className="mt-returned"><span className="mt-strong">Returned: </span>{r.returnedComment}</p>}
-            <RevisionActions projectId={project.id} revision={r} held={project.roles} readiness={readiness.data} />
+            <RevisionActions projectId={project.id} revision={r} held={project.roles} readiness={readiness.data} listed={<Link to={`/projects/${project.id}/schedule`}>See what is open</Link>} />
             <div className="mt-columns">
               <div className="mt-stack">
                 <PdfPreview revision={r} projectId={project.id} />

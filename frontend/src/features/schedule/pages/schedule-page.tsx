@@ -14,6 +14,7 @@ import { Readiness } from '../components/readiness.js';
 import { Register } from '../components/register.js';
 import { StartRevision } from '../components/revision-drawers.js';
 import { RevisionActions } from '../components/revision-actions.js';
+import { AwaitedFrom } from '../../team/components/awaited-from.js';
 import { isOpen, scheduleWords } from '../revision-words.js';
 import '../schedule.css';
 
@@ -22,14 +23,14 @@ function InWork({ revision, project, readiness }: { revision: RevisionDto; proje
     <section className="mt-stack" aria-label={`${revision.code}, in work`}>
       <LifeLine revision={revision} />
       {revision.returnedComment && <p className="mt-returned"><span className="mt-strong">Returned: </span>{revision.returnedComment}</p>}
-      <RevisionActions projectId={project.id} revision={revision} held={project.roles} readiness={readiness} />
+      <RevisionActions projectId={project.id} revision={revision} held={project.roles} readiness={readiness} listed="They are listed under Readiness, each with the place where it is settled." />
       <p><Link to={`/projects/${project.id}/schedule/${revision.id}`}>Open {revision.code} with its PDF</Link></p>
     </section>
   );
 }
 
-function Nothing({ design, canStart, onStart }: { design: boolean; canStart: boolean; onStart: () => void }) {
-  if (!design) return <Panel label="Revisions"><EmptyState title="Nothing has been issued yet">Revisions appear here once a specifier issues the schedule.</EmptyState></Panel>;
+function Nothing({ projectId, design, canStart, onStart }: { projectId: string; design: boolean; canStart: boolean; onStart: () => void }) {
+  if (!design) return <Panel label="Revisions"><EmptyState title="Nothing has been issued yet">Revisions appear here once a specifier issues the schedule. <AwaitedFrom projectId={projectId} /></EmptyState></Panel>;
   return (
     <Panel label="Revisions">
       <EmptyState title="Start the first revision" action={canStart ? <Button type="primary" onClick={onStart}>Start a revision</Button> : null}>
@@ -47,7 +48,7 @@ export default function SchedulePage() {
   const revisions = useRevisions(project.id);
   const readiness = useReadiness(project.id, design);
   const [starting, setStarting] = useState(false);
-  const words = revisions.data ? scheduleWords(revisions.data, readiness.data) : { heading: 'Schedule', sub: undefined };
+  const words = revisions.data ? scheduleWords(revisions.data, readiness.data, project.roles) : { heading: 'Schedule', sub: undefined };
   const open = revisions.data?.find((r) => isOpen(r.state));
   const canStart = may('edit-revisions') && revisions.data !== undefined && !open;
   return (
@@ -60,7 +61,7 @@ export default function SchedulePage() {
           <>
             {open && <InWork revision={open} project={project} readiness={readiness.data} />}
             {design && <QueryState query={readiness} what="what is open">{(r) => <Readiness readiness={r} projectId={project.id} held={project.roles} />}</QueryState>}
-            {list.length > 0 ? <Register revisions={list} projectId={project.id} /> : <Nothing design={design} canStart={canStart} onStart={() => setStarting(true)} />}
+            {list.length > 0 ? <Register revisions={list} projectId={project.id} /> : <Nothing projectId={project.id} design={design} canStart={canStart} onStart={() => setStarting(true)} />}
           </>
         )}
       </QueryState>

@@ -1,6 +1,7 @@
 import { memberTypeNames } from '@mantlet/common';
 import type { SiteItemDto, SiteZoneDto } from '@mantlet/common';
 import { count, formatNumber } from '../../../lib/format.js';
+import { Term } from '../../../ui/term.js';
 import { groupItems } from '../site-words.js';
 import type { ApplyGroup } from '../site-words.js';
 
@@ -31,7 +32,7 @@ function Group({ group, zone }: { group: ApplyGroup; zone: SiteZoneDto }) {
       <table className="mt-site-table">
         <caption className="mt-sr">{group.how} of {group.productName}, zone {zone.code} {zone.name}</caption>
         <thead>
-          <tr><th scope="col">Mark</th><th scope="col" className="mt-num">No.</th><th scope="col">Section</th><th scope="col">Member</th><th scope="col">Sides to protect</th><th scope="col" className="mt-num">Length m</th><th scope="col" className="mt-num">Area m²</th>{litres && <th scope="col" className="mt-num">Litres</th>}</tr>
+          <tr><th scope="col"><Term name="mark" /></th><th scope="col" className="mt-num">No.</th><th scope="col">Section</th><th scope="col">Member</th><th scope="col"><Term name="exposure">Sides to protect</Term></th><th scope="col" className="mt-num">Length m</th><th scope="col" className="mt-num">Area m²</th>{litres && <th scope="col" className="mt-num">Litres</th>}</tr>
         </thead>
         <tbody>{group.items.map((item) => <Item key={item.mark} item={item} litres={litres} />)}</tbody>
       </table>

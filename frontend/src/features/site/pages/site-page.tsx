@@ -7,12 +7,14 @@ import { LinkButton } from '../../../ui/link-button.js';
 import { Page } from '../../../ui/page.js';
 import { Panel } from '../../../ui/panel.js';
 import { EmptyState, QueryState } from '../../../ui/states.js';
+import { Term } from '../../../ui/term.js';
 import { useCurrentProject, useMay } from '../../projects/project-context.js';
 import { pdfUrl } from '../../schedule/api/revisions.js';
+import { AwaitedFrom } from '../../team/components/awaited-from.js';
 import { useSite } from '../api/site.js';
 import { Materials } from '../components/materials.js';
 import { ZoneWork } from '../components/zone-work.js';
-import { levelName, shownLevels, siteHeading } from '../site-words.js';
+import { levelName, onlyInspects, shownLevels, siteHeading } from '../site-words.js';
 import '../site.css';
 
 /** Whole packages for the floor where the issued record counts them; what is used, otherwise. */
@@ -28,11 +30,11 @@ function LevelMaterials({ level, site }: { level: SiteLevelDto; site: SiteDto })
   );
 }
 
-function Level({ level, site }: { level: SiteLevelDto; site: SiteDto }) {
+function Level({ level, site, inspects }: { level: SiteLevelDto; site: SiteDto; inspects: boolean }) {
   return (
     <section className="mt-panel mt-site-level" id={`level-${level.id}`} aria-labelledby={`level-${level.id}-name`}>
       <h2 id={`level-${level.id}-name`}>{levelName(level)}</h2>
-      <LevelMaterials level={level} site={site} />
+      {!inspects && <LevelMaterials level={level} site={site} />}
       {level.zones.map((zone) => <ZoneWork key={zone.id} zone={zone} />)}
     </section>
   );
@@ -61,18 +63,20 @@ function Issued({ site, project }: { site: SiteDto; project: ProjectDto }) {
   const [params] = useSearchParams();
   const { hash } = useLocation();
   const shown = shownLevels(site.levels, params.get('level'));
+  const inspects = onlyInspects(project.roles);
   useEffect(() => { if (hash) document.getElementById(hash.slice(1))?.scrollIntoView(); }, [hash]);
   return (
     <>
       <Finder site={site} shown={shown} />
-      {shown.length === site.levels.length && site.purchase.length > 0 && (
+      {!inspects && shown.length === site.levels.length && site.purchase.length > 0 && (
         <Panel title="To buy for the whole job" sub="Containers, bags and sheets are rounded up once for each product.">
           <Materials materials={site.purchase} caption="To buy for the whole job" currency={site.project?.currency ?? project.currency} prices={site.prices} />
         </Panel>
       )}
-      {shown.map((level) => <Level key={level.id} level={level} site={site} />)}
+      {shown.map((level) => <Level key={level.id} level={level} site={site} inspects={inspects} />)}
       <p className="mt-sub">
-        Thickness is of the protection alone, primer deducted. The product’s own instructions govern surface, primer, conditions and curing; ask the specifier before applying anything that differs from this revision.
+        <Term name="dft">Dry thickness</Term> is of the protection alone, primer deducted; the <Term name="wft">wet thickness</Term> is what a gauge reads while applying.
+        {' '}{inspects ? 'Members left bare are listed with each zone: coating found on them is a deviation to report. What is acceptable on site is for the specification, the product’s instructions and local practice to say.' : 'The product’s own instructions govern surface, primer, conditions and curing; ask the specifier before applying anything that differs from this revision.'}
         {' '}Thicknesses rest on {site.revision?.code}; a later revision replaces it.
       </p>
     </>
@@ -84,7 +88,8 @@ function Nothing({ projectId }: { projectId: string }) {
   return (
     <Panel label="Site">
       <EmptyState title="Nothing has been issued yet" action={design ? <LinkButton to={`/projects/${projectId}/schedule`} type="primary">Go to the schedule</LinkButton> : null}>
-        {design ? 'The site reads issued revisions only. Prepare, check and issue the schedule; it then stands here floor by floor.' : 'Nothing is to be applied before a specifier issues the schedule. What to apply where then stands here, floor by floor.'}
+        {design ? 'The site reads issued revisions only. Prepare, check and issue the schedule; it then stands here floor by floor.' : 'Nothing is to be applied before a specifier issues the schedule. What to apply where then stands here, floor by floor. '}
+        {!design && <AwaitedFrom projectId={projectId} />}
       </EmptyState>
     </Panel>
   );
@@ -96,13 +101,15 @@ export default function SitePage() {
   const query = useSite(project.id);
   const site = query.data;
   const revision = site?.revision;
+  const [params] = useSearchParams();
+  const oneFloor = site ? site.levels.length > 1 && shownLevels(site.levels, params.get('level')).length === 1 : false;
   return (
     <Page
-      title="Site" projectName={project.name} heading={site ? siteHeading(site) : 'Site'}
+      title="Site" projectName={project.name} heading={site ? siteHeading(site, project.roles) : 'Site'}
       sub={revision && site?.project ? <>{site.project.number} {site.project.name}{site.project.place && `, ${site.project.place}`}. Issued {formatDate(revision.issuedAt)}. <span title={revision.pdfSha256}>PDF {revision.pdfSha256.slice(0, 12)}…</span></> : undefined}
       state={revision ? { word: 'Issued', kind: 'settled' } : site ? { word: 'Not issued', kind: 'neutral' } : undefined}
       actions={revision ? <>
-        <Button onClick={() => window.print()}>Print</Button>
+        <Button onClick={() => window.print()}>{oneFloor ? 'Print this floor' : 'Print all floors'}</Button>
         {revision.pdfAvailable && <Button href={pdfUrl(project.id, revision.id, true)} download>Specification PDF</Button>}
         <Link className="mt-noprint" to={`/projects/${project.id}/schedule/${revision.id}`}>About {revision.code}</Link>
       </> : null}

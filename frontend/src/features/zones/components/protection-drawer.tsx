@@ -4,6 +4,7 @@ import { environments, memberTypeNames, memberTypes, productKindNames, zoneProte
 import type { ZoneDto } from '@mantlet/common';
 import { NumberField, RadioField, SelectField } from '../../../ui/form/fields.js';
 import { FormDrawer } from '../../../ui/form/form-drawer.js';
+import { Term } from '../../../ui/term.js';
 import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
 import { useSaveProtection, useZoneProducts, useZones } from '../api/zones.js';
 
@@ -38,11 +39,11 @@ export function ProtectionDrawer({ projectId, zone, onClose }: { projectId: stri
       title={`Protection of ${zone.code} ${zone.name}`} open onClose={onClose} onSubmit={(e) => { void submit(e); }}
       dirty={form.formState.isDirty && !save.isSuccess} saving={save.isPending} error={save.error} onReload={() => { void zones.refetch(); }}
     >
-      <SelectField control={form.control} name="environment" label="Environment" options={environmentOptions} help="Corrosivity category of ISO 12944-2. A product must be assessed for it." />
-      <RadioField control={form.control} name="targetPolicy.policy" label="Thicknesses in the zone" options={policyOptions} help="Members of one system share a target; no member ever gets less than it needs." />
-      {policy === 'bands' && <NumberField control={form.control} name="targetPolicy.bands" label="Bands at most" min={1} max={12} decimals={0} width={120} help="Split so that the least material is used." />}
+      <SelectField control={form.control} name="environment" label="Environment" term="environment" options={environmentOptions} help="Corrosivity category of ISO 12944-2. A product must be assessed for it." />
+      <RadioField control={form.control} name="targetPolicy.policy" label="Thicknesses in the zone" term="target-policy" options={policyOptions} help="Members of one system share a target; no member ever gets less than it needs." />
+      {policy === 'bands' && <NumberField control={form.control} name="targetPolicy.bands" label="Bands at most" term="band" min={1} max={12} decimals={0} width={120} help="Split so that the least material is used." />}
       <fieldset>
-        <legend>System by member type</legend>
+        <legend><Term name="system">System</Term> by member type</legend>
         {products.data?.length === 0 && <p className="mt-help">The library holds no product yet. Add one under Products first.</p>}
         {memberTypes.map((type, i) => (
           <SelectField key={type} control={form.control} name={`systems.${i}.productId`} label={memberTypeNames[type]} options={productOptions} allowClear search placeholder="No system: stays not determined" />

@@ -37,19 +37,19 @@ export function ZoneDrawer({ projectId, zone, levelId, levels, onClose }: ZoneDr
       </div>
       <TextField control={form.control} name="name" label="Name" />
       <div className="mt-form-row">
-        <SelectField control={form.control} name="periodMin" label="Period" options={periods} placeholder="Choose" />
-        <SelectField control={form.control} name="curve.kind" label="Fire curve" options={curves} />
+        <SelectField control={form.control} name="periodMin" label="Period" term="period" options={periods} placeholder="Choose" />
+        <SelectField control={form.control} name="curve.kind" label="Fire curve" term="fire-curve" options={curves} />
       </div>
       {kind === 'parametric' && (
         <fieldset>
           <legend>Parametric fire</legend>
           <p className="mt-help">EN 1991-1-2 Annex A. A member must survive the whole fire, cooling included: it is judged on its highest steel temperature, not on the period.</p>
           <div className="mt-form-row">
-            <NumberField control={form.control} name="curve.openingFactor" label="Opening factor O" unit="m^½" help="0.02 to 0.20" />
-            <NumberField control={form.control} name="curve.thermalAbsorptivity" label="Absorptivity b" unit="J/m²s^½K" help="100 to 2200" />
+            <NumberField control={form.control} name="curve.openingFactor" label="Opening factor O" term="opening-factor" unit="m^½" help="0.02 to 0.20" />
+            <NumberField control={form.control} name="curve.thermalAbsorptivity" label="Absorptivity b" term="thermal-inertia" unit="J/m²s^½K" help="100 to 2200" />
           </div>
           <div className="mt-form-row">
-            <NumberField control={form.control} name="curve.fireLoadTotalMjPerM2" label="Fire load on the total area" unit="MJ/m²" help="50 to 1000, related to the whole enclosure" />
+            <NumberField control={form.control} name="curve.fireLoadTotalMjPerM2" label="Fire load on the total area" term="fire-load" unit="MJ/m²" help="50 to 1000, related to the whole enclosure" />
             <SelectField control={form.control} name="curve.limitTimeMin" label="Limit time" options={limits} placeholder="Choose" />
           </div>
         </fieldset>

@@ -91,18 +91,18 @@ function useColumns(actions: ZoneTreeActions, projectId: string, /** said once a
   const specifier = may('edit-protection');
   const columns: ScheduleColumn<ZoneRow>[] = [
     {
-      title: 'Level and zone', key: 'name', foldLabel: '', width: 210, className: 'mt-fold-head',
+      title: 'Level and zone', term: 'zone', key: 'name', foldLabel: '', width: 210, className: 'mt-fold-head',
       onCell: (row) => (row.kind === 'level' ? { colSpan: zoneColumns } : {}),
       render: (_, row) => row.kind === 'level'
         ? <span>{row.level.code} {row.level.name} <span className="mt-unit mt-level-facts">{formatLevel(row.level.elevationM)} m, {formatNumber(row.level.heightM, 2)} m high</span></span>
         : <div className="mt-tree-1"><Link to={`/projects/${projectId}/members?zoneIds=${row.zone.id}`}>{row.zone.code} {row.zone.name}</Link><FoldedZone zone={row.zone} /></div>,
     },
-    { title: 'Period', key: 'period', width: sameCurve ? 72 : 112, className: 'mt-fold-hide', render: zoneOnly((z) => <><span className="mt-strong">R {z.periodMin}</span>{!sameCurve && <div className="mt-sub">{fireCurveNames[z.curve.kind]}</div>}</>) },
-    { title: 'Environment', key: 'environment', width: 90, className: 'mt-fold-hide', render: zoneOnly((z) => z.environment) },
-    { title: 'Systems', key: 'systems', className: 'mt-fold-hide', render: zoneOnly((z) => <Systems zone={z} />) },
-    { title: 'Target', key: 'target', width: 106, className: 'mt-fold-hide', render: zoneOnly((z) => targetPolicyName(z.targetPolicy)) },
+    { title: 'Period', term: 'period', key: 'period', width: sameCurve ? 72 : 112, className: 'mt-fold-hide', render: zoneOnly((z) => <><span className="mt-strong">R {z.periodMin}</span>{!sameCurve && <div className="mt-sub">{fireCurveNames[z.curve.kind]}</div>}</>) },
+    { title: 'Environment', term: 'environment', key: 'environment', width: 96, className: 'mt-fold-hide', render: zoneOnly((z) => z.environment) },
+    { title: 'Systems', term: 'system', key: 'systems', className: 'mt-fold-hide', render: zoneOnly((z) => <Systems zone={z} />) },
+    { title: 'Target', term: 'target-policy', key: 'target', width: 106, className: 'mt-fold-hide', render: zoneOnly((z) => targetPolicyName(z.targetPolicy)) },
     { title: 'Each its own', key: 'own', numeric: true, width: 96, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="own" />) },
-    { title: 'Bands', key: 'bands', numeric: true, width: 84, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="bands" />) },
+    { title: 'Bands', term: 'band', key: 'bands', numeric: true, width: 84, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="bands" />) },
     { title: 'One for all', key: 'one', numeric: true, width: 84, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="one" />) },
     {
       title: 'Members', key: 'members', numeric: true, width: 76, className: 'mt-fold-hide',
@@ -139,10 +139,10 @@ export function ZoneTree({ rows, projectId, openZones, onOpenZones, actions, mar
         columnTitle: <span className="mt-sr">Target protection</span>,
         expandedRowKeys: openZones,
         onExpandedRowsChange: (keys) => onOpenZones(keys.map(String)),
-        rowExpandable: (row) => row.kind === 'zone' && row.zone.targets.length > 0,
+        rowExpandable: (row) => row.kind === 'zone',
         expandedRowRender: (row) => (row.kind === 'zone' ? <TargetDetail zone={row.zone} projectId={projectId} /> : null),
         expandIcon: ({ expanded, expandable, onExpand, record }) => expandable && record.kind === 'zone'
-          ? <button type="button" className="mt-unfold" aria-expanded={expanded} aria-label={`Target of ${record.zone.code}`} title="Target protection" onClick={(e) => onExpand(record, e)}>{expanded ? '−' : '+'}</button>
+          ? <button type="button" className="mt-unfold" aria-expanded={expanded} aria-label={`Target of ${record.zone.code}`} title="Target protection and where the period comes from" onClick={(e) => onExpand(record, e)}>{expanded ? '−' : '+'}</button>
           : null,
       }}
     />

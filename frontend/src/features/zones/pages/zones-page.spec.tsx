@@ -56,6 +56,15 @@ describe('the zones page', () => {
     expect(screen.queryByRole('button', { name: 'Add level' })).not.toBeInTheDocument();
     expect(screen.getByText(/Only the fire engineer may change zones/)).toBeInTheDocument();
   });
+  it('opens the zone of the address and takes the focus there; says so where there is none', async () => {
+    serve(answers);
+    const { unmount } = renderPage(<ZonesPage />, { project: testProject(['specifier']), at: `${at}/zones?zone=${id(12)}` });
+    expect(await screen.findByText(/No reference says where the period comes from/)).toBeInTheDocument();
+    expect(screen.getByRole('link', { name: 'Z2 Room Z2' })).toHaveFocus();
+    unmount();
+    renderPage(<ZonesPage />, { project: testProject(['specifier']), at: `${at}/zones?zone=${id(99)}` });
+    expect(await screen.findByText(/is not on this project; it may have been deleted/)).toBeInTheDocument();
+  });
   it('asks nothing of the server for a reader, and says who may see it', async () => {
     const calls = open(['reader']);
     expect(await screen.findByText(/may see work in progress/)).toBeInTheDocument();

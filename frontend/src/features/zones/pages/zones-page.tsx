@@ -8,6 +8,7 @@ import { whyNot } from '../../../lib/may.js';
 import { Page } from '../../../ui/page.js';
 import { Panel } from '../../../ui/panel.js';
 import { EmptyState, QueryState } from '../../../ui/states.js';
+import { StatusWord } from '../../../ui/status-word.js';
 import { RequireRight, useCurrentProject, useMay } from '../../projects/project-context.js';
 import { useLevels, useZones } from '../api/zones.js';
 import { LevelDrawer } from '../components/level-drawer.js';
@@ -48,16 +49,20 @@ function Editor({ editing, project, levels, zones, onClose }: { editing: Editing
   return zone ? <ProtectionDrawer projectId={project.id} zone={zone} onClose={onClose} /> : null;
 }
 
-interface ContentProps { project: ProjectDto; levels: LevelDto[]; zones: ZoneDto[]; editing: Editing; setEditing: (editing: Editing) => void }
+interface ContentProps { project: ProjectDto; levels: LevelDto[]; zones: ZoneDto[]; /** the zone named by the address */ asked: string | null; editing: Editing; setEditing: (editing: Editing) => void }
 
-function Content({ project, levels, zones, editing, setEditing }: ContentProps) {
+function Content({ project, levels, zones, asked, editing, setEditing }: ContentProps) {
   const may = useMay();
-  const [params] = useSearchParams();
-  const asked = params.get('zone');
+  const found = asked === null || zones.some((z) => z.id === asked);
   const [openZones, setOpenZones] = useState<string[]>(asked ? [asked] : []);
-  useEffect(() => { if (asked) document.getElementById(`row-${asked}`)?.scrollIntoView({ block: 'center' }); }, [asked]);
+  useEffect(() => {
+    const row = asked ? document.getElementById(`row-${asked}`) : null;
+    row?.scrollIntoView({ block: 'center' });
+    row?.querySelector('a')?.focus({ preventScroll: true });
+  }, [asked]);
   return (
     <>
+      {!found && <p role="status"><StatusWord kind="attention">The zone of this address is not on this project; it may have been deleted. These are the zones there are.</StatusWord></p>}
       <Panel flush label="Levels and zones">
         {levels.length === 0 ? (
           <EmptyState title="Begin with the levels" action={may('edit-levels') ? <Button type="primary" onClick={() => setEditing({ what: 'level', id: null })}>Add the first level</Button> : null}>
@@ -85,13 +90,14 @@ function Zones({ project }: { project: ProjectDto }) {
   const levels = useLevels(project.id);
   const zones = useZones(project.id);
   const may = useMay();
+  const asked = useSearchParams()[0].get('zone');
   const [editing, setEditing] = useState<Editing>(null);
   const addLevel = may('edit-levels') && levels.data?.length ? <Button onClick={() => setEditing({ what: 'level', id: null })}>Add level</Button> : null;
   const words = levels.data && zones.data ? zonesWords(levels.data, zones.data) : { heading: 'Zones', sub: undefined };
   return (
     <Page title="Zones" projectName={project.name} heading={words.heading} sub={words.sub} actions={addLevel}>
       <QueryState query={levels} what="the levels">
-        {(l) => <QueryState query={zones} what="the zones">{(z) => <Content key={project.id} project={project} levels={l} zones={z} editing={editing} setEditing={setEditing} />}</QueryState>}
+        {(l) => <QueryState query={zones} what="the zones">{(z) => <Content key={`${project.id} ${asked}`} project={project} levels={l} zones={z} asked={asked} editing={editing} setEditing={setEditing} />}</QueryState>}
       </QueryState>
     </Page>
   );
