@@ -76,6 +76,20 @@ describe('the team of a project', () => {
     ]);
   });
 
+  it('narrows its trail by person, thing and time, and refuses what is none of these', async () => {
+    const user = await app.makeUser('In the trail');
+    const at0 = `/api/projects/${project.id}/audit`;
+    const before = new Date().toISOString();
+    await lead.post(at()).send({ email: user.email, roles: ['reader'] }).expect(201);
+    const mine = await lead.get(at0).query({ userId: leadId, from: before }).expect(200);
+    expect(mine.body).toMatchObject({ total: 1, items: [{ entity: 'membership', label: 'In the trail' }] });
+    expect((await lead.get(at0).query({ userId: user.id }).expect(200)).body.total).toBe(0);
+    expect((await lead.get(at0).query({ entity: 'zone', from: before }).expect(200)).body.total).toBe(0);
+    const earlier = await lead.get(at0).query({ before }).expect(200);
+    expect(earlier.body.items.some((e: { label: string }) => e.label === 'In the trail')).toBe(false);
+    for (const query of [{ userId: 'me' }, { from: 'yesterday' }, { before: '2026-02-30T00:00:00Z' }, { from: "'; drop table audit_entries" }]) await lead.get(at0).query(query).expect(400);
+  });
+
   it('refuses roles set over somebody else’s, and shows who set them', async () => {
     const user = await app.makeUser('Twice set');
     await app.join(project, user, 'reader');

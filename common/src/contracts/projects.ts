@@ -45,6 +45,11 @@ export type LevelUpdate = z.infer<typeof levelUpdateSchema>;
 export const auditQuerySchema = z.object({
   entity: z.string().max(40).optional(),
   entityId: idSchema.optional(),
+  userId: idSchema.optional(),
+  /** entries at or after this instant */
+  from: z.iso.datetime({ error: 'is not a date and time' }).optional(),
+  /** entries before this instant */
+  before: z.iso.datetime({ error: 'is not a date and time' }).optional(),
   search: z.string().trim().max(200).optional(),
   page: z.coerce.number().int().min(1).default(1),
   pageSize: z.coerce.number().int().min(1).max(200).default(50),

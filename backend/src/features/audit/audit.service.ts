@@ -79,6 +79,9 @@ export class AuditService {
     const found = this.entries.createQueryBuilder('e').where('e.projectId = :projectId', { projectId });
     if (query.entity) found.andWhere('e.entity = :entity', { entity: query.entity });
     if (query.entityId) found.andWhere('e.entityId = :entityId', { entityId: query.entityId });
+    if (query.userId) found.andWhere('e.userId = :userId', { userId: query.userId });
+    if (query.from) found.andWhere('e.at >= :from', { from: query.from });
+    if (query.before) found.andWhere('e.at < :before', { before: query.before });
     if (query.search) {
       found.andWhere('(e.label ILIKE :like OR e.userName ILIKE :like OR e.action ILIKE :like)', { like: `%${query.search.replace(/[\\%_]/g, '\\$&')}%` });
     }

@@ -22,11 +22,19 @@ export const useSaveDesignBasis = (projectId: string) =>
 export const useSaveTakeoff = (projectId: string) =>
   useProjectMutation<TakeoffSettingsUpdate, ProjectDto>(projectId, (body) => api.put(`${at(projectId)}/takeoff-settings`, body));
 
-export interface AuditFilter { search: string; page: number }
+/** from and to are days of the reader's calendar, both included; '' narrows nothing */
+export interface AuditFilter { search: string; who: string; what: string; from: string; to: string; page: number }
+const midnight = (day: string, plus = 0) => {
+  const [year = 0, month = 1, date = 1] = day.split('-').map(Number);
+  return new Date(year, month - 1, date + plus).toISOString();
+};
 export const auditPageSize = 50;
-export const auditQuery = (projectId: string, { search, page }: AuditFilter) =>
+export const auditQuery = (projectId: string, filter: AuditFilter) =>
   queryOptions({
-    queryKey: projectKey(projectId, 'audit', search, page), placeholderData: keepPreviousData,
-    queryFn: ({ signal }) => api.get<Page<AuditEntryDto>>(`${at(projectId)}/audit`, { search, page, pageSize: auditPageSize }, signal),
+    queryKey: projectKey(projectId, 'audit', filter), placeholderData: keepPreviousData,
+    queryFn: ({ signal }) => api.get<Page<AuditEntryDto>>(`${at(projectId)}/audit`, {
+      search: filter.search, userId: filter.who, entity: filter.what, page: filter.page, pageSize: auditPageSize,
+      from: filter.from && midnight(filter.from), before: filter.to && midnight(filter.to, 1),
+    }, signal),
   });
 export const useAudit = (projectId: string, filter: AuditFilter) => useQuery(auditQuery(projectId, filter));

@@ -1,5 +1,6 @@
-import { Input, Pagination } from 'antd';
-import { useDeferredValue, useState } from 'react';
+import { Pagination } from 'antd';
+import { useCallback, useEffect, useRef } from 'react';
+import { useLocation, useSearchParams } from 'react-router-dom';
 import type { AuditEntryDto } from '@mantlet/common';
 import { formatDateTime, formatNumber } from '../../../lib/format.js';
 import { fieldName, isNothing, partsOfChange, valueInWords } from '../../../lib/record-words.js';
@@ -8,7 +9,11 @@ import { Panel } from '../../../ui/panel.js';
 import { ScheduleTable } from '../../../ui/schedule-table.js';
 import type { ScheduleColumn } from '../../../ui/schedule-table.js';
 import { EmptyState, QueryState } from '../../../ui/states.js';
+import { Term } from '../../../ui/term.js';
 import { auditPageSize, useAudit } from '../api/team.js';
+import type { AuditFilter } from '../api/team.js';
+import { auditFilterOf, auditParams, isNarrowed } from '../audit-filter.js';
+import { AuditFilters } from './audit-filters.js';
 import { actInWords, groupEntries, groupSize } from './audit-groups.js';
 import type { AuditGroup } from './audit-groups.js';
 
@@ -64,28 +69,35 @@ const columns: ScheduleColumn<AuditGroup>[] = [
 
 /** Who changed what, when, from what to what, and why. Nothing can be taken out of it. */
 export function AuditTrail({ projectId }: { projectId: string }) {
-  const [search, setSearch] = useState('');
-  const [page, setPage] = useState(1);
-  const asked = useDeferredValue(search.trim());
-  const audit = useAudit(projectId, { search: asked, page });
+  const [params, setParams] = useSearchParams();
+  const filter = auditFilterOf(params);
+  const audit = useAudit(projectId, filter);
+  const change = useCallback((next: AuditFilter) => setParams(auditParams(next), { replace: true, preventScrollReset: true }), [setParams]);
+  // an address made for the trail opens at it, once
+  const asked = useRef(useLocation().hash === '#audit' || isNarrowed(filter) || filter.page > 1);
+  useEffect(() => {
+    if (!asked.current || audit.data === undefined) return;
+    asked.current = false;
+    document.getElementById('audit')?.scrollIntoView();
+  }, [audit.data]);
   return (
-    <Panel
-      flush title="Audit trail" sub="Newest first. Nothing can be taken out of it."
-      actions={<Input allowClear value={search} aria-label="Search the audit trail" placeholder="Search" style={{ width: 220 }} onChange={(e) => { setSearch(e.target.value); setPage(1); }} />}
-    >
-      <QueryState query={audit} what="the audit trail">
-        {(data) => (
-          <>
-            <ScheduleTable<AuditGroup>
-              caption="Audit trail" columns={columns} rows={groupEntries(data.items)} rowKey={(g) => g[0]?.id ?? ''} sticky={false} minWidth={860}
-              empty={<EmptyState title={asked ? `Nothing holds "${asked}"` : 'Nothing has been changed yet'} />}
-            />
-            {data.total > auditPageSize && (
-              <Pagination className="mt-pages" current={page} pageSize={auditPageSize} total={data.total} showSizeChanger={false} showLessItems onChange={setPage} showTotal={(n) => `${formatNumber(n)} entries`} />
-            )}
-          </>
-        )}
-      </QueryState>
-    </Panel>
+    <div id="audit" className="mt-audit">
+      <Panel flush title={<Term name="audit-trail" />} sub="Newest first. Nothing can be taken out of it.">
+        <AuditFilters projectId={projectId} filter={filter} onChange={change} />
+        <QueryState query={audit} what="the audit trail">
+          {(data) => (
+            <>
+              <ScheduleTable<AuditGroup>
+                caption="Audit trail" columns={columns} rows={groupEntries(data.items)} rowKey={(g) => g[0]?.id ?? ''} sticky={false} minWidth={860}
+                empty={<EmptyState title={isNarrowed(filter) ? 'No entry is as asked' : 'Nothing has been changed yet'}>{isNarrowed(filter) ? 'Widen the dates, or show everything.' : null}</EmptyState>}
+              />
+              {data.total > auditPageSize && (
+                <Pagination className="mt-pages" current={filter.page} pageSize={auditPageSize} total={data.total} showSizeChanger={false} showLessItems onChange={(page) => change({ ...filter, page })} showTotal={(n) => `${formatNumber(n)} entries`} />
+              )}
+            </>
+          )}
+        </QueryState>
+      </Panel>
+    </div>
   );
 }

@@ -7,6 +7,7 @@ import { whyNot } from '../../../lib/may.js';
 import { CheckField, NumberField, RadioField } from '../../../ui/form/fields.js';
 import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
 import { Panel } from '../../../ui/panel.js';
+import { Term } from '../../../ui/term.js';
 import { useProject } from '../../projects/api/projects.js';
 import { useMay } from '../../projects/project-context.js';
 import { useSaveDesignBasis } from '../api/team.js';
@@ -72,7 +73,7 @@ function Steel({ form: { control }, disabled }: PartProps) {
 function Assumed({ form: { control }, disabled }: PartProps) {
   return (
     <fieldset>
-      <legend>Assumed critical temperatures</legend>
+      <legend><Term name="assumed">Assumed</Term> critical temperatures</legend>
       <p className="mt-help">Used only where nothing better is given; each blocks issue until the fire engineer accepts it. Common practice: 550 °C for columns, 620 °C for beams that carry a slab.</p>
       <div className="mt-form-row">
         {memberTypes.map((type) => <NumberField key={type} control={control} name={`assumedTemperatureC.${type}`} label={memberTypeNames[type]} unit="°C" disabled={disabled} />)}
@@ -95,7 +96,7 @@ export function DesignBasisPanel({ project, settings }: { project: ProjectDto; s
   const submit = form.handleSubmit((designBasis) => save.mutate({ designBasis, version: project.version }, { onSuccess: () => { form.reset(designBasis); saved(); } }));
   const part = { form, disabled: !may };
   return (
-    <Panel title="Design basis" sub="EN 1990, EN 1991-1-2 and EN 1993-1-2. Nothing here is a hidden constant.">
+    <Panel title={<Term name="design-basis" />} sub="EN 1990, EN 1991-1-2 and EN 1993-1-2. Nothing here is a hidden constant.">
       <SettingsForm
         onSubmit={(e) => { void submit(e); }} dirty={isDirty} saving={save.isPending} error={save.error} locked={may ? null : whyNot('edit-design-basis')}
         onReload={() => { void query.refetch(); }} onUndo={() => { form.reset(values); save.reset(); }}

@@ -3,6 +3,7 @@ import { useState } from 'react';
 import { membershipInputSchema, roleNames, roles } from '@mantlet/common';
 import type { MembershipDto } from '@mantlet/common';
 import { rolesInWords, whyNot } from '../../../lib/may.js';
+import { roleDecides } from '../../../lib/role-words.js';
 import { DeleteButton } from '../../../ui/form/delete-button.js';
 import { CheckListField, TextField } from '../../../ui/form/fields.js';
 import { FormDrawer } from '../../../ui/form/form-drawer.js';
@@ -13,7 +14,7 @@ import { QueryState } from '../../../ui/states.js';
 import { useMay } from '../../projects/project-context.js';
 import { useAddMembership, useMemberships, useRemoveMembership, useSetRoles } from '../api/team.js';
 
-const roleOptions = roles.map((value) => ({ value, label: roleNames[value] }));
+const roleOptions = roles.map((value) => ({ value, label: <>{roleNames[value]}<span className="mt-sub mt-role-says">{roleDecides[value]}</span></> }));
 const roleHelp = 'Contractors, inspectors and readers see issued work only. Whoever prepares a schedule cannot check it.';
 
 function AddPerson({ projectId, onClose }: { projectId: string; onClose: () => void }) {
@@ -61,8 +62,8 @@ export function People({ projectId }: { projectId: string }) {
           <ScheduleTable
             caption="People on the project" rows={rows} rowKey={(p) => p.userId} sticky={false}
             columns={[
-              { title: 'Name', key: 'name', className: 'mt-fold-head', render: (_, p) => <><span className="mt-strong">{p.name}</span><div className="mt-sub">{p.email}</div></> },
-              { title: 'Roles', key: 'roles', className: 'mt-fold-text', render: (_, p) => rolesInWords(p.roles) },
+              { title: 'Name', key: 'name', width: 260, className: 'mt-fold-head', render: (_, p) => <><span className="mt-strong">{p.name}</span><div className="mt-sub">{p.email}</div></> },
+              { title: 'Roles', key: 'roles', className: 'mt-fold-text', render: (_, p) => <><span className="mt-strong">{rolesInWords(p.roles)}</span>{p.roles.map((role) => <div key={role} className="mt-sub">{roleDecides[role]}</div>)}</> },
               ...(edit ? [{ title: <span className="mt-sr">Change</span>, key: 'edit', className: 'mt-fold-side', align: 'right' as const, width: 100, render: (_: unknown, p: MembershipDto) => <Button size="small" onClick={() => setEditing(p)} aria-label={`Roles of ${p.name}`}>Roles</Button> }] : []),
             ]}
           />

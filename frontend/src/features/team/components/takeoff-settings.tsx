@@ -6,6 +6,7 @@ import { whyNot } from '../../../lib/may.js';
 import { CheckField, NumberField, RadioField, SelectField } from '../../../ui/form/fields.js';
 import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
 import { Panel } from '../../../ui/panel.js';
+import { Term } from '../../../ui/term.js';
 import { useProject } from '../../projects/api/projects.js';
 import { useMay } from '../../projects/project-context.js';
 import { useSaveTakeoff } from '../api/team.js';
@@ -30,7 +31,7 @@ export function TakeoffSettingsPanel({ project, settings }: { project: ProjectDt
   const { control } = form;
   const disabled = !may;
   return (
-    <Panel title="Takeoff and issue">
+    <Panel title={<><Term name="takeoff">Takeoff</Term> and issue</>}>
       <SettingsForm
         onSubmit={(e) => { void submit(e); }} dirty={isDirty} saving={save.isPending} error={save.error} locked={may ? null : whyNot('edit-takeoff')}
         onReload={() => { void query.refetch(); }} onUndo={() => { form.reset(values); save.reset(); }}
@@ -43,9 +44,9 @@ export function TakeoffSettingsPanel({ project, settings }: { project: ProjectDt
         <fieldset>
           <legend>Quantities</legend>
           <div className="mt-form-row">
-            <NumberField control={control} name="deductions.endLapMm" label="Deduction at each end" unit="mm" disabled={disabled} />
+            <NumberField control={control} name="deductions.endLapMm" label="Deduction at each end" term="deduction" unit="mm" disabled={disabled} />
             <NumberField control={control} name="deductions.openingThresholdM2" label="Openings deducted from" unit="m²" disabled={disabled} />
-            <NumberField control={control} name="deductions.coatBackMm" label="Coat-back" unit="mm" disabled={disabled} help="Common practice: 450 to 500 mm" />
+            <NumberField control={control} name="deductions.coatBackMm" label="Coat-back" term="coat-back" unit="mm" disabled={disabled} help="Common practice: 450 to 500 mm" />
           </div>
           <div className="mt-form-row">
             <NumberField control={control} name="markUpPercent" label="Overheads on printed lines" unit="%" text disabled={disabled} />

@@ -9,6 +9,7 @@ import { DesignBasisPanel } from '../components/design-basis.js';
 import { People } from '../components/people.js';
 import { ProjectParticulars } from '../components/project-particulars.js';
 import { TakeoffSettingsPanel } from '../components/takeoff-settings.js';
+import '../team.css';
 
 /** A schedule needs these three, and a second specifier to check it. */
 export function teamWords(people: readonly MembershipDto[]): { heading: string; sub: string } {
