@@ -104,4 +104,5 @@ export const accessTable: Record<string, string> = {
   'POST /api/projects/:projectId/revisions/:revisionId/return': 'specifier',
   'POST /api/projects/:projectId/revisions/:revisionId/issue': 'specifier',
   'GET /api/projects/:projectId/site': 'team',
+  'GET /api/projects/:projectId/site/building': 'team',
 };

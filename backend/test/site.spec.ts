@@ -1,5 +1,5 @@
 import { Decimal } from '@mantlet/common';
-import type { SiteDto } from '@mantlet/common';
+import type { IssuedBuildingDto, SiteDto } from '@mantlet/common';
 import { Project } from '../src/features/projects/project.entity.js';
 import { TestApp } from './support/app.js';
 import { makeScheduleProject } from './support/schedule-project.js';
@@ -19,15 +19,36 @@ describe('site', () => {
 
   const view = async (role: 'contractor' | 'specifier' | 'reader' = 'contractor'): Promise<SiteDto> => (await p.team[role].get(p.url('site')).expect(200)).body;
 
+  const building = async (role: 'contractor' | 'inspector' | 'reader' = 'contractor'): Promise<IssuedBuildingDto> => (await p.team[role].get(p.url('site/building')).expect(200)).body;
+
   it('is empty until a revision is issued', async () => {
     const { body: draft } = await p.team.specifier.post(p.url('revisions')).send({ code: 'P01' }).expect(201);
     await p.team.specifier.post(p.url(`revisions/${draft.id}/prepare`)).expect(200);
     expect(await view()).toMatchObject({ revision: null, levels: [], purchase: [] });
+    expect(await building()).toEqual({ revision: null, members: 0, protectedMembers: 0, bareMembers: 0, protectedAreaM2: 0, levels: [] });
     await p.checker.post(p.url(`revisions/${draft.id}/check`)).expect(200);
     expect((await view('specifier')).revision).toBeNull();
     await p.checker.post(p.url(`revisions/${draft.id}/issue`)).expect(200);
     site = await view();
     expect(site.revision).toMatchObject({ id: draft.id, code: 'P01', pdfAvailable: true });
+  });
+
+  it('draws the building as issued for those who see nothing else, with totals that are those of its zones', async () => {
+    const drawn = await building('inspector');
+    expect(drawn.revision).toMatchObject({ code: 'P01' });
+    expect(drawn.levels.map((l) => [l.code, l.zones.map((z) => z.code)])).toEqual([['L0', ['Z01']], ['L1', ['Z02']]]);
+    const zones = drawn.levels.flatMap((l) => l.zones);
+    for (const part of ['members', 'protectedMembers', 'bareMembers'] as const) expect(zones.reduce((sum, z) => sum + z[part], 0)).toBe(drawn[part]);
+    expect(drawn.protectedMembers + drawn.bareMembers).toBe(drawn.members);
+    // the same areas as the materials of the site page add up to
+    const bought = site.levels.map((l) => l.materials.reduce((sum, m) => sum.plus(m.areaM2), new Decimal(0)).toNumber());
+    expect(drawn.levels.map((l) => l.zones.reduce((sum, z) => sum + z.protectedAreaM2, 0))).toEqual(bought.map((area) => expect.closeTo(area, 6)));
+  });
+
+  it('keeps what is changed after the issue out of it', async () => {
+    const before = await building('reader');
+    await app.dataSource.query(`UPDATE zones SET period_min = 15 WHERE project_id = $1`, [p.project.id]);
+    expect(await building('reader')).toEqual(before);
   });
 
   it('says floor by floor what to apply, how thick and how much', () => {

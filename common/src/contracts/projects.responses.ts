@@ -67,6 +67,19 @@ export const buildingDtoSchema = z.object({
 });
 export type BuildingDto = z.infer<typeof buildingDtoSchema>;
 
+/** The building as an issued revision froze it, for everybody on the team: nothing of work in progress is in it. */
+export const issuedZoneDtoSchema = z.object({
+  id: idSchema, code: z.string(), name: z.string(), periodMin: z.number(), curve: z.enum(fireCurveKinds),
+  protectedAreaM2: z.number(), members: z.number(), protectedMembers: z.number(), bareMembers: z.number(),
+});
+export type IssuedZoneDto = z.infer<typeof issuedZoneDtoSchema>;
+export const issuedBuildingDtoSchema = z.object({
+  revision: z.object({ id: idSchema, code: z.string(), issuedAt: z.string() }).nullable(),
+  members: z.number(), protectedMembers: z.number(), bareMembers: z.number(), protectedAreaM2: z.number(),
+  levels: z.array(buildingLevelDtoSchema.extend({ zones: z.array(issuedZoneDtoSchema) })),
+});
+export type IssuedBuildingDto = z.infer<typeof issuedBuildingDtoSchema>;
+
 export const levelDtoSchema = levelInputSchema.extend({ id: idSchema, version: z.number() });
 export type LevelDto = z.infer<typeof levelDtoSchema>;
 

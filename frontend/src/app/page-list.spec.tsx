@@ -9,7 +9,7 @@ describe('the list of pages', () => {
     expect(labels(projectEntries(testProject(['structural-engineer'])))).toEqual(['Building', 'Zones', 'Members', 'Products', 'Quantities', 'Schedule', 'Site', 'Team and basis']);
   });
   it.each(['contractor', 'inspector', 'reader'] as const)('offers issued work only to the %s', (role) => {
-    expect(labels(projectEntries(testProject([role])))).toEqual(['Site', 'Schedule']);
+    expect(labels(projectEntries(testProject([role])))).toEqual(['Building', 'Site', 'Schedule']);
   });
   it('offers accounts to the administrator only', () => {
     expect(labels(generalEntries(false))).not.toContain('Accounts');

@@ -11,7 +11,7 @@ export function projectEntries(project: ProjectDto): Entry[][] {
   const { counts } = project;
   const issued = project.issuedRevision?.code;
   if (!may(project.roles, 'see-design')) {
-    return [[{ to: `${at}/site`, label: 'Site', ...(issued ? { count: issued } : {}) }, { to: `${at}/schedule`, label: 'Schedule', ...(issued ? { count: issued } : {}) }]];
+    return [[{ to: at, label: 'Building', end: true }, { to: `${at}/site`, label: 'Site', ...(issued ? { count: issued } : {}) }, { to: `${at}/schedule`, label: 'Schedule', ...(issued ? { count: issued } : {}) }]];
   }
   return [
     [

@@ -11,6 +11,8 @@ export interface ZoneBox<Z extends ElevationZone = ElevationZone> {
   /** widths of the shares of members settled, issued and open, from the left, the left and the right */
   settledWidth: number; issuedWidth: number; openWidth: number;
 }
+/** A step of the scale bar, filled and empty by turns. */
+export interface ScaleStep { fromM: number; toM: number; y: number; height: number }
 export interface LevelMark { level: ElevationLevel; y: number; labelY: number }
 export interface ElevationLayout {
   width: number; height: number; plotLeft: number; plotWidth: number; pxPerM: number;
@@ -19,7 +21,10 @@ export interface ElevationLayout {
   boxes: ZoneBox[]; emptyBands: { level: ElevationLevel; x: number; y: number; width: number; height: number }[]; marks: LevelMark[];
 }
 
-const padding = { top: 26, right: 14, bottom: 22 };
+/** At the right there is room for the scale bar, where the drawing is wide enough for one. */
+const paddingOf = (width: number) => ({ top: 26, right: width < wideFrom ? 12 : 64, bottom: 22 });
+/** From here on the drawing has dashed level lines and a scale bar. */
+export const wideFrom = 520;
 const leastZoneWidth = 62;
 const leastMarkGap = 15;
 /** A level with less than this share of the largest level's area is drawn narrower, like a plant room on a roof. */
@@ -60,12 +65,13 @@ function bandsOf(levels: readonly ElevationLevel[]) {
   return bands;
 }
 
-/** Storeys come out legible (about 82 px for the middle one) while the whole stays within a screen and a half. */
-function scaleOf(bands: { fromM: number; toM: number }[]): number {
+/** Storeys come out legible (82 px for the middle one, more on a large sheet) while the whole stays within a screen and a half. */
+function scaleOf(bands: { fromM: number; toM: number }[], width: number): number {
+  const storeyPx = Math.max(82, Math.min(width * 0.085, 124));
   const heights = bands.map((b) => b.toM - b.fromM).sort((a, b) => a - b);
   const middle = heights[Math.floor(heights.length / 2)] ?? 4;
   const totalM = (bands.at(-1)?.toM ?? 0) - (bands[0]?.fromM ?? 0);
-  return Math.max(8, Math.min(82 / middle, 1100 / Math.max(totalM, 1), 40));
+  return Math.max(8, Math.min(storeyPx / middle, Math.max(1100, width * 0.9) / Math.max(totalM, 1), 46));
 }
 
 /** Level marks that would sit on each other are moved apart; the triangle stays at the true height. */
@@ -80,10 +86,11 @@ function spreadMarks(marks: LevelMark[]): void {
 
 /** Heights to one scale; within a level, widths by protected area. Pixels of the given total width. */
 export function layoutElevation(levels: readonly ElevationLevel[], width: number): ElevationLayout {
-  const plotLeft = width < 520 ? 66 : 104;
+  const padding = paddingOf(width);
+  const plotLeft = width < wideFrom ? 66 : 104;
   const plotWidth = Math.max(120, width - plotLeft - padding.right);
   const bands = bandsOf(levels);
-  const pxPerM = scaleOf(bands);
+  const pxPerM = scaleOf(bands, width);
   const topM = bands.at(-1)?.toM ?? 0;
   const bottomM = bands[0]?.fromM ?? 0;
   const yOf = (m: number) => padding.top + (topM - m) * pxPerM;
@@ -113,6 +120,20 @@ export function layoutElevation(levels: readonly ElevationLevel[], width: number
   }
   spreadMarks(layout.marks);
   return layout;
+}
+
+/** Beside the wall, from the lowest floor up: four steps of 1, 2, 5 or 10 m, as many as the building is high enough for. */
+export function scaleBar(layout: ElevationLayout): { x: number; steps: ScaleStep[] } | null {
+  if (layout.width < wideFrom || layout.boxes.length + layout.emptyBands.length === 0) return null;
+  const bottom = Math.max(...[...layout.boxes, ...layout.emptyBands].map((b) => b.y + b.height));
+  const top = Math.min(...[...layout.boxes, ...layout.emptyBands].map((b) => b.y));
+  const stepM = [1, 2, 5, 10, 20, 50].find((m) => m * layout.pxPerM >= 22) ?? 50;
+  const steps = Math.min(4, Math.floor((bottom - top) / (stepM * layout.pxPerM) + 1e-6));
+  if (steps < 1) return null;
+  return {
+    x: layout.plotLeft + layout.plotWidth + 22,
+    steps: Array.from({ length: steps }, (_, i) => ({ fromM: i * stepM, toM: (i + 1) * stepM, y: bottom - (i + 1) * stepM * layout.pxPerM, height: stepM * layout.pxPerM })),
+  };
 }
 
 /** Cuts a text to about a width, for a face whose letters take 0.54 of its size. */

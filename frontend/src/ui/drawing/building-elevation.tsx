@@ -1,10 +1,19 @@
-import { useId, useMemo } from 'react';
+import { useId, useMemo, useState } from 'react';
+import type { KeyboardEvent } from 'react';
 import { Link } from 'react-router-dom';
-import { formatLevel, formatNumber } from '../../lib/format.js';
+import { formatNumber } from '../../lib/format.js';
 import { HatchPattern } from '../hatch.js';
-import { fitText, layoutElevation } from './building-elevation-layout.js';
-import type { ElevationLayout, ElevationLevel, ElevationZone, ZoneBox } from './building-elevation-layout.js';
+import { layoutElevation } from './building-elevation-layout.js';
+import type { ElevationLevel, ElevationZone, ZoneBox } from './building-elevation-layout.js';
+import { labelZone } from './elevation-labels.js';
+import { Ground, LevelMarks, ScaleBar, Slabs, ZoneText } from './elevation-parts.js';
+import { stepFrom } from './elevation-steps.js';
 import { useElementWidth } from './use-element-width.js';
+
+/** A share of a zone's members drawn along its floor. */
+export interface Rail { key: string; kind: 'settled' | 'ink'; members: number }
+/** What is pointed at, in the drawing or in the list beside it. */
+export interface Pointed { zoneId: string | null; keynote: number | null }
 
 interface BuildingElevationProps {
   levels: readonly ElevationLevel[];
@@ -12,84 +21,81 @@ interface BuildingElevationProps {
   zoneHref: (zone: ElevationZone) => string;
   /** the drawing's accessible name */
   label: string;
+  /** from the floor up */
+  rails: (zone: ElevationZone) => readonly Rail[];
+  /** all of a zone's figures in a sentence */
+  say: (zone: ElevationZone, level: ElevationLevel) => string;
+  /** zone id → numbers in the list beside the drawing */
+  keynotes?: ReadonlyMap<string, readonly number[]>;
+  pointed?: Pointed;
+  onPoint?: (pointed: Pointed) => void;
+}
+const none: readonly number[] = [];
+const nothing: Pointed = { zoneId: null, keynote: null };
+/** The first rail stands on the floor slab; those above it are lines. */
+const railPx = (i: number) => (i === 0 ? 5 : 2.5);
+const railsPx = (n: number) => 2 + Array.from({ length: n }, (_, i) => railPx(i) + 2).reduce((a, b) => a + b, 0);
+
+function Rails({ box, rails }: { box: ZoneBox; rails: readonly Rail[] }) {
+  const { zone, x, y, width, height } = box;
+  return rails.map(({ key, kind, members }, i) => {
+    const share = zone.members > 0 ? (width * Math.min(members, zone.members)) / zone.members : 0;
+    return share > 0 && <rect key={key} className={`d-rail-${kind}`} x={x + 1.5} y={y + height - railsPx(i + 1) + 2} width={Math.max(0, share - 3)} height={railPx(i)} pointerEvents="none" />;
+  });
 }
 
-export const zoneInWords = ({ zone, level }: Pick<ZoneBox, 'zone' | 'level'>): string =>
-  `Zone ${zone.code} ${zone.name}, level ${level.code}: R ${zone.periodMin}, ${formatNumber(zone.protectedAreaM2)} m² protected, ` +
-  `${zone.settled} of ${zone.members} members settled, ${zone.open} open, ${zone.issuedMembers} issued`;
-
-function Zone({ box, href, hatch }: { box: ZoneBox; href: string; hatch: string }) {
-  const { zone, x, y, width, height } = box;
-  const bar = Math.min(6, height / 4);
-  const area = `${formatNumber(zone.protectedAreaM2)} m²`;
-  const room = width - 22;
-  const tall = height >= 50;
-  const wide = room > 118;
+interface ZoneProps extends Pick<BuildingElevationProps, 'zoneHref' | 'rails' | 'say' | 'onPoint'> { box: ZoneBox; hatch: string; keynotes: readonly number[]; pointed: Pointed; focusable: boolean }
+function Zone({ box, zoneHref, rails, say, hatch, keynotes, pointed, onPoint, focusable }: ZoneProps) {
+  const { zone, level, x, y, width, height } = box;
+  const own = height >= 30 ? rails(zone) : rails(zone).slice(0, 1);
+  const labels = labelZone(box, { strong: `R ${zone.periodMin}`, code: zone.code, name: zone.name, aside: `${formatNumber(zone.protectedAreaM2)} m²`, keynotes }, railsPx(own.length));
+  const on = pointed.zoneId === zone.id;
   return (
-    <g className="d-zone-link">
+    <g
+      className={`d-zone-link ${on ? 'd-zone-on' : ''}`}
+      onPointerEnter={() => onPoint?.({ zoneId: zone.id, keynote: null })} onPointerLeave={() => onPoint?.(nothing)}
+      onFocus={() => onPoint?.({ zoneId: zone.id, keynote: null })} onBlur={() => onPoint?.(nothing)}
+    >
       <rect className="d-zone" x={x} y={y} width={width} height={height} strokeWidth="1.3" />
       {box.openWidth > 0 && <rect x={x + width - box.openWidth} y={y} width={box.openWidth} height={height} fill={`url(#${hatch})`} pointerEvents="none" />}
-      <rect className="d-settled" x={x} y={y + height - bar} width={box.settledWidth} height={bar} pointerEvents="none" />
-      {box.issuedWidth > 0 && <line className="d-line" x1={x} x2={x + box.issuedWidth} y1={y + height - bar - 3} y2={y + height - bar - 3} strokeWidth="2" />}
-      <g className="d-halo" aria-hidden="true" pointerEvents="none">
-        <text x={x + 11} y={y + 19} fontSize="14.5" fontWeight="600">R {zone.periodMin}</text>
-        {tall && <text x={x + 11} y={y + 37} fontSize="12.5">{fitText(`${zone.code} ${zone.name}`, wide && zone.open > 0 ? room - 52 : room, 12.5)}</text>}
-        {wide && <text className="d-sub" x={x + width - 11} y={y + 19} fontSize="12.5" textAnchor="end">{area}</text>}
-        {zone.open > 0 && (wide || height >= 68) && (
-          <text className="d-attention" x={wide ? x + width - 11 : x + 11} y={wide ? y + 37 : y + 55} fontSize="12.5" fontWeight="500" textAnchor={wide ? 'end' : 'start'}>{zone.open} open</text>
-        )}
-      </g>
+      <Rails box={box} rails={own} />
+      <ZoneText labels={labels} activeKeynote={pointed.keynote} />
       {/* above the texts, which are cut where there is no room: the link's own name says all of them */}
-      <Link to={href} aria-label={zoneInWords(box)}>
+      <Link to={zoneHref(zone)} aria-label={say(zone, level)} data-zone={zone.id} tabIndex={focusable ? 0 : -1}>
         <rect x={x} y={y} width={width} height={height} fill="transparent" />
-        <title>{zoneInWords(box)}</title>
       </Link>
     </g>
   );
 }
 
-function LevelMarks({ layout }: { layout: ElevationLayout }) {
-  // on a narrow screen the mark stands close to the wall and the dashed line is left out
-  const compact = layout.plotLeft < 100;
-  const tip = layout.plotLeft - (compact ? 9 : 49);
-  return (
-    <g aria-hidden="true">
-      {layout.marks.map(({ level, y, labelY }) => (
-        <g key={level.id}>
-          {!compact && <line className="d-aid" x1={tip} x2={layout.plotLeft} y1={y} y2={y} strokeWidth="1" strokeDasharray="5 3" />}
-          <path d={`M${tip - 5} ${labelY - 9}h10l-5 8z`} fill="var(--ink)" />
-          <text className="d-sub" x={tip - 9} y={labelY - 3.5} fontSize="11.5" textAnchor="end">{formatLevel(level.elevationM)}</text>
-        </g>
-      ))}
-    </g>
-  );
-}
-
-function Ground({ layout, hatch }: { layout: ElevationLayout; hatch: string }) {
-  const y = layout.groundY;
-  if (y == null) return null;
-  const from = 4;
-  return (
-    <g aria-hidden="true" className="d-ground">
-      <rect x={from} y={y} width={layout.plotLeft - from} height="7" fill={`url(#${hatch})`} />
-      <rect x={layout.plotLeft + layout.plotWidth} y={y} width={layout.width - layout.plotLeft - layout.plotWidth} height="7" fill={`url(#${hatch})`} />
-      <line className="d-line" x1={from} x2={layout.width} y1={y} y2={y} strokeWidth="1.8" />
-    </g>
-  );
+/** One stop of the Tab key; the arrows lead from zone to zone as the eye would go. */
+function useArrows(boxes: readonly ZoneBox[]) {
+  const [at, setAt] = useState<string | null>(null);
+  const current = boxes.some((b) => b.zone.id === at) ? at : boxes.at(-1)?.zone.id ?? null;
+  const onKeyDown = (event: KeyboardEvent<SVGSVGElement>) => {
+    const from = (event.target as Element).getAttribute('data-zone');
+    const next = from && !event.altKey && !event.ctrlKey && !event.metaKey ? stepFrom(boxes, from, event.key) : null;
+    if (next === null) return;
+    event.preventDefault();
+    setAt(next);
+    event.currentTarget.querySelector<SVGElement>(`[data-zone="${next}"]`)?.focus();
+  };
+  return { current, onKeyDown };
 }
 
 /**
- * The building as an elevation: heights to scale with level marks in metres, zones by protected area, the open share hatched.
+ * The building as an elevation: heights to scale with level marks in metres, zones by protected area, the open share hatched and numbered.
  * Every zone is a link; the drawing's numbers stand in a table as well (see ZoneList).
  */
-export function BuildingElevation({ levels, zoneHref, label }: BuildingElevationProps) {
+export function BuildingElevation({ levels, label, keynotes, pointed = nothing, ...zoneProps }: BuildingElevationProps) {
   const { ref, width } = useElementWidth<HTMLDivElement>(760);
   const layout = useMemo(() => layoutElevation(levels, width), [levels, width]);
+  const arrows = useArrows(layout.boxes);
   const openHatch = useId();
   const groundHatch = useId();
   return (
     <div ref={ref} className="mt-elevation">
-      <svg className="mt-drawing" viewBox={`0 0 ${layout.width} ${layout.height}`} role="group" aria-label={label}>
+      <svg className="mt-drawing" viewBox={`0 0 ${layout.width} ${layout.height}`} role="group" aria-label={label} onKeyDown={arrows.onKeyDown}>
         <defs>
           <HatchPattern id={openHatch} />
           <HatchPattern id={groundHatch} color="var(--ink-3)" spacing={5} opacity={1} />
@@ -98,11 +104,15 @@ export function BuildingElevation({ levels, zoneHref, label }: BuildingElevation
         {layout.emptyBands.map(({ level, ...box }) => (
           <g key={level.id}>
             <rect {...box} className="d-aid" strokeDasharray="6 4" strokeWidth="1" />
-            <text className="d-sub" x={box.x + 11} y={box.y + Math.min(19, box.height - 4)} fontSize="12.5">{level.code} {level.name}: no zone yet</text>
+            {box.height >= 14 && <text className="d-sub" x={box.x + 11} y={box.y + Math.min(19, box.height - 4)} fontSize="12.5">{level.code} {level.name}: no zone yet</text>}
           </g>
         ))}
-        {layout.boxes.map((box) => <Zone key={box.zone.id} box={box} href={zoneHref(box.zone)} hatch={openHatch} />)}
+        {layout.boxes.map((box) => (
+          <Zone key={box.zone.id} box={box} hatch={openHatch} keynotes={keynotes?.get(box.zone.id) ?? none} pointed={pointed} focusable={box.zone.id === arrows.current} {...zoneProps} />
+        ))}
+        <Slabs layout={layout} />
         <Ground layout={layout} hatch={groundHatch} />
+        <ScaleBar layout={layout} />
       </svg>
     </div>
   );

@@ -24,6 +24,11 @@ const declarations = (p: Palette) => [
   `--settled:${p.settled}`, `--settled-tint:${p.settledTint}`, `--attention:${p.attention}`, `--attention-tint:${p.attentionTint}`, `--hover:${p.hover}`,
 ].join(';');
 
+/** Where the system forces its colours, drawings follow: words, hatch and marks still carry what colour repeats. */
+const forced = `--paper:Canvas;--sheet:Canvas;--ink:CanvasText;--ink-2:CanvasText;--ink-3:GrayText;--line:CanvasText;--line-2:GrayText;` +
+  `--settled:CanvasText;--settled-tint:Canvas;--attention:CanvasText;--attention-tint:Canvas;--hover:Canvas`;
+
 /** Custom properties for both grounds. Paper prints light whatever the screen shows. */
 export const paletteCss = `:root{${declarations(light)};color-scheme:light}
-@media screen{:root[data-ground="dark"]{${declarations(dark)};color-scheme:dark}}`;
+@media screen{:root[data-ground="dark"]{${declarations(dark)};color-scheme:dark}}
+@media (forced-colors:active){:root,:root[data-ground]{${forced}}}`;

@@ -1,6 +1,6 @@
-import { screen } from '@testing-library/react';
+import { fireEvent, screen, within } from '@testing-library/react';
 import { describe, expect, it } from 'vitest';
-import type { BuildingDto } from '@mantlet/common';
+import type { BuildingDto, IssuedBuildingDto } from '@mantlet/common';
 import { projectId, renderPage, serve, testProject } from '../../../test/render.js';
 import BuildingPage from './building-page.js';
 
@@ -21,8 +21,8 @@ describe('the building page', () => {
     expect(await screen.findByRole('heading', { level: 1, name: '10 of 12 members settled' })).toBeInTheDocument();
     const zone = screen.getByRole('link', { name: /Zone Z01 Hall, level L0: R 60, 81 m² protected, 10 of 12 members settled, 2 open/ });
     expect(zone).toHaveAttribute('href', `/projects/${projectId}/zones?zone=${zoneId}`);
-    expect(screen.getByRole('link', { name: 'B1 has no actions' })).toHaveAttribute('href', `/projects/${projectId}/members/${memberId}`);
-    expect(screen.getByText('You')).toBeInTheDocument();
+    expect(screen.getByRole('link', { name: /B1 has no actions/ })).toHaveAttribute('href', `/projects/${projectId}/members/${memberId}`);
+    expect(within(screen.getByRole('region', { name: 'Waits on you' })).getByRole('link', { name: /B1 has no actions/ })).toBeInTheDocument();
     expect(document.title).toBe('Building · Test house · Mantlet');
   });
   it('says what to do first in an empty project', async () => {
@@ -37,11 +37,28 @@ describe('the building page', () => {
     expect(await screen.findByText('The building cannot be drawn.')).toBeInTheDocument();
     expect(screen.getByRole('button', { name: 'Try again' })).toBeInTheDocument();
   });
-  it('sends those who see issued work only to the site page', async () => {
-    const calls = serve({});
-    const { router } = renderPage(<BuildingPage />, { project: testProject(['contractor']), path: '/projects/:projectId', at: `/projects/${projectId}` });
-    await screen.findByText('elsewhere');
-    expect(router.state.location.pathname).toBe(`/projects/${projectId}/site`);
-    expect(calls).toEqual([]);
+  it('reads out a zone pointed at, and marks its line in the list', async () => {
+    serve({ [path]: { body: building } });
+    renderPage(<BuildingPage />, { project: testProject(['specifier']) });
+    const zone = await screen.findByRole('link', { name: /Zone Z01 Hall/ });
+    fireEvent.focus(zone);
+    expect(screen.getByText(/^Zone Z01 Hall, level L0: R 60/)).toBeInTheDocument();
+    expect(screen.getByRole('link', { name: /B1 has no actions/ }).closest('li')).toHaveClass('mt-keynote-on');
+  });
+  it('shows those without a design role the building as issued, and asks for nothing else', async () => {
+    const issued: IssuedBuildingDto = {
+      revision: { id: 'r', code: 'P01', issuedAt: '2026-03-02T09:00:00Z' }, members: 12, protectedMembers: 11, bareMembers: 1, protectedAreaM2: 80.4,
+      levels: [{ id: 'l', code: 'L0', name: 'Ground', elevationM: 0, heightM: 4, zones: [{ id: zoneId, code: 'Z01', name: 'Hall', periodMin: 60, curve: 'standard', protectedAreaM2: 80.4, members: 12, protectedMembers: 11, bareMembers: 1 }] }],
+    };
+    const calls = serve({ [`GET /projects/${projectId}/site/building`]: { body: issued } });
+    renderPage(<BuildingPage />, { project: testProject(['contractor']) });
+    expect(await screen.findByRole('heading', { level: 1, name: 'P01: 11 members to protect, 80 m²; 1 stays bare' })).toBeInTheDocument();
+    expect(screen.getByRole('link', { name: /Zone Z01 Hall, level L0: R 60, 80 m² to protect, 11 of 12 members protected/ })).toHaveAttribute('href', `/projects/${projectId}/site#zone-${zoneId}`);
+    expect(calls.map((c) => c.path)).toEqual([`/projects/${projectId}/site/building`]);
+  });
+  it('says that nothing is issued yet', async () => {
+    serve({ [`GET /projects/${projectId}/site/building`]: { body: { revision: null, members: 0, protectedMembers: 0, bareMembers: 0, protectedAreaM2: 0, levels: [] } satisfies IssuedBuildingDto } });
+    renderPage(<BuildingPage />, { project: testProject(['reader']) });
+    expect(await screen.findByRole('heading', { level: 1, name: 'Nothing has been issued yet' })).toBeInTheDocument();
   });
 });

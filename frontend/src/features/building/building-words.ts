@@ -1,0 +1,38 @@
+import type { BuildingDto, BuildingLevelDto, BuildingZoneDto, IssuedBuildingDto, IssuedZoneDto } from '@mantlet/common';
+import { count, countWord, formatDate, formatNumber } from '../../lib/format.js';
+import type { Keynote } from './keynotes.js';
+
+export interface Words { heading: string; sub: string }
+
+/** How many lines of the list are the reader's: "One line waits on you." */
+function waitingWords(keynotes: readonly Keynote[]): string {
+  const mine = keynotes.filter((k) => k.mine).length;
+  if (keynotes.length === 0) return '';
+  if (mine === 0) return ' Nothing waits on you.';
+  return mine === 1 ? ' One line waits on you.' : ` ${countWord(mine)} lines wait on you.`;
+}
+
+export function buildingWords({ members, settled, open, levels }: BuildingDto, keynotes: readonly Keynote[] = []): Words {
+  if (levels.length === 0) return { heading: 'No levels yet', sub: 'The building is drawn from its levels and zones.' };
+  if (members === 0) return { heading: 'No members yet', sub: 'The levels are there; the member schedule is not.' };
+  if (open === 0 && settled === members) return { heading: `All ${formatNumber(members)} members settled`, sub: 'Nothing is open; the schedule can be prepared.' };
+  const rest = open === 0 ? 'No member is open.' : `${countWord(open)} ${open === 1 ? 'is' : 'are'} open; the schedule can be prepared when ${open === 1 ? 'it is' : 'they are'} closed.`;
+  return { heading: `${formatNumber(settled)} of ${formatNumber(members)} members settled`, sub: rest + waitingWords(keynotes) };
+}
+
+export function issuedWords({ revision, protectedMembers, bareMembers, protectedAreaM2 }: IssuedBuildingDto): Words {
+  if (!revision) return { heading: 'Nothing has been issued yet', sub: 'The building appears here with the first issued revision of the schedule.' };
+  const bare = bareMembers === 0 ? '' : `; ${formatNumber(bareMembers)} ${bareMembers === 1 ? 'stays' : 'stay'} bare`;
+  return {
+    heading: `${revision.code}: ${count(protectedMembers, 'member')} to protect, ${formatNumber(protectedAreaM2)} m²${bare}`,
+    sub: `As issued on ${formatDate(revision.issuedAt)}. Later changes are not in it until the next revision is issued.`,
+  };
+}
+
+type Place = Pick<BuildingLevelDto, 'code'>;
+export const sayZone = (zone: BuildingZoneDto, level: Place): string =>
+  `Zone ${zone.code} ${zone.name}, level ${level.code}: R ${zone.periodMin}, ${formatNumber(zone.protectedAreaM2)} m² protected, ` +
+  `${zone.settled} of ${zone.members} members settled, ${zone.open} open, ${zone.issuedMembers} issued`;
+export const sayIssued = (zone: IssuedZoneDto, level: Place): string =>
+  `Zone ${zone.code} ${zone.name}, level ${level.code}: R ${zone.periodMin}, ${formatNumber(zone.protectedAreaM2)} m² to protect, ` +
+  `${zone.protectedMembers} of ${zone.members} members protected, ${zone.bareMembers} ${zone.bareMembers === 1 ? 'stays' : 'stay'} bare`;
