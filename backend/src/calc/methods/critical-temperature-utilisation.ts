@@ -3,9 +3,9 @@ import type { CriticalTemperatureBasis, DesignBasis } from '@mantlet/common';
 import { citation, explain } from '../formula.js';
 import type { WorkingStep } from '../formula.js';
 import { utilisationFromAmbientFormula } from '../standards/en-1993-1-2/clause-2-4-2-reduction-factor.js';
-import { criticalTemperatureFormula } from '../standards/en-1993-1-2/clause-4-2-4-critical-temperature.js';
+import { LEAST_UTILISATION, criticalTemperatureFormula } from '../standards/en-1993-1-2/clause-4-2-4-critical-temperature.js';
 import type { Loading, SectionClass } from '../standards/en-1993-1-1/table-5-2.js';
-import { table31Source, temperatureOfKe, temperatureOfKy } from '../standards/en-1993-1-2/table-3-1.js';
+import { kE, kY, table31Source, temperatureOfKe, temperatureOfKy } from '../standards/en-1993-1-2/table-3-1.js';
 import type { CriticalTemperature, CriticalTemperatureCase, Determined } from '../types.js';
 import { bendingColdShare, bucklingColdShare } from './cold-resistance.js';
 import { loadingByType } from './critical-temperature-scope.js';
@@ -17,6 +17,8 @@ interface Reading {
   method: string;
   step: () => WorkingStep;
 }
+/** How a temperature was read from μ0, as the result names it. */
+const methods = { equation: 'equation (4.22)', strength: 'inversion of k_y', stability: 'inversion of the smaller of k_y and k_E, safe where buckling may govern' } as const;
 type Classify = (loading: Loading | null) => Determined<SectionClass | null>;
 
 /** μ0, from what was given. */
@@ -34,7 +36,7 @@ function degreeOfUtilisation(basis: UtilisationBasis, design: DesignBasis, worki
 function stabilityBound(mu0: number): Reading {
   const temperatureC = Math.min(temperatureOfKy(mu0), temperatureOfKe(mu0));
   return {
-    temperatureC, method: 'inversion of the smaller of k_y and k_E, safe where buckling may govern',
+    temperatureC, method: methods.stability,
     step: () => ({
       what: 'Critical temperature of a member that may buckle', equation: 'θ_cr: min(k_y,θ ; k_E,θ) = μ0', inputs: [{ symbol: 'μ0', value: mu0, unit: '' }],
       note: 'R_fi,d,θ ≥ min(k_y,θ ; k_E,θ)·R_fi,d,0 for every slenderness; the full calculation from actions gives as much or more',
@@ -47,11 +49,11 @@ const heldNote = 'for a member that is held against buckling, and whose deflecti
 
 function byMethod(mu0: number, method: DesignBasis['utilisationMethod']): Reading {
   if (method === 'equation-4.22') {
-    return { temperatureC: criticalTemperatureFormula.evaluate({ utilisation: mu0 }), method: 'equation (4.22)', step: () => ({ ...explain(criticalTemperatureFormula, { utilisation: mu0 }).step, note: heldNote }) };
+    return { temperatureC: criticalTemperatureFormula.evaluate({ utilisation: mu0 }), method: methods.equation, step: () => ({ ...explain(criticalTemperatureFormula, { utilisation: mu0 }).step, note: heldNote }) };
   }
   const temperatureC = temperatureOfKy(mu0);
   return {
-    temperatureC, method: 'inversion of k_y',
+    temperatureC, method: methods.strength,
     step: () => ({
       what: 'Critical temperature from the degree of utilisation', equation: 'θ_cr: k_y,θ = μ0', inputs: [{ symbol: 'μ0', value: mu0, unit: '' }],
       note: heldNote, value: temperatureC, unit: '°C', source: citation(table31Source),
@@ -111,4 +113,25 @@ export function fromUtilisation(c: CriticalTemperatureCase, basis: UtilisationBa
     kind: 'determined', temperatureC, bareTemperatureC: temperatureC, way: basis.way, method: capped ? 'class 4 default' : read.method,
     governing: null, utilisation: mu0, limitStates: [], assumed: false,
   };
+}
+
+const everyK = 20;
+const tabulated = (share: (temperatureC: number) => number): [number, number][] =>
+  Array.from({ length: (1200 - 20) / everyK + 1 }, (_, i) => [20 + i * everyK, share(20 + i * everyK)]);
+
+/**
+ * The relation μ0 was read from, as pairs of steel temperature and utilisation, for the drawing of the member; null where the
+ * temperature came about otherwise (declared, calculated, capped for class 4). (4.22) is drawn over the utilisations it is made for.
+ */
+export function utilisationCurve(method: string | null): [number, number][] | null {
+  switch (method) {
+    case methods.equation: {
+      const steps = 60;
+      return Array.from({ length: steps + 1 }, (_, i) => 1 - ((1 - LEAST_UTILISATION) * i) / steps)
+        .map((utilisation) => [criticalTemperatureFormula.evaluate({ utilisation }), utilisation]);
+    }
+    case methods.strength: return tabulated(kY);
+    case methods.stability: return tabulated((t) => Math.min(kY(t), kE(t)));
+    default: return null;
+  }
 }

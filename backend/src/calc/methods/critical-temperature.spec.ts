@@ -5,6 +5,7 @@ import { sectionProperties } from '../sections/index.js';
 import { kY } from '../standards/index.js';
 import type { CriticalTemperature, CriticalTemperatureCase } from '../types.js';
 import { criticalTemperature, explainCriticalTemperature, resistanceCurve } from './critical-temperature.js';
+import { utilisationCurve } from './critical-temperature-utilisation.js';
 
 /** dimensions of EN 10365 */
 const ipe300: SectionShape = { kind: 'i', hMm: 300, bMm: 150, twMm: 7.1, tfMm: 10.7, rootRadiusMm: 15 };
@@ -221,6 +222,19 @@ describe('utilisation', () => {
     expect(from(null)).toBeCloseTo(at(0.8 * 0.65).temperatureC, 9);
     expect(from(0.5)).toBeCloseTo(at(0.4).temperatureC, 9);
   });
+  it.each<[string, Partial<CriticalTemperatureCase>]>([
+    ['equation (4.22)', {}], ['k_y', { design: { ...defaultDesignBasis, utilisationMethod: 'inversion-of-ky' } }], ['the smaller of k_y and k_E', { memberType: 'column', shape: he200b }],
+  ])('draws the relation it reads from: %s', (_, change) => {
+    for (const mu0 of [0.1, 0.42, 0.6, 0.85]) {
+      const { method, temperatureC } = at(mu0, change);
+      const points = utilisationCurve(method) ?? [];
+      const i = points.findIndex(([, share]) => share <= mu0);
+      const [[fromC, from], [toC, to]] = [points[i - 1]!, points[i]!];
+      // the drawing joins its points by straight lines
+      expect(Math.abs(fromC + ((toC - fromC) * (from - mu0)) / (from - to) - temperatureC)).toBeLessThan(1.5);
+    }
+  });
+  it('draws no relation for a temperature that came about otherwise', () => expect(utilisationCurve('class 4 default')).toBeNull());
   it('above 1 is under-strength cold', () => {
     for (const basis of [{ way: 'utilisation', mu0: 1.2, reference: 'x' }, { way: 'ambient-utilisation', utilisation: 1.2, etaFi: null, reference: 'x' }] as const) {
       const result = criticalTemperature(member(basis));

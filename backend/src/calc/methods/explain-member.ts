@@ -6,6 +6,7 @@ import { gasTemperatureC, naturalFireDurationMin } from '../standards/gas-temper
 import type { MemberCase, SectionFactor, ThicknessRequest } from '../types.js';
 import { assessMember, bareHeating, orientationOf } from './assess.js';
 import { explainCriticalTemperature, resistanceCurve } from './critical-temperature.js';
+import { utilisationCurve } from './critical-temperature-utilisation.js';
 import { explainThickness, refusedStep } from './explain-thickness.js';
 import { protectedHistory, unprotectedHistory } from './heating.js';
 import { heatingOf, placeInThermal } from './thermal-thickness.js';
@@ -76,6 +77,11 @@ function protectedPoints(c: MemberCase, result: MemberResultDto, minutes: number
   return place.ok ? pairs(protectedHistory({ ...heatingOf(place.value, c.curve, result.requiredThickness), minutes })) : null;
 }
 
+function utilisationOf({ method, utilisation, verdict }: MemberResultDto): MemberChartsDto['utilisation'] {
+  const points = verdict === 'under-strength' || utilisation === null ? null : utilisationCurve(method);
+  return points === null || utilisation === null ? null : { value: utilisation, points };
+}
+
 function chartsOf(c: MemberCase, own: SectionFactor, result: MemberResultDto): MemberChartsDto | null {
   const heating = bareHeating(c, own);
   if (!heating) return null;
@@ -85,6 +91,7 @@ function chartsOf(c: MemberCase, own: SectionFactor, result: MemberResultDto): M
     resistance: resistanceCurve({ basis, memberType, shape, properties, steel, exposure, design, accepted }).map((r) => ({
       limitState: r.limitState, unit: r.unit, effect: r.effect, points: r.points.map((p) => [p.temperatureC, p.resistance] as [number, number]),
     })),
+    utilisation: utilisationOf(result),
     fire: Array.from({ length: Math.floor(minutes) + 1 }, (_, minute) => [minute, gasTemperatureC(c.curve, minute)]),
     bare: pairs(unprotectedHistory({ ...heating, minutes })),
     protected: protectedPoints(c, result, minutes),

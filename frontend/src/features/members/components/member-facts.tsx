@@ -9,7 +9,7 @@ import { useMay } from '../../projects/project-context.js';
 import { useWithdrawAcceptance } from '../api/members.js';
 import { FailedSave } from '../../../ui/form/failed-save.js';
 import { acceptanceNames } from '../member-words.js';
-import { bareAtEnd } from './member-drawings.js';
+import { bareAtEnd } from '../reading.js';
 
 const missing = 'not determined';
 const orMissing = (text: string) => (text === '–' ? missing : text);

@@ -2,10 +2,10 @@ import { useEffect } from 'react';
 import { useNavigate } from 'react-router-dom';
 import { LinkButton } from '../../../ui/link-button.js';
 
-interface MemberPagerProps { projectId: string; previousId: string | null; nextId: string | null; state: unknown }
+interface MemberPagerProps { /** the list as it was left */ back: string; projectId: string; previousId: string | null; nextId: string | null; state: unknown }
 
 /** To the member before and after by mark. With a modifier, so that a key alone never leaves the page. */
-export function MemberPager({ projectId, previousId, nextId, state }: MemberPagerProps) {
+export function MemberPager({ back, projectId, previousId, nextId, state }: MemberPagerProps) {
   const navigate = useNavigate();
   useEffect(() => {
     const onKey = (event: KeyboardEvent) => {
@@ -23,6 +23,7 @@ export function MemberPager({ projectId, previousId, nextId, state }: MemberPage
     : null);
   return (
     <nav className="mt-pager mt-noprint" aria-label="Members by mark">
+      <LinkButton to={back}>All members</LinkButton>
       {button(previousId, 'Previous', 'Alt +PageUp')}
       {button(nextId, 'Next', 'Alt +PageDown')}
     </nav>

@@ -1,6 +1,6 @@
 import { App, Button } from 'antd';
 import { useState } from 'react';
-import { Link, useLocation, useNavigate, useParams } from 'react-router-dom';
+import { useLocation, useNavigate, useParams } from 'react-router-dom';
 import type { MemberSheetDto } from '@mantlet/common';
 import { ApiError } from '../../../lib/api-client.js';
 import { count } from '../../../lib/format.js';
@@ -9,10 +9,11 @@ import type { PageInfo } from '../../../ui/page-info.js';
 import { QueryState } from '../../../ui/states.js';
 import { RequireRight, useCurrentProject, useMay } from '../../projects/project-context.js';
 import { useDeleteMembers, useMember } from '../api/members.js';
-import { MemberDrawings } from '../components/member-drawings.js';
+import { MemberDrawing } from '../components/member-drawing.js';
 import { Acceptances, MemberFacts } from '../components/member-facts.js';
 import { MemberHistory } from '../components/member-history.js';
 import { MemberPager } from '../components/member-pager.js';
+import { OpenNotice } from '../components/open-notice.js';
 import { WorkingTable } from '../components/working-table.js';
 import { AcceptanceDrawer } from '../forms/acceptance-drawer.js';
 import { EditMemberDrawer } from '../forms/member-drawer.js';
@@ -80,10 +81,10 @@ function Sheet({ sheet, reload }: { sheet: MemberSheetDto; reload: () => void })
   return (
     <Page
       title={`Member ${sheet.member.mark}`} projectName={project.name} heading={sheetHeading(sheet)} sub={sheetSub(sheet)} state={stateOf(sheet)}
-      actions={<><Actions sheet={sheet} setOpen={setOpen} /><MemberPager projectId={project.id} previousId={sheet.previousId} nextId={sheet.nextId} state={location.state} /></>}
+      actions={<><Actions sheet={sheet} setOpen={setOpen} /><MemberPager back={back} projectId={project.id} previousId={sheet.previousId} nextId={sheet.nextId} state={location.state} /></>}
     >
-      <p className="mt-noprint"><Link to={back}>All members</Link></p>
-      <MemberDrawings sheet={sheet} />
+      <OpenNotice sheet={sheet} heading={sheetHeading(sheet)} />
+      <MemberDrawing sheet={sheet} />
       <WorkingTable working={sheet.working} />
       <div className="mt-sheet-foot">
         <MemberFacts sheet={sheet} />
