@@ -26,6 +26,7 @@ describe('members', () => {
   const declare = async (member: MemberDto, temperatureC: number): Promise<MemberDto> =>
     (await team['structural-engineer'].put(at(`/${member.id}/structural`))
       .send({ basis: { way: 'declared', temperatureC, reference: 'Calculation 12' }, version: member.version }).expect(200)).body as MemberDto;
+  const seen = ({ id, version }: { id: string; version: number }): { id: string; version: number } => ({ id, version });
   const list = async (query: Record<string, string> = {}): Promise<Page<MemberRowDto>> => (await team.specifier.get(at()).query(query).expect(200)).body as Page<MemberRowDto>;
   const sheet = async (id: string): Promise<MemberSheetDto> => (await team['fire-engineer'].get(at(`/${id}`)).expect(200)).body as MemberSheetDto;
   /** an invented coating for beams of the zone */
@@ -74,7 +75,7 @@ describe('members', () => {
       await team[role].post(at()).send(input({ mark: 'X' })).expect(403);
       await team[role].patch(at(`/${made.id}`)).send({ ...input(), version: 1 }).expect(403);
       await team[role].delete(at(`/${made.id}?version=1`)).expect(403);
-      await team[role].post(at('/bulk')).send({ memberIds: [made.id], set: { grade: 'S275' } }).expect(403);
+      await team[role].post(at('/bulk')).send({ members: [made], set: { grade: 'S275' } }).expect(403);
     }
     for (const role of ['fire-engineer', 'specifier', 'contractor'] as const) {
       await team[role].put(at(`/${made.id}/structural`)).send({ basis, version: 1 }).expect(403);
@@ -134,9 +135,9 @@ describe('members', () => {
     await team.specifier.post(at()).send(input({ sectionId: foreignSection.id })).expect(422);
     const foreignMember = await build.beam(app, foreignZone, foreignSection, 'F');
     await team.specifier.get(at(`/${foreignMember.id}`)).expect(404);
-    const bulk = await team.specifier.post(at('/bulk')).send({ memberIds: [foreignMember.id], set: { grade: 'S275' } }).expect(409);
+    const bulk = await team.specifier.post(at('/bulk')).send({ members: [foreignMember].map(seen), set: { grade: 'S275' } }).expect(409);
     expect(bulk.body.code).toBe('member.some-unknown');
-    await team.specifier.post(at('/delete')).send({ memberIds: [foreignMember.id] }).expect(409);
+    await team.specifier.post(at('/delete')).send({ members: [foreignMember].map(seen) }).expect(409);
     expect(await app.dataSource.manager.existsBy(Member, { id: foreignMember.id, grade: 'S355' })).toBe(true);
   });
 
@@ -167,18 +168,31 @@ describe('members', () => {
 
   it('change together, all or none, and once for the zones they touch', async () => {
     const made = [await make({ mark: 'B1', onSite: false }), await make({ mark: 'B2', onSite: false }), await make({ mark: 'B3', onSite: false })];
-    const memberIds = made.map((m) => m.id);
-    const gone = '00000000-0000-4000-8000-000000000000';
-    await team.specifier.post(at('/bulk')).send({ memberIds: [...memberIds, gone], set: { grade: 'S275' } }).expect(409);
+    const members = made.map(seen);
+    const gone = { id: '00000000-0000-4000-8000-000000000000', version: 1 };
+    await team.specifier.post(at('/bulk')).send({ members: [...members, gone], set: { grade: 'S275' } }).expect(409);
     expect((await list()).items.every((row) => row.grade === 'S355')).toBe(true);
-    const changed = await team.specifier.post(at('/bulk')).send({ memberIds, set: { grade: 'S275', zoneId: otherZone.id, exposure: { arrangement: 'four-sides', faces: ['top'], reason: 'free' } } }).expect(200);
-    expect(changed.body).toEqual({ changed: 3 });
+    const set = { grade: 'S275', zoneId: otherZone.id, exposure: { arrangement: 'four-sides', faces: ['top'], reason: 'free' } };
+    expect((await team.specifier.post(at('/bulk/preview')).send({ members, set }).expect(200)).body).toEqual({ chosen: 3, changes: 3 });
+    expect((await list()).items.every((row) => row.grade === 'S355' && row.version === 1)).toBe(true);
+    const changed = await team.specifier.post(at('/bulk')).send({ members, set }).expect(200);
+    // nothing is given of their temperatures: the verdict stays, though not for the same heated faces
+    expect(changed.body).toMatchObject({ changed: 3 });
     expect((await list()).items).toEqual(made.map((m) => expect.objectContaining({ id: m.id, grade: 'S275', zoneCode: 'Z2', exposure: 'four-sides', version: 2 })));
     // what was not set stays
     expect(await app.dataSource.manager.countBy(Member, { projectId: project.id, onSite: false })).toBe(3);
-    expect((await team.specifier.post(at('/bulk')).send({ memberIds, set: { grade: 'S275' } }).expect(200)).body).toEqual({ changed: 0 });
-    await team.specifier.post(at('/bulk')).send({ memberIds, set: {} }).expect(400);
-    expect((await team.specifier.post(at('/delete')).send({ memberIds: memberIds.slice(0, 2) }).expect(200)).body).toEqual({ deleted: 2 });
+    // seen at a version that no longer stands: all are left as they are, and named
+    const moved = await team.specifier.post(at('/bulk')).send({ members: [{ ...members[0], version: 2 }, members[1], members[2]], set: { grade: 'S460' } }).expect(409);
+    expect(moved.body).toMatchObject({ code: 'member.moved', message: 'B2, B3 were changed by somebody since you chose them. Nothing was changed; look at them again and repeat.' });
+    await team.specifier.post(at('/delete')).send({ members }).expect(409);
+    expect((await list()).items.every((row) => row.grade === 'S275')).toBe(true);
+    const again = members.map((member) => ({ ...member, version: 2 }));
+    expect((await team.specifier.post(at('/bulk')).send({ members: again, set: { grade: 'S275' } }).expect(200)).body).toEqual({ changed: 0, results: 0 });
+    expect((await team.specifier.post(at('/bulk/preview')).send({ members: again, set: { grade: 'S275' } }).expect(200)).body).toEqual({ chosen: 3, changes: 0 });
+    await team.specifier.post(at('/bulk')).send({ members: again, set: {} }).expect(400);
+    await team.specifier.post(at('/bulk')).send({ set: { grade: 'S275' } }).expect(400);
+    await team.specifier.post(at('/delete')).send({}).expect(400);
+    expect((await team.specifier.post(at('/delete')).send({ members: again.slice(0, 2) }).expect(200)).body).toEqual({ deleted: 2 });
     expect((await list()).items.map((row) => row.mark)).toEqual(['B3']);
   });
 

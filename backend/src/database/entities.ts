@@ -5,6 +5,7 @@ import { MemberImport } from '../features/imports/member-import.entity.js';
 import { Job } from '../features/jobs/job.entity.js';
 import { Level } from '../features/levels/level.entity.js';
 import { MemberAcceptance } from '../features/members/member-acceptance.entity.js';
+import { MemberView } from '../features/members/member-view.entity.js';
 import { Member } from '../features/members/member.entity.js';
 import { Membership } from '../features/memberships/membership.entity.js';
 import { Product } from '../features/products/product.entity.js';
@@ -17,5 +18,5 @@ import { Zone } from '../features/zones/zone.entity.js';
 
 export const entities = [
   User, Project, Membership, Level, Zone, ZoneSystem, Section, Product, Member, MemberAcceptance, MemberResult, ZoneResult,
-  Revision, MemberImport, AuditEntry, Job,
+  Revision, MemberImport, AuditEntry, Job, MemberView,
 ];

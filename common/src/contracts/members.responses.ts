@@ -1,10 +1,8 @@
 import { z } from 'zod';
-import { criticalTemperatureBasisSchema, criticalTemperatureWays, memberTypes } from './actions.js';
-import { verdictKinds } from './assessment.js';
+import { criticalTemperatureBasisSchema } from './actions.js';
 import { memberResultDtoSchema, workingStepDtoSchema } from './assessment.responses.js';
-import { exposureArrangements, protectionForms } from './fire.js';
 import { acceptanceKinds, memberInputSchema } from './members.js';
-import { idSchema, thicknessUnits } from './primitives.js';
+import { idSchema } from './primitives.js';
 import { auditEntryDtoSchema } from './projects.responses.js';
 import { sectionDtoSchema, sectionOutlineSchema } from './sections.responses.js';
 
@@ -13,19 +11,6 @@ export const acceptanceDtoSchema = z.object({
 });
 export type AcceptanceDto = z.infer<typeof acceptanceDtoSchema>;
 
-export const memberRowDtoSchema = z.object({
-  id: idSchema, mark: z.string(), zoneId: idSchema, zoneCode: z.string(), levelCode: z.string(), memberType: z.enum(memberTypes),
-  sectionId: idSchema, section: z.string(), grade: z.string(), lengthMm: z.number(), quantity: z.number(),
-  exposure: z.enum(exposureArrangements), protectionForm: z.enum(protectionForms),
-  way: z.enum(criticalTemperatureWays), verdict: z.enum(verdictKinds).nullable(),
-  sectionFactorPerM: z.number().nullable(), criticalTemperatureC: z.number().nullable(), assumed: z.boolean(),
-  requiredThickness: z.number().nullable(), appliedThickness: z.number().nullable(), thicknessUnit: z.enum(thicknessUnits).nullable(),
-  productName: z.string().nullable(), areaM2: z.number().nullable(), open: z.boolean(),
-  /** the result as a sentence */
-  sentence: z.string(),
-  version: z.number(),
-});
-export type MemberRowDto = z.infer<typeof memberRowDtoSchema>;
 export const memberDtoSchema = memberInputSchema.extend({
   id: idSchema, version: z.number(),
   basis: criticalTemperatureBasisSchema, basisSetBy: z.string().nullable(), basisSetAt: z.string().nullable(),
@@ -66,8 +51,8 @@ export const memberSheetDtoSchema = z.object({
 });
 export type MemberSheetDto = z.infer<typeof memberSheetDtoSchema>;
 
-/** How many members a change of several touched. */
-export const membersChangedDtoSchema = z.object({ changed: z.number() });
+/** How many members a change of several touched, and how many results moved with them. */
+export const membersChangedDtoSchema = z.object({ changed: z.number(), results: z.number() });
 export type MembersChangedDto = z.infer<typeof membersChangedDtoSchema>;
 export const membersDeletedDtoSchema = z.object({ deleted: z.number() });
 export type MembersDeletedDto = z.infer<typeof membersDeletedDtoSchema>;

@@ -1,7 +1,7 @@
 import { z } from 'zod';
-import { verdictKinds } from './assessment.js';
 import { criticalTemperatureBasisSchema, memberTypes, steelGrades } from './actions.js';
 import { exposureSchema, protectionForms } from './fire.js';
+import { isOneChoice, memberChoiceShape, mostChosen, notOneChoice } from './member-choice.js';
 import { codeSchema, idSchema, nonNegativeSchema, noteSchema, positiveSchema, versionSchema } from './primitives.js';
 
 /** What the specifier decides of a member. */
@@ -32,42 +32,27 @@ export type MemberUpdate = z.infer<typeof memberUpdateSchema>;
 export const memberStructuralSchema = z.object({ basis: criticalTemperatureBasisSchema, version: versionSchema });
 export type MemberStructural = z.infer<typeof memberStructuralSchema>;
 
-export const bulkMemberSchema = z.object({
-  memberIds: z.array(idSchema).min(1).max(5000),
+const bulkSetSchema = memberInputSchema.pick({ zoneId: true, memberType: true, grade: true, exposure: true, protectionForm: true, sectionId: true })
   // onSite without its default: what is not sent must stay as it is
-  set: memberInputSchema.pick({ zoneId: true, memberType: true, grade: true, exposure: true, protectionForm: true, sectionId: true }).extend({ onSite: z.boolean() }).partial()
-    .refine((s) => Object.keys(s).length > 0, 'choose at least one field to set'),
-});
+  .extend({ onSite: z.boolean() }).partial()
+  .refine((s) => Object.keys(s).length > 0, 'choose at least one field to set');
+export const bulkMemberSchema = z.object({ ...memberChoiceShape, set: bulkSetSchema }).refine(isOneChoice, notOneChoice);
 export type BulkMember = z.infer<typeof bulkMemberSchema>;
+/** How the critical temperature of many comes about; actions are each member's own and are set one by one. */
+export const bulkStructuralSchema = z.object({
+  ...memberChoiceShape,
+  basis: criticalTemperatureBasisSchema.refine(({ way }) => way !== 'calculated', 'actions are set member by member'),
+}).refine(isOneChoice, notOneChoice);
+export type BulkStructural = z.infer<typeof bulkStructuralSchema>;
 export const memberDeleteQuerySchema = z.object({ version: z.coerce.number().int().min(1) });
-export const memberIdsSchema = z.object({ memberIds: z.array(idSchema).min(1).max(5000) });
 
 /** A signed acceptance, by the fire engineer; it holds only while the accepted value stands. */
 export const acceptanceKinds = ['assumed', 'high-temperature', 'bare'] as const;
-export const acceptanceSchema = z.object({
-  memberIds: z.array(idSchema).min(1).max(5000),
-  kind: z.enum(acceptanceKinds),
-  reason: z.string().trim().min(3, 'say why').max(1000),
-});
+const memberIdsSchema = z.array(idSchema).min(1).max(mostChosen);
+export const acceptanceFormSchema = z.object({ kind: z.enum(acceptanceKinds), reason: z.string().trim().min(3, 'say why').max(1000) });
+/** Of all that a filter finds, those are signed for which there is something to accept. */
+export const acceptanceSchema = acceptanceFormSchema.extend({ memberIds: memberIdsSchema.optional(), found: memberChoiceShape.found })
+  .refine((v) => (v.memberIds === undefined) !== (v.found === undefined), { ...notOneChoice, path: ['memberIds'] });
 export type Acceptance = z.infer<typeof acceptanceSchema>;
-export const acceptanceWithdrawalSchema = acceptanceSchema.omit({ reason: true });
+export const acceptanceWithdrawalSchema = z.object({ memberIds: memberIdsSchema, kind: z.enum(acceptanceKinds) });
 export type AcceptanceWithdrawal = z.infer<typeof acceptanceWithdrawalSchema>;
-
-export const memberSortKeys = ['mark', 'level', 'zone', 'type', 'section', 'sectionFactor', 'criticalTemperature', 'thickness', 'verdict', 'quantity', 'length'] as const;
-const list = <T extends z.ZodType>(item: T) => z.preprocess((v) => (typeof v === 'string' ? v.split(',').filter(Boolean) : v), z.array(item)).optional();
-export const memberQuerySchema = z.object({
-  search: z.string().trim().max(100).optional(),
-  zoneIds: list(idSchema),
-  levelIds: list(idSchema),
-  memberTypes: list(z.enum(memberTypes)),
-  verdicts: list(z.enum(verdictKinds)),
-  productIds: list(idSchema),
-  memberIds: list(idSchema),
-  /** only members with something open */
-  open: z.enum(['true', 'false']).optional(),
-  sort: z.enum(memberSortKeys).default('mark'),
-  direction: z.enum(['asc', 'desc']).default('asc'),
-  page: z.coerce.number().int().min(1).default(1),
-  pageSize: z.coerce.number().int().min(1).max(500).default(100),
-});
-export type MemberQuery = z.infer<typeof memberQuerySchema>;

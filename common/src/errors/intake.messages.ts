@@ -11,6 +11,14 @@ export const intakeMessages = {
   'member.section-unknown': (_: Record<string, never>) => 'This section is neither in the catalogue nor one of the project. Choose one from the list.',
   'member.some-unknown': (p: { count: number }) =>
     `${many(p.count, 'of the members is', 'of the members are')} no longer in this project. Nothing was changed; reload the list and try again.`,
+  'member.moved': (p: { marks: string[] }) =>
+    `${listed(p.marks)} ${p.marks.length === 1 ? 'was' : 'were'} changed by somebody since you chose ${p.marks.length === 1 ? 'it' : 'them'}. Nothing was changed; look at ${p.marks.length === 1 ? 'it' : 'them'} again and repeat.`,
+  'member.found-moved': (p: { then: number; now: number }) =>
+    p.then === p.now
+      ? `Some of the ${p.then} members found were changed since you looked. Nothing was changed; look at the list again and repeat.`
+      : `${p.then} members were found when you looked, ${p.now} are now. Nothing was changed; look at the list again and repeat.`,
+  'member-view.name-taken': (p: { name: string }) => `You have a list called ${p.name} already. Give this one another name, or change that one.`,
+  'member-view.too-many': (p: { most: number }) => `You keep ${p.most} lists on this project already. Delete one before you keep another.`,
   'member.not-assumed': (p: { marks: string[] }) =>
     `Nothing was accepted: ${listed(p.marks)} ${p.marks.length === 1 ? 'does' : 'do'} not rest on an assumed temperature.`,
   'member.not-high': (p: { marks: string[]; aboveC: number }) =>

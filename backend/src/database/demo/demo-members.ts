@@ -5,7 +5,7 @@ import { ImportsService } from '../../features/imports/imports.service.js';
 import { AcceptancesService } from '../../features/members/acceptances.service.js';
 import { MemberWriterService } from '../../features/members/member-writer.service.js';
 import { Member } from '../../features/members/member.entity.js';
-import { MembersService } from '../../features/members/members.service.js';
+import { MembersBulkService } from '../../features/members/members-bulk.service.js';
 import { RevisionsService } from '../../features/revisions/revisions.service.js';
 import type { ProjectScope } from '../../shared/access.js';
 import { readBases, readDemoFile } from './demo-data.js';
@@ -54,5 +54,5 @@ export async function signWarnings(app: INestApplicationContext, scope: ProjectS
 
 export async function takeOut(app: INestApplicationContext, scope: ProjectScope, marks: readonly string[]): Promise<void> {
   const members = await app.get(DataSource).manager.findBy(Member, { projectId: scope.projectId, mark: In([...marks]) });
-  if (members.length) await app.get(MembersService, { strict: false }).removeMany(scope, members.map((member) => member.id));
+  if (members.length) await app.get(MembersBulkService, { strict: false }).removeMany(scope, { members: members.map(({ id, version }) => ({ id, version })) });
 }

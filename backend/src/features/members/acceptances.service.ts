@@ -10,9 +10,9 @@ import { MemberResult } from '../assessment/member-result.entity.js';
 import { AuditService } from '../audit/audit.service.js';
 import { Project } from '../projects/project.entity.js';
 import { MemberAcceptance } from './member-acceptance.entity.js';
+import { MemberChoiceService } from './member-choice.service.js';
 import { MemberWriterService } from './member-writer.service.js';
 import type { Member } from './member.entity.js';
-import { MembersService } from './members.service.js';
 
 type Kind = Acceptance['kind'];
 
@@ -21,22 +21,23 @@ type Kind = Acceptance['kind'];
 export class AcceptancesService {
   constructor(
     @InjectDataSource() private readonly dataSource: DataSource,
-    private readonly members: MembersService,
+    private readonly choice: MemberChoiceService,
     private readonly writer: MemberWriterService,
     private readonly audit: AuditService,
   ) {}
 
   /** All or none: a member for which there is nothing to accept is named. */
-  async accept(scope: ProjectScope, { memberIds, kind, reason }: Acceptance): Promise<{ accepted: number }> {
+  async accept(scope: ProjectScope, { memberIds, found, kind, reason }: Acceptance): Promise<{ accepted: number }> {
     return this.dataSource.transaction(async (manager) => {
-      const members = await this.members.lockMembers(manager, scope.projectId, memberIds);
-      const results = await this.resultsOf(manager, members);
-      await this.requireOccasion(manager, scope.projectId, kind, members, results);
+      await this.writer.lock(manager, scope.projectId);
+      const chosen = found ? await this.choice.read(manager, scope.projectId, { found }) : await this.choice.byId(manager, scope.projectId, memberIds ?? []);
+      const results = await this.resultsOf(manager, chosen);
+      const members = await this.withOccasion(manager, scope.projectId, kind, chosen, results, found !== undefined);
       const acceptedAt = new Date();
       const rows = members.map((member) => ({
         memberId: member.id, kind, reason, valueC: results.get(member.id)?.criticalTemperatureC ?? null, acceptedById: scope.actor.id, acceptedAt,
       }));
-      await manager.upsert(MemberAcceptance, rows, ['memberId', 'kind']);
+      for (let at = 0; at < rows.length; at += 2000) await manager.upsert(MemberAcceptance, rows.slice(at, at + 2000), ['memberId', 'kind']);
       await this.record(manager, scope, members, `${words[kind]} accepted`, kind, (member) => ({ old: null, new: results.get(member.id)?.criticalTemperatureC ?? null }), reason);
       await this.writer.settle(manager, scope.projectId, members.map((m) => m.zoneId));
       return { accepted: members.length };
@@ -46,7 +47,8 @@ export class AcceptancesService {
   /** Takes signatures back; members without one are passed over. */
   async withdraw(scope: ProjectScope, { memberIds, kind }: { memberIds: string[]; kind: Kind }): Promise<{ withdrawn: number }> {
     return this.dataSource.transaction(async (manager) => {
-      const members = await this.members.lockMembers(manager, scope.projectId, memberIds);
+      await this.writer.lock(manager, scope.projectId);
+      const members = await this.choice.byId(manager, scope.projectId, memberIds);
       const signed = await manager.findBy(MemberAcceptance, { memberId: In(members.map((m) => m.id)), kind });
       const values = new Map(signed.map((acceptance) => [acceptance.memberId, acceptance.valueC]));
       const concerned = members.filter((member) => values.has(member.id));
@@ -62,11 +64,17 @@ export class AcceptancesService {
     return new Map(results.map((result) => [result.memberId, result]));
   }
 
-  private async requireOccasion(manager: EntityManager, projectId: string, kind: Kind, members: readonly Member[], results: ReadonlyMap<string, MemberResult>): Promise<void> {
+  /** Those for which there is something to accept; of members named one by one, all must have it. */
+  private async withOccasion(
+    manager: EntityManager, projectId: string, kind: Kind, members: readonly Member[], results: ReadonlyMap<string, MemberResult>, someWill: boolean,
+  ): Promise<Member[]> {
     const project = await manager.findOneByOrFail(Project, { id: projectId });
     const aboveC = project.settings.designBasis.secondSignatureAboveC;
-    const without = members.filter((member) => !hasOccasion(kind, member, results.get(member.id), aboveC)).map((member) => member.mark);
-    if (without.length) throw unprocessable(refusal(kind, without.sort(), aboveC));
+    const having = members.filter((member) => hasOccasion(kind, member, results.get(member.id), aboveC));
+    const had = new Set(having);
+    const without = members.filter((member) => !had.has(member)).map((member) => member.mark);
+    if (without.length && !(someWill && having.length)) throw unprocessable(refusal(kind, without.sort(), aboveC));
+    return having;
   }
 
   private async record(

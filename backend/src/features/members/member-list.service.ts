@@ -1,39 +1,43 @@
 import { Injectable } from '@nestjs/common';
-import type { MemberQuery, MemberRowDto, Message, Page } from '@mantlet/common';
-import { memberSentence } from '@mantlet/common';
+import { exposureNames, memberSentence, memberTypeNames, wayNames } from '@mantlet/common';
+import type { MemberPageDto, MemberQuery, MemberRowDto, MemberValue, MemberValuesDto, Message } from '@mantlet/common';
 import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource } from 'typeorm';
-import type { SelectQueryBuilder } from 'typeorm';
-import { MemberResult } from '../assessment/member-result.entity.js';
-import { Level } from '../levels/level.entity.js';
-import { Product } from '../products/product.entity.js';
-import { Section } from '../sections/section.entity.js';
-import { Zone } from '../zones/zone.entity.js';
-import { Member } from './member.entity.js';
+import { searchMembers, sortBy } from './member-search.js';
 
-/** What each column is sorted by; ties go by mark. */
-const sortBy: Record<MemberQuery['sort'], string> = {
-  mark: 'm.mark', level: 'l.elevationM', zone: 'z.code', type: 'm.memberType', section: 's.designation', sectionFactor: 'r.sectionFactorPerM',
-  criticalTemperature: 'r.criticalTemperatureC', thickness: 'r.appliedThickness', verdict: 'r.verdict', quantity: 'm.quantity', length: 'm.lengthMm',
-};
 const columns: Record<Exclude<keyof MemberRowDto, 'sentence'> | 'reason', string> = {
-  id: 'm.id', mark: 'm.mark', zoneId: 'm.zoneId', zoneCode: 'z.code', levelCode: 'l.code', memberType: 'm.memberType', sectionId: 'm.sectionId',
-  section: 's.designation', grade: 'm.grade', lengthMm: 'm.lengthMm', quantity: 'm.quantity', exposure: "m.exposure->>'arrangement'",
-  protectionForm: 'm.protectionForm', way: "m.basis->>'way'", verdict: 'r.verdict', sectionFactorPerM: 'r.sectionFactorPerM',
-  criticalTemperatureC: 'r.criticalTemperatureC', assumed: 'coalesce(r.assumed, false)', requiredThickness: 'r.requiredThickness',
-  appliedThickness: 'r.appliedThickness', thicknessUnit: 'r.thicknessUnit', productName: 'p.name', areaM2: 'r.areaM2',
-  // a member that was never assessed is open as well
-  open: 'coalesce(r.open, true)', version: 'm.version', reason: 'r.reason',
+  id: 'm.id', mark: 'm.mark', version: 'm.version', levelCode: 'l.code', zoneId: 'm.zoneId', zoneCode: 'z.code', periodMin: 'z.periodMin',
+  memberType: 'm.memberType', sectionId: 'm.sectionId', section: 's.designation', family: 's.family', grade: 'm.grade', lengthMm: 'm.lengthMm',
+  quantity: 'm.quantity', exposure: "m.exposure->>'arrangement'", protectionForm: 'm.protectionForm', note: 'm.note', way: "m.basis->>'way'",
+  verdict: 'r.verdict', sectionFactorPerM: 'r.sectionFactorPerM', criticalTemperatureC: 'r.criticalTemperatureC', utilisation: 'r.utilisation',
+  assumed: 'coalesce(r.assumed, false)', requiredThickness: 'r.requiredThickness', appliedThickness: 'r.appliedThickness', thicknessUnit: 'r.thicknessUnit',
+  productName: 'p.name', areaM2: 'r.areaM2', open: 'coalesce(r.open, true)', reason: 'r.reason',
 };
 
-/** Thousands of members, a page at a time: filtered, searched and sorted in the database. */
+/** What a filter may choose from: the value, how it is called, and the order it is listed in. */
+const valueColumns: Record<keyof MemberValuesDto, { value: string; label?: string; order?: string; words?: Record<string, string> }> = {
+  levelIds: { value: 'l.id', label: "l.code || ' ' || l.name", order: 'l.elevationM' },
+  zoneIds: { value: 'z.id', label: "z.code || ' ' || z.name", order: 'z.code' },
+  memberTypes: { value: 'm.memberType', words: memberTypeNames },
+  families: { value: 's.family' },
+  sectionIds: { value: 's.id', label: 's.designation', order: 's.designation' },
+  grades: { value: 'm.grade' },
+  exposures: { value: "m.exposure->>'arrangement'", words: exposureNames },
+  protectionForms: { value: 'm.protectionForm', words: { profile: 'Follows the profile', boxed: 'Boxed' } },
+  periods: { value: 'z.periodMin', label: "z.periodMin || ' min'", order: 'z.periodMin' },
+  productIds: { value: 'p.id', label: 'p.name', order: 'p.name' },
+  verdicts: { value: 'r.verdict' },
+  ways: { value: "m.basis->>'way'", words: wayNames },
+};
+
+/** Thousands of members, a window at a time: filtered, searched and sorted in the database. */
 @Injectable()
 export class MemberListService {
   constructor(@InjectDataSource() private readonly dataSource: DataSource) {}
 
-  async list(projectId: string, query: MemberQuery): Promise<Page<MemberRowDto>> {
-    const found = this.matching(projectId, query);
-    const total = await found.getCount();
+  async list(projectId: string, query: MemberQuery): Promise<MemberPageDto> {
+    const found = searchMembers(this.dataSource.manager, projectId, query);
+    const [total, project] = await Promise.all([found.getCount(), this.whole(projectId)]);
     const direction = query.direction === 'desc' ? 'DESC' : 'ASC';
     found.select([]);
     for (const [name, column] of Object.entries(columns)) found.addSelect(column, name);
@@ -41,33 +45,26 @@ export class MemberListService {
     if (query.sort !== 'mark') found.addOrderBy('m.mark', 'ASC');
     const rows = await found.offset((query.page - 1) * query.pageSize).limit(query.pageSize)
       .getRawMany<Omit<MemberRowDto, 'sentence'> & { reason: Message | null }>();
-    return { items: rows.map(toRow), total, page: query.page, pageSize: query.pageSize };
+    return { items: rows.map(toRow), total, page: query.page, pageSize: query.pageSize, project };
   }
 
-  private matching(projectId: string, query: MemberQuery): SelectQueryBuilder<Member> {
-    const found = this.dataSource.manager
-      .createQueryBuilder(Member, 'm')
-      .innerJoin(Zone, 'z', 'z.id = m.zoneId')
-      .innerJoin(Level, 'l', 'l.id = z.levelId')
-      .innerJoin(Section, 's', 's.id = m.sectionId')
-      .leftJoin(MemberResult, 'r', 'r.memberId = m.id')
-      .leftJoin(Product, 'p', 'p.id = r.productId')
-      .where('m.projectId = :projectId', { projectId });
-    const among = (column: string, values: readonly string[] | undefined): void => {
-      if (values?.length) found.andWhere(`${column} IN (:...${column.replace('.', '_')})`, { [column.replace('.', '_')]: values });
-    };
-    among('m.zoneId', query.zoneIds);
-    among('z.levelId', query.levelIds);
-    among('m.memberType', query.memberTypes);
-    among('r.verdict', query.verdicts);
-    among('r.productId', query.productIds);
-    among('m.id', query.memberIds);
-    if (query.open) found.andWhere('coalesce(r.open, true) = :open', { open: query.open === 'true' });
-    if (query.search) {
-      // spaces in a section's name are a matter of taste
-      found.andWhere(`(m.mark ILIKE :like OR m.note ILIKE :like OR replace(s.designation, ' ', '') ILIKE replace(:like, ' ', ''))`, { like: `%${query.search.replace(/[\\%_]/g, '\\$&')}%` });
-    }
-    return found;
+  private async whole(projectId: string): Promise<MemberPageDto['project']> {
+    const [row] = await this.dataSource.query<{ members: number; open: number }[]>(
+      `SELECT count(*)::int AS members, count(*) FILTER (WHERE coalesce(r.open, true))::int AS open
+       FROM members m LEFT JOIN member_results r ON r.member_id = m.id WHERE m.project_id = $1`, [projectId]);
+    return row as MemberPageDto['project'];
+  }
+
+  /** Every value that members of the project have, with how many have it. */
+  async values(projectId: string): Promise<MemberValuesDto> {
+    const entries = await Promise.all(Object.entries(valueColumns).map(async ([key, { value, label = value, order = label, words }]) => {
+      const found = searchMembers(this.dataSource.manager, projectId, {}).select([])
+        .addSelect(`cast(${value} AS text)`, 'value').addSelect(`max(${label})`, 'label').addSelect('count(*)::int', 'members').addSelect(`max(${order})`, 'place')
+        .andWhere(`${value} IS NOT NULL`).groupBy(value).orderBy('place');
+      const rows = await found.getRawMany<MemberValue>();
+      return [key, rows.map((row) => ({ value: row.value, label: words?.[row.value] ?? row.label, members: row.members }))];
+    }));
+    return Object.fromEntries(entries) as MemberValuesDto;
   }
 }
 

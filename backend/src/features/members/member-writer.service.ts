@@ -90,10 +90,16 @@ export class MemberWriterService {
     return changed.length;
   }
 
-  /** Results of the zones that were touched. */
-  async settle(manager: EntityManager, projectId: string, zoneIds: Iterable<string>): Promise<void> {
+  /** How many of these would be other than they are. */
+  countChanges(changes: readonly MemberChange[]): number {
+    return changes.filter(({ before, set }) => changesBetween<Columns>(before, { ...before, ...set }, Object.keys(set) as (keyof Columns)[]).length > 0).length;
+  }
+
+  /** Results of the zones that were touched. @returns how many results are other than before */
+  async settle(manager: EntityManager, projectId: string, zoneIds: Iterable<string>): Promise<number> {
     const touched = [...new Set(zoneIds)];
-    if (touched.length) await this.assessment.recompute(manager, projectId, touched);
+    if (!touched.length) return 0;
+    return (await this.assessment.recompute(manager, projectId, touched)).changed;
   }
 
   /** Names that the trail shows in place of ids. */

@@ -1,19 +1,22 @@
 import { Body, Controller, Delete, Get, HttpCode, HttpStatus, Param, Patch, Post, Put, Query } from '@nestjs/common';
 import {
-  acceptanceSchema, acceptancesWithdrawnDtoSchema, acceptanceWithdrawalSchema, bulkMemberSchema, memberDeleteQuerySchema, memberDtoSchema,
-  memberIdsSchema, memberInputSchema, memberQuerySchema, memberRowDtoSchema, membersAcceptedDtoSchema, membersChangedDtoSchema,
-  membersDeletedDtoSchema, memberSheetDtoSchema, memberStructuralSchema, memberUpdateSchema, pageSchema,
+  acceptanceSchema, acceptancesWithdrawnDtoSchema, acceptanceWithdrawalSchema, bulkMemberSchema, bulkStructuralSchema, foundQuerySchema, foundSummaryDtoSchema,
+  memberChoiceSchema, memberDeleteQuerySchema, memberDtoSchema, memberInputSchema, memberPageDtoSchema, memberQuerySchema, membersAcceptedDtoSchema,
+  membersChangedDtoSchema, membersDeletedDtoSchema, memberSheetDtoSchema, memberStructuralSchema, memberUpdateSchema, memberValuesDtoSchema, previewAnswerDtoSchema,
 } from '@mantlet/common';
 import type {
-  Acceptance, AcceptanceWithdrawal, BulkMember, MemberDto, MemberInput, MemberQuery, MemberRowDto, MemberSheetDto, MemberStructural, MemberUpdate, Page,
+  Acceptance, AcceptanceWithdrawal, MembersChangedDto, BulkMember, BulkStructural, FoundQuery, FoundSummaryDto, MemberChoice, MemberDto, MemberInput, MemberPageDto,
+  MemberQuery, MemberSheetDto, MemberStructural, MemberUpdate, MemberValuesDto, PreviewAnswerDto,
 } from '@mantlet/common';
 import { DesignTeam, Roles, Scope } from '../../shared/access.js';
 import type { ProjectScope } from '../../shared/access.js';
 import { Returns, ReturnsNothing } from '../../shared/openapi/returns.js';
 import { idParam } from '../../shared/validation.js';
 import { AcceptancesService } from './acceptances.service.js';
+import { MemberChoiceService } from './member-choice.service.js';
 import { MemberListService } from './member-list.service.js';
 import { MemberSheetService } from './member-sheet.service.js';
+import { MembersBulkService } from './members-bulk.service.js';
 import { MembersService } from './members.service.js';
 
 /** Members of a project. What the specifier and the structural engineer decide are separate routes with separate fields. */
@@ -23,13 +26,32 @@ export class MembersController {
     private readonly members: MembersService,
     private readonly lists: MemberListService,
     private readonly sheets: MemberSheetService,
+    private readonly bulk: MembersBulkService,
+    private readonly choice: MemberChoiceService,
   ) {}
 
   @Get()
   @DesignTeam()
-  @Returns(pageSchema(memberRowDtoSchema), 'Members, filtered, sorted and paged; A/V in 1/m, temperatures in °C, lengths in mm, thickness in its unit.')
-  list(@Scope() scope: ProjectScope, @Query({ schema: memberQuerySchema }) query: MemberQuery): Promise<Page<MemberRowDto>> {
+  @Returns(memberPageDtoSchema, 'Members, filtered, sorted and paged; A/V in 1/m, temperatures in °C, lengths in mm, thickness in its unit.')
+  list(@Scope() scope: ProjectScope, @Query({ schema: memberQuerySchema }) query: MemberQuery): Promise<MemberPageDto> {
     return this.lists.list(scope.projectId, query);
+  }
+
+  /** What a filter may choose from. */
+  @Get('values')
+  @DesignTeam()
+  @Returns(memberValuesDtoSchema, 'The values that members of the project have, each with how many have it.')
+  values(@Scope() scope: ProjectScope): Promise<MemberValuesDto> {
+    return this.lists.values(scope.projectId);
+  }
+
+  /** Writes nothing: what a filter finds, before something is done with all of it. */
+  @Post('found')
+  @HttpCode(HttpStatus.OK)
+  @DesignTeam()
+  @Returns(foundSummaryDtoSchema, 'What a filter finds: how many members, under which stamp, and what of them may be accepted.')
+  found(@Scope() scope: ProjectScope, @Body({ schema: foundQuerySchema }) query: FoundQuery): Promise<FoundSummaryDto> {
+    return this.choice.summary(scope.projectId, query);
   }
 
   @Get(':memberId')
@@ -51,16 +73,33 @@ export class MembersController {
   @HttpCode(HttpStatus.OK)
   @Roles('specifier')
   @Returns(membersChangedDtoSchema, 'Sets the same fields of several members, all or none.')
-  setMany(@Scope() scope: ProjectScope, @Body({ schema: bulkMemberSchema }) input: BulkMember): Promise<{ changed: number }> {
-    return this.members.setMany(scope, input);
+  setMany(@Scope() scope: ProjectScope, @Body({ schema: bulkMemberSchema }) input: BulkMember): Promise<MembersChangedDto> {
+    return this.bulk.setMany(scope, input);
+  }
+
+  /** Writes nothing: how many the same body would change. */
+  @Post('bulk/preview')
+  @HttpCode(HttpStatus.OK)
+  @Roles('specifier')
+  @Returns(previewAnswerDtoSchema, 'Counts what the same body would change, and changes nothing.')
+  preview(@Scope() scope: ProjectScope, @Body({ schema: bulkMemberSchema }) input: BulkMember): Promise<PreviewAnswerDto> {
+    return this.bulk.preview(scope, input);
+  }
+
+  @Post('structural')
+  @HttpCode(HttpStatus.OK)
+  @Roles('structural-engineer')
+  @Returns(membersChangedDtoSchema, 'Sets how the critical temperature of several members comes about, all or none.')
+  setStructuralMany(@Scope() scope: ProjectScope, @Body({ schema: bulkStructuralSchema }) input: BulkStructural): Promise<MembersChangedDto> {
+    return this.bulk.setStructural(scope, input);
   }
 
   @Post('delete')
   @HttpCode(HttpStatus.OK)
   @Roles('specifier')
   @Returns(membersDeletedDtoSchema, 'Removes several members, all or none.')
-  removeMany(@Scope() scope: ProjectScope, @Body({ schema: memberIdsSchema }) { memberIds }: { memberIds: string[] }): Promise<{ deleted: number }> {
-    return this.members.removeMany(scope, memberIds);
+  removeMany(@Scope() scope: ProjectScope, @Body({ schema: memberChoiceSchema }) input: MemberChoice): Promise<{ deleted: number }> {
+    return this.bulk.removeMany(scope, input);
   }
 
   @Patch(':memberId')

@@ -1,19 +1,19 @@
 import { Injectable } from '@nestjs/common';
-import { message } from '@mantlet/common';
-import type { BulkMember, Exposure, MemberDto, MemberInput, MemberStructural, MemberUpdate } from '@mantlet/common';
+import type { MemberDto, MemberInput, MemberStructural, MemberUpdate } from '@mantlet/common';
 import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource, In } from 'typeorm';
 import type { EntityManager } from 'typeorm';
 import type { ProjectScope } from '../../shared/access.js';
-import { conflict, notFound } from '../../shared/refusal.js';
+import { notFound } from '../../shared/refusal.js';
 import { AssessmentService } from '../assessment/assessment.service.js';
 import { AuditService } from '../audit/audit.service.js';
 import { Section } from '../sections/section.entity.js';
+import { tidy } from './exposure.js';
 import { toMemberDto } from './member-mapper.js';
 import { MemberWriterService } from './member-writer.service.js';
 import { Member } from './member.entity.js';
 
-/** Members one by one and many at once: the specifier's part, and the structural engineer's. */
+/** Members one by one: the specifier's part, and the structural engineer's. */
 @Injectable()
 export class MembersService {
   constructor(
@@ -77,18 +77,6 @@ export class MembersService {
     return { ...(await this.find(manager, projectId, id)), designation: section.designation };
   }
 
-  /** The same fields for all; all or none. */
-  async setMany(scope: ProjectScope, { memberIds, set }: BulkMember): Promise<{ changed: number }> {
-    return this.dataSource.transaction(async (manager) => {
-      const members = await this.lockMembers(manager, scope.projectId, memberIds);
-      await this.writer.check(manager, scope.projectId, set, null);
-      const tidied = set.exposure ? { ...set, exposure: tidy(set.exposure) } : set;
-      const changed = await this.writer.update(manager, scope, members.map((before) => ({ before, set: tidied })), 'members changed together');
-      if (changed) await this.writer.settle(manager, scope.projectId, [...members.map((m) => m.zoneId), ...(set.zoneId ? [set.zoneId] : [])]);
-      return { changed };
-    });
-  }
-
   async remove(scope: ProjectScope, memberId: string, version: number): Promise<void> {
     await this.dataSource.transaction(async (manager) => {
       await this.writer.lock(manager, scope.projectId);
@@ -99,15 +87,8 @@ export class MembersService {
     });
   }
 
-  async removeMany(scope: ProjectScope, memberIds: string[]): Promise<{ deleted: number }> {
-    return this.dataSource.transaction(async (manager) => {
-      const members = await this.lockMembers(manager, scope.projectId, memberIds);
-      await this.erase(manager, scope, members);
-      return { deleted: members.length };
-    });
-  }
-
-  private async erase(manager: EntityManager, scope: ProjectScope, members: readonly Member[]): Promise<void> {
+  /** Takes them out of the project, and works out anew what they leave behind. */
+  async erase(manager: EntityManager, scope: ProjectScope, members: readonly Member[]): Promise<void> {
     await manager.delete(Member, { id: In(members.map((m) => m.id)) });
     await this.audit.record(
       manager,
@@ -118,19 +99,4 @@ export class MembersService {
     );
     await this.writer.settle(manager, scope.projectId, members.map((m) => m.zoneId));
   }
-
-  /** All of them, of this project, and no other writer until the end. @throws Refusal where one is missing */
-  async lockMembers(manager: EntityManager, projectId: string, memberIds: readonly string[]): Promise<Member[]> {
-    await this.writer.lock(manager, projectId);
-    const wanted = [...new Set(memberIds)];
-    const members = await manager.findBy(Member, { id: In(wanted), projectId });
-    if (members.length < wanted.length) throw conflict(message('member.some-unknown', { count: wanted.length - members.length }));
-    return members;
-  }
-}
-
-/** Named faces belong to "faces as given" alone. */
-function tidy(exposure: Exposure): Exposure {
-  const { arrangement, faces, reason } = exposure;
-  return arrangement === 'given-faces' ? { arrangement, faces: [...new Set(faces)], reason } : { arrangement, reason };
 }

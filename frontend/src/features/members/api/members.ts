@@ -1,5 +1,5 @@
 import { keepPreviousData, queryOptions, useQuery } from '@tanstack/react-query';
-import type { Acceptance, AcceptanceDto, BulkMember, MemberInput, MemberQuery, MemberRowDto, MemberSheetDto, MemberStructural, MemberUpdate, Page } from '@mantlet/common';
+import type { Acceptance, AcceptanceDto, BulkMember, MemberChoice, MemberInput, MemberQuery, MemberSheetDto, MemberStructural, MemberUpdate, MembersChangedDto, MemberPageDto } from '@mantlet/common';
 import { api } from '../../../lib/api-client.js';
 import { projectKey } from '../../../lib/query-client.js';
 import { useProjectMutation } from '../../projects/api/projects.js';
@@ -9,7 +9,7 @@ const at = (projectId: string) => `/projects/${projectId}/members`;
 export const membersQuery = (projectId: string, query: Partial<MemberQuery>) =>
   queryOptions({
     queryKey: projectKey(projectId, 'members', query),
-    queryFn: ({ signal }) => api.get<Page<MemberRowDto>>(at(projectId), query, signal),
+    queryFn: ({ signal }) => api.get<MemberPageDto>(at(projectId), query, signal),
     // the rows stay on screen while the next page or order is fetched
     placeholderData: keepPreviousData,
   });
@@ -26,9 +26,9 @@ export const useUpdateMember = (projectId: string, memberId: string) =>
 export const useSetStructural = (projectId: string, memberId: string) =>
   useProjectMutation<MemberStructural>(projectId, (body) => api.put(`${at(projectId)}/${memberId}/structural`, body));
 export const useBulkMembers = (projectId: string) =>
-  useProjectMutation<BulkMember, { changed: number }>(projectId, (body) => api.post(`${at(projectId)}/bulk`, body));
+  useProjectMutation<BulkMember, MembersChangedDto>(projectId, (body) => api.post(`${at(projectId)}/bulk`, body));
 export const useDeleteMembers = (projectId: string) =>
-  useProjectMutation<string[], { deleted: number }>(projectId, (memberIds) => api.post(`${at(projectId)}/delete`, { memberIds }));
+  useProjectMutation<MemberChoice, { deleted: number }>(projectId, (body) => api.post(`${at(projectId)}/delete`, body));
 
 export const useAccept = (projectId: string) =>
   useProjectMutation<Acceptance, { accepted: number }>(projectId, (body) => api.post(`/projects/${projectId}/acceptances`, body));

@@ -36,7 +36,7 @@ export function ChoiceBar({ projectId, chosen, found, clear, chooseAll }: Choice
   const askDelete = () => modal.confirm({
     title: `Delete ${count(chosen.length, 'member')}?`, icon: null, okText: `Delete ${count(chosen.length, 'member')}`, okButtonProps: { danger: true }, cancelText: 'Keep',
     content: `${chosen.slice(0, 8).map((m) => m.mark).join(', ')}${chosen.length > 8 ? ` and ${chosen.length - 8} more` : ''}. They leave the schedule in progress; issued revisions keep them.`,
-    onOk: () => remove.mutateAsync(chosen.map((m) => m.id)).then(({ deleted }) => done(`${count(deleted, 'member')} deleted`), (error: unknown) => {
+    onOk: () => remove.mutateAsync({ members: chosen.map(({ id, version }) => ({ id, version })) }).then(({ deleted }) => done(`${count(deleted, 'member')} deleted`), (error: unknown) => {
       void message.error(error instanceof ApiError ? error.message : 'Nothing was deleted. Try again.');
     }),
   });
@@ -48,7 +48,7 @@ export function ChoiceBar({ projectId, chosen, found, clear, chooseAll }: Choice
       {may('accept-temperatures') && <Button onClick={() => setDrawer('accept')}>Accept</Button>}
       {may('edit-members') && <Button danger onClick={askDelete}>Delete</Button>}
       <Button type="link" onClick={clear}>Choose none</Button>
-      {drawer === 'set' && <BulkDrawer projectId={projectId} memberIds={chosen.map((m) => m.id)} onClose={() => setDrawer(null)} onChanged={(n) => done(changedWords(n))} />}
+      {drawer === 'set' && <BulkDrawer projectId={projectId} members={chosen} onClose={() => setDrawer(null)} onChanged={(n) => done(changedWords(n))} />}
       {drawer === 'accept' && <AcceptanceDrawer members={chosen} onClose={() => setDrawer(null)} onAccepted={(n) => done(`Accepted for ${count(n, 'member')}`)} />}
     </div>
   );

@@ -1,4 +1,4 @@
-import { acceptanceKinds, acceptanceSchema, defaultDesignBasis } from '@mantlet/common';
+import { acceptanceKinds, acceptanceFormSchema, defaultDesignBasis } from '@mantlet/common';
 import type { Acceptance } from '@mantlet/common';
 import { count, joinWords } from '../../../lib/format.js';
 import { RadioField, TextField } from '../../../ui/form/fields.js';
@@ -9,8 +9,6 @@ import { useWatch } from 'react-hook-form';
 import { useAccept } from '../api/members.js';
 import { acceptable } from './acceptance.js';
 import type { Acceptable, AcceptanceKind } from './acceptance.js';
-
-const formSchema = acceptanceSchema.omit({ memberIds: true });
 
 const named = (members: readonly Acceptable[]) => (members.length > 6 ? `${members.slice(0, 6).map((m) => m.mark).join(', ')} and ${members.length - 6} more` : joinWords(members.map((m) => m.mark)));
 
@@ -24,11 +22,11 @@ export function AcceptanceDrawer({ members, onClose, onAccepted }: AcceptanceDra
   const by = acceptable(members, aboveC);
   const words: Record<AcceptanceKind, string> = { assumed: 'An assumed critical temperature', 'high-temperature': `A critical temperature above ${aboveC} °C`, bare: 'Staying bare' };
   const first = acceptanceKinds.find((kind) => by[kind].length > 0);
-  const form = useContractForm(formSchema, { defaultValues: { ...(first && { kind: first }), reason: '' } });
+  const form = useContractForm(acceptanceFormSchema, { defaultValues: { ...(first && { kind: first }), reason: '' } });
   useServerIssues(form, accept.error);
   const kind = useWatch({ control: form.control, name: 'kind' }) as AcceptanceKind | undefined;
   const chosen = kind ? by[kind] : [];
-  const send = (body: Omit<Acceptance, 'memberIds'>) => accept.mutate({ ...body, memberIds: by[body.kind].map((m) => m.id) }, { onSuccess: ({ accepted }) => onAccepted(accepted) });
+  const send = (body: Omit<Acceptance, 'memberIds' | 'found'>) => accept.mutate({ ...body, memberIds: by[body.kind].map((m) => m.id) }, { onSuccess: ({ accepted }) => onAccepted(accepted) });
   const save = form.handleSubmit(send);
   const options = acceptanceKinds.map((value) => ({ value, label: `${words[value]}: ${by[value].length === 0 ? 'none chosen' : count(by[value].length, 'member')}`, disabled: by[value].length === 0 }));
   if (!first) {

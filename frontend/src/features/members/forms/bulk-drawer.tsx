@@ -11,23 +11,23 @@ import { ExposureFields } from './exposure-fields.js';
 import { formOptions, gradeOptions, placeOptions, typeOptions, useZoneOptions } from './member-fields.js';
 import { SectionField } from './section-field.js';
 
-interface BulkDrawerProps { projectId: string; memberIds: readonly string[]; onClose: () => void; onChanged: (changed: number) => void }
+interface BulkDrawerProps { projectId: string; members: readonly { id: string; version: number }[]; onClose: () => void; onChanged: (changed: number) => void }
 const kept = { allowClear: true, placeholder: 'Keep as it is' };
 
 /** Sets the same values on many members at once; a field left empty changes nothing. */
-export function BulkDrawer({ projectId, memberIds, onClose, onChanged }: BulkDrawerProps) {
+export function BulkDrawer({ projectId, members, onClose, onChanged }: BulkDrawerProps) {
   const bulk = useBulkMembers(projectId);
   const zones = useZoneOptions(projectId);
   const form = useContractForm(bulkFormSchema, { defaultValues: emptyBulk });
   useServerIssues(form, bulk.error);
   const { control } = form;
   const exposure = useWatch({ control, name: 'exposure' });
-  const send = (set: BulkMember['set']) => bulk.mutate({ memberIds: [...memberIds], set }, { onSuccess: ({ changed }) => onChanged(changed) });
+  const send = (set: BulkMember['set']) => bulk.mutate({ members: members.map(({ id, version }) => ({ id, version })), set }, { onSuccess: ({ changed }) => onChanged(changed) });
   const save = form.handleSubmit(send);
   return (
     <FormDrawer
-      title={`Set values on ${count(memberIds.length, 'member')}`} open onClose={onClose} onSubmit={(e) => { void save(e); }} dirty={form.formState.isDirty && !bulk.isSuccess}
-      saving={bulk.isPending} error={bulk.error} saveText={`Set on ${count(memberIds.length, 'member')}`}
+      title={`Set values on ${count(members.length, 'member')}`} open onClose={onClose} onSubmit={(e) => { void save(e); }} dirty={form.formState.isDirty && !bulk.isSuccess}
+      saving={bulk.isPending} error={bulk.error} saveText={`Set on ${count(members.length, 'member')}`}
     >
       <p className="mt-sub">Choose only what shall change. Results are worked out again when you save.</p>
       <SelectField control={control} name="zoneId" label="Zone" options={zones} search {...kept} />

@@ -35,12 +35,12 @@ function Actions({ sheet, setOpen }: { sheet: MemberSheetDto; setOpen: (open: Op
   const navigate = useNavigate();
   const { message, modal } = App.useApp();
   const remove = useDeleteMembers(project.id);
-  const { id, mark } = sheet.member;
+  const { id, version, mark } = sheet.member;
   const askDelete = () => modal.confirm({
     title: `Delete ${mark}?`, icon: null, okText: 'Delete', okButtonProps: { danger: true }, cancelText: 'Keep', content: 'It leaves the schedule in progress; issued revisions keep it.',
     onOk: async () => {
       try {
-        await remove.mutateAsync([id]);
+        await remove.mutateAsync({ members: [{ id, version }] });
         void navigate(`/projects/${project.id}/members`);
       } catch (error) {
         void message.error(error instanceof ApiError ? error.message : 'Not deleted. Try again.');
