@@ -9,6 +9,7 @@ import { Membership } from '../../src/features/memberships/membership.entity.js'
 import { Project } from '../../src/features/projects/project.entity.js';
 import { PasswordService } from '../../src/features/users/password.service.js';
 import { User } from '../../src/features/users/user.entity.js';
+import { AnswerCheck } from './answers.js';
 import { createTestDatabase } from './database.js';
 
 export type Agent = ReturnType<typeof request.agent>;
@@ -18,12 +19,15 @@ const PASSWORD = 'a long test password';
 export class TestApp {
   private counter = 0;
   private passwordHash: string | null = null;
+  readonly answers: AnswerCheck;
 
   private constructor(
     readonly app: NestExpressApplication,
     readonly dataSource: DataSource,
     private readonly dropDatabase: () => Promise<void>,
-  ) {}
+  ) {
+    this.answers = new AnswerCheck(app);
+  }
 
   static async start(options: { catalogue?: boolean; secureCookies?: boolean } = {}): Promise<TestApp> {
     const database = await createTestDatabase(options.catalogue ? 'catalogue' : 'migrated');
@@ -32,13 +36,21 @@ export class TestApp {
     return new TestApp(app, app.get(DataSource), database.drop);
   }
 
+  /** Fails where an answer did not fit what its route states. */
   async stop(): Promise<void> {
     await this.app.close();
     await this.dropDatabase();
+    if (this.answers.faults.size) throw new Error(`answers that do not fit what their routes state:\n${[...this.answers.faults].join('\n')}`);
   }
 
   anonymous(): Agent {
-    return request.agent(this.app.getHttpServer());
+    const agent = request.agent(this.app.getHttpServer());
+    agent.use((sent: request.Test) => {
+      sent.on('response', ({ status, type, text, body }: request.Response) => {
+        this.answers.check({ method: sent.method, path: new URL(sent.url).pathname, status, type, text, body });
+      });
+    });
+    return agent;
   }
 
   async makeUser(name: string, options: { administrator?: boolean } = {}): Promise<User> {

@@ -20,8 +20,8 @@ export type RevisionInput = z.infer<typeof revisionInputSchema>;
 /** was: what the form showed when it was opened; refused where that no longer stands. */
 export const revisionUpdateSchema = revisionInputSchema.extend({ was: revisionInputSchema.optional() });
 export type RevisionUpdate = z.infer<typeof revisionUpdateSchema>;
-export const returnSchema = z.object({ comment: z.string().trim().min(3, 'say what must change').max(2000) });
-export type ReturnInput = z.infer<typeof returnSchema>;
+export const returnInputSchema = z.object({ comment: z.string().trim().min(3, 'say what must change').max(2000) });
+export type ReturnInput = z.infer<typeof returnInputSchema>;
 
 /** The next code after those in use: the last number counted up in the same pattern, P01 for the first. */
 export function suggestRevisionCode(codes: readonly string[]): string {

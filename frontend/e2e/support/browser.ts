@@ -33,7 +33,7 @@ export class People {
     await this.browser.close();
   }
 
-  /** A fresh visitor. Fails the journey where a page throws. */
+  /** A fresh visitor. Fails the journey where a page throws or the server fails. */
   async visitor(options: { empty?: boolean; dark?: boolean } = {}): Promise<Page> {
     const context = await this.browser.newContext({
       baseURL: required(options.empty ? 'MANTLET_E2E_EMPTY_URL' : 'MANTLET_E2E_URL'), viewport: { width: 1440, height: 920 }, locale: 'en-GB',
@@ -45,6 +45,9 @@ export class People {
     context.setDefaultTimeout(30_000);
     const page = await context.newPage();
     page.on('pageerror', (error) => faults.push(error));
+    page.on('response', (response) => {
+      if (response.status() >= 500) faults.push(new Error(`${response.request().method()} ${response.url()} answered ${response.status()}`));
+    });
     return page;
   }
 
@@ -58,7 +61,7 @@ export class People {
   }
 }
 
-/** What pages threw; a journey's last step asks for none. */
+/** What pages threw, and where the server failed; a journey's last step asks for none. */
 export const faults: Error[] = [];
 
 export async function signIn(page: Page, { email, password }: Pick<Account, 'email' | 'password'>): Promise<void> {

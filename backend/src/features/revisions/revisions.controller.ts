@@ -1,6 +1,6 @@
 import { Body, Controller, Get, HttpCode, Param, Patch, Post, Query, Res, StreamableFile } from '@nestjs/common';
 import {
-  readinessDtoSchema, returnSchema, revisionDetailDtoSchema, revisionDtoSchema, revisionInputSchema, revisionUpdateSchema, revisionVerificationDtoSchema,
+  readinessDtoSchema, returnInputSchema, revisionDetailDtoSchema, revisionDtoSchema, revisionInputSchema, revisionUpdateSchema, revisionVerificationDtoSchema,
 } from '@mantlet/common';
 import type { ReadinessDto, ReturnInput, RevisionDetailDto, RevisionDto, RevisionInput, RevisionUpdate, RevisionVerificationDto } from '@mantlet/common';
 import type { Response } from 'express';
@@ -73,7 +73,7 @@ export class RevisionsController {
   @HttpCode(200)
   @Roles('specifier')
   @Returns(revisionDtoSchema, 'Returns a revision to draft, saying what must change.')
-  giveBack(@Scope() scope: ProjectScope, @Param('revisionId', idParam) id: string, @Body({ schema: returnSchema }) input: ReturnInput): Promise<RevisionDto> {
+  giveBack(@Scope() scope: ProjectScope, @Param('revisionId', idParam) id: string, @Body({ schema: returnInputSchema }) input: ReturnInput): Promise<RevisionDto> {
     return this.revisions.giveBack(scope, id, input);
   }
 

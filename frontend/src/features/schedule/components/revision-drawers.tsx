@@ -1,4 +1,4 @@
-import { returnSchema, revisionInputSchema } from '@mantlet/common';
+import { returnInputSchema, revisionInputSchema } from '@mantlet/common';
 import type { RevisionDto } from '@mantlet/common';
 import { TextField } from '../../../ui/form/fields.js';
 import { FormDrawer } from '../../../ui/form/form-drawer.js';
@@ -35,7 +35,7 @@ export function ChangeRevision({ projectId, revision, onClose }: { projectId: st
 /** Sends a prepared or checked revision back to draft, with what must change. */
 export function ReturnRevision({ projectId, revision, onClose }: { projectId: string; revision: RevisionDto; onClose: () => void }) {
   const giveBack = useReturnRevision(projectId, revision.id);
-  const form = useContractForm(returnSchema, { defaultValues: { comment: '' } });
+  const form = useContractForm(returnInputSchema, { defaultValues: { comment: '' } });
   useServerIssues(form, giveBack.error);
   const submit = form.handleSubmit((body) => giveBack.mutate(body, { onSuccess: onClose }));
   return (
