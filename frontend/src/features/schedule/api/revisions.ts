@@ -1,5 +1,5 @@
 import { queryOptions, useMutation, useQuery } from '@tanstack/react-query';
-import type { ReadinessDto, ReturnInput, RevisionDetailDto, RevisionDto, RevisionInput, RevisionVerificationDto } from '@mantlet/common';
+import type { ReadinessDto, ReturnInput, RevisionDetailDto, RevisionDto, RevisionInput, RevisionUpdate, RevisionVerificationDto } from '@mantlet/common';
 import { api, apiUrl } from '../../../lib/api-client.js';
 import { projectKey } from '../../../lib/query-client.js';
 import { useProjectMutation } from '../../projects/api/projects.js';
@@ -19,7 +19,7 @@ export const revisionQuery = (projectId: string, id: string) =>
 export const useRevision = (projectId: string, id: string) => useQuery(revisionQuery(projectId, id));
 
 export const useStartRevision = (projectId: string) => useProjectMutation(projectId, (body: RevisionInput) => api.post<RevisionDto>(at(projectId), body));
-export const useChangeRevision = (projectId: string, id: string) => useProjectMutation(projectId, (body: RevisionInput) => api.patch<RevisionDto>(at(projectId, id), body));
+export const useChangeRevision = (projectId: string, id: string) => useProjectMutation(projectId, (body: RevisionUpdate) => api.patch<RevisionDto>(at(projectId, id), body));
 export type Step = 'prepare' | 'check' | 'issue';
 export const useTakeStep = (projectId: string, id: string) => useProjectMutation(projectId, (step: Step) => api.post<RevisionDto>(at(projectId, id, step)));
 export const useReturnRevision = (projectId: string, id: string) => useProjectMutation(projectId, (body: ReturnInput) => api.post<RevisionDto>(at(projectId, id, 'return'), body));
