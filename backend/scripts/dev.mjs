@@ -39,17 +39,18 @@ await runCommand(
 
     const compiler = startProcess(process.execPath, [tool.tsc, '-b', 'common', 'backend', '--watch', '--preserveWatchOutput'], { name: 'the compiler', cwd: root });
     const api = startProcess(process.execPath, ['--watch', '--watch-preserve-output', '--enable-source-maps', built.server], { name: 'the server', env });
+    const worker = startProcess(process.execPath, ['--watch', '--watch-preserve-output', '--enable-source-maps', built.worker], { name: 'the worker', env });
     const client = startProcess(process.execPath, [tool.vite, '--host', '127.0.0.1', '--strictPort', '--clearScreen', 'false'], {
       name: 'the client',
       cwd: at('frontend'),
       env: { ...process.env, MANTLET_API: `http://127.0.0.1:${port}` },
     });
-    running.add({ children: [compiler, api, client].map((one) => identity(one.child.pid)) });
+    running.add({ children: [compiler, api, worker, client].map((one) => identity(one.child.pid)) });
     await untilAnswering(client, clientPort, 'The client');
     say(`\nClient, reloading as you save: ${clientUrl}\nAPI, restarting as it is compiled: http://127.0.0.1:${port}/api`);
     for (const line of accountLines(demoAccounts())) say(line);
     say('A new migration runs at the next npm run dev. Ctrl-C stops everything.');
-    await Promise.race([mustStay(compiler, 'The compiler'), mustStay(api, 'The server'), mustStay(client, 'The client')]);
+    await Promise.race([mustStay(compiler, 'The compiler'), mustStay(api, 'The server'), mustStay(worker, 'The worker'), mustStay(client, 'The client')]);
     return undefined;
   },
   { codeOnInterrupt: 0 },

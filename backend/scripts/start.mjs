@@ -8,7 +8,7 @@ import { startServer } from './lib/postgres.mjs';
 import { postgresPackage } from './lib/postgres-programs.mjs';
 import { holderOf, isFree, portFrom } from './lib/ports.mjs';
 import { identity } from './lib/processes.mjs';
-import { accountLines, demoAccounts, mustStay, prepareDatabase, startApplication } from './lib/server.mjs';
+import { accountLines, demoAccounts, mustStay, prepareDatabase, startApplication, startWorker } from './lib/server.mjs';
 import { claimInstallation, databaseFolder, secrets } from './lib/state.mjs';
 
 const help = `npm start                 the demo scenario, its data kept between starts
@@ -77,9 +77,10 @@ await runCommand(
     const ownState = path.join(stateDir, kind);
     const databaseUrl = await prepareDatabase(server, { name: wish.empty ? 'mantlet_empty' : 'mantlet', demo: !wish.empty, stateDir: ownState });
     const application = await startApplication({ databaseUrl, host, port, sessionSecret, clientDir: built.client, stateDir: ownState });
-    running.add({ children: [identity(application.child.pid)] });
+    const worker = startWorker({ databaseUrl, stateDir: ownState });
+    running.add({ children: [application, worker].map((one) => identity(one.child.pid)) });
     announce({ url, host, empty: wish.empty });
-    await mustStay(application, 'The server');
+    await Promise.race([mustStay(application, 'The server'), mustStay(worker, 'The worker')]);
     return undefined;
   },
   { codeOnInterrupt: 0 },

@@ -6,6 +6,7 @@ import { AssessmentModule } from './features/assessment/assessment.module.js';
 import { AuditModule } from './features/audit/audit.module.js';
 import { AuthModule } from './features/auth/auth.module.js';
 import { EventsModule } from './features/events/events.module.js';
+import { JobsModule } from './features/jobs/jobs.module.js';
 import { MembersModule } from './features/members/members.module.js';
 import { ImportsModule } from './features/imports/imports.module.js';
 import { QuantitiesModule } from './features/quantities/quantities.module.js';
@@ -19,7 +20,7 @@ import { SiteModule } from './features/site/site.module.js';
 import { UsersModule } from './features/users/users.module.js';
 
 /** The features of the server, one module each. */
-export const featureModules = [AuditModule, UsersModule, AuthModule, SectionsModule, AssessmentModule, QuantitiesModule, LevelsModule, ProjectsModule, ZonesModule, ProductsModule, MembersModule, ImportsModule, RevisionsModule, SiteModule, EventsModule];
+export const featureModules = [AuditModule, UsersModule, AuthModule, SectionsModule, AssessmentModule, QuantitiesModule, LevelsModule, ProjectsModule, ZonesModule, ProductsModule, MembersModule, ImportsModule, RevisionsModule, SiteModule, EventsModule, JobsModule];
 
 @Module({})
 export class AppModule {

@@ -22,6 +22,8 @@ export const accessTable: Record<string, string> = {
   'PUT /api/projects/:projectId/design-basis': 'fire-engineer',
   'PUT /api/projects/:projectId/takeoff-settings': 'specifier',
   'GET /api/projects/:projectId/events': 'team',
+  'GET /api/projects/:projectId/jobs': 'design team',
+  'POST /api/projects/:projectId/jobs/:jobId/retry': 'design team',
   'GET /api/projects/:projectId/building': 'design team',
   'GET /api/projects/:projectId/audit': 'design team',
   'GET /api/projects/:projectId/memberships': 'team',

@@ -84,7 +84,7 @@ describe('assessment', () => {
     });
 
     it('reports no change when nothing changed, and who may ask', async () => {
-      expect((await p.team['structural-engineer'].post(p.url('recalculate')).expect(200)).body).toEqual({ members: 8, changed: 0 });
+      expect((await p.team['structural-engineer'].post(p.url('recalculate')).expect(200)).body).toEqual({ members: 8, changed: 0, queued: false });
       await p.team.contractor.post(p.url('recalculate')).expect(403);
     });
 
@@ -95,7 +95,7 @@ describe('assessment', () => {
       const { body } = await p.team.specifier.get(p.url('readiness')).expect(200);
       expect(body).toMatchObject({ ready: false, current: false });
       expect(titles(body.blockers)).toEqual(['1 result is older than the inputs; recalculate']);
-      expect((await p.team.specifier.post(p.url('recalculate')).expect(200)).body).toEqual({ members: 8, changed: 1 });
+      expect((await p.team.specifier.post(p.url('recalculate')).expect(200)).body).toEqual({ members: 8, changed: 1, queued: false });
       expect(await isCurrent(p)).toBe(true);
     });
 

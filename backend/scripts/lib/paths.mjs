@@ -23,6 +23,7 @@ export const tool = {
 /** What the build leaves behind; the server's own commands. */
 export const built = {
   server: at('backend/dist/main.js'),
+  worker: at('backend/dist/worker/main.js'),
   migrate: at('backend/dist/database/migrate.js'),
   seedDemo: at('backend/dist/database/seed-demo.js'),
   bench: at('backend/dist/bench/bench.js'),

@@ -64,6 +64,10 @@ export async function startApplication(wish) {
   return running;
 }
 
+/** Starts the worker, which does what is too much to do within a request. @returns {ReturnType<typeof startProcess>} */
+export const startWorker = ({ databaseUrl, stateDir, env = process.env }) =>
+  startProcess(process.execPath, [built.worker], { name: 'the worker', env: { ...env, MANTLET_DATABASE_URL: databaseUrl, MANTLET_STATE_DIR: stateDir } });
+
 /** Fails the command when a process that should stay ends. */
 export async function mustStay(running, what) {
   const code = await running.ended;

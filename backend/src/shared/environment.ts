@@ -9,6 +9,8 @@ export const databaseUrl = (): string => required('MANTLET_DATABASE_URL');
 export const sessionSecret = (): string => required('MANTLET_SESSION_SECRET');
 export const port = (): number => Number(process.env['PORT'] ?? 4700);
 export const host = (): string => process.env['HOST'] ?? '127.0.0.1';
+/** how many members a change may touch to be worked out within it; more are left to a worker */
+export const recalculateInPlaceMax = (): number => Number(process.env['MANTLET_RECALCULATE_IN_PLACE_MAX'] ?? 5000);
 /** where the built client lies; unset in tests of the API alone */
 export const clientDir = (): string | undefined => process.env['MANTLET_CLIENT_DIR'];
 /** behind TLS the cookie must be secure */

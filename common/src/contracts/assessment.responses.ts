@@ -52,5 +52,11 @@ export const memberResultDtoSchema = z.object({
 export type MemberResultDto = z.infer<typeof memberResultDtoSchema>;
 
 /** After all members were assessed anew: how many there are, and how many came out differently. */
-export const recalculationDtoSchema = z.object({ members: z.number(), changed: z.number() });
+export const recalculationDtoSchema = z.object({
+  members: z.number(),
+  /** whose result is another than before; 0 where the work is put to the queue */
+  changed: z.number(),
+  /** too many to work out at once: a worker does it */
+  queued: z.boolean(),
+});
 export type RecalculationDto = z.infer<typeof recalculationDtoSchema>;

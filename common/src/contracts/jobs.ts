@@ -22,12 +22,3 @@ export const jobDtoSchema = z.object({
   error: z.string().nullable(),
 });
 export type JobDto = z.infer<typeof jobDtoSchema>;
-
-/** Answer to a request for new results: worked out at once, or put to the queue where there are many. */
-export const recalculatedDtoSchema = z.object({
-  members: z.number().int(),
-  /** members whose result is another than before; 0 where the work is put to the queue */
-  changed: z.number().int(),
-  queued: z.boolean(),
-});
-export type RecalculatedDto = z.infer<typeof recalculatedDtoSchema>;

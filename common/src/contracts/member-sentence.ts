@@ -6,7 +6,7 @@ import type { VerdictKind } from './assessment.js';
 
 /** What the sentence of a member is made of; a stored result has all of it. */
 export interface MemberSentenceInput {
-  /** null: not assessed yet */
+  /** null: being worked out */
   verdict: VerdictKind | null;
   reason: Message | { code: string; params: unknown } | null;
   requiredThickness: number | null;
@@ -26,7 +26,7 @@ const openings = {
  * "Needs 0.62 mm of …" · "May stay bare" · "Outside the assessment: …" · "Not determined: …" · "Under-strength cold: …"
  */
 export function memberSentence(m: MemberSentenceInput): string {
-  if (m.verdict === null) return 'Not determined: not assessed yet';
+  if (m.verdict === null) return 'Not determined: being recalculated';
   if (m.verdict === 'bare') return 'May stay bare';
   if (m.verdict === 'protected') return protectedSentence(m);
   return withOpening(openings[m.verdict], m.reason ? withoutLastStop(sentence(m.reason)) : 'no reason was stored');

@@ -14,6 +14,7 @@ export const projectListItemDtoSchema = z.object({
   revision: z.object({ code: z.string(), state: z.enum(revisionStates) }).nullable(),
   /** null where the reader may see issued work only and nothing is issued */
   members: z.number().nullable(),
+  /** null as well while members are being recalculated */
   protectedAreaM2: z.number().nullable(),
   open: z.number().nullable(),
   /** open items that wait on a role the reader holds, and a revision that waits for their check or issue */
@@ -51,6 +52,8 @@ export type OpenItemDto = z.infer<typeof openItemDtoSchema>;
 export const buildingZoneDtoSchema = z.object({
   id: idSchema, code: z.string(), name: z.string(), periodMin: z.number(), curve: z.enum(fireCurveKinds),
   protectedAreaM2: z.number(), members: z.number(), settled: z.number(), open: z.number(), issuedMembers: z.number(),
+  /** members being recalculated: open until then, and nothing of them is in the area */
+  unassessed: z.number(),
 });
 export type BuildingZoneDto = z.infer<typeof buildingZoneDtoSchema>;
 export const buildingLevelDtoSchema = z.object({
@@ -58,7 +61,7 @@ export const buildingLevelDtoSchema = z.object({
 });
 export type BuildingLevelDto = z.infer<typeof buildingLevelDtoSchema>;
 export const buildingDtoSchema = z.object({
-  members: z.number(), settled: z.number(), open: z.number(),
+  members: z.number(), settled: z.number(), open: z.number(), unassessed: z.number(),
   levels: z.array(buildingLevelDtoSchema),
   openItems: z.array(openItemDtoSchema),
   protection: z.array(z.object({

@@ -118,6 +118,8 @@ export const quantitiesDtoSchema = z.object({
   /** null where the cost is */
   markUp: z.string().nullable(),
   totalWithMarkUp: z.string().nullable(),
+  /** members being recalculated: nothing of them is counted here yet */
+  unassessed: z.number(),
   /** names of the ids that occur */
   names: z.record(z.string(), z.string()),
 });

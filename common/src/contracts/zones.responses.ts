@@ -38,6 +38,8 @@ export const zoneDtoSchema = z.object({
   reference: z.string(), environment: z.enum(environments), targetPolicy: targetPolicySchema, version: z.number(),
   systems: z.array(z.object({ memberType: z.enum(memberTypes), productId: idSchema, productName: z.string(), productKind: z.enum(productKinds) })),
   members: z.number(), settled: z.number(), open: z.number(), protectedAreaM2: z.number(),
+  /** members being recalculated: open until then, and nothing of them is in the area or the targets */
+  unassessed: z.number(),
   targets: z.array(zoneTargetDtoSchema),
 });
 export type ZoneDto = z.infer<typeof zoneDtoSchema>;

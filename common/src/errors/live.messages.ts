@@ -5,4 +5,9 @@ export const liveMessages = {
   'live.too-many': (p: { windows: number }) =>
     `This browser follows changes in ${p.windows} windows already. Close one of them, and this page follows again by itself.`,
   'live.unavailable': (_: Record<string, never>) => 'Changes cannot be followed at the moment. The page tries again by itself.',
+  'job.failed': (p: { done: number; total: number }) =>
+    `${p.done} of ${p.total} members are recalculated; then it failed. Try again, and tell the administrator if it fails again.`,
+  'job.not-failed': (_: Record<string, never>) => 'This has not failed: it is under way or done. Nothing was changed.',
+  'job.recalculating': (p: { members: number }) =>
+    `${p.members === 1 ? '1 member is' : `${p.members} members are`} being recalculated, so this would be incomplete. Try again when it is done.`,
 };

@@ -1,17 +1,19 @@
 import { Injectable } from '@nestjs/common';
-import type { MemberChartsDto, MemberResultDto, SectionOutline, WorkingStepDto } from '@mantlet/common';
+import type { MemberChartsDto, MemberResultDto, RecalculationDto, SectionOutline, WorkingStepDto } from '@mantlet/common';
 import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource } from 'typeorm';
 import type { EntityManager } from 'typeorm';
 import { determineSectionOutline, explainMember } from '../../calc/index.js';
 import type { TakeoffMember } from '../../calc/index.js';
+import { recalculateInPlaceMax } from '../../shared/environment.js';
 import { lockProject } from '../../shared/project-lock.js';
 import { publish, resultsEvent } from '../../shared/project-events.js';
 import { notFound } from '../../shared/refusal.js';
+import { JobsService } from '../jobs/jobs.service.js';
 import { acceptanceHolds, inputHashes, resolveCases, withSteelReason } from './member-case.js';
 import type { InputAcceptance, ProjectInputs } from './project-inputs.service.js';
 import { ProjectInputsService } from './project-inputs.service.js';
-import { storeOutcomes, storeZones, storedOutcomes } from './result-store.js';
+import { storeOutcomes, storeZones, storedOutcomes, unassessed, withdrawResults } from './result-store.js';
 import { assessInputs, takeoffMember, zoneHash } from './zone-outcome.js';
 
 /** What the sheet of one member shows beside its stored result. */
@@ -40,14 +42,28 @@ export class AssessmentService {
   constructor(
     @InjectDataSource() private readonly dataSource: DataSource,
     private readonly inputs: ProjectInputsService,
+    private readonly jobs: JobsService,
   ) {}
 
   /**
-   * Assesses anew the members of these zones (all zones where null) and their zone targets, in the caller's transaction.
-   * Call it after every change to anything that enters a result. `changed` counts members whose result is another than before.
+   * Call it after every change to anything that enters a result: these zones (all where null) are assessed anew in the caller's
+   * transaction. Where that would take long, their results are taken away instead, so that no old one is ever shown, and a worker
+   * makes the new ones. `changed` counts members whose result is another than before.
    */
-  async recompute(manager: EntityManager, projectId: string, zoneIds: string[] | null): Promise<{ members: number; changed: number }> {
+  async recompute(manager: EntityManager, projectId: string, zoneIds: string[] | null): Promise<RecalculationDto> {
     await lockProject(manager, projectId);
+    const [touched] = await manager.query<{ n: number }[]>(
+      'SELECT count(*)::int AS n FROM members WHERE project_id = $1 AND ($2::uuid[] IS NULL OR zone_id = ANY($2))', [projectId, zoneIds]);
+    const members = touched?.n ?? 0;
+    if (members <= recalculateInPlaceMax()) return { ...(await this.assess(manager, projectId, zoneIds)), queued: false };
+    const waiting = await withdrawResults(manager, projectId, zoneIds);
+    await this.jobs.enqueue(manager, projectId, 'recalculation', waiting);
+    await publish(manager, [resultsEvent(projectId)]);
+    return { members, changed: 0, queued: true };
+  }
+
+  /** At once, however many there are. */
+  async assess(manager: EntityManager, projectId: string, zoneIds: string[] | null): Promise<{ members: number; changed: number }> {
     const inputs = await this.inputs.load(manager, projectId, zoneIds);
     const outcome = assessInputs(inputs);
     const changed = await storeOutcomes(manager, inputs.zones.map((zone) => zone.id), outcome.members);
@@ -56,7 +72,7 @@ export class AssessmentService {
     return { members: outcome.members.length, changed };
   }
 
-  recalculate(projectId: string): Promise<{ members: number; changed: number }> {
+  recalculate(projectId: string): Promise<RecalculationDto> {
     return this.dataSource.transaction((manager) => this.recompute(manager, projectId, null));
   }
 
@@ -83,6 +99,11 @@ export class AssessmentService {
         appliedThickness: applies ? stored.appliedThickness : null, layers: applies ? stored.layers : result.layers,
       },
     };
+  }
+
+  /** Members without a result: a worker is at them, and every total is incomplete. */
+  unassessed(manager: EntityManager, projectId: string): Promise<number> {
+    return unassessed(manager, projectId);
   }
 
   /** Stored results by member. */

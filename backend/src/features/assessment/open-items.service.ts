@@ -4,6 +4,8 @@ import type { OpenItemDto, Role } from '@mantlet/common';
 import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource } from 'typeorm';
 import type { EntityManager } from 'typeorm';
+import type { Job } from '../jobs/job.entity.js';
+import { JobsService } from '../jobs/jobs.service.js';
 import type { StaleResults } from './assessment.service.js';
 import { AssessmentService } from './assessment.service.js';
 import { acceptanceHolds } from './member-case.js';
@@ -22,6 +24,7 @@ export class OpenItemsService {
     @InjectDataSource() private readonly dataSource: DataSource,
     private readonly inputs: ProjectInputsService,
     private readonly assessment: AssessmentService,
+    private readonly jobs: JobsService,
   ) {}
 
   /** Blockers first, in the order of who must act; at most 500 member ids an item, `count` says how many there are. */
@@ -36,7 +39,7 @@ export class OpenItemsService {
     const { designBasis } = inputs.project.settings;
     return inOrder([
       ...withoutMembers(inputs),
-      ...staleItem(await this.assessment.stale(manager, inputs)),
+      ...staleItem(await this.assessment.stale(manager, inputs), await this.jobs.unfinished(manager, inputs.project.id, 'recalculation')),
       ...itemsOfMembers(membersOf(inputs, stored), designBasis.secondSignatureAboveC),
       ...expiredProducts(inputs, stored),
       ...foreignEnvironments(inputs, stored),
@@ -57,11 +60,12 @@ function withoutMembers(inputs: ProjectInputs): OpenItemDto[] {
   return [{ ...blank, role: 'specifier', kind: 'blocker', code: 'no-members', title: 'There are no members yet; type them in or import a schedule', page: 'members' }];
 }
 
-function staleItem({ memberIds, zoneIds }: StaleResults): OpenItemDto[] {
+function staleItem({ memberIds, zoneIds }: StaleResults, job: Job | null): OpenItemDto[] {
   if (memberIds.length + zoneIds.length === 0) return [];
   const what = memberIds.length > 0 ? `${formatNumber(memberIds.length)} ${memberIds.length === 1 ? 'result is' : 'results are'}` : 'Targets of zones are';
+  const title = job && job.state !== 'failed' ? `${what} being recalculated; wait until this is done` : `${what} older than the inputs; recalculate`;
   return [{
-    ...blank, role: 'specifier', kind: 'blocker', code: 'stale', title: `${what} older than the inputs; recalculate`, page: 'schedule',
+    ...blank, role: 'specifier', kind: 'blocker', code: 'stale', title, page: 'schedule',
     memberIds: memberIds.slice(0, LISTED_MEMBERS), count: memberIds.length,
   }];
 }

@@ -68,3 +68,21 @@ export async function storeZones(manager: EntityManager, zones: readonly ZoneOut
        settled = excluded.settled, open = excluded.open, protected_area_m2 = excluded.protected_area_m2, targets = excluded.targets`,
     [JSON.stringify(zones)]);
 }
+
+/**
+ * Takes the results of these zones (all where null) away: they would be older than their inputs.
+ * @returns how many members of the project are without a result now
+ */
+export async function withdrawResults(manager: EntityManager, projectId: string, zoneIds: string[] | null): Promise<number> {
+  const ofZones = 'SELECT id FROM zones WHERE project_id = $1 AND ($2::uuid[] IS NULL OR id = ANY($2))';
+  await manager.query(`DELETE FROM member_results r USING members m WHERE m.id = r.member_id AND m.zone_id IN (${ofZones})`, [projectId, zoneIds]);
+  await manager.query(`DELETE FROM zone_results WHERE zone_id IN (${ofZones})`, [projectId, zoneIds]);
+  return unassessed(manager, projectId);
+}
+
+/** Members of a project that have no result: a worker is at them, or will be. */
+export async function unassessed(manager: EntityManager, projectId: string): Promise<number> {
+  const [row] = await manager.query<{ n: number }[]>(
+    'SELECT count(*)::int AS n FROM members m LEFT JOIN member_results r ON r.member_id = m.id WHERE m.project_id = $1 AND r.member_id IS NULL', [projectId]);
+  return row?.n ?? 0;
+}

@@ -2,7 +2,7 @@ import type { MemberType, Role, VerdictKind } from '@mantlet/common';
 import type { EntityManager } from 'typeorm';
 import { blockerOf } from './open-items.js';
 
-interface Group { projectId: string; zoneId: string; memberType: MemberType; verdict: VerdictKind | null; code: string | null; assumed: boolean }
+interface Group { projectId: string; inWork: boolean; zoneId: string; memberType: MemberType; verdict: VerdictKind | null; code: string | null; assumed: boolean }
 
 /**
  * How many blockers wait for each role, from the stored results alone, for a list of many projects: one item a finding and zone, as
@@ -11,7 +11,7 @@ interface Group { projectId: string; zoneId: string; memberType: MemberType; ver
 export async function waitingCounts(manager: EntityManager, projectIds: readonly string[]): Promise<Map<string, Map<Role, number>>> {
   const groups = await manager.query<Group[]>(
     `SELECT DISTINCT m.project_id AS "projectId", m.zone_id AS "zoneId", m.member_type AS "memberType", r.verdict, r.reason->>'code' AS code,
-            coalesce(r.assumed, false) AS assumed
+            coalesce(r.assumed, false) AS assumed, EXISTS (SELECT 1 FROM jobs j WHERE j.project_id = m.project_id AND j.state IN ('waiting', 'running')) AS "inWork"
        FROM members m LEFT JOIN member_results r ON r.member_id = m.id WHERE m.project_id = ANY($1)`, [projectIds]);
   const expired = await expiredProducts(manager, projectIds);
   return new Map(projectIds.map((id) => {
@@ -24,9 +24,10 @@ export async function waitingCounts(manager: EntityManager, projectIds: readonly
 function findings(groups: readonly Group[]): [string, Role][] {
   if (groups.length === 0) return [['no-members', 'specifier']];
   const found = new Map<string, Role>();
-  for (const { zoneId, memberType, verdict, code, assumed } of groups) {
+  for (const { zoneId, memberType, verdict, code, assumed, inWork } of groups) {
     const blocker = verdict && blockerOf({ memberType, verdict, assumed, reason: code === null ? null : { code } });
-    if (verdict === null) found.set('stale', 'specifier');
+    // what a worker is at waits for nobody
+    if (verdict === null && !inWork) found.set('stale', 'specifier');
     else if (blocker) found.set(`${blocker.code}|${zoneId}`, blocker.role);
   }
   return [...found];

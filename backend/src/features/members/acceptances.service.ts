@@ -5,7 +5,7 @@ import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource, In } from 'typeorm';
 import type { EntityManager } from 'typeorm';
 import type { ProjectScope } from '../../shared/access.js';
-import { unprocessable } from '../../shared/refusal.js';
+import { conflict, unprocessable } from '../../shared/refusal.js';
 import { MemberResult } from '../assessment/member-result.entity.js';
 import { AuditService } from '../audit/audit.service.js';
 import { Project } from '../projects/project.entity.js';
@@ -68,6 +68,8 @@ export class AcceptancesService {
   private async withOccasion(
     manager: EntityManager, projectId: string, kind: Kind, members: readonly Member[], results: ReadonlyMap<string, MemberResult>, someWill: boolean,
   ): Promise<Member[]> {
+    const unassessed = members.length - results.size;
+    if (unassessed > 0) throw conflict(message('job.recalculating', { members: unassessed }));
     const project = await manager.findOneByOrFail(Project, { id: projectId });
     const aboveC = project.settings.designBasis.secondSignatureAboveC;
     const having = members.filter((member) => hasOccasion(kind, member, results.get(member.id), aboveC));

@@ -38,7 +38,7 @@ export class MemberSheetService {
     const { id, code, name, periodMin, curve, level } = zone;
     return {
       member, section: toSectionDto(section), zone: { id, code, name, periodMin, curve: curve.kind }, level: { id: level.id, code: level.code, name: level.name },
-      productName: product?.name ?? null, result, sentence: sentenceOf(result, product?.name ?? null), areaM2: stored?.areaM2 ?? null,
+      productName: product?.name ?? null, result, sentence: sentenceOf(stored && result, product?.name ?? null), areaM2: stored?.areaM2 ?? null,
       outline, working, charts, history: history.items,
       ...(await this.neighbours(projectId, member.mark)),
     };

@@ -25,12 +25,18 @@ export class BuildingService {
       id, code, name, elevationM, heightM,
       zones: zones.filter((zone) => zone.levelId === id).map((zone) => toBuildingZone(zone, issued.get(zone.id) ?? 0)),
     }));
-    const { members, settled, open } = sumTallies(zones);
-    return { members, settled, open, levels, openItems: await this.openItems.openItems(projectId), protection: await this.protection(projectId, members) };
+    const { members, settled, open, unassessed } = sumTallies(zones);
+    return {
+      members, settled, open, unassessed, levels, openItems: await this.openItems.openItems(projectId),
+      protection: await this.protection(projectId, members, unassessed),
+    };
   }
 
-  /** Products first, then what may stay bare, then what has no answer yet; the members of all lines add up to the schedule's. */
-  private async protection(projectId: string, members: number): Promise<BuildingDto['protection']> {
+  /**
+   * Products first, then what may stay bare, then what has no answer yet; the members of all lines add up to the schedule's.
+   * While members are being recalculated, how much there is of a product is not known.
+   */
+  private async protection(projectId: string, members: number, unassessed: number): Promise<BuildingDto['protection']> {
     const products = await this.quantities.totalsByProduct(projectId);
     const [row]: { bare: string; protected: string }[] = await this.dataSource.manager.query(
       `SELECT count(*) FILTER (WHERE r.verdict = 'bare') AS bare, count(*) FILTER (WHERE r.verdict = 'protected') AS protected
@@ -38,10 +44,11 @@ export class BuildingService {
       [projectId],
     );
     const bare = Number(row?.bare ?? 0);
-    const unanswered = members - bare - Number(row?.protected ?? 0);
+    const unanswered = members - bare - Number(row?.protected ?? 0) - unassessed;
     return [
-      ...products.map(({ productName, kind, members: count, areaM2, net }) => ({ label: productName, kind, members: count, areaM2, net })),
+      ...products.map(({ productName, kind, members: count, areaM2, net }) => ({ label: productName, kind, members: count, ...(unassessed ? { areaM2: null, net: null } : { areaM2, net }) })),
       ...(bare ? [{ label: 'May stay bare', kind: 'bare' as const, members: bare, areaM2: null, net: null }] : []),
+      ...(unassessed ? [{ label: 'Being recalculated', kind: 'open' as const, members: unassessed, areaM2: null, net: null }] : []),
       ...(unanswered ? [{ label: 'No answer yet', kind: 'open' as const, members: unanswered, areaM2: null, net: null }] : []),
     ];
   }
@@ -59,6 +66,6 @@ export class BuildingService {
 }
 
 function toBuildingZone(zone: ZoneDto, issuedMembers: number): BuildingZoneDto {
-  const { id, code, name, periodMin, curve, protectedAreaM2, members, settled, open } = zone;
-  return { id, code, name, periodMin, curve: curve.kind, protectedAreaM2, members, settled, open, issuedMembers };
+  const { id, code, name, periodMin, curve, protectedAreaM2, members, settled, open, unassessed } = zone;
+  return { id, code, name, periodMin, curve: curve.kind, protectedAreaM2, members, settled, open, unassessed, issuedMembers };
 }

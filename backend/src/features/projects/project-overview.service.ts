@@ -49,7 +49,7 @@ export class ProjectOverviewService {
         }
         const tally = tallies.get(project.id) ?? emptyTally;
         return {
-          ...head, revision: shown(open ?? issued), members: tally.members, protectedAreaM2: tally.protectedAreaM2, open: tally.open,
+          ...head, revision: shown(open ?? issued), members: tally.members, protectedAreaM2: tally.unassessed > 0 ? null : tally.protectedAreaM2, open: tally.open,
           waitsOnMe: waitsOn(roles, waiting.get(project.id)) + signatureOf(actor, roles, open),
         };
       });

@@ -1,4 +1,4 @@
-import { Controller, Get, Header, Query, StreamableFile } from '@nestjs/common';
+import { Controller, Get, Query, StreamableFile } from '@nestjs/common';
 import { quantitiesDtoSchema, quantityQuerySchema } from '@mantlet/common';
 import type { QuantitiesDto, QuantityQuery } from '@mantlet/common';
 import { DesignTeam, Scope } from '../../shared/access.js';
@@ -21,10 +21,9 @@ export class QuantitiesController {
   @Get('quantities/lines.csv')
   @DesignTeam()
   @ReturnsFile('text/csv', 'The printed lines as CSV.')
-  @Header('Content-Type', 'text/csv; charset=utf-8')
-  @Header('Content-Disposition', 'attachment; filename="quantities.csv"')
-  linesCsv(@Scope() scope: ProjectScope): Promise<string> {
-    return this.quantities.linesCsv(scope.projectId);
+  async linesCsv(@Scope() scope: ProjectScope): Promise<StreamableFile> {
+    const content = Buffer.from(await this.quantities.linesCsv(scope.projectId));
+    return new StreamableFile(content, { type: 'text/csv; charset=utf-8', disposition: 'attachment; filename="quantities.csv"', length: content.length });
   }
 
   @Get('quantities.xlsx')

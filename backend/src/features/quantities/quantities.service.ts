@@ -1,5 +1,5 @@
 import { Injectable } from '@nestjs/common';
-import { Decimal, formatDecimal, formatNumber, sumDecimals } from '@mantlet/common';
+import { Decimal, formatDecimal, formatNumber, message, sumDecimals } from '@mantlet/common';
 import type { ProductKind, PurchaseDto, QuantitiesDto, QuantityLineDto, QuantityQuery, SnapshotQuantities } from '@mantlet/common';
 import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource } from 'typeorm';
@@ -8,6 +8,7 @@ import { defaultKerfMm, splitQuantities, takeoff, withMarkUp } from '../../calc/
 import type { Takeoff, TakeoffMember } from '../../calc/index.js';
 import type { ProjectInputs } from '../assessment/project-inputs.service.js';
 import { ProjectInputsService } from '../assessment/project-inputs.service.js';
+import { conflict } from '../../shared/refusal.js';
 import { AssessmentService } from '../assessment/assessment.service.js';
 import { csvOf, linesTable } from './quantity-table.js';
 import { workbookOf } from './quantity-workbook.js';
@@ -44,7 +45,10 @@ export class QuantitiesService {
     const split = splitQuantities(lines, query.rows, query.columns);
     const { markUpPercent } = inputs.project.settings;
     const priced = withMarkUp(split.total.cost, markUpPercent, MONEY_PLACES);
-    return { currency: inputs.project.currency, lines, split, purchases, markUpPercent, markUp: priced.markUp, totalWithMarkUp: priced.total, names: namesOf(inputs) };
+    return {
+      currency: inputs.project.currency, lines, split, purchases, markUpPercent, markUp: priced.markUp, totalWithMarkUp: priced.total,
+      unassessed: await this.assessment.unassessed(manager, projectId), names: namesOf(inputs),
+    };
   }
 
   /** As a snapshot freezes them: by level and product, bought once for the project. */
@@ -73,6 +77,7 @@ export class QuantitiesService {
 
   async linesCsv(projectId: string): Promise<string> {
     const { manager } = this.dataSource;
+    requireComplete(await this.assessment.unassessed(manager, projectId));
     const inputs = await this.inputs.load(manager, projectId, null);
     const { lines } = await this.takeoffOf(manager, inputs, 'project');
     return csvOf(linesTable(lines, namesOf(inputs), inputs.project.currency));
@@ -80,12 +85,18 @@ export class QuantitiesService {
 
   async workbook(projectId: string, query: QuantityQuery): Promise<{ name: string; content: Buffer }> {
     const quantities = await this.split(projectId, query);
+    requireComplete(quantities.unassessed);
     return { name: 'quantities.xlsx', content: await workbookOf(quantities, query) };
   }
 
   private async takeoffOf(manager: EntityManager, inputs: ProjectInputs, delivery: QuantityQuery['delivery']): Promise<Takeoff> {
     return takeoffBy(await this.assessment.takeoffMembers(manager, inputs), inputs, delivery);
   }
+}
+
+/** A file goes its own way; what is incomplete must not. */
+function requireComplete(members: number): void {
+  if (members > 0) throw conflict(message('job.recalculating', { members }));
 }
 
 function takeoffBy(members: readonly TakeoffMember[], inputs: ProjectInputs, delivery: QuantityQuery['delivery']): Takeoff {

@@ -25,13 +25,13 @@ export async function loadZoneDtos(manager: EntityManager, projectId: string, zo
     .map((zone) => toZoneDto(zone, tallies.get(zone.id) ?? emptyTally, targets.get(zone.id) ?? []));
 }
 
-function toZoneDto(zone: Zone, { members, settled, open, protectedAreaM2 }: Tally, targets: ZoneDto['targets']): ZoneDto {
+function toZoneDto(zone: Zone, { members, settled, open, protectedAreaM2, unassessed }: Tally, targets: ZoneDto['targets']): ZoneDto {
   const { id, levelId, code, name, periodMin, curve, reference, targetPolicy, version } = zone;
   return {
     id, levelId, code, name, periodMin, curve, reference, environment: zone.environment as ZoneDto['environment'], targetPolicy, version,
     systems: [...zone.systems]
       .sort((a, b) => memberTypes.indexOf(a.memberType) - memberTypes.indexOf(b.memberType))
       .map(({ memberType, productId, product }) => ({ memberType, productId, productName: product.name, productKind: product.kind })),
-    members, settled, open, protectedAreaM2, targets,
+    members, settled, open, protectedAreaM2, unassessed, targets,
   };
 }
