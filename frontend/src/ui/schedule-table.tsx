@@ -4,6 +4,7 @@ import type { ColumnType } from 'antd/es/table';
 import type { ReactNode } from 'react';
 import type { TermName } from '../lib/terms.js';
 import { Term } from './term.js';
+import { usePrinting } from './use-printing.js';
 
 export interface ScheduleColumn<T> extends ColumnType<T> {
   /** right-aligned, tabular figures */
@@ -42,19 +43,22 @@ function withSchedule<T>(column: ScheduleColumn<T>): ColumnType<T> {
 
 /** antd's table set like a drawing schedule: hairlines, small head, sticky below the title strip, folding on a phone. */
 export function ScheduleTable<T extends object>({ caption, columns, rows, rowKey, fold = true, empty, minWidth, onRow, className, ...rest }: ScheduleTableProps<T>) {
+  // a head that stands still while the page scrolls is a table of its own; on paper it heads every sheet
+  const printing = usePrinting();
   return (
     <div className={`mt-schedule ${fold ? 'mt-schedule-fold' : ''} ${className ?? ''}`} role="group" aria-label={caption}>
       <Table<T>
         size="small"
         pagination={false}
-        sticky={rest.virtual || rest.scroll?.y ? false : { offsetHeader: 54 }}
-        {...(minWidth ? { scroll: { x: minWidth } } : {})}
+        sticky={printing || rest.virtual || rest.scroll?.y ? false : { offsetHeader: 54 }}
+        {...(minWidth && !printing ? { scroll: { x: minWidth } } : {})}
         columns={columns.map(withSchedule)}
         dataSource={rows as T[]}
         rowKey={rowKey}
         {...(empty ? { locale: { emptyText: empty } } : {})}
         onRow={(row, index) => ({ role: 'row', ...onRow?.(row, index) })}
         {...rest}
+        {...(printing ? { sticky: false } : {})}
       />
     </div>
   );

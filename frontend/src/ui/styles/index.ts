@@ -4,3 +4,4 @@ import './shell.css';
 import './page.css';
 import './table.css';
 import './drawing.css';
+import './print.css';
