@@ -20,7 +20,7 @@ export const roleSteps: Record<Role, readonly RoleStep[]> = {
   ],
   'structural-engineer': [
     { text: 'Filter the members to those that have no actions, or import them with the member schedule.', page: 'members', pageName: 'Members' },
-    { text: 'Give each member its actions, utilisation or declared temperature, with the calculation it comes from. Several at once, where they are alike.', page: 'members', pageName: 'Members' },
+    { text: 'Give each member its actions, utilisation or declared temperature, with the calculation it comes from.', page: 'members', pageName: 'Members' },
     { text: 'Settle what waits on you: members not determined, and those that fail cold.', page: '', pageName: 'Building' },
   ],
   'specifier': [
