@@ -1,4 +1,4 @@
-import { defaultDesignBasis, productSupplySchema, thermalPropertiesSchema } from '@mantlet/common';
+import { defaultDesignBasis, memberDesignSchema, productSupplySchema, thermalPropertiesSchema } from '@mantlet/common';
 import type { CriticalTemperatureBasis, Evidence, MemberType, ProductKind, RegressionFit, SectionShape, ThicknessTable } from '@mantlet/common';
 import { sectionProperties } from '../calc/index.js';
 import type { MemberCase } from '../calc/index.js';
@@ -80,15 +80,13 @@ function basisOf(random: () => number, memberType: MemberType, areaMm2: number, 
   const effect = {
     axialKn: column ? (share * areaMm2 * yieldMPa * 0.6) / 1000 : 0,
     momentYKnm: column ? 0 : (share * plasticMm3 * yieldMPa) / 1e6,
+    momentZKnm: 0,
     shearZKn: 0,
   };
   const bucklingLength = column ? 2500 + 2000 * random() : null;
   return {
     way: 'calculated', reference: 'generated',
-    design: {
-      actions: { given: 'fire-effect', effect }, bucklingLengthYMm: bucklingLength, bucklingLengthZMm: bucklingLength,
-      bucklingRule: 'given', lateralRestraint: 'continuous', continuousBeam: false, composite: false, webOpenings: false,
-    },
+    design: memberDesignSchema.parse({ actions: { given: 'fire-effect', effect }, bucklingLengthYMm: bucklingLength, bucklingLengthZMm: bucklingLength }),
   };
 }
 

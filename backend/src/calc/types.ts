@@ -40,12 +40,13 @@ export interface CriticalTemperatureCase {
 }
 
 export interface LimitStateResult {
-  name: 'tension' | 'compression' | 'bending' | 'shear';
+  name: 'tension' | 'compression' | 'bending' | 'shear' | 'lateral-torsional buckling' | 'axial force with bending' | 'cross-section';
   /** EN 1993-1-2 clause */
   clause: string;
   effect: number;
   resistanceCold: number;
-  unit: 'kN' | 'kNm';
+  /** none where effects act together: the effect is then 1, the resistance how many times they are carried */
+  unit: 'kN' | 'kNm' | '';
   /** E_fi,d / R_fi,d at 20 °C */
   utilisation: number;
   temperatureC: number;

@@ -14,12 +14,57 @@ const force = numberSchema.min(-1e6).max(1e6);
 export const effectsSchema = z.object({
   axialKn: force.default(0),
   momentYKnm: force.default(0),
+  /** about the weak axis */
+  momentZKnm: force.default(0),
   shearZKn: force.default(0),
 });
 export type Effects = z.infer<typeof effectsSchema>;
 export const variableEffectsSchema = effectsSchema.extend({ category: z.enum(actionCategories) });
 
-/** Either the characteristic actions, combined by EN 1990 6.4.3.3 with the project's ψ, or the fire effect itself. */
+/** A beam described by its supports and loads; the moment diagram is worked out from it. A cantilever is built in at x = 0. */
+export const beamSupports = ['simple', 'propped', 'fixed', 'cantilever'] as const;
+export type BeamSupport = (typeof beamSupports)[number];
+export const beamSupportNames: Record<BeamSupport, string> = {
+  simple: 'Simply supported', propped: 'Built in at the left, simply supported at the right', fixed: 'Built in at both ends', cantilever: 'Cantilever, built in at the left',
+};
+const place = nonNegativeSchema.max(100_000, 'is more than 100 m');
+const loadAction = z.enum(['permanent', ...actionCategories]);
+/** Characteristic loads, downward positive, at places measured from the left support. */
+export const beamLoadSchema = z.discriminatedUnion('kind', [
+  z.object({ kind: z.literal('point'), action: loadAction, atMm: place, forceKn: force }),
+  z.object({ kind: z.literal('distributed'), action: loadAction, fromMm: place, toMm: place, startKnPerM: force, endKnPerM: force }),
+]);
+export type BeamLoadInput = z.infer<typeof beamLoadSchema>;
+
+export const describedBeamSchema = z.object({
+  given: z.literal('loads'),
+  supports: z.enum(beamSupports),
+  spanMm: positiveSchema.min(100, 'is less than 100 mm; spans are in mm').max(100_000, 'is more than 100 m'),
+  loads: z.array(beamLoadSchema).min(1, 'name at least one load').max(50, 'more than 50 loads'),
+  /** between the supports, which hold the beam sideways and against twist themselves; a cantilever's tip only where named here */
+  lateralSupportsMm: z.array(place).max(50, 'more than 50 lateral supports').default([]),
+  /** axial force in fire beside the loads, already combined; compression positive */
+  axialInFireKn: force.default(0),
+}).superRefine((beam, context) => {
+  const outside = (path: (string | number)[], value: number) => {
+    if (value > beam.spanMm) context.addIssue({ code: 'custom', path, message: `is beyond the span of ${beam.spanMm} mm` });
+  };
+  beam.loads.forEach((load, i) => {
+    if (load.kind === 'point') return outside(['loads', i, 'atMm'], load.atMm);
+    outside(['loads', i, 'toMm'], load.toMm);
+    if (load.toMm <= load.fromMm) context.addIssue({ code: 'custom', path: ['loads', i, 'toMm'], message: 'must lie beyond where the load begins' });
+  });
+  beam.lateralSupportsMm.forEach((at, i) => outside(['lateralSupportsMm', i], at));
+  const categories = new Set(beam.loads.map((load) => load.action));
+  categories.delete('permanent');
+  if (categories.size > 4) context.addIssue({ code: 'custom', path: ['loads'], message: 'at most four categories of variable action on one beam' });
+});
+export type DescribedBeam = z.infer<typeof describedBeamSchema>;
+
+/**
+ * The characteristic effects, combined by EN 1990 6.4.3.3 with the project's ψ; the fire effect itself; or the beam with its loads,
+ * from which moments and shears are worked out.
+ */
 export const actionsSchema = z.discriminatedUnion('given', [
   z.object({
     given: z.literal('characteristic'),
@@ -28,8 +73,24 @@ export const actionsSchema = z.discriminatedUnion('given', [
     accompanying: z.array(variableEffectsSchema).max(10).default([]),
   }),
   z.object({ given: z.literal('fire-effect'), effect: effectsSchema }),
+  describedBeamSchema,
 ]);
 export type Actions = z.infer<typeof actionsSchema>;
+
+/** The shape of the moment diagram between restraints, where only effects are given. Ratio: the smaller end moment over the greater, negative in double curvature. */
+export const momentShapeSchema = z.discriminatedUnion('kind', [
+  z.object({ kind: z.literal('end-moments'), ratio: numberSchema.min(-1).max(1) }),
+  z.object({ kind: z.literal('distributed') }),
+  z.object({ kind: z.literal('point') }),
+]);
+export type MomentShape = z.infer<typeof momentShapeSchema>;
+export const momentShapeNames: Record<MomentShape['kind'], string> = {
+  'end-moments': 'By end moments', distributed: 'Distributed load', point: 'Force at mid-span',
+};
+/** where loads take hold: above the shear centre they help the beam to buckle */
+export const loadHeights = ['top-flange', 'shear-centre', 'bottom-flange'] as const;
+export type LoadHeight = (typeof loadHeights)[number];
+export const loadHeightNames: Record<LoadHeight, string> = { 'top-flange': 'Top flange', 'shear-centre': 'Shear centre', 'bottom-flange': 'Bottom flange' };
 
 /** Braced-storey buckling lengths of EN 1993-1-2 4.2.3.2(5) count only when the engineer confirms that they apply. */
 export const bucklingRules = ['given', 'braced-intermediate', 'braced-top'] as const;
@@ -40,6 +101,13 @@ export const memberDesignSchema = z.object({
   bucklingLengthZMm: positiveSchema.max(100_000).nullable().default(null),
   bucklingRule: z.enum(bucklingRules).default('given'),
   lateralRestraint: z.enum(['continuous', 'at-points']).default('continuous'),
+  /** distance between the points that hold the compression flange, where the loads are not described, in mm */
+  lateralSpacingMm: positiveSchema.max(100_000).nullable().default(null),
+  /** uniform unless said otherwise, which is the safe side */
+  momentShapeY: momentShapeSchema.default({ kind: 'end-moments', ratio: 1 }),
+  momentShapeZ: momentShapeSchema.default({ kind: 'end-moments', ratio: 1 }),
+  /** the top flange unless said otherwise, which is the safe side */
+  loadHeight: z.enum(loadHeights).default('top-flange'),
   /** over the supports of a statically indeterminate beam: κ2 = 0.85 */
   continuousBeam: z.boolean().default(false),
   /** net area at holes is not needed in fire where filled with bolts (4.2.3.1(2)); acts as a reminder only */

@@ -21,8 +21,8 @@ export type MemberDto = z.infer<typeof memberDtoSchema>;
 const points = z.array(z.tuple([z.number(), z.number()]));
 export interface ChartSeries { name: string; points: z.infer<typeof points> }
 export const memberChartsDtoSchema = z.object({
-  /** resistance against steel temperature, one series a limit state; effect in the same unit */
-  resistance: z.array(z.object({ limitState: z.string(), unit: z.enum(['kN', 'kNm']), effect: z.number(), points })),
+  /** resistance against steel temperature, one series a limit state; effect in the same unit. Without unit: how many times the effects are carried, of an interaction */
+  resistance: z.array(z.object({ limitState: z.string(), unit: z.enum(['kN', 'kNm', '']), effect: z.number(), points })),
   /** the degree of utilisation against steel temperature, by the relation the temperature was read from; null where it came about otherwise */
   utilisation: z.object({ value: z.number(), points }).nullable(),
   /** °C against minutes */

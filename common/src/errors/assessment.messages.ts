@@ -15,9 +15,11 @@ export const assessmentMessages = {
   'assessment.no-actions': (_: Record<string, never>) => 'Not determined: no actions given.',
   'assessment.no-buckling-length': (p: { axis: 'y' | 'z' }) => `Not determined: no buckling length about ${p.axis}.`,
   'assessment.lateral-torsional': (_: Record<string, never>) =>
-    'Not determined: a beam held laterally at points only needs a check of lateral-torsional buckling, which is not calculated here. Give its utilisation in fire, marked as able to buckle, or declare its temperature.',
-  'assessment.axial-with-bending': (_: Record<string, never>) =>
-    'Not determined: axial force together with bending is not calculated here. Give the utilisation in fire (of a beam: marked as able to buckle) or declare the temperature; set a negligible force to exactly 0.',
+    'Not determined: lateral-torsional buckling is calculated here for I, rectangular hollow and box sections with equal flanges. Give the utilisation in fire, marked as able to buckle, or declare the temperature.',
+  'assessment.no-lateral-spacing': (_: Record<string, never>) =>
+    'Not determined: the distance between the points that hold the compression flange is missing. Give it, or describe the beam with its loads and lateral supports.',
+  'assessment.cantilever-tip': (_: Record<string, never>) =>
+    'Not determined: a cantilever held sideways along its length but free at its tip is not calculated here. Hold the tip too, or leave the supports along it out.',
   'assessment.composite': (_: Record<string, never>) =>
     'Not determined: a composite member is not calculated here. Give its utilisation or declare its temperature.',
   'assessment.web-openings': (_: Record<string, never>) =>
@@ -30,6 +32,8 @@ export const assessmentMessages = {
     `Not determined: the web's h/t of ${p.slenderness.toFixed(1)} is above ${p.limit.toFixed(1)}, so that it may buckle in shear, which is not calculated here. Give its utilisation in fire, marked as able to buckle, or declare its temperature.`,
   'assessment.under-strength': (p: { state: string; effect: number; resistance: number; unit: string; utilisation: number }) =>
     `Under-strength cold: the effect in fire, ${p.effect.toFixed(1)} ${p.unit}, is above the ${p.state} resistance at 20 °C, ${p.resistance.toFixed(1)} ${p.unit} (utilisation ${p.utilisation.toFixed(2)}).`,
+  'assessment.under-strength-together': (p: { state: string; utilisation: number }) =>
+    `Under-strength cold: axial force and bending in fire together use ${p.utilisation.toFixed(2)} of what the member carries at 20 °C (${p.state}).`,
   'assessment.under-strength-utilisation': (p: { utilisation: number }) =>
     `Under-strength cold: the utilisation given, ${p.utilisation.toFixed(2)}, is above 1.`,
   'assessment.braced-rule-for-columns': (_: Record<string, never>) =>

@@ -25,9 +25,9 @@ export interface LimitState {
   explainAt: (temperatureC: number, working: WorkingStep[]) => void;
 }
 
-type Material = { fy: number; gamma: number };
+export type Material = { fy: number; gamma: number };
 
-function tableStep(symbol: string, temperatureC: number, value: number): WorkingStep {
+export function tableStep(symbol: string, temperatureC: number, value: number): WorkingStep {
   return {
     what: symbol === 'k_y,θ' ? 'Reduction of the yield strength' : 'Reduction of the modulus of elasticity',
     equation: `${symbol} by Table 3.1, linear between rows`,
@@ -47,7 +47,7 @@ export function tension(c: CriticalTemperatureCase, effect: number, { fy, gamma 
 }
 
 /** Root of χ·k_y = share: the row of Table 3.1 by bisection, then the temperature within it by false position (Illinois). */
-function bucklingTemperature(share: number, slenderness: number, imperfection: number): number {
+export function bucklingTemperature(share: number, slenderness: number, imperfection: number): number {
   const excess = (temperatureC: number) => bucklingShare(temperatureC, slenderness, imperfection) - share;
   let low = 0;
   let high = table31Rows.length - 1;
@@ -80,9 +80,14 @@ function bucklingTemperature(share: number, slenderness: number, imperfection: n
   return a;
 }
 
+export interface CompressionState extends LimitState {
+  slendernessY: number;
+  slendernessZ: number;
+}
+
 export function compression(
   c: CriticalTemperatureCase, rule: MemberDesign['bucklingRule'], systemLengthMm: { y: number; z: number }, effect: number, { fy, gamma }: Material, working: WorkingStep[] | null,
-): LimitState {
+): CompressionState {
   const { areaMm2, iyMm4, izMm4 } = c.properties;
   const factor = bracedLengthFactor[rule];
   const about = (axis: 'y' | 'z') => {
@@ -102,7 +107,7 @@ export function compression(
   const slenderness = Math.max(y, z);
   const imperfection = 0.65 * Math.sqrt(235 / fy);
   return {
-    name: 'compression', clause: `4.2.3.2, about ${z >= y ? 'z' : 'y'}`, unit: 'kN', effect,
+    name: 'compression', clause: `4.2.3.2, about ${z >= y ? 'z' : 'y'}`, unit: 'kN', effect, slendernessY: y, slendernessZ: z,
     resistance: (t) => (areaMm2 * fy * bucklingShare(t, slenderness, imperfection)) / gamma,
     temperature: () => bucklingTemperature((effect * gamma) / (areaMm2 * fy), slenderness, imperfection),
     explainAt: (t, steps) => {
@@ -144,12 +149,13 @@ function shearedModulus(c: CriticalTemperatureCase, modulus: number, plastic: bo
 
 const isBeam = (type: MemberType): boolean => type === 'beam' || type === 'secondary-beam';
 
-export function bending(c: CriticalTemperatureCase, design: MemberDesign, effect: FireEffect, sectionClass: SectionClass, { fy, gamma }: Material): LimitState {
+/** `continuous`: over a support of a statically indeterminate beam */
+export function bending(c: CriticalTemperatureCase, continuous: boolean, effect: FireEffect, sectionClass: SectionClass, { fy, gamma }: Material): LimitState {
   const plastic = sectionClass <= 2;
   const modulus = plastic ? c.properties.wplYMm3 : c.properties.welYMm3;
   const sheared = shearedModulus(c, modulus, plastic);
   const shearCold = (c.properties.shearAreaZMm2 * fy) / (Math.sqrt(3) * gamma);
-  const k2 = kappa2(design.continuousBeam);
+  const k2 = kappa2(continuous);
   // κ1 is for beams under a slab; a column against a wall is as warm on both flanges for all that is known
   const k1 = (bare: boolean) => (isBeam(c.memberType) ? kappa1(c.exposure.arrangement, !bare) : 1);
   const left = (ky: number) => modulus - (effect.shearZN > 0 ? shearLoss(effect.shearZN, ky * shearCold) * sheared : 0);

@@ -11,7 +11,7 @@ export const shapeWords: Record<SectionShape['kind'], string> = {
 const calculatedShapes: readonly SectionShape['kind'][] = ['i', 'rectangular-hollow', 'circular-hollow', 'box'];
 
 /** EN 1993-1-1 6.3.2.1(2): square and circular hollow sections do not buckle sideways; nor does anything bent about its weaker axis. */
-function cannotTwist(c: CriticalTemperatureCase): boolean {
+export function cannotTwist(c: CriticalTemperatureCase): boolean {
   const closed = c.shape.kind === 'circular-hollow' || c.shape.kind === 'rectangular-hollow';
   return closed && c.properties.iyMm4 <= c.properties.izMm4 * (1 + 1e-6);
 }
@@ -30,11 +30,8 @@ function shearBuckling(c: CriticalTemperatureCase): Message | null {
 export function refusal(c: CriticalTemperatureCase, design: MemberDesign, effect: FireEffect): Message | null {
   if (design.composite) return message('assessment.composite', {});
   if (design.webOpenings) return message('assessment.web-openings', {});
-  const { compressionN, tensionN, momentYNmm, shearZN } = effect;
-  if (compressionN === 0 && tensionN === 0 && momentYNmm === 0 && shearZN === 0) return message('assessment.no-actions', {});
+  const { compressionN, shearZN } = effect;
   if (!calculatedShapes.includes(c.shape.kind)) return message('assessment.shape-not-calculated', { shape: shapeWords[c.shape.kind] });
-  if (momentYNmm > 0 && (compressionN > 0 || tensionN > 0)) return message('assessment.axial-with-bending', {});
-  if (momentYNmm > 0 && design.lateralRestraint === 'at-points' && !cannotTwist(c)) return message('assessment.lateral-torsional', {});
   if (compressionN > 0 && design.bucklingRule !== 'given' && c.memberType !== 'column') return message('assessment.braced-rule-for-columns', {});
   if (compressionN > 0 && design.bucklingLengthYMm === null) return message('assessment.no-buckling-length', { axis: 'y' });
   if (compressionN > 0 && design.bucklingLengthZMm === null) return message('assessment.no-buckling-length', { axis: 'z' });

@@ -1,20 +1,18 @@
 import { message } from '@mantlet/common';
 import type { MemberDesign } from '@mantlet/common';
-import { explain } from '../formula.js';
 import type { WorkingStep } from '../formula.js';
-import { fireEpsilonFormula, sectionClass } from '../standards/en-1993-1-2/clause-4-2-2-classification.js';
+import { explainedClass, sectionClass } from '../standards/en-1993-1-2/clause-4-2-2-classification.js';
 import type { Loading, SectionClass } from '../standards/en-1993-1-1/table-5-2.js';
 import type { CriticalTemperature, CriticalTemperatureCase, Determined, LimitStateResult } from '../types.js';
-import { fireEffect } from './fire-effect.js';
-import type { FireEffect } from './fire-effect.js';
-import { RESISTANCE_CURVE_ENDS_C, bending, compression, shear, tension } from './critical-temperature-limit-states.js';
+import { RESISTANCE_CURVE_ENDS_C } from './critical-temperature-limit-states.js';
 import type { LimitState } from './critical-temperature-limit-states.js';
-import { loadingByType, refusal } from './critical-temperature-scope.js';
+import { loadingByType } from './critical-temperature-scope.js';
+import { governingStates } from './critical-temperature-states.js';
 import { fromUtilisation } from './critical-temperature-utilisation.js';
 
 /** Collects the working; null in the fast path. */
 type Working = WorkingStep[] | null;
-const scale = { kN: 1e3, kNm: 1e6 } as const;
+const scale = { kN: 1e3, kNm: 1e6, '': 1 } as const;
 
 /**
  * The critical temperature of a member by whichever of the five ways it was given, or the reason why there is none.
@@ -54,13 +52,7 @@ function plain(c: CriticalTemperatureCase, temperatureC: number, method: string,
 function classified(c: CriticalTemperatureCase, loading: Loading | null, working: Working): Determined<SectionClass | null> {
   if (loading === null) return { ok: true, value: null };
   const found = sectionClass(c.shape, loading, c.steel.yieldStrengthMPa);
-  if (found.ok && working) {
-    const epsilon = explain(fireEpsilonFormula, { yieldStrengthMPa: c.steel.yieldStrengthMPa });
-    working.push(epsilon.step, {
-      what: `Section class in ${loading}`, equation: 'c/t against the limits of Table 5.2 times ε',
-      inputs: [{ symbol: 'ε', value: epsilon.value, unit: '' }], value: found.value, unit: '', source: 'EN 1993-1-2:2005 4.2.2 with EN 1993-1-1:2005 Table 5.2',
-    });
-  }
+  if (found.ok) working?.push(...explainedClass(c.steel.yieldStrengthMPa, found.value, loading));
   return found;
 }
 
@@ -71,33 +63,6 @@ function assumed(c: CriticalTemperatureCase, working: Working): CriticalTemperat
   // a shape without a class keeps the default of its type: it is an assumption for somebody to accept either way
   if (found.ok && found.value === 4 && c.design.class4TemperatureC < byType) return plain(c, c.design.class4TemperatureC, 'class 4 default', !c.accepted);
   return plain(c, byType, 'assumed by member type', !c.accepted);
-}
-
-interface Loaded {
-  states: LimitState[];
-  class4: boolean;
-}
-
-/** The limit states that apply to a member's effects, or why they are not calculated. */
-function limitStatesOf(c: CriticalTemperatureCase, design: MemberDesign, working: Working): Determined<Loaded> {
-  const effect: FireEffect = fireEffect(design.actions, c.design, working);
-  const reason = refusal(c, design, effect);
-  if (reason) return { ok: false, reason };
-  let loading: Loading | null = null;
-  if (effect.momentYNmm > 0) loading = 'bending';
-  else if (effect.compressionN > 0) loading = 'compression';
-  const found = classified(c, loading, working);
-  if (!found.ok) return found;
-  const material = { fy: c.steel.yieldStrengthMPa, gamma: c.design.gammaMFi };
-  const { bucklingLengthYMm, bucklingLengthZMm } = design;
-  const states: LimitState[] = [];
-  if (effect.tensionN > 0) states.push(tension(c, effect.tensionN, material));
-  if (effect.compressionN > 0 && bucklingLengthYMm !== null && bucklingLengthZMm !== null) {
-    states.push(compression(c, design.bucklingRule, { y: bucklingLengthYMm, z: bucklingLengthZMm }, effect.compressionN, material, working));
-  }
-  if (effect.momentYNmm > 0) states.push(bending(c, design, effect, found.value ?? 3, material));
-  if (effect.shearZN > 0) states.push(shear(c, effect.shearZN, material));
-  return { ok: true, value: { states, class4: found.value === 4 } };
 }
 
 function resultOf(state: LimitState): LimitStateResult {
@@ -112,16 +77,16 @@ function resultOf(state: LimitState): LimitStateResult {
 
 function calculated(c: CriticalTemperatureCase, design: MemberDesign, working: Working): CriticalTemperature {
   const way = 'calculated';
-  const loaded = limitStatesOf(c, design, working);
+  const loaded = governingStates(c, design, working);
   if (!loaded.ok) return { kind: 'not-determined', way, reason: loaded.reason };
   const { states, class4 } = loaded.value;
   const limitStates = states.map(resultOf);
   const worst = limitStates.reduce((a, b) => (b.utilisation > a.utilisation ? b : a));
   if (worst.utilisation > 1) {
     if (working) explainCold(states, limitStates, working);
-    const reason = message('assessment.under-strength', {
-      state: worst.name, effect: worst.effect, resistance: worst.resistanceCold, unit: worst.unit, utilisation: worst.utilisation,
-    });
+    const reason = worst.unit === ''
+      ? message('assessment.under-strength-together', { state: worst.name, utilisation: worst.utilisation })
+      : message('assessment.under-strength', { state: worst.name, effect: worst.effect, resistance: worst.resistanceCold, unit: worst.unit, utilisation: worst.utilisation });
     return { kind: 'under-strength', governing: worst.name, utilisation: worst.utilisation, limitStates, reason, way };
   }
   const lowest = limitStates.reduce((a, b) => (b.temperatureC < a.temperatureC ? b : a));
@@ -180,7 +145,7 @@ export interface ResistanceCurve {
 /** Resistance against temperature for the member's drawing; empty unless it is calculated from actions. */
 export function resistanceCurve(c: CriticalTemperatureCase, everyK = 20): ResistanceCurve[] {
   if (c.basis.way !== 'calculated') return [];
-  const loaded = limitStatesOf(c, c.basis.design, null);
+  const loaded = governingStates(c, c.basis.design, null);
   if (!loaded.ok) return [];
   return loaded.value.states.map((state) => {
     const points: ResistanceCurve['points'] = [];

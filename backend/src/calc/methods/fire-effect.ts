@@ -9,17 +9,19 @@ export interface FireEffect {
   compressionN: number;
   tensionN: number;
   momentYNmm: number;
+  momentZNmm: number;
   shearZN: number;
 }
 
 const names: Record<keyof Effects, { what: string; unit: string }> = {
   axialKn: { what: 'axial force', unit: 'kN' },
   momentYKnm: { what: 'bending moment about y', unit: 'kNm' },
+  momentZKnm: { what: 'bending moment about z', unit: 'kNm' },
   shearZKn: { what: 'shear force', unit: 'kN' },
 };
 
 /** Largest and smallest value of one effect over the combinations with and without each variable action. */
-function envelope(actions: Exclude<Actions, { given: 'fire-effect' }>, design: DesignBasis, key: keyof Effects, working: WorkingStep[] | null): [number, number] {
+function envelope(actions: Extract<Actions, { given: 'characteristic' }>, design: DesignBasis, key: keyof Effects, working: WorkingStep[] | null): [number, number] {
   const permanent = actions.permanent[key];
   const { leading } = actions;
   const first = leading ? design.psi[leading.category][design.psiFi] * leading[key] : 0;
@@ -45,18 +47,20 @@ function envelope(actions: Exclude<Actions, { given: 'fire-effect' }>, design: D
  * Combines characteristic effects for fire by EN 1990 6.4.3.3 with the project's ψ, or takes the effect as given.
  * A variable action that acts favourably is left out, per effect.
  */
-export function fireEffect(actions: Actions, design: DesignBasis, working: WorkingStep[] | null = null): FireEffect {
+export function fireEffect(actions: Exclude<Actions, { given: 'loads' }>, design: DesignBasis, working: WorkingStep[] | null = null): FireEffect {
   if (actions.given === 'fire-effect') {
-    const { axialKn, momentYKnm, shearZKn } = actions.effect;
-    return { compressionN: Math.max(axialKn, 0) * 1e3, tensionN: Math.max(-axialKn, 0) * 1e3, momentYNmm: Math.abs(momentYKnm) * 1e6, shearZN: Math.abs(shearZKn) * 1e3 };
+    const { axialKn, momentYKnm, momentZKnm, shearZKn } = actions.effect;
+    return { compressionN: Math.max(axialKn, 0) * 1e3, tensionN: Math.max(-axialKn, 0) * 1e3, momentYNmm: Math.abs(momentYKnm) * 1e6, momentZNmm: Math.abs(momentZKnm) * 1e6, shearZN: Math.abs(shearZKn) * 1e3 };
   }
   const [most, least] = envelope(actions, design, 'axialKn', working);
   const [momentMost, momentLeast] = envelope(actions, design, 'momentYKnm', working);
+  const [momentZMost, momentZLeast] = envelope(actions, design, 'momentZKnm', working);
   const [shearMost, shearLeast] = envelope(actions, design, 'shearZKn', working);
   return {
     compressionN: Math.max(most, 0) * 1e3,
     tensionN: Math.max(-least, 0) * 1e3,
     momentYNmm: Math.max(Math.abs(momentMost), Math.abs(momentLeast)) * 1e6,
+    momentZNmm: Math.max(Math.abs(momentZMost), Math.abs(momentZLeast)) * 1e6,
     shearZN: Math.max(Math.abs(shearMost), Math.abs(shearLeast)) * 1e3,
   };
 }

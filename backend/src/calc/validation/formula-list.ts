@@ -18,6 +18,12 @@ import { tensionResistanceFormula } from '../standards/en-1993-1-2/clause-4-2-3-
 import { bucklingReductionFormula, compressionResistanceFormula, slendernessFormula, slendernessInFireFormula } from '../standards/en-1993-1-2/clause-4-2-3-2-compression.js';
 import { bendingResistanceFormula, shearReductionFormula, shearResistanceFormula } from '../standards/en-1993-1-2/clause-4-2-3-3-bending.js';
 import { criticalTemperatureFormula } from '../standards/en-1993-1-2/clause-4-2-4-critical-temperature.js';
+import { criticalMomentFormula, lateralSlendernessFormula } from '../standards/en-1993-1-1/clause-6-3-2-2-critical-moment.js';
+import { elasticCrossSectionFormula, plasticCrossSectionFormula } from '../standards/en-1993-1-1/clause-6-2-9-bending-and-axial.js';
+import { lateralBucklingResistanceFormula } from '../standards/en-1993-1-2/clause-4-2-3-3-lateral-torsional.js';
+import {
+  amplificationFormula, interactionFormula, lateralAmplificationFormula, muLtFormula, muYFormula, muZFormula,
+} from '../standards/en-1993-1-2/clause-4-2-3-5-beam-columns.js';
 import { unprotectedStepFormula } from '../standards/en-1993-1-2/clause-4-2-5-1-unprotected.js';
 import { heatRatioFormula, moistureDwellFormula, protectedStepFormula } from '../standards/en-1993-1-2/clause-4-2-5-2-protected.js';
 
@@ -49,7 +55,9 @@ export const formulaChapters: FormulaChapter[] = [
     title: 'Resistance and critical temperature',
     formulas: [
       printed(fireEpsilonFormula), printed(tensionResistanceFormula), printed(slendernessFormula), printed(slendernessInFireFormula), printed(bucklingReductionFormula), printed(coldBucklingReductionFormula),
-      printed(compressionResistanceFormula), printed(bendingResistanceFormula), printed(shearReductionFormula), printed(shearResistanceFormula), printed(criticalTemperatureFormula),
+      printed(compressionResistanceFormula), printed(bendingResistanceFormula), printed(shearReductionFormula), printed(shearResistanceFormula), printed(criticalMomentFormula),
+      printed(lateralSlendernessFormula), printed(lateralBucklingResistanceFormula), printed(plasticCrossSectionFormula), printed(elasticCrossSectionFormula), printed(muYFormula), printed(muZFormula),
+      printed(muLtFormula), printed(amplificationFormula), printed(lateralAmplificationFormula), printed(interactionFormula), printed(criticalTemperatureFormula),
     ],
   },
   { title: 'Protection', formulas: [printed(regressionTime), printed(regressionThickness)] },
@@ -73,6 +81,10 @@ export const decisions: string[] = [
   'A variable action that acts favourably is left out, effect by effect; an axial force that can turn its sign is checked both ways.',
   'Both axes share one buckling curve in fire, so the more slender axis governs at every temperature and is the one reported.',
   'High shear (above half the shear resistance at temperature) reduces the bending resistance by EN 1993-1-1 6.2.8.',
+  'M_cr of a length between lateral supports comes from its own moment diagram and the height of its loads, by least energy over a series for the twist (Rayleigh and Ritz); C_1 and C_2 printed beside it are the numbers that give the same M_cr in the general expression. Ends are held sideways and against twist, free to warp and to turn in plan; neighbouring lengths lend no help. A cantilever with a free tip is built in at its root, free to warp there.',
+  'A described beam is of one stiffness throughout; its loads are combined for every choice of variable actions present, each in turn leading, and the worst governs. Moment and shear are checked together place by place; κ2 holds at built-in ends of propped and fixed beams.',
+  'Where only effects are given, a beam held at points is under uniform moment and its loads are on the top flange, unless said otherwise.',
+  'Bending with compression (4.2.3.5): both expressions, and the cross-section by EN 1993-1-1 6.2.9 with the strength at temperature. The class is found with the force in fire and f_y at 20 °C. The slenderness in μ_y is not capped at 1.1, which is the safe side. β_M of a described beam takes 1.3 for its loads, and 1.1 for lateral-torsional buckling.',
   'Class 4 (4.2.3.6): the lower of the project’s setting and of what the gross section would carry, in bending and compression; tension has no class. Where only a utilisation is known the member’s type says how it is stressed: beams bend, columns and bracing are compressed, ties pull. A declared temperature stands.',
   'From a utilisation: beams and ties by (4.22) or by inverting k_y, as the project sets, μ0 below 0.013 read as 0.013. Columns and bracing may buckle, and so may a beam that is said to: there (4.22) does not hold, and they are read from the smaller of k_y and k_E, which is on the safe side for every slenderness.',
   'A cold utilisation rests on the resistance of EN 1993-1-1, μ0 on that of EN 1993-1-2 at 20 °C, which is the smaller for members that buckle (its one curve lies below the cold ones) and for sections whose class is worse with the reduced ε. μ0 = η_fi·E_d/R_d is divided by the least R_fi,d,0/R_d: of all slendernesses, against the most favourable cold curve of the shape; W_el/W_pl where class 1 or 2 becomes 3. Above 1 the member is not determined. A beam that may buckle needs its utilisation in fire.',
@@ -83,8 +95,8 @@ export const decisions: string[] = [
 ];
 
 export const refused: string[] = [
-  'lateral-torsional buckling (a beam held at points only; square and circular hollow sections need no such check)',
-  'axial force together with bending (unless one of them is exactly zero)',
+  'lateral-torsional buckling of shapes other than I, rectangular hollow and box with equal flanges (square and circular hollow sections need no such check); a cantilever held along its length with a free tip',
+  'torsion; shear parallel to the weak axis',
   'composite members; web openings',
   'resistance of unequal I sections, channels, tees, angles, flats and rounds (their section factor and heating are computed; give a utilisation, of a beam that may buckle marked as such, or declare the temperature)',
   'shear in webs above h/t = 72·√(235/f_y), which may buckle in shear',

@@ -27,3 +27,10 @@ export function classOf(ratio: number, limits: Limits, factor: number): SectionC
 export function internalClass3Limit(psi: number): number {
   return psi > -1 ? 42 / (0.67 + 0.33 * psi) : 62 * (1 - psi) * Math.sqrt(-psi);
 }
+
+/** Limits, times ε, of an internal part under bending with compression: α the compressed share when plastic, ψ the stress ratio when elastic. */
+export function internalCombinedLimits(alpha: number, psi: number): Limits {
+  return alpha > 0.5
+    ? [396 / (13 * alpha - 1), 456 / (13 * alpha - 1), internalClass3Limit(psi)]
+    : [36 / alpha, 41.5 / alpha, internalClass3Limit(psi)];
+}

@@ -1,8 +1,9 @@
 import { message } from '@mantlet/common';
 import type { SectionShape } from '@mantlet/common';
-import { defineFormula } from '../../formula.js';
+import { defineFormula, explain } from '../../formula.js';
+import type { WorkingStep } from '../../formula.js';
 import type { Determined } from '../../types.js';
-import { angleLimits, classOf, internalClass3Limit, internalLimits, outstandLimits, tubeLimits } from '../en-1993-1-1/table-5-2.js';
+import { angleLimits, classOf, internalClass3Limit, internalCombinedLimits, internalLimits, outstandLimits, tubeLimits } from '../en-1993-1-1/table-5-2.js';
 import type { Loading, SectionClass } from '../en-1993-1-1/table-5-2.js';
 
 export const fireEpsilonFormula = defineFormula<{ yieldStrengthMPa: number }>({
@@ -90,9 +91,42 @@ export function sectionClass(shape: SectionShape, loading: Loading, yieldStrengt
   }
 }
 
+/**
+ * Class under bending about y with axial compression (N): the web by Table 5.2 for its own share of compression, with the force in
+ * fire and f_y at 20 °C, as 4.2.2 classifies "as for normal temperature"; the rest as in compression. Shapes without such a web: as in compression.
+ */
+export function combinedSectionClass(shape: SectionShape, compressionN: number, areaMm2: number, yieldStrengthMPa: number): Determined<SectionClass> {
+  const compressed = sectionClass(shape, 'compression', yieldStrengthMPa);
+  if (!compressed.ok || compressed.value === 1) return compressed;
+  const web = webOf(shape);
+  const bent = sectionClass(shape, 'bending', yieldStrengthMPa);
+  if (!web || !bent.ok) return compressed;
+  const e = fireEpsilonFormula.evaluate({ yieldStrengthMPa });
+  const alpha = Math.min(0.5 * (1 + compressionN / (web.webs * web.depthMm * web.thicknessMm * yieldStrengthMPa)), 1);
+  const psi = Math.min((2 * compressionN) / (areaMm2 * yieldStrengthMPa) - 1, 1);
+  // bending leaves the flanges wholly compressed, so their class is in it already
+  return { ok: true, value: worst(bent.value, classOf(web.depthMm / web.thicknessMm, internalCombinedLimits(alpha, psi), e)) };
+}
+
+function webOf(s: SectionShape): { depthMm: number; thicknessMm: number; webs: number } | null {
+  if (s.kind === 'i') return { depthMm: s.hMm - 2 * s.tfMm - 2 * s.rootRadiusMm, thicknessMm: s.twMm, webs: 1 };
+  if (s.kind === 'box') return { depthMm: s.hMm - 2 * s.tfMm, thicknessMm: s.twMm, webs: 2 };
+  if (s.kind === 'rectangular-hollow') return { depthMm: s.hMm - 2 * Math.max(s.outerRadiusMm, s.tMm), thicknessMm: s.tMm, webs: 2 };
+  return null;
+}
+
 /** The class at normal temperature, with ε = √(235/f_y); 4 where Table 5.2 gives none. */
 export function coldSectionClass(shape: SectionShape, loading: Loading, yieldStrengthMPa: number): SectionClass {
   // the ε of fire is 0.85·√(235/f_y), which for 0.85²·f_y is the cold one
   const found = sectionClass(shape, loading, yieldStrengthMPa * 0.85 ** 2);
   return found.ok ? found.value : 4;
+}
+
+/** The lines of working of a class. */
+export function explainedClass(yieldStrengthMPa: number, found: SectionClass, loading: string): WorkingStep[] {
+  const epsilon = explain(fireEpsilonFormula, { yieldStrengthMPa });
+  return [epsilon.step, {
+    what: `Section class in ${loading}`, equation: 'c/t against the limits of Table 5.2 times ε',
+    inputs: [{ symbol: 'ε', value: epsilon.value, unit: '' }], value: found, unit: '', source: 'EN 1993-1-2:2005 4.2.2 with EN 1993-1-1:2005 Table 5.2',
+  }];
 }

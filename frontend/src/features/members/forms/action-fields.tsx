@@ -4,12 +4,13 @@ import type { Control, FieldPath } from 'react-hook-form';
 import { actionCategories, actionCategoryNames } from '@mantlet/common';
 import type { MemberStructural } from '@mantlet/common';
 import { NumberField, RadioField, SelectField } from '../../../ui/form/fields.js';
+import { BeamFields } from './beam-fields.js';
 import { noEffects } from './structural-form.js';
 import type { StructuralValues } from './structural-form.js';
 import type { UseFormReturn } from 'react-hook-form';
 
 export type StructuralForm = UseFormReturn<StructuralValues, unknown, MemberStructural>;
-type StructuralControl = Control<StructuralValues, unknown, MemberStructural>;
+export type StructuralControl = Control<StructuralValues, unknown, MemberStructural>;
 const categories = actionCategories.map((value) => ({ value, label: actionCategoryNames[value] }));
 const actions = 'basis.design.actions';
 
@@ -20,6 +21,7 @@ function EffectFields({ control, name }: { control: StructuralControl; name: str
     <div className="mt-form-row">
       <NumberField control={control} name={at('axialKn')} label="Axial force N" unit="kN" help="Compression positive, tension negative." />
       <NumberField control={control} name={at('momentYKnm')} label="Moment My" unit="kNm" help="Greatest, about the strong axis." />
+      <NumberField control={control} name={at('momentZKnm')} label="Moment Mz" unit="kNm" help="Greatest, about the weak axis." />
       <NumberField control={control} name={at('shearZKn')} label="Shear Vz" unit="kN" help="Greatest, parallel to the web." />
     </div>
   );
@@ -72,10 +74,12 @@ export function ActionFields({ form }: { form: StructuralForm }) {
     <>
       <RadioField
         control={control} name={`${actions}.given`} label="Actions given as"
-        options={[{ value: 'characteristic', label: 'Characteristic actions' }, { value: 'fire-effect', label: 'Effect in fire' }]}
+        options={[{ value: 'loads', label: 'Beam with its loads' }, { value: 'characteristic', label: 'Characteristic actions' }, { value: 'fire-effect', label: 'Effect in fire' }]}
         help={given === 'fire-effect' ? 'Already combined: E fi,d. Nothing is added or reduced.' : 'Combined by EN 1990 6.4.3.3 with the ψ factors of the design basis.'}
       />
-      {given === 'fire-effect' ? <fieldset><legend>Effect in fire</legend><EffectFields control={control} name={`${actions}.effect`} /></fieldset> : <Characteristic form={form} />}
+      {given === 'fire-effect' && <fieldset><legend>Effect in fire</legend><EffectFields control={control} name={`${actions}.effect`} /></fieldset>}
+      {given === 'characteristic' && <Characteristic form={form} />}
+      {given === 'loads' && <BeamFields form={form} />}
     </>
   );
 }

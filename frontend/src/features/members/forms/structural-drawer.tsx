@@ -1,6 +1,7 @@
 import { useWatch } from 'react-hook-form';
-import { defaultDesignBasis, memberTypeNames, wayNames } from '@mantlet/common';
-import type { CriticalTemperatureWay, MemberDto, MemberStructural, MemberType } from '@mantlet/common';
+import type { FieldPath } from 'react-hook-form';
+import { defaultDesignBasis, loadHeightNames, loadHeights, memberTypeNames, momentShapeNames, wayNames } from '@mantlet/common';
+import type { CriticalTemperatureWay, MemberDto, MemberStructural, MemberType, MomentShape } from '@mantlet/common';
 import { CheckField, NumberField, RadioField, SelectField, TextField } from '../../../ui/form/fields.js';
 import { FormDrawer } from '../../../ui/form/form-drawer.js';
 import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
@@ -17,10 +18,31 @@ const bucklingRules = [
   { value: 'braced-intermediate', label: 'Braced column, between storeys: half the storey height' },
   { value: 'braced-top', label: 'Braced column, top storey: 0.7 of its height' },
 ];
+const heights = loadHeights.map((value) => ({ value, label: loadHeightNames[value] }));
+const shapes = (Object.keys(momentShapeNames) as MomentShape['kind'][]).map((value) => ({ value, label: momentShapeNames[value] }));
 const design = 'basis.design';
+
+/** What lateral-torsional buckling needs to know beside a described beam's own diagram. */
+function LateralFields({ control, described }: { control: StructuralForm['control']; described: boolean }) {
+  const shape = useWatch({ control, name: `${design}.momentShapeY.kind` });
+  return (
+    <>
+      <SelectField control={control} name={`${design}.loadHeight`} label="Loads act at the" options={heights} help="Above the shear centre they help the beam to buckle." />
+      {!described && (
+        <div className="mt-form-row">
+          <NumberField control={control} name={`${design}.lateralSpacingMm`} label="Distance between lateral supports" unit="mm" min={0} />
+          <SelectField control={control} name={`${design}.momentShapeY.kind`} label="Moment between them" options={shapes} />
+          {shape === 'end-moments' && <NumberField control={control} name={`${design}.momentShapeY.ratio` as FieldPath<StructuralValues>} label="Ratio of end moments" min={-1} max={1} help="Smaller over greater; 1 uniform, negative in double curvature." />}
+        </div>
+      )}
+    </>
+  );
+}
 
 function CalculatedFields({ form }: { form: StructuralForm }) {
   const { control } = form;
+  const restraint = useWatch({ control, name: `${design}.lateralRestraint` });
+  const given = useWatch({ control, name: `${design}.actions.given` });
   return (
     <>
       <ActionFields form={form} />
@@ -34,7 +56,8 @@ function CalculatedFields({ form }: { form: StructuralForm }) {
       </fieldset>
       <fieldset>
         <legend>Beams</legend>
-        <RadioField control={control} name={`${design}.lateralRestraint`} label="Compression flange" options={[{ value: 'continuous', label: 'Held along its length' }, { value: 'at-points', label: 'Held at points only' }]} help="Held at points, lateral-torsional buckling would have to be checked: that is not calculated here, and is said as such." />
+        <RadioField control={control} name={`${design}.lateralRestraint`} label="Compression flange" options={[{ value: 'continuous', label: 'Held along its length' }, { value: 'at-points', label: 'Held at points only' }]} help="Held at points, lateral-torsional buckling is checked for each length between them, EN 1993-1-2 4.2.3.3(4)." />
+        {restraint === 'at-points' && <LateralFields control={control} described={given === 'loads'} />}
         <CheckField control={control} name={`${design}.continuousBeam`} label="The moment is over a support of a continuous beam" help="κ2 = 0.85, EN 1993-1-2 4.2.3.3(8)." />
         <CheckField control={control} name={`${design}.composite`} label="Composite with the slab" help="Not calculated here: give its utilisation or declare its temperature." />
         <CheckField control={control} name={`${design}.webOpenings`} label="Has web openings" help="Not calculated here: needs a declared temperature." />

@@ -1,6 +1,6 @@
 import type { z } from 'zod';
 import { memberStructuralSchema } from '@mantlet/common';
-import type { ActionCategory, Actions, CriticalTemperatureBasis, CriticalTemperatureWay, Effects, MemberDesign, MemberStructural } from '@mantlet/common';
+import type { ActionCategory, Actions, BeamLoadInput, BeamSupport, CriticalTemperatureBasis, CriticalTemperatureWay, Effects, MemberDesign, MemberStructural } from '@mantlet/common';
 
 /**
  * All five ways side by side, so that trying another way loses nothing that was typed in the first.
@@ -20,13 +20,26 @@ export interface StructuralValues {
   };
 }
 export type VariableEffects = Effects & { category: ActionCategory };
-export interface ActionsValues { given: Actions['given']; permanent: Effects; leading: VariableEffects | null; accompanying: VariableEffects[]; effect: Effects }
+type Nullable<T> = T extends unknown ? { [K in keyof T]: T[K] extends number ? number | null : T[K] } : never;
+/** numbers are empty until they are typed */
+export type BeamLoadValues = Nullable<BeamLoadInput>;
+export interface ActionsValues {
+  given: Actions['given']; permanent: Effects; leading: VariableEffects | null; accompanying: VariableEffects[]; effect: Effects;
+  supports: BeamSupport; spanMm: number | null; loads: BeamLoadValues[]; lateralSupportsMm: (number | null)[]; axialInFireKn: number;
+}
 
 export const structuralFormSchema = memberStructuralSchema as unknown as z.ZodType<MemberStructural, StructuralValues>;
-export const noEffects: Effects = { axialKn: 0, momentYKnm: 0, shearZKn: 0 };
+export const noEffects: Effects = { axialKn: 0, momentYKnm: 0, momentZKnm: 0, shearZKn: 0 };
+
+/** The load that a new line begins with. */
+export const newLoad = (kind: BeamLoadInput['kind']): BeamLoadValues =>
+  kind === 'point' ? { kind, action: 'permanent', atMm: null, forceKn: null } : { kind, action: 'permanent', fromMm: 0, toMm: null, startKnPerM: null, endKnPerM: null };
 
 function actionsValues(actions: Actions | null): ActionsValues {
-  const blank: ActionsValues = { given: 'characteristic', permanent: noEffects, leading: null, accompanying: [], effect: noEffects };
+  const blank: ActionsValues = {
+    given: 'characteristic', permanent: noEffects, leading: null, accompanying: [], effect: noEffects,
+    supports: 'simple', spanMm: null, loads: [newLoad('distributed')], lateralSupportsMm: [], axialInFireKn: 0,
+  };
   return { ...blank, ...actions };
 }
 
@@ -37,7 +50,8 @@ export function structuralValues(basis: CriticalTemperatureBasis, version: numbe
     basis: {
       temperatureC: null, mu0: null, utilisation: null, etaFi: null, mayBuckle: false, reference: '', ...basis,
       design: {
-        bucklingLengthYMm: null, bucklingLengthZMm: null, bucklingRule: 'given', lateralRestraint: 'continuous', continuousBeam: false, composite: false, webOpenings: false,
+        bucklingLengthYMm: null, bucklingLengthZMm: null, bucklingRule: 'given', lateralRestraint: 'continuous', lateralSpacingMm: null, momentShapeY: { kind: 'end-moments', ratio: 1 }, momentShapeZ: { kind: 'end-moments', ratio: 1 },
+        loadHeight: 'top-flange', continuousBeam: false, composite: false, webOpenings: false,
         ...design, actions: actionsValues(design?.actions ?? null),
       },
     },
