@@ -22,7 +22,11 @@ export function drawnStates({ charts, result }: Pick<MemberSheetDto, 'charts' | 
   return loaded.sort((a, b) => Number(b.limitState === result?.governing) - Number(a.limitState === result?.governing));
 }
 
+const times = (value: number | null) => (value === null ? 'no value' : `${formatNumber(value, 2)} times the effect`);
+
 function oneState({ limitState, unit, effect, points }: LimitState): LoadSide {
+  // effects that act together have no one unit: how many times they are carried
+  if (unit === '') return { curves: [{ name: `${limitState}, carried`, points, className: 'd-ink' }], effect, effectText: ['effects', 'in fire'], axis: 'multiples of the effects in fire', format: times };
   const what = unit === 'kNm' ? 'bending moment' : limitState === 'shear' ? 'shear force' : 'axial force';
   return { curves: [{ name: `${limitState} resistance`, points, className: 'd-ink' }], effect, effectText: ['effect in fire', force(unit)(effect)], axis: `${what}, ${unit}`, format: force(unit) };
 }
@@ -32,7 +36,7 @@ const looks = ['d-ink', 'd-thin', 'd-dashed'];
 function allStates(states: readonly LimitState[]): LoadSide {
   return {
     curves: states.map((s, i) => ({ name: `${s.limitState} resistance`, points: s.points.map(([t, r]) => [t, r / s.effect] as const), className: looks[i % looks.length] as string })),
-    effect: 1, effectText: ['effect', 'in fire'], axis: 'multiples of the effect in fire', format: (value) => (value === null ? 'no value' : `${formatNumber(value, 2)} times the effect`),
+    effect: 1, effectText: ['effect', 'in fire'], axis: 'multiples of the effect in fire', format: times,
   };
 }
 

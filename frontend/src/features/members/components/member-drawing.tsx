@@ -53,6 +53,10 @@ const missing = 'not determined';
 
 function effectAnswer(sheet: MemberSheetDto): Answer {
   const [state] = drawnStates(sheet);
+  if (state?.unit === '') {
+    const used = state.points[0]?.[1] ? 1 / state.points[0][1] : null;
+    return { term: 'utilisation', name: 'Utilisation in fire', value: used === null ? missing : formatNumber(used, 2), more: `${state.limitState}, cold`, open: used !== null && used > 1 };
+  }
   if (state) {
     const format = state.unit === 'kNm' ? formatMoment : formatForce;
     const cold = state.points[0]?.[1] ?? null;
