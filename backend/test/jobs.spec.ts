@@ -93,7 +93,7 @@ describe('large changes', () => {
 
     // nothing is prepared or signed on what is not there
     const readiness = await read<ReadinessDto>(p, 'readiness');
-    expect(readiness).toMatchObject({ ready: false, current: false, blockers: [{ title: '4 results are being recalculated; wait until this is done' }] });
+    expect(readiness).toMatchObject({ ready: false, current: false, blockers: [{ code: 'recalculating', title: '4 results are being recalculated; wait until this is done' }] });
     const { body: revision } = await p.team.specifier.post(p.url('revisions')).send({ code: 'P1', purpose: 'For tender' }).expect(201);
     const prepared = await p.team.specifier.post(p.url(`revisions/${(revision as { id: string }).id}/prepare`));
     expect(prepared.status).toBe(422);

@@ -1,10 +1,12 @@
 import { useParams } from 'react-router-dom';
+import { JobProgress } from '../features/live/components/job-progress.js';
 import { LiveNotice } from '../features/live/components/live-notice.js';
 import { useLiveProject } from '../features/live/use-live-project.js';
 import { ProjectProvider } from '../features/projects/project-context.js';
 import { useProject } from '../features/projects/api/projects.js';
 import { useSession } from '../features/session/api/session.js';
 import { ApiError } from '../lib/api-client.js';
+import { may } from '../lib/may.js';
 import { ErrorState, QueryState } from '../ui/states.js';
 import { Shell } from './shell.js';
 
@@ -18,7 +20,7 @@ export function ProjectLayout() {
   if (project.error instanceof ApiError && project.error.isMissing) return <Shell><ErrorState error={project.error} /></Shell>;
   return (
     <ProjectProvider project={project.data}>
-      <Shell project={project.data} notice={<LiveNotice {...live} />} />
+      <Shell project={project.data} notice={<><LiveNotice {...live} /><JobProgress projectId={projectId} enabled={may(project.data.roles, 'see-design')} /></>} />
     </ProjectProvider>
   );
 }

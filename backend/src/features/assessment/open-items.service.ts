@@ -63,9 +63,10 @@ function withoutMembers(inputs: ProjectInputs): OpenItemDto[] {
 function staleItem({ memberIds, zoneIds }: StaleResults, job: Job | null): OpenItemDto[] {
   if (memberIds.length + zoneIds.length === 0) return [];
   const what = memberIds.length > 0 ? `${formatNumber(memberIds.length)} ${memberIds.length === 1 ? 'result is' : 'results are'}` : 'Targets of zones are';
-  const title = job && job.state !== 'failed' ? `${what} being recalculated; wait until this is done` : `${what} older than the inputs; recalculate`;
+  const inWork = job !== null && job.state !== 'failed';
+  const title = inWork ? `${what} being recalculated; wait until this is done` : `${what} older than the inputs; recalculate`;
   return [{
-    ...blank, role: 'specifier', kind: 'blocker', code: 'stale', title, page: 'schedule',
+    ...blank, role: 'specifier', kind: 'blocker', code: inWork ? 'recalculating' : 'stale', title, page: 'schedule',
     memberIds: memberIds.slice(0, LISTED_MEMBERS), count: memberIds.length,
   }];
 }

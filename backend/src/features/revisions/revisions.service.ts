@@ -44,7 +44,7 @@ export class RevisionsService {
     const items = await this.items.openItems(projectId);
     const blockers = items.filter((item) => item.kind === 'blocker');
     return {
-      ready: blockers.length === 0, current: !blockers.some((item) => item.code === 'stale'), blockers, warnings: items.filter((item) => item.kind === 'warning'),
+      ready: blockers.length === 0, current: !blockers.some((item) => ['stale', 'recalculating'].includes(item.code)), blockers, warnings: items.filter((item) => item.kind === 'warning'),
     };
   }
 

@@ -1,9 +1,10 @@
 import { QueryClientProvider } from '@tanstack/react-query';
 import { act, render, screen } from '@testing-library/react';
 import { liveTopics } from '@mantlet/common';
-import type { LiveTopic, ProjectEventDto } from '@mantlet/common';
+import type { JobDto, LiveTopic, ProjectEventDto } from '@mantlet/common';
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import { createQueryClient, projectKey } from '../../lib/query-client.js';
+import { percentOf, sayJob } from './job-words.js';
 import { LiveNotice } from './components/live-notice.js';
 import { queriesTouched } from './live-queries.js';
 import { useLiveProject } from './use-live-project.js';
@@ -125,5 +126,26 @@ describe('a page that follows its project', () => {
   it('knows for every topic what shows it', () => {
     for (const topic of liveTopics) expect(queriesTouched([topic]).length).toBeGreaterThan(0);
     expect(queriesTouched(['results'])).toEqual(expect.arrayContaining(['building', 'zones', 'members', 'member', 'quantities', 'readiness']));
+  });
+});
+
+describe('what is said of a recalculation', () => {
+  const job: JobDto = { id: projectId, kind: 'recalculation', state: 'running', total: 12_000, done: 4800, secondsLeft: 42, withoutWorker: false, error: null };
+  it('how far it is, and what it means for what is shown', () => {
+    expect(sayJob(job)).toMatch(/^Recalculating 12.000 members: 40 %, about 50 s left\. Their results and all totals are open until then\.$/);
+    expect(sayJob({ ...job, secondsLeft: null })).toMatch(/40 %\. Their/);
+    expect(sayJob({ ...job, secondsLeft: 150 })).toContain('about 3 min left');
+  });
+  it('that it waits, and that it waits for nobody', () => {
+    expect(sayJob({ ...job, state: 'waiting', done: 0, secondsLeft: null })).toMatch(/^12.000 members wait to be recalculated\. /);
+    expect(sayJob({ ...job, withoutWorker: true })).toMatch(/^7.200 members wait to be recalculated: no worker is running/);
+    expect(sayJob({ ...job, state: 'waiting', total: 1, done: 0 })).toMatch(/^1 member waits/);
+  });
+  it('why it failed', () => {
+    expect(sayJob({ ...job, state: 'failed', error: 'It failed. Try again.' })).toBe('It failed. Try again.');
+  });
+  it('is never at its end while something is left', () => {
+    expect(percentOf({ ...job, done: 11_999 })).toBe(99);
+    expect(percentOf({ ...job, total: 0, done: 0 })).toBe(0);
   });
 });

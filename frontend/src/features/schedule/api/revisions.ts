@@ -1,5 +1,5 @@
 import { queryOptions, useMutation, useQuery } from '@tanstack/react-query';
-import type { ReadinessDto, ReturnInput, RevisionDetailDto, RevisionDto, RevisionInput, RevisionUpdate, RevisionVerificationDto } from '@mantlet/common';
+import type { ReadinessDto, RecalculationDto, ReturnInput, RevisionDetailDto, RevisionDto, RevisionInput, RevisionUpdate, RevisionVerificationDto } from '@mantlet/common';
 import { api, apiUrl } from '../../../lib/api-client.js';
 import { projectKey } from '../../../lib/query-client.js';
 import { useProjectMutation } from '../../projects/api/projects.js';
@@ -25,6 +25,6 @@ export const useTakeStep = (projectId: string, id: string) => useProjectMutation
 export const useReturnRevision = (projectId: string, id: string) => useProjectMutation(projectId, (body: ReturnInput) => api.post<RevisionDto>(at(projectId, id, 'return'), body));
 /** Asked for by hand: the server reads the stored files and computes their digests anew. */
 export const useVerify = (projectId: string, id: string) => useMutation({ mutationFn: () => api.get<RevisionVerificationDto>(at(projectId, id, 'verify')) });
-export const useRecalculate = (projectId: string) => useProjectMutation<void, { members: number; changed: number }>(projectId, () => api.post(`/projects/${projectId}/recalculate`));
+export const useRecalculate = (projectId: string) => useProjectMutation<void, RecalculationDto>(projectId, () => api.post(`/projects/${projectId}/recalculate`));
 
 export const pdfUrl = (projectId: string, id: string, download = false) => apiUrl(at(projectId, id, 'pdf'), download ? { download: 1 } : {});

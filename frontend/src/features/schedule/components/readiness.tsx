@@ -35,11 +35,13 @@ function Stale({ projectId }: { projectId: string }) {
 /** What keeps the schedule from being prepared, by who must act; each line leads to where it is settled. */
 export function Readiness({ readiness, projectId, held }: { readiness: ReadinessDto; projectId: string; held: readonly Role[] }) {
   const groups = groupByRole(readiness);
+  // a worker is at it: nothing to press
+  const inWork = readiness.blockers.some((item) => item.code === 'recalculating');
   const open = readiness.blockers.length;
   return (
     <Panel title="Readiness" sub={open > 0 ? 'Each line leads to the place where it is settled.' : undefined}>
       {open === 0 && <StatusWord kind="settled">Nothing keeps the schedule from being prepared</StatusWord>}
-      {!readiness.current && <Stale projectId={projectId} />}
+      {!readiness.current && !inWork && <Stale projectId={projectId} />}
       {groups.map((group) => (
         <section key={group.role} aria-label={roleTally(group)} className="mt-readiness">
           <h3>{roleTally(group)}{held.includes(group.role) && <span className="mt-sub"> (you)</span>}</h3>
