@@ -56,14 +56,14 @@ export function AccountMenu({ user, roles }: { user: MeDto | null; roles: string
 }
 
 /** The same choices inside the menu drawer of small screens. */
-export function AccountMenuItems({ user, onDone }: { user: MeDto | null; onDone: () => void }) {
+export function AccountMenuItems({ user, roles, onDone }: { user: MeDto | null; roles: string; onDone: () => void }) {
   const { choice, choose } = useTheme();
   const leave = useLeave();
   const [password, setPassword] = useState(false);
   if (!user) return null;
   return (
     <div className="mt-menu-account">
-      <div className="mt-sub">Signed in as {user.name}</div>
+      <div className="mt-sub">Signed in as {user.name}{roles && roles !== user.name ? `, ${roles.charAt(0).toLowerCase()}${roles.slice(1)}` : ''}</div>
       <Radio.Group aria-label="Ground" value={choice} onChange={(e) => choose(e.target.value as ThemeChoice)} options={themeChoices.map((c) => ({ value: c, label: themeNames[c] }))} className="mt-radios" />
       <div className="mt-actions">
         <Button onClick={() => setPassword(true)}>Change password</Button>

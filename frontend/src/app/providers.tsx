@@ -8,7 +8,7 @@ import { createRouter } from './router.js';
 
 export function Providers() {
   const [client] = useState(createQueryClient);
-  const [router] = useState(createRouter);
+  const [router] = useState(() => createRouter(client));
   return (
     <QueryClientProvider client={client}>
       <ThemeProvider>

@@ -1,6 +1,9 @@
+import type { QueryClient } from '@tanstack/react-query';
 import type { ComponentType } from 'react';
 import { createBrowserRouter, Navigate } from 'react-router-dom';
 import type { RouteObject } from 'react-router-dom';
+import { projectQuery } from '../features/projects/api/projects.js';
+import { sessionQuery } from '../features/session/api/session.js';
 import { LoadingState } from '../ui/states.js';
 import { NotFound, RouteFault } from './faults.js';
 import { ProjectLayout } from './project-layout.js';
@@ -30,7 +33,22 @@ const projectPages: RouteObject[] = [
 /** A fault inside one page leaves the strip and the list of pages standing. */
 const guarded = (children: RouteObject[]): RouteObject => ({ errorElement: <RouteFault />, children });
 
-export const routes: RouteObject[] = [
+/**
+ * The project is asked for while the session still is, so that no page waits for three answers in a row.
+ * Nobody waits here: the layouts show what there is.
+ */
+const projectRoute = (client: QueryClient): RouteObject => ({
+  path: '/projects/:projectId', element: <ProjectLayout />,
+  loader: ({ params }) => {
+    void client.prefetchQuery(sessionQuery());
+    void client.prefetchQuery(projectQuery(params['projectId'] ?? ''));
+    return null;
+  },
+  shouldRevalidate: ({ currentParams, nextParams }) => currentParams['projectId'] !== nextParams['projectId'],
+  children: [guarded([...projectPages, { path: '*', element: <NotFound /> }])],
+});
+
+const routes = (client: QueryClient): RouteObject[] => [
   {
     errorElement: <RouteFault />,
     hydrateFallbackElement: <LoadingState what="Mantlet" />,
@@ -41,7 +59,7 @@ export const routes: RouteObject[] = [
         element: <RequireSession />,
         children: [
           { path: '/', element: <Navigate to="/projects" replace /> },
-          { path: '/projects/:projectId', element: <ProjectLayout />, children: [guarded([...projectPages, { path: '*', element: <NotFound /> }])] },
+          projectRoute(client),
           {
             element: <Shell />,
             children: [guarded([
@@ -58,4 +76,4 @@ export const routes: RouteObject[] = [
     ],
   },
 ];
-export const createRouter = () => createBrowserRouter(routes);
+export const createRouter = (client: QueryClient) => createBrowserRouter(routes(client));

@@ -1,18 +1,32 @@
 import { Drawer } from 'antd';
-import { useRef, useState } from 'react';
-import type { ReactNode } from 'react';
-import { Outlet, ScrollRestoration, useNavigation } from 'react-router-dom';
+import { useEffect, useRef, useState } from 'react';
+import type { ReactNode, RefObject } from 'react';
+import { Outlet, ScrollRestoration, useLocation, useNavigation } from 'react-router-dom';
 import type { ProjectDto } from '@mantlet/common';
 import { useSession } from '../features/session/api/session.js';
 import { AccountMenuItems } from './account-menu.js';
 import { PageList } from './page-list.js';
-import { TitleStrip } from './title-strip.js';
+import { TitleStrip, standing } from './title-strip.js';
+
+/** Another page: the focus goes to its heading, unless the page has put it somewhere already. A change of filters or an opened sheet leaves it where it is. */
+function useHeadingFocus(main: RefObject<HTMLElement | null>): void {
+  const { pathname } = useLocation();
+  const last = useRef(pathname);
+  useEffect(() => {
+    if (last.current === pathname) return;
+    last.current = pathname;
+    const at = document.activeElement;
+    const heading = main.current?.querySelector<HTMLElement>('h1');
+    if (heading && !(at && main.current?.contains(at) && at !== main.current)) heading.focus({ preventScroll: true });
+  }, [pathname, main]);
+}
 
 /** The title strip above, the list of pages at the left, the page between them and the standing caution. */
 export function Shell({ project, notice, children }: { project?: ProjectDto; notice?: ReactNode; children?: ReactNode }) {
   const user = useSession().data?.user;
   const [menuOpen, setMenuOpen] = useState(false);
   const main = useRef<HTMLElement>(null);
+  useHeadingFocus(main);
   const going = useNavigation().state !== 'idle';
   const administrator = user?.administrator ?? false;
   return (
@@ -33,7 +47,7 @@ export function Shell({ project, notice, children }: { project?: ProjectDto; not
       <Drawer title="Menu" placement="right" size={300} open={menuOpen} onClose={() => setMenuOpen(false)} rootClassName="mt-menu-drawer">
         {project && <div className="mt-menu-who"><div className="mt-sub">Project {project.number}</div><div className="mt-strong">{project.name}</div></div>}
         <PageList project={project} administrator={administrator} onGo={() => setMenuOpen(false)} />
-        <AccountMenuItems user={user ?? null} onDone={() => setMenuOpen(false)} />
+        <AccountMenuItems user={user ?? null} roles={standing(project, user ?? null)} onDone={() => setMenuOpen(false)} />
       </Drawer>
       <ScrollRestoration />
     </div>

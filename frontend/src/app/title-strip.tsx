@@ -12,7 +12,7 @@ const stateOf = (project: ProjectDto) =>
     : project.counts.members > 0 ? { word: 'Settled', kind: 'settled' as const } : { word: 'No members yet', kind: 'neutral' as const };
 
 /** On a project, one's roles there; elsewhere, whether one is the administrator. */
-const standing = (project: ProjectDto | undefined, user: MeDto | null) =>
+export const standing = (project: ProjectDto | undefined, user: MeDto | null) =>
   project?.roles.length ? rolesInWords(project.roles) : user?.administrator ? 'Administrator' : user?.name ?? '';
 
 /** Like the title block of a drawing: what this is, which page and revision, how it stands, and who looks at it. */
@@ -26,7 +26,7 @@ export function TitleStrip({ project, user, onMenu }: { project: ProjectDto | un
       <Link className="mt-strip-brand" to="/projects" aria-label="Mantlet, all projects"><Mark /><span>Mantlet</span></Link>
       <dl>
         {project && <div className="mt-strip-cell mt-strip-project"><dt>Project {project.number}</dt><dd title={project.name}><Link to={`/projects/${project.id}`}>{project.name}</Link></dd></div>}
-        <div className="mt-strip-cell mt-strip-page"><dt>Page</dt><dd title={title}>{title || '…'}</dd></div>
+        <div className="mt-strip-cell mt-strip-page"><dt>{project ? <><span className="mt-strip-wide">Page</span><span className="mt-strip-narrow">{project.number}{revision ? `, ${revision.code} ${revisionStateNames[revision.state].toLowerCase()}` : ''}</span></> : 'Page'}</dt><dd title={title}>{title || '…'}</dd></div>
         {project && <div className="mt-strip-cell mt-strip-revision"><dt>Revision</dt><dd>{revision ? `${revision.code} ${revisionStateNames[revision.state].toLowerCase()}` : 'None yet'}</dd></div>}
         {shownState && <div className="mt-strip-cell mt-strip-state"><dt>State</dt><dd className={shownState.kind === 'neutral' ? '' : `mt-${shownState.kind}`}>{shownState.word}</dd></div>}
       </dl>

@@ -27,7 +27,8 @@ export function Page({ title, projectName, heading, sub, actions, state, width =
     <article className={`mt-page mt-page-${width}`}>
       <header className="mt-page-head">
         <div className="mt-page-words">
-          <h1>{heading}</h1>
+          {/* takes the focus when one goes to another page, so that its answer is read out */}
+          <h1 tabIndex={-1}>{heading}</h1>
           {sub && <p className="mt-sub">{sub}</p>}
         </div>
         {actions && <div className="mt-actions">{actions}</div>}

@@ -1,7 +1,7 @@
 import { sentence, sumDecimals } from '@mantlet/common';
 import type { ProductKind, QuantityAmounts, QuantityLineDto, QuantityTotals } from '@mantlet/common';
 
-/** What a cell of the matrix can show. Places are those the server prints, so that cells add up by eye. */
+/** What a cell of the matrix can show. Places are those the server prints, so that cells add up by eye; volume is cut to what a drawing of a building can say, and its figures stand in full in the CSV. */
 export const measureKeys = ['area', 'litres', 'kg', 'sheets', 'volume', 'cost'] as const;
 export type MeasureKey = (typeof measureKeys)[number];
 interface Measure { name: string; unit: string; field: keyof QuantityAmounts; places: number; /** of what it does not apply to */ none: string }
@@ -11,7 +11,7 @@ export const measures: Record<MeasureKey, Measure> = {
   litres: { name: 'Coating', unit: 'L', field: 'litres', places: 2, none: 'no coating' },
   kg: { name: 'Mass', unit: 'kg', field: 'kg', places: 2, none: 'no coating or spray' },
   sheets: { name: 'Board sheet', unit: 'm²', field: 'sheetM2', places: 2, none: 'no board' },
-  volume: { name: 'Volume in place', unit: 'm³', field: 'volumeM3', places: 4, none: 'nothing to protect' },
+  volume: { name: 'Volume in place', unit: 'm³', field: 'volumeM3', places: 2, none: 'nothing to protect' },
   cost: { name: 'Cost', unit: '', field: 'cost', places: 2, none: 'not priced' },
 };
 export const unitOf = (key: MeasureKey, currency: string): string => (key === 'cost' ? currency : measures[key].unit);

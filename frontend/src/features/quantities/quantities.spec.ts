@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import type { PurchaseDto, QuantityLineDto } from '@mantlet/common';
-import { hatchClass } from '../../ui/drawing/building-quantities.js';
+import { barLengths } from '../../ui/drawing/floor-bars.js';
+import { hatchClass, scaleTop } from '../../ui/drawing/building-quantities.js';
 import { orderLines } from './components/purchases.js';
 import { byZone } from './measures.js';
 import { readChoice, withSplit } from './pages/quantities-page.js';
@@ -64,5 +65,16 @@ describe('the split', () => {
   it('names keys and sets thicknesses in order', () => {
     expect([keyName('level', 'L', { L: 'L1 First' }), keyName('member-type', 'tie', {}), keyName('application', 'off-site', {})]).toEqual(['L1 First', 'Tie or hanger', 'Off site']);
     expect(inOrder('thickness', ['25 mm', '1200 µm', '620 µm', '12 mm'])).toEqual(['620 µm', '1200 µm', '12 mm', '25 mm']);
+  });
+});
+
+describe('the drawings of quantities', () => {
+  it('take the least round scale of five steps that reaches the greatest amount', () => {
+    expect([794, 1000, 1001, 0.37, 12, 0].map(scaleTop)).toEqual([1000, 1000, 1250, 0.5, 12.5, 0]);
+  });
+  it('leave every bar room for its figure, in proportion to the amounts', () => {
+    const floors = [{ id: 'a', amount: 100 }, { id: 'b', amount: 50 }, { id: 'c', amount: null }].map((f) => ({ code: '', name: '', elevationM: 0, ...f }));
+    expect([...barLengths(floors, 200, 42)]).toEqual([['a', 150], ['b', 75], ['c', 0]]);
+    expect([...barLengths(floors, 20, 42).values()]).toEqual([0, 0, 0]);
   });
 });

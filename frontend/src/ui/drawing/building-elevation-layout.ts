@@ -66,12 +66,11 @@ function bandsOf(levels: readonly ElevationLevel[]) {
 }
 
 /** Storeys come out legible (82 px for the middle one, more on a large sheet) while the whole stays within a screen and a half. */
-function scaleOf(bands: { fromM: number; toM: number }[], width: number): number {
-  const storeyPx = Math.max(82, Math.min(width * 0.085, 124));
+function scaleOf(bands: { fromM: number; toM: number }[], width: number, storeyPx: number): number {
   const heights = bands.map((b) => b.toM - b.fromM).sort((a, b) => a - b);
   const middle = heights[Math.floor(heights.length / 2)] ?? 4;
   const totalM = (bands.at(-1)?.toM ?? 0) - (bands[0]?.fromM ?? 0);
-  return Math.max(8, Math.min(storeyPx / middle, Math.max(1100, width * 0.9) / Math.max(totalM, 1), 46));
+  return Math.max(Math.min(8, storeyPx / middle), Math.min(storeyPx / middle, Math.max(1100, width * 0.9) / Math.max(totalM, 1), 46));
 }
 
 /** Level marks that would sit on each other are moved apart; the triangle stays at the true height. */
@@ -85,12 +84,12 @@ function spreadMarks(marks: LevelMark[]): void {
 }
 
 /** Heights to one scale; within a level, widths by protected area. Pixels of the given total width. */
-export function layoutElevation(levels: readonly ElevationLevel[], width: number): ElevationLayout {
+export function layoutElevation(levels: readonly ElevationLevel[], width: number, storeyPx = Math.max(82, Math.min(width * 0.085, 124))): ElevationLayout {
   const padding = paddingOf(width);
   const plotLeft = width < wideFrom ? 66 : 104;
   const plotWidth = Math.max(120, width - plotLeft - padding.right);
   const bands = bandsOf(levels);
-  const pxPerM = scaleOf(bands, width);
+  const pxPerM = scaleOf(bands, width, storeyPx);
   const topM = bands.at(-1)?.toM ?? 0;
   const bottomM = bands[0]?.fromM ?? 0;
   const yOf = (m: number) => padding.top + (topM - m) * pxPerM;

@@ -13,9 +13,12 @@ import type { ScheduleColumn } from '../../../ui/schedule-table.js';
 import { QueryState } from '../../../ui/states.js';
 import { StatusWord } from '../../../ui/status-word.js';
 import { useProjects } from '../api/projects.js';
+import { ProjectSheet } from '../components/project-sheet.js';
 import { CreateProjectDrawer } from '../components/create-project-drawer.js';
 import { FirstVisit } from '../components/first-visit.js';
 
+/** Up to this many, each project has a sheet with its building; more are a table. */
+const mostSheets = 3;
 const notIssued = 'nothing is issued yet';
 
 const columns: ScheduleColumn<ProjectListItemDto>[] = [
@@ -53,16 +56,18 @@ export default function ProjectsPage() {
     <Page title="Projects" heading={words.heading} sub={words.sub} actions={projects.data?.length ? start : null}>
       <QueryState query={projects} what="your projects">
         {(rows) => (
-          <Panel flush label="Projects">
-            {rows.length === 0 ? (
-              <FirstVisit start={start} />
-            ) : (
-              <ScheduleTable
-                caption="Projects" columns={columns} rows={rows} rowKey={(p) => p.id}
-                onRow={(p) => ({ style: { cursor: 'pointer' }, onClick: (event) => { if (!(event.target as HTMLElement).closest('a')) void navigate(`/projects/${p.id}`); } })}
-              />
-            )}
-          </Panel>
+          rows.length > 0 && rows.length <= mostSheets ? <div className="mt-stack">{rows.map((p) => <ProjectSheet key={p.id} project={p} />)}</div> : (
+            <Panel flush label="Projects">
+              {rows.length === 0 ? (
+                <FirstVisit start={start} />
+              ) : (
+                <ScheduleTable
+                  caption="Projects" columns={columns} rows={rows} rowKey={(p) => p.id}
+                  onRow={(p) => ({ style: { cursor: 'pointer' }, onClick: (event) => { if (!(event.target as HTMLElement).closest('a')) void navigate(`/projects/${p.id}`); } })}
+                />
+              )}
+            </Panel>
+          )
         )}
       </QueryState>
       <CreateProjectDrawer open={creating} onClose={() => setCreating(false)} />

@@ -24,6 +24,8 @@ function rowsOf({ split, names }: QuantitiesDto, by: SplitKey): Row[] {
   return [...rows, { key: 'total', name: 'Total', total: split.total, last: true }];
 }
 
+/** On a narrow screen a row is a list of named values, in which what a floor has none of need not be said. */
+const foldsAway = (value: string | null | undefined, row: Row) => (value == null && !row.last ? { className: 'mt-num mt-fold-hide' } : {});
 const totalClass = (row: Row) => (row.last ? 'mt-row-total' : '');
 
 /** One measure over two splits. Each cell is a sum of the same printed lines, so both totals and every other split agree. */
@@ -34,6 +36,7 @@ export function Matrix({ data, rows, columns, measure }: TableProps & { measure:
   const keys = inOrder(columns, split.columns.map((c) => c.key));
   const cellColumns = keys.map((key): ScheduleColumn<Row> => ({
     title: keyName(columns, key, names), key, numeric: true, width: 122,
+    onCell: (row) => foldsAway((row.last ? columnTotals.get(key) : cells.get(`${row.key}\n${key}`))?.[measures[measure].field], row),
     render: (_, row) => <Amount totals={row.last ? columnTotals.get(key) : cells.get(`${row.key}\n${key}`)} measure={measure} currency={currency} where={`${row.name}, ${keyName(columns, key, names)}`} />,
   }));
   return (
@@ -57,7 +60,7 @@ export function AllMeasures({ data, rows }: Pick<TableProps, 'data' | 'rows'>) {
       columns={[
         { title: splitKeyNames[rows], key: 'name', width: 200, className: 'mt-fold-head', foldLabel: '', render: (_, r) => r.name },
         { title: 'Pieces', key: 'pieces', numeric: true, width: 80, render: (_, r) => <Quantity value={r.total.pieces} what={`Pieces of steel, ${r.name}`} /> },
-        ...measureKeys.map((measure): ScheduleColumn<Row> => ({ title: labelOf(measure, currency), key: measure, numeric: true, width: 118, render: (_, r) => <Amount totals={r.total} measure={measure} currency={currency} where={r.name} /> })),
+        ...measureKeys.map((measure): ScheduleColumn<Row> => ({ title: labelOf(measure, currency), key: measure, numeric: true, width: 118, onCell: (r) => foldsAway(r.total[measures[measure].field], r), render: (_, r) => <Amount totals={r.total} measure={measure} currency={currency} where={r.name} /> })),
       ]}
     />
   );

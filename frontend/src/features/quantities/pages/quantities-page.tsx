@@ -4,6 +4,7 @@ import { useSearchParams } from 'react-router-dom';
 import { deliveryRules, quantityQuerySchema, sentence, splitKeyNames, splitKeys } from '@mantlet/common';
 import type { BuildingDto, ProjectDto, QuantitiesDto, QuantityQuery, SplitKey } from '@mantlet/common';
 import { BuildingQuantities } from '../../../ui/drawing/building-quantities.js';
+import { FloorBars } from '../../../ui/drawing/floor-bars.js';
 import { Page } from '../../../ui/page.js';
 import { Panel } from '../../../ui/panel.js';
 import { Quantity } from '../../../ui/quantity.js';
@@ -55,10 +56,23 @@ function Drawing({ data, building, measure, project }: { data: QuantitiesDto; bu
   const amounts = new Map([...byZone(data.lines, measure)].map(([zone, amount]) => [zone, amount === null ? null : Number(amount)]));
   const { name } = measures[measure];
   const unit = unitOf(measure, data.currency);
+  const decimals = measure === 'volume' ? 1 : 0;
+  const floors = building.levels.map(({ id, code, name: levelName, elevationM, zones }) => {
+    const own = zones.map((zone) => amounts.get(zone.id)).filter((a) => a !== undefined);
+    // a floor with a zone that is not determined has no sum
+    const amount = own.length === 0 || own.includes(null) ? null : own.reduce<number>((sum, a) => sum + (a ?? 0), 0);
+    return { id, code, name: levelName, elevationM, amount };
+  });
   return (
-    <Panel flush title={`${name} by zone`} sub={`In ${unit}. The closer the hatch, the more; a dash has none.`}>
-      <BuildingQuantities levels={building.levels} amounts={amounts} unit={unit} decimals={measure === 'volume' ? 1 : 0} what={name} label={`Elevation of ${project.name}: ${name.toLowerCase()} by zone. The same figures stand in the table when rows are zones.`} />
-    </Panel>
+    <div className="mt-columns mt-quantity-drawings">
+      <Panel flush title={`${name} by zone`}>
+        <BuildingQuantities levels={building.levels} amounts={amounts} unit={unit} decimals={decimals} what={name} label={`Elevation of ${project.name}: ${name.toLowerCase()} by zone.`} />
+      </Panel>
+      <div className="mt-stack">
+        <Panel flush title={`${name} by level`}><FloorBars floors={floors} unit={unit} decimals={decimals} label={`${name} by level`} /></Panel>
+        <MoneyLine data={data} />
+      </div>
+    </div>
   );
 }
 
@@ -86,17 +100,12 @@ function Content({ data, choice, project }: { data: QuantitiesDto; choice: Choic
       {missing.length > 0 && (
         <Panel title="Some quantities are not determined"><ul className="mt-missing">{missing.map(sentence).map((m) => <li key={m}>{m}</li>)}</ul></Panel>
       )}
-      <Panel flush title={`${measures[choice.measure].name} by ${splitKeyNames[choice.rows].toLowerCase()} and ${splitKeyNames[choice.columns].toLowerCase()}`} sub={`In ${unitOf(choice.measure, data.currency)}. Every split adds up to the same grand total.`}>
+      <QueryState query={building} what="the building">{(b) => <Drawing data={data} building={b} measure={choice.measure} project={project} />}</QueryState>
+      <Panel flush className="mt-fit" title={`${measures[choice.measure].name} by ${splitKeyNames[choice.rows].toLowerCase()} and ${splitKeyNames[choice.columns].toLowerCase()}`} sub={`In ${unitOf(choice.measure, data.currency)}. Every split adds up to the same grand total.`}>
         <Matrix data={data} rows={choice.rows} columns={choice.columns} measure={choice.measure} />
       </Panel>
-      <div className="mt-columns">
-        <div className="mt-stack">
-          <QueryState query={building} what="the building">{(b) => <Drawing data={data} building={b} measure={choice.measure} project={project} />}</QueryState>
-        </div>
-        <div className="mt-stack"><MoneyLine data={data} /></div>
-      </div>
-      <Panel flush title="What to order" sub="Containers, bags and sheets are rounded up once for each product and delivery, not for each member."><Purchases data={data} /></Panel>
-      <Panel flush title={`All quantities by ${splitKeyNames[choice.rows].toLowerCase()}`}><AllMeasures data={data} rows={choice.rows} /></Panel>
+      <Panel flush className="mt-fit" title="What to order" sub="Containers, bags and sheets are rounded up once for each product and delivery, not for each member."><Purchases data={data} /></Panel>
+      <Panel flush title={`All quantities by ${splitKeyNames[choice.rows].toLowerCase()}`} sub="Rounded for reading; the figures in full are in the CSV and the workbook."><AllMeasures data={data} rows={choice.rows} /></Panel>
     </>
   );
 }
