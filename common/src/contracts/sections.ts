@@ -40,6 +40,8 @@ export type CustomSection = z.infer<typeof customSectionSchema>;
 
 export const sectionQuerySchema = z.object({
   search: nameSchema.optional(),
+  /** the one with this id, if it may be seen */
+  id: idSchema.optional(),
   family: z.enum(sectionFamilies).optional(),
   projectId: idSchema.optional(),
   page: z.coerce.number().int().min(1).default(1),

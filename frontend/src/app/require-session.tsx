@@ -1,6 +1,8 @@
 import { useQueryClient } from '@tanstack/react-query';
 import { useEffect, useState } from 'react';
 import { Navigate, Outlet, useLocation } from 'react-router-dom';
+import { DraftOwner } from '../ui/form/use-draft.js';
+import { pruneDrafts } from '../lib/drafts.js';
 import { useSession } from '../features/session/api/session.js';
 import { SessionEndedDialog } from '../features/session/components/session-ended-dialog.js';
 import { onSignedOut } from '../lib/api-client.js';
@@ -18,6 +20,7 @@ export function RequireSession() {
   const client = useQueryClient();
   const [ended, setEnded] = useState(false);
   useEffect(() => {
+    pruneDrafts();
     onSignedOut(() => setEnded(true));
     return () => onSignedOut(() => undefined);
   }, []);
@@ -28,7 +31,7 @@ export function RequireSession() {
   const { user } = session.data;
   if (!user) return <Navigate to={`/sign-in?to=${encodeURIComponent(location.pathname + location.search)}`} replace />;
   return (
-    <>
+    <DraftOwner value={user.id}>
       <LeaveGuard />
       <Outlet />
       {ended && (
@@ -37,6 +40,6 @@ export function RequireSession() {
           onBack={() => { setEnded(false); void client.invalidateQueries({ predicate: (q) => q.queryKey[0] !== sessionKey[0] }); }}
         />
       )}
-    </>
+    </DraftOwner>
   );
 }

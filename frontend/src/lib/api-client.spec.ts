@@ -26,7 +26,7 @@ describe('the API client', () => {
     const error = await failure(api.post('/x', {}));
     expect(error).toMatchObject({ status: 400, message: 'Height: must be above 0', code: 'shared.invalid', issues: [{ path: 'heightM', message: 'must be above 0' }] });
   });
-  it.each([[403, 'isRefused'], [404, 'isMissing'], [409, 'isStale'], [401, 'isSignedOut']] as const)('knows what %i means', async (status, what) => {
+  it.each([[403, 'isRefused'], [404, 'isMissing'], [401, 'isSignedOut']] as const)('knows what %i means', async (status, what) => {
     answer(status, JSON.stringify({ message: 'No.' }));
     expect((await failure(api.get('/x')))[what]).toBe(true);
   });

@@ -7,6 +7,15 @@ export interface ApiIssue {
   message: string;
 }
 
+/** Sent with a refusal of an edit that somebody else's save overtook. */
+export interface Overtaken {
+  /** what stands now */
+  current: unknown;
+  /** who saved it, and when; null where the server does not know */
+  by: string | null;
+  at: string | null;
+}
+
 export class ApiError extends Error {
   override name = 'ApiError';
   constructor(
@@ -15,12 +24,18 @@ export class ApiError extends Error {
     message: string,
     readonly issues: ApiIssue[] = [],
     readonly code: string | null = null,
+    readonly overtaken: Overtaken | null = null,
   ) {
     super(message);
   }
   get isRefused() { return this.status === 403; }
   get isMissing() { return this.status === 404; }
-  get isStale() { return this.status === 409; }
+  /** Somebody else saved it meanwhile. Other conflicts (a name that is taken) show no version. */
+  get isStale() { return this.overtaken !== null; }
+  /** No answer, or one from something between here and the server: the request may have been carried out all the same. */
+  get isUnanswered() { return this.status === 0 || this.status === 502 || this.status === 504; }
+  /** The same again may well go through. */
+  get isPassing() { return this.status === 0 || this.status === 429 || this.status >= 500 || this.code === 'shared.busy'; }
   get isSignedOut() { return this.status === 401; }
 }
 
@@ -55,12 +70,14 @@ const strangeAnswer = (status: number) =>
 
 async function errorOf(response: Response): Promise<ApiError> {
   const body: unknown = await response.json().catch(() => null);
-  const said = (body ?? {}) as { message?: unknown; code?: unknown; issues?: unknown };
+  const said = (body ?? {}) as { message?: unknown; code?: unknown; issues?: unknown; current?: unknown; by?: unknown; at?: unknown };
   const issues = Array.isArray(said.issues)
     ? said.issues.filter((i): i is ApiIssue => typeof i?.path === 'string' && typeof i?.message === 'string')
     : [];
   const message = typeof said.message === 'string' && said.message ? said.message : strangeAnswer(response.status);
-  return new ApiError(response.status, message, issues, typeof said.code === 'string' ? said.code : null);
+  const text = (value: unknown) => (typeof value === 'string' ? value : null);
+  const overtaken = response.status === 409 && said.current != null ? { current: said.current, by: text(said.by), at: text(said.at) } : null;
+  return new ApiError(response.status, message, issues, text(said.code), overtaken);
 }
 
 async function send<T>(path: string, init: RequestInit, quiet401 = false): Promise<T> {

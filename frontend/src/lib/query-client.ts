@@ -9,7 +9,8 @@ export const createQueryClient = () =>
   new QueryClient({
     defaultOptions: {
       queries: { staleTime: 15_000, retry: worthRetrying, refetchOnWindowFocus: true },
-      mutations: { retry: false },
+      // a save that cannot go out fails at once and says so; held back, it would go out later behind the person's back
+      mutations: { retry: false, networkMode: 'always' },
     },
   });
 

@@ -43,7 +43,7 @@ const cut = (text: string, most = longest) => (text.length > most ? `${text.slic
 export const isNothing = (value: unknown): boolean => value === null || value === undefined || value === '' || (Array.isArray(value) && value.length === 0);
 
 /** A stored value as people read it, with the unit its field's name spells. Limits of temperature are cut, never rounded up. */
-export function valueInWords(field: string, value: unknown): string {
+export function valueInWords(field: string, value: unknown, most = longest): string {
   if (isNothing(value) || value === null) return 'nothing';
   if (typeof value === 'boolean') return value ? 'yes' : 'no';
   if (typeof value === 'number') {
@@ -51,11 +51,11 @@ export function valueInWords(field: string, value: unknown): string {
     const unit = endingOf(lastOf(field))?.[1];
     return unit ? `${numberInWords(value)}\u00a0${unit}` : numberInWords(value);
   }
-  if (Array.isArray(value)) return cut(value.map((v) => valueInWords(field, v)).join(', '));
-  if (typeof value === 'object') return cut(Object.entries(value).filter(([, v]) => !isNothing(v)).map(([k, v]) => `${fieldName(k)} ${valueInWords(k, v)}`).join('; '));
+  if (Array.isArray(value)) return cut(value.map((v) => valueInWords(field, v, most)).join(', '), most);
+  if (typeof value === 'object') return cut(Object.entries(value).filter(([, v]) => !isNothing(v)).map(([k, v]) => `${fieldName(k)} ${valueInWords(k, v, most)}`).join('; '), most);
   const text = String(value);
   if (/^[\da-f]{64}$/.test(text)) return `${text.slice(0, 12)}…`;
-  return cut(codeWords[text] ?? text);
+  return cut(codeWords[text] ?? text, most);
 }
 
 const isRecord = (value: unknown): value is Record<string, unknown> => typeof value === 'object' && value !== null && !Array.isArray(value);

@@ -27,7 +27,7 @@ export class SectionsService {
 
   /** The catalogue alone where there is no project; else with the project's own first. */
   async list(projectId: string | null, query: SectionQuery): Promise<Page<SectionDto>> {
-    const scopes = visibleTo(projectId).map((where) => ({ ...where, ...(query.family ? { family: query.family } : {}) }));
+    const scopes = visibleTo(projectId).map((where) => ({ ...where, ...(query.family ? { family: query.family } : {}), ...(query.id ? { id: query.id } : {}) }));
     const names = await this.dataSource.manager.find(Section, {
       where: scopes, select: { id: true, projectId: true, family: true, designation: true, designationKey: true, otherNames: true },
     });

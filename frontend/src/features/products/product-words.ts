@@ -11,6 +11,17 @@ export const formNames: Record<Evidence['form'], string> = { table: 'Thickness t
 /** "Open section, beam, R 60" */
 export const tableName = (t: Pick<ThicknessTable, 'shape' | 'orientation' | 'periodMin'>): string =>
   `${shapeNames[t.shape]}, ${orientationNames[t.orientation].toLowerCase()}, R ${t.periodMin}`;
+/** A product's parts where two versions of it are compared: a table is named and measured, not written out. */
+export const productEditWords = {
+  label: (path: string): string | undefined => /^evidence\.tables\./.test(path) ? 'Thickness table' : /^evidence\.fits\./.test(path) ? 'Regression' : path === 'evidence' ? 'Assessed data' : undefined,
+  value: (path: string, value: unknown): string | undefined => {
+    if (/^evidence\.tables(\.|$)/.test(path) && value) {
+      const tables = (Array.isArray(value) ? value : [value]) as ThicknessTable[];
+      return tables.map((t) => `${tableName(t)}: ${count(t.sectionFactorsPerM.length, 'section factor')} × ${count(t.temperaturesC.length, 'temperature')}, ${t.thickness.flat().join(' ')}`).join('\n');
+    }
+    return path === 'evidence' && value ? formNames[(value as Evidence).form] : undefined;
+  },
+};
 /** "Open section, beam" */
 export const fitName = (f: Pick<RegressionFit, 'shape' | 'orientation'>): string => `${shapeNames[f.shape]}, ${orientationNames[f.orientation].toLowerCase()}`;
 

@@ -52,7 +52,7 @@ export function PreviewStep({ projectId, importId, onDone, onBack, onAbandon }: 
   // not by mutate's own callbacks: this step is gone once the import is confirmed
   const send = () => confirm.mutateAsync({ leaveOutWrongRows: leaveOut }).then(onDone, (error: unknown) => {
     // the outcome would differ from what was shown: show what it would be now
-    if (error instanceof ApiError && error.isStale) void preview.refetch();
+    if (error instanceof ApiError && error.status === 409) void preview.refetch();
   });
   return (
     <QueryState query={preview} what="the rows">

@@ -1,5 +1,5 @@
 import { keepPreviousData, queryOptions, useQuery } from '@tanstack/react-query';
-import type { Acceptance, AcceptanceDto, BulkMember, MemberChoice, MemberInput, MemberQuery, MemberSheetDto, MemberStructural, MemberUpdate, MembersChangedDto, MemberPageDto } from '@mantlet/common';
+import type { Acceptance, AcceptanceDto, BulkMember, MemberChoice, MemberDto, MemberInput, MemberQuery, MemberSheetDto, MemberStructural, MemberUpdate, MembersChangedDto, MemberPageDto } from '@mantlet/common';
 import { api } from '../../../lib/api-client.js';
 import { projectKey } from '../../../lib/query-client.js';
 import { useProjectMutation } from '../../projects/api/projects.js';
@@ -22,9 +22,9 @@ export const useMember = (projectId: string, memberId: string) => useQuery(membe
 export interface SavedMember { id: string }
 export const useCreateMember = (projectId: string) => useProjectMutation<MemberInput, SavedMember>(projectId, (body) => api.post(at(projectId), body));
 export const useUpdateMember = (projectId: string, memberId: string) =>
-  useProjectMutation<MemberUpdate>(projectId, (body) => api.patch(`${at(projectId)}/${memberId}`, body));
+  useProjectMutation<MemberUpdate, MemberDto>(projectId, (body) => api.patch(`${at(projectId)}/${memberId}`, body));
 export const useSetStructural = (projectId: string, memberId: string) =>
-  useProjectMutation<MemberStructural>(projectId, (body) => api.put(`${at(projectId)}/${memberId}/structural`, body));
+  useProjectMutation<MemberStructural, MemberDto>(projectId, (body) => api.put(`${at(projectId)}/${memberId}/structural`, body));
 export const useBulkMembers = (projectId: string) =>
   useProjectMutation<BulkMember, MembersChangedDto>(projectId, (body) => api.post(`${at(projectId)}/bulk`, body));
 export const useDeleteMembers = (projectId: string) =>

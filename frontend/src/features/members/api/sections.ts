@@ -15,4 +15,10 @@ export const sectionsQuery = (projectId: string, search: string) =>
     staleTime: 5 * 60_000,
   });
 export const useSections = (projectId: string, search: string, enabled: boolean) => useQuery({ ...sectionsQuery(projectId, search), enabled });
+/** One section by its id, for a form that was given the id alone. */
+export const useSection = (projectId: string, id: string | null) =>
+  useQuery({
+    queryKey: projectKey(projectId, 'section', id), staleTime: 5 * 60_000, enabled: id !== null,
+    queryFn: async ({ signal }) => (await api.get<Page<SectionDto>>(at(projectId), { id, pageSize: 1 }, signal)).items[0] ?? null,
+  });
 export const useCreateSection = (projectId: string) => useProjectMutation<CustomSection, SectionDto>(projectId, (body) => api.post(at(projectId), body));

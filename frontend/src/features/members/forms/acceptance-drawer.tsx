@@ -1,9 +1,11 @@
+import { useMemo } from 'react';
+import type { z } from 'zod';
 import { acceptanceKinds, acceptanceFormSchema, defaultDesignBasis } from '@mantlet/common';
 import type { Acceptance } from '@mantlet/common';
 import { count, joinWords } from '../../../lib/format.js';
 import { RadioField, TextField } from '../../../ui/form/fields.js';
 import { FormDrawer } from '../../../ui/form/form-drawer.js';
-import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
+import { useEditForm } from '../../../ui/form/use-edit-form.js';
 import { useCurrentProject } from '../../projects/project-context.js';
 import { useWatch } from 'react-hook-form';
 import { useAccept } from '../api/members.js';
@@ -22,12 +24,13 @@ export function AcceptanceDrawer({ members, onClose, onAccepted }: AcceptanceDra
   const by = acceptable(members, aboveC);
   const words: Record<AcceptanceKind, string> = { assumed: 'An assumed critical temperature', 'high-temperature': `A critical temperature above ${aboveC} °C`, bare: 'Staying bare' };
   const first = acceptanceKinds.find((kind) => by[kind].length > 0);
-  const form = useContractForm(acceptanceFormSchema, { defaultValues: { ...(first && { kind: first }), reason: '' } });
-  useServerIssues(form, accept.error);
+  const { form, edit } = useEditForm({
+    schema: acceptanceFormSchema, name: `accept/${members.length === 1 ? members[0]?.id : project.id}`, title: 'Accept', save: accept,
+    record: useMemo(() => ({ values: { ...(first && { kind: first }), reason: '' } as z.input<typeof acceptanceFormSchema>, version: null }), [first]),
+    body: (input: Omit<Acceptance, 'memberIds' | 'found'>) => ({ ...input, memberIds: by[input.kind].map((m) => m.id) }), onSaved: ({ accepted }) => onAccepted(accepted),
+  });
   const kind = useWatch({ control: form.control, name: 'kind' }) as AcceptanceKind | undefined;
   const chosen = kind ? by[kind] : [];
-  const send = (body: Omit<Acceptance, 'memberIds' | 'found'>) => accept.mutate({ ...body, memberIds: by[body.kind].map((m) => m.id) }, { onSuccess: ({ accepted }) => onAccepted(accepted) });
-  const save = form.handleSubmit(send);
   const options = acceptanceKinds.map((value) => ({ value, label: `${words[value]}: ${by[value].length === 0 ? 'none chosen' : count(by[value].length, 'member')}`, disabled: by[value].length === 0 }));
   if (!first) {
     return (
@@ -38,7 +41,7 @@ export function AcceptanceDrawer({ members, onClose, onAccepted }: AcceptanceDra
   }
   return (
     <FormDrawer
-      title="Accept" open onClose={onClose} onSubmit={(e) => { void save(e); }} dirty={form.formState.isDirty && !accept.isSuccess} saving={accept.isPending} error={accept.error}
+      title="Accept" open onClose={onClose} edit={edit}
       saveText={`Accept for ${count(chosen.length, 'member')}`}
     >
       <RadioField control={form.control} name="kind" label="What you accept" options={options} help="Your name and the date go with it. It holds only while the accepted value stands." />

@@ -2,15 +2,14 @@ import { Button, Checkbox } from 'antd';
 import { useFieldArray, useWatch } from 'react-hook-form';
 import type { Control, FieldPath } from 'react-hook-form';
 import { actionCategories, actionCategoryNames } from '@mantlet/common';
-import type { MemberStructural } from '@mantlet/common';
 import { NumberField, RadioField, SelectField } from '../../../ui/form/fields.js';
 import { BeamFields } from './beam-fields.js';
 import { noEffects } from './structural-form.js';
-import type { StructuralValues } from './structural-form.js';
+import type { StructuralOut, StructuralValues } from './structural-form.js';
 import type { UseFormReturn } from 'react-hook-form';
 
-export type StructuralForm = UseFormReturn<StructuralValues, unknown, MemberStructural>;
-export type StructuralControl = Control<StructuralValues, unknown, MemberStructural>;
+export type StructuralForm = UseFormReturn<StructuralValues, unknown, StructuralOut>;
+export type StructuralControl = Control<StructuralValues, unknown, StructuralOut>;
 const categories = actionCategories.map((value) => ({ value, label: actionCategoryNames[value] }));
 const actions = 'basis.design.actions';
 

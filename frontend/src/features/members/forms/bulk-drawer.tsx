@@ -4,7 +4,7 @@ import type { BulkMember } from '@mantlet/common';
 import { count } from '../../../lib/format.js';
 import { SelectField } from '../../../ui/form/fields.js';
 import { FormDrawer } from '../../../ui/form/form-drawer.js';
-import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
+import { useEditForm } from '../../../ui/form/use-edit-form.js';
 import { useBulkMembers } from '../api/members.js';
 import { bulkFormSchema, emptyBulk } from './bulk-form.js';
 import { ExposureFields } from './exposure-fields.js';
@@ -12,22 +12,23 @@ import { formOptions, gradeOptions, placeOptions, typeOptions, useZoneOptions } 
 import { SectionField } from './section-field.js';
 
 interface BulkDrawerProps { projectId: string; members: readonly { id: string; version: number }[]; onClose: () => void; onChanged: (changed: number) => void }
+const start = { values: emptyBulk, version: null };
 const kept = { allowClear: true, placeholder: 'Keep as it is' };
 
 /** Sets the same values on many members at once; a field left empty changes nothing. */
 export function BulkDrawer({ projectId, members, onClose, onChanged }: BulkDrawerProps) {
   const bulk = useBulkMembers(projectId);
   const zones = useZoneOptions(projectId);
-  const form = useContractForm(bulkFormSchema, { defaultValues: emptyBulk });
-  useServerIssues(form, bulk.error);
+  const { form, edit } = useEditForm({
+    schema: bulkFormSchema, name: `bulk/${projectId}`, title: 'Set values on several members', record: start, save: bulk,
+    body: (set: BulkMember['set']) => ({ members: members.map(({ id, version }) => ({ id, version })), set }), onSaved: ({ changed }) => onChanged(changed),
+  });
   const { control } = form;
   const exposure = useWatch({ control, name: 'exposure' });
-  const send = (set: BulkMember['set']) => bulk.mutate({ members: members.map(({ id, version }) => ({ id, version })), set }, { onSuccess: ({ changed }) => onChanged(changed) });
-  const save = form.handleSubmit(send);
   return (
     <FormDrawer
-      title={`Set values on ${count(members.length, 'member')}`} open onClose={onClose} onSubmit={(e) => { void save(e); }} dirty={form.formState.isDirty && !bulk.isSuccess}
-      saving={bulk.isPending} error={bulk.error} saveText={`Set on ${count(members.length, 'member')}`}
+      title={`Set values on ${count(members.length, 'member')}`} open onClose={onClose} edit={edit}
+      saveText={`Set on ${count(members.length, 'member')}`}
     >
       <p className="mt-sub">Choose only what shall change. Results are worked out again when you save.</p>
       <SelectField control={control} name="zoneId" label="Zone" options={zones} search {...kept} />

@@ -8,13 +8,14 @@ import type { CustomSection, SectionDto, SectionKind } from '@mantlet/common';
 import { NumberField, TextField } from '../../../ui/form/fields.js';
 import { FieldFrame } from '../../../ui/form/field-frame.js';
 import { FormDrawer } from '../../../ui/form/form-drawer.js';
-import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
+import { useEditForm } from '../../../ui/form/use-edit-form.js';
 import { SectionDrawing } from '../../../ui/drawing/section-drawing.js';
 import { shapeDetails, shapePreview } from '../../../ui/drawing/shape-preview.js';
 import { useCreateSection } from '../api/sections.js';
 import { completeShape, dimensionsOf, sectionKindNames, shapeOfKind } from './custom-section.js';
 
 type Values = z.input<typeof customSectionSchema>;
+const blank = { values: { designation: '', shape: shapeOfKind('i', {}) as never } as Values, version: null };
 const kinds = (Object.keys(sectionKindNames) as SectionKind[]).map((value) => ({ value, label: sectionKindNames[value] }));
 
 interface CustomSectionDrawerProps { projectId: string; open: boolean; onClose: () => void; onMade: (section: SectionDto) => void }
@@ -23,18 +24,18 @@ interface CustomSectionDrawerProps { projectId: string; open: boolean; onClose: 
 export function CustomSectionDrawer({ projectId, open, onClose, onMade }: CustomSectionDrawerProps) {
   const kindId = useId();
   const create = useCreateSection(projectId);
-  const form = useContractForm<Values, CustomSection>(customSectionSchema, { defaultValues: { designation: '', shape: shapeOfKind('i', {}) as never } });
-  useServerIssues(form, create.error);
+  const { form, edit } = useEditForm<Values, CustomSection, CustomSection, SectionDto>({
+    schema: customSectionSchema, name: `new-section/${projectId}`, title: 'Make a section', record: blank, save: create, body: (input) => input,
+    onSaved: (section) => { onMade(section); onClose(); },
+  });
   const typed = useWatch({ control: form.control, name: 'shape' }) as { kind: SectionKind } & Record<string, unknown>;
   const shape = completeShape(typed);
   const outline = shape && shapePreview(shape);
-  const close = () => { form.reset(); create.reset(); onClose(); };
-  const save = form.handleSubmit((body) => create.mutate(body, { onSuccess: (section) => { onMade(section); close(); } }));
   return (
     <FormDrawer
-      title="Make a section" open={open} onClose={close} dirty={form.formState.isDirty && !create.isSuccess} saving={create.isPending} error={create.error} saveText="Make the section"
+      title="Make a section" open={open} onClose={onClose} edit={edit} saveText="Make the section"
       // the drawer's form lies inside another one in the tree of components: its submit must not reach that one
-      onSubmit={(event) => { event.stopPropagation(); void save(event); }}
+      onSubmit={(event) => { event.stopPropagation(); edit.submit(event); }}
     >
       <TextField control={form.control} name="designation" label="Name" help="As it will stand in the schedule, such as PG 800x300x15x25." />
       <FieldFrame id={kindId} label="Shape" error={undefined}>

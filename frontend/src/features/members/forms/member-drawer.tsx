@@ -1,37 +1,52 @@
-import { useState } from 'react';
-import type { MemberDto, SectionDto } from '@mantlet/common';
+import { useMemo, useState } from 'react';
+import type { MemberDto, MemberInput, SectionDto } from '@mantlet/common';
 import { FormDrawer } from '../../../ui/form/form-drawer.js';
-import { useServerIssues } from '../../../ui/form/use-contract-form.js';
+import { useEditForm } from '../../../ui/form/use-edit-form.js';
 import { useCreateMember, useUpdateMember } from '../api/members.js';
-import { MemberFields } from './member-fields.js';
-import { useMemberForm } from './member-form.js';
+import { MemberFields, useZoneOptions } from './member-fields.js';
+import { memberSchema, memberStanding, memberWords, newMember } from './member-form.js';
+import type { Named } from './member-form.js';
 
 interface NewProps { projectId: string; zoneId: string | null; onClose: () => void; onAdded: (mark: string) => void }
 /** Adds a member. Mount it when it opens, so that every one starts blank. */
 export function NewMemberDrawer({ projectId, zoneId, onClose, onAdded }: NewProps) {
   const create = useCreateMember(projectId);
+  const zones = useZoneOptions(projectId);
   const [section, setSection] = useState<SectionDto | null>(null);
-  const form = useMemberForm(null, zoneId ? { zoneId } : {});
-  useServerIssues(form, create.error);
-  const save = form.handleSubmit((body) => create.mutate(body, { onSuccess: () => onAdded(body.mark) }));
+  const { form, edit } = useEditForm({
+    schema: memberSchema, name: `new-member/${projectId}`, title: 'Add a member', save: create, body: (input: MemberInput) => input, onSaved: (_, input) => onAdded(input.mark),
+    record: useMemo(() => newMember(zoneId), [zoneId]), words: memberWords({ zones, sections: [section] }),
+  });
   return (
-    <FormDrawer title="Add a member" open onClose={onClose} onSubmit={(e) => { void save(e); }} dirty={form.formState.isDirty && !create.isSuccess} saving={create.isPending} error={create.error} saveText="Add the member" size={620}>
+    <FormDrawer title="Add a member" open onClose={onClose} edit={edit} saveText="Add the member" size={620}>
       <MemberFields form={form} projectId={projectId} section={section} setSection={setSection} />
     </FormDrawer>
   );
 }
 
-interface EditProps { projectId: string; member: MemberDto; section: SectionDto; onClose: () => void; onReload: () => void }
-/** Changes what the specifier decides of a member. A save against an older version is refused and keeps what was typed. */
-export function EditMemberDrawer({ projectId, member, section: saved, onClose, onReload }: EditProps) {
+interface EditProps { projectId: string; member: MemberDto; section: SectionDto; onClose: () => void }
+/** Changes what the specifier decides of a member. A save that was overtaken shows both versions. */
+export function EditMemberDrawer({ projectId, member, section: saved, onClose }: EditProps) {
   const update = useUpdateMember(projectId, member.id);
+  const makeAnew = useCreateMember(projectId);
+  const zones = useZoneOptions(projectId);
   const [section, setSection] = useState<SectionDto | null>(saved);
-  const form = useMemberForm(member);
-  useServerIssues(form, update.error);
-  const save = form.handleSubmit((body) => update.mutate({ ...body, version: member.version }, { onSuccess: onClose }));
-  const reload = () => { update.reset(); onReload(); };
+  const [theirs, setTheirs] = useState<Named | null>(null);
+  const title = `Change ${member.mark}`;
+  const { form, edit } = useEditForm({
+    schema: memberSchema, name: `member/${member.id}`, title, save: update, onSaved: onClose,
+    record: useMemo(() => memberStanding(member), [member]),
+    body: (input, { version }) => ({ ...input, version: version ?? member.version }),
+    // of a member that somebody else saved the answer names the section, which this form may never have seen
+    read: (answer: MemberDto & { designation?: string }) => {
+      if (answer.designation) setTheirs({ id: answer.sectionId, designation: answer.designation });
+      return memberStanding(answer);
+    },
+    anew: (input) => makeAnew.mutateAsync(input),
+    words: memberWords({ zones, sections: [saved, section, theirs] }),
+  });
   return (
-    <FormDrawer title={`Change ${member.mark}`} open onClose={onClose} onSubmit={(e) => { void save(e); }} dirty={form.formState.isDirty && !update.isSuccess} saving={update.isPending} error={update.error} onReload={reload} size={620}>
+    <FormDrawer title={title} open onClose={onClose} edit={edit} error={makeAnew.error} size={620}>
       <MemberFields form={form} projectId={projectId} section={section} setSection={setSection} />
     </FormDrawer>
   );

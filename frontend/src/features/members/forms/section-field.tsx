@@ -7,7 +7,7 @@ import { SectionDrawing } from '../../../ui/drawing/section-drawing.js';
 import { shapeDetails, shapePreview } from '../../../ui/drawing/shape-preview.js';
 import { describedBy, FieldFrame } from '../../../ui/form/field-frame.js';
 import type { AnyControl } from '../../../ui/form/fields.js';
-import { useSections } from '../api/sections.js';
+import { useSection, useSections } from '../api/sections.js';
 import { sectionLabel } from './member-form.js';
 
 /** Follows what is typed after a pause, so that each letter is not a request. */
@@ -38,11 +38,14 @@ export function SectionField<T extends { sectionId?: string | null }>({ control,
   const { ref, value, onBlur, onChange } = field;
   const [typed, setTyped] = useState('');
   const [taken, setTaken] = useState<SectionDto | null>(current);
+  // a draft, or somebody else's version, brings an id that this form has not seen
+  const strange = typeof value === 'string' && value !== current?.id && value !== taken?.id ? value : null;
+  const fetched = useSection(projectId, strange).data;
   const search = usePaused(typed.trim());
   const found = useSections(projectId, search, search.length > 0);
   const items = search.length > 0 ? found.data?.items ?? [] : [];
   // the section it has stands first only while nothing is looked for: Enter must take what was found
-  const held = current ?? (taken?.id === value ? taken : null);
+  const held = [taken, current, fetched].find((section) => section?.id === value) ?? current;
   const known = held && (search.length === 0 || typed.trim().length === 0) ? [held] : items;
   const error = fieldState.error?.message;
   const words = help ?? 'Type its name: UB 457x191x67, 254 x 146 x 31 UB, IPE300, SHS 150x150x6.3.';

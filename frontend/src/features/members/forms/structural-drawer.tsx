@@ -1,16 +1,18 @@
+import { useMemo } from 'react';
 import { useWatch } from 'react-hook-form';
 import type { FieldPath } from 'react-hook-form';
 import { defaultDesignBasis, loadHeightNames, loadHeights, memberTypeNames, momentShapeNames, wayNames } from '@mantlet/common';
-import type { CriticalTemperatureWay, MemberDto, MemberStructural, MemberType, MomentShape } from '@mantlet/common';
+import type { CriticalTemperatureWay, MemberDto, MemberType, MomentShape } from '@mantlet/common';
+import { fieldName } from '../../../lib/record-words.js';
 import { CheckField, NumberField, RadioField, SelectField, TextField } from '../../../ui/form/fields.js';
 import { FormDrawer } from '../../../ui/form/form-drawer.js';
-import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
+import { useEditForm } from '../../../ui/form/use-edit-form.js';
 import { useCurrentProject } from '../../projects/project-context.js';
 import { useSetStructural } from '../api/members.js';
 import { ActionFields } from './action-fields.js';
 import type { StructuralForm } from './action-fields.js';
 import { structuralFormSchema, structuralValues } from './structural-form.js';
-import type { StructuralValues } from './structural-form.js';
+import type { StructuralOut, StructuralValues } from './structural-form.js';
 
 const ways = (['calculated', 'utilisation', 'ambient-utilisation', 'declared', 'assumed', 'none'] as const satisfies readonly CriticalTemperatureWay[]).map((value) => ({ value, label: wayNames[value] }));
 const bucklingRules = [
@@ -91,17 +93,23 @@ function WayFields({ form, memberType }: { form: StructuralForm; memberType: Mem
   }
 }
 
-interface StructuralDrawerProps { projectId: string; member: MemberDto; onClose: () => void; onReload: () => void }
+interface StructuralDrawerProps { projectId: string; member: MemberDto; onClose: () => void }
+
+const standing = ({ basis, version }: MemberDto) => ({ values: structuralValues(basis), version });
+/** "basis.design.actions.permanent.axialKn" → "permanent axial"; the form itself says that all of it is the basis. */
+const label = (path: string): string | undefined => (path === 'basis.way' ? 'How it comes about' : path.startsWith('basis.') ? capital(fieldName(path.replace(/^basis\.(design\.(actions\.)?)?/, ''))) : undefined);
+const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
 
 /** How the critical temperature of a member comes about: the structural engineer's alone, kept with name, date and reference. */
-export function StructuralDrawer({ projectId, member, onClose, onReload }: StructuralDrawerProps) {
+export function StructuralDrawer({ projectId, member, onClose }: StructuralDrawerProps) {
   const save = useSetStructural(projectId, member.id);
-  const form = useContractForm<StructuralValues, MemberStructural>(structuralFormSchema, { values: structuralValues(member.basis, member.version) });
-  useServerIssues(form, save.error);
-  const submit = form.handleSubmit((body) => save.mutate({ ...body, version: member.version }, { onSuccess: onClose }));
-  const reload = () => { save.reset(); onReload(); };
+  const title = `Critical temperature of ${member.mark}`;
+  const { form, edit } = useEditForm<StructuralValues, StructuralOut, StructuralOut & { version: number }, MemberDto>({
+    schema: structuralFormSchema, name: `structural/${member.id}`, title, read: standing, save, onSaved: onClose,
+    record: useMemo(() => standing(member), [member]), body: (input, { version }) => ({ ...input, version: version ?? member.version }), words: { label },
+  });
   return (
-    <FormDrawer title={`Critical temperature of ${member.mark}`} open onClose={onClose} onSubmit={(e) => { void submit(e); }} dirty={form.formState.isDirty && !save.isSuccess} saving={save.isPending} error={save.error} onReload={reload} size={680}>
+    <FormDrawer title={title} open onClose={onClose} edit={edit} size={680}>
       <SelectField control={form.control} name="basis.way" label="How it comes about" options={ways} />
       <WayFields form={form} memberType={member.memberType} />
     </FormDrawer>

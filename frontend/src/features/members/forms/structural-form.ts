@@ -7,7 +7,6 @@ import type { ActionCategory, Actions, BeamLoadInput, BeamSupport, CriticalTempe
  * The contract's schema keeps the fields of the chosen way and drops the rest.
  */
 export interface StructuralValues {
-  version: number;
   basis: {
     way: CriticalTemperatureWay;
     temperatureC: number | null;
@@ -28,7 +27,8 @@ export interface ActionsValues {
   supports: BeamSupport; spanMm: number | null; loads: BeamLoadValues[]; lateralSupportsMm: (number | null)[]; axialInFireKn: number;
 }
 
-export const structuralFormSchema = memberStructuralSchema as unknown as z.ZodType<MemberStructural, StructuralValues>;
+export type StructuralOut = Omit<MemberStructural, 'version'>;
+export const structuralFormSchema = memberStructuralSchema.omit({ version: true }) as unknown as z.ZodType<StructuralOut, StructuralValues>;
 export const noEffects: Effects = { axialKn: 0, momentYKnm: 0, momentZKnm: 0, shearZKn: 0 };
 
 /** The load that a new line begins with. */
@@ -43,10 +43,9 @@ function actionsValues(actions: Actions | null): ActionsValues {
   return { ...blank, ...actions };
 }
 
-export function structuralValues(basis: CriticalTemperatureBasis, version: number): StructuralValues {
+export function structuralValues(basis: CriticalTemperatureBasis): StructuralValues {
   const design = basis.way === 'calculated' ? basis.design : null;
   return {
-    version,
     basis: {
       temperatureC: null, mu0: null, utilisation: null, etaFi: null, mayBuckle: false, reference: '', ...basis,
       design: {

@@ -57,13 +57,13 @@ function Actions({ sheet, setOpen }: { sheet: MemberSheetDto; setOpen: (open: Op
   );
 }
 
-function Drawers({ sheet, open, close, reload }: { sheet: MemberSheetDto; open: Open; close: () => void; reload: () => void }) {
+function Drawers({ sheet, open, close }: { sheet: MemberSheetDto; open: Open; close: () => void }) {
   const project = useCurrentProject();
   const { message } = App.useApp();
   const { member, section, result } = sheet;
   switch (open) {
-    case 'member': return <EditMemberDrawer projectId={project.id} member={member} section={section} onClose={close} onReload={reload} />;
-    case 'structural': return <StructuralDrawer projectId={project.id} member={member} onClose={close} onReload={reload} />;
+    case 'member': return <EditMemberDrawer projectId={project.id} member={member} section={section} onClose={close} />;
+    case 'structural': return <StructuralDrawer projectId={project.id} member={member} onClose={close} />;
     case 'accept': {
       const one = { id: member.id, mark: member.mark, assumed: result?.assumed ?? false, criticalTemperatureC: result?.criticalTemperatureC ?? null, verdict: result?.verdict ?? null };
       return <AcceptanceDrawer members={[one]} onClose={close} onAccepted={(n) => { close(); void message.success(`Accepted for ${count(n, 'member')}`); }} />;
@@ -72,7 +72,7 @@ function Drawers({ sheet, open, close, reload }: { sheet: MemberSheetDto; open: 
   }
 }
 
-function Sheet({ sheet, reload }: { sheet: MemberSheetDto; reload: () => void }) {
+function Sheet({ sheet }: { sheet: MemberSheetDto }) {
   const project = useCurrentProject();
   const location = useLocation();
   const [open, setOpen] = useState<Open>(null);
@@ -93,7 +93,7 @@ function Sheet({ sheet, reload }: { sheet: MemberSheetDto; reload: () => void })
           <MemberHistory history={sheet.history} />
         </div>
       </div>
-      <Drawers sheet={sheet} open={open} close={() => setOpen(null)} reload={reload} />
+      <Drawers sheet={sheet} open={open} close={() => setOpen(null)} />
     </Page>
   );
 }
@@ -102,7 +102,7 @@ function MemberOfAddress() {
   const project = useCurrentProject();
   const { memberId = '' } = useParams();
   const member = useMember(project.id, memberId);
-  return <QueryState query={member} what="the member">{(sheet) => <Sheet key={sheet.member.id} sheet={sheet} reload={() => { void member.refetch(); }} />}</QueryState>;
+  return <QueryState query={member} what="the member">{(sheet) => <Sheet key={sheet.member.id} sheet={sheet} />}</QueryState>;
 }
 
 export default function MemberPage() {

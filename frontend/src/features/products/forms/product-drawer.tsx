@@ -3,18 +3,21 @@ import { useMemo, useRef } from 'react';
 import { useWatch } from 'react-hook-form';
 import { environments, fireCurveNames, nominalCurves, productInputSchema, productKindNames, productKinds } from '@mantlet/common';
 import type { Evidence, ProductDto, ProductKind } from '@mantlet/common';
+import type { UseMutationResult } from '@tanstack/react-query';
 import { ApiError } from '../../../lib/api-client.js';
 import { CheckField, CheckListField, RadioField, TextField } from '../../../ui/form/fields.js';
 import { FormDrawer } from '../../../ui/form/form-drawer.js';
-import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
-import { useCreateProduct, useProduct, useUpdateProduct } from '../api/products.js';
+import { useEditForm } from '../../../ui/form/use-edit-form.js';
+import { useCreateProduct, useUpdateProduct } from '../api/products.js';
 import type { Library } from '../api/products.js';
-import { formNames } from '../product-words.js';
+import { formNames, productEditWords } from '../product-words.js';
 import { RegressionFields, TableFields, ThermalFields } from './evidence-fields.js';
 import type { ProductFormApi } from './evidence-fields.js';
 import { blankEvidence, blankProduct, evidenceForms, formOf } from './product-form.js';
 import type { ProductForm, ProductFormOut } from './product-form.js';
 import { SupplyFields } from './supply-fields.js';
+
+const standing = (product: ProductDto) => ({ values: formOf(product), version: product.version });
 
 interface ProductDrawerProps { library: Library; product: ProductDto | null; onClose: () => void; onSaved: (product: ProductDto) => void }
 
@@ -83,20 +86,19 @@ export function ProductDrawer({ library, product, onClose, onSaved }: ProductDra
   const create = useCreateProduct(library);
   const update = useUpdateProduct(library, product?.id ?? '');
   const save = product ? update : create;
-  const query = useProduct(library, product?.id ?? '', product !== null);
-  const values = useMemo(() => (product ? formOf(product) : blankProduct()), [product]);
-  const form = useContractForm<ProductForm, ProductFormOut>(productInputSchema, { values });
-  useServerIssues(form, save.error);
-  const kind = useWatch({ control: form.control, name: 'kind' });
-  const submit = form.handleSubmit((body) => {
-    if (product) update.mutate({ ...body, version: product.version }, { onSuccess: onSaved });
-    else create.mutate(body, { onSuccess: onSaved });
+  const title = product ? `Edit ${product.name}` : library ? 'Add a product to this project' : 'Add a product to the library';
+  const { form, edit } = useEditForm<ProductForm, ProductFormOut, never, ProductDto>({
+    schema: productInputSchema, name: product ? `product/${product.id}` : `new-product/${library ?? 'shared'}`, title, read: standing, onSaved, words: productEditWords,
+    record: useMemo(() => (product ? standing(product) : { values: blankProduct(), version: null }), [product]),
+    // a new product and a change of one differ in the version alone
+    save: save as UseMutationResult<ProductDto, Error, never>, body: (input, { version }) => (version === null ? input : { ...input, version }) as never,
+    anew: (input) => create.mutateAsync(input),
   });
+  const kind = useWatch({ control: form.control, name: 'kind' });
   return (
     <FormDrawer
-      title={product ? `Edit ${product.name}` : library ? 'Add a product to this project' : 'Add a product to the library'} open onClose={onClose} size={760}
-      onSubmit={(e) => { void submit(e); }} dirty={form.formState.isDirty && !save.isSuccess} saving={save.isPending} error={save.error}
-      onReload={product ? () => { void query.refetch(); } : undefined} saveText={product ? 'Save' : 'Add the product'}
+      title={title} open onClose={onClose} size={760} edit={edit} error={product ? create.error : null}
+      saveText={product ? 'Save' : 'Add the product'}
     >
       <IdentityFields form={form} />
       <AssessmentFields form={form} />

@@ -1,22 +1,25 @@
+import type { z } from 'zod';
 import { useNavigate } from 'react-router-dom';
 import { projectCreateSchema, roleNames, roles } from '@mantlet/common';
 import { CheckListField, SelectField, TextField } from '../../../ui/form/fields.js';
 import { FormDrawer } from '../../../ui/form/form-drawer.js';
-import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
+import { useEditForm } from '../../../ui/form/use-edit-form.js';
 import { useCreateProject } from '../api/projects.js';
 
 const currencies = projectCreateSchema.shape.currency.unwrap().options.map((value) => ({ value, label: value }));
 const roleOptions = roles.map((value) => ({ value, label: roleNames[value] }));
 
+const blank = { values: { number: '', name: '', place: '', currency: 'EUR', note: '', roles: [] } as z.input<typeof projectCreateSchema>, version: null };
+
 export function CreateProjectDrawer({ open, onClose }: { open: boolean; onClose: () => void }) {
   const navigate = useNavigate();
   const create = useCreateProject();
-  const form = useContractForm(projectCreateSchema, { defaultValues: { number: '', name: '', place: '', currency: 'EUR', note: '', roles: [] } });
-  useServerIssues(form, create.error);
-  const close = () => { form.reset(); create.reset(); onClose(); };
-  const save = form.handleSubmit((body) => create.mutate(body, { onSuccess: (project) => { close(); void navigate(`/projects/${project.id}`); } }));
+  const { form, edit } = useEditForm({
+    schema: projectCreateSchema, name: 'new-project', title: 'Start a project', record: blank, save: create, body: (input) => input,
+    onSaved: (project) => { onClose(); void navigate(`/projects/${project.id}`); },
+  });
   return (
-    <FormDrawer title="Start a project" open={open} onClose={close} onSubmit={(e) => { void save(e); }} dirty={form.formState.isDirty && !create.isSuccess} saving={create.isPending} error={create.error} saveText="Start the project">
+    <FormDrawer title="Start a project" open={open} onClose={onClose} edit={edit} saveText="Start the project">
       <div className="mt-form-row">
         <TextField control={form.control} name="number" label="Number" help="As your office files it, e.g. 24-017." />
         <SelectField control={form.control} name="currency" label="Currency" options={currencies} />

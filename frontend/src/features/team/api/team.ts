@@ -1,5 +1,5 @@
 import { keepPreviousData, queryOptions, useQuery } from '@tanstack/react-query';
-import type { AuditEntryDto, DesignBasisUpdate, MembershipDto, MembershipInput, Page, ProjectDto, ProjectUpdate, Role, TakeoffSettingsUpdate } from '@mantlet/common';
+import type { AuditEntryDto, DesignBasisUpdate, MembershipDto, MembershipInput, MembershipRoles, Page, ProjectDto, ProjectUpdate, TakeoffSettingsUpdate } from '@mantlet/common';
 import { api } from '../../../lib/api-client.js';
 import { projectKey } from '../../../lib/query-client.js';
 import { useProjectMutation } from '../../projects/api/projects.js';
@@ -12,7 +12,7 @@ export const useMemberships = (projectId: string) => useQuery(membershipsQuery(p
 export const useAddMembership = (projectId: string) =>
   useProjectMutation<MembershipInput, MembershipDto>(projectId, (body) => api.post(`${at(projectId)}/memberships`, body));
 export const useSetRoles = (projectId: string) =>
-  useProjectMutation<{ userId: string; roles: Role[] }>(projectId, ({ userId, roles }) => api.put(`${at(projectId)}/memberships/${userId}`, { roles }));
+  useProjectMutation<MembershipRoles & { userId: string }, MembershipDto>(projectId, ({ userId, ...body }) => api.put(`${at(projectId)}/memberships/${userId}`, body));
 export const useRemoveMembership = (projectId: string) =>
   useProjectMutation<string>(projectId, (userId) => api.delete(`${at(projectId)}/memberships/${userId}`));
 

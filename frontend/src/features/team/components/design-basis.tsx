@@ -1,14 +1,13 @@
-import { useFormState } from 'react-hook-form';
+import { useMemo } from 'react';
 import type { UseFormReturn } from 'react-hook-form';
 import type { z } from 'zod';
 import { actionCategories, actionCategoryNames, designBasisSchema, memberTypeNames, memberTypes } from '@mantlet/common';
 import type { ProjectDto, ProjectSettings } from '@mantlet/common';
 import { whyNot } from '../../../lib/may.js';
 import { CheckField, NumberField, RadioField } from '../../../ui/form/fields.js';
-import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
+import { useEditForm } from '../../../ui/form/use-edit-form.js';
 import { Panel } from '../../../ui/panel.js';
 import { Term } from '../../../ui/term.js';
-import { useProject } from '../../projects/api/projects.js';
 import { useMay } from '../../projects/project-context.js';
 import { useSaveDesignBasis } from '../api/team.js';
 import { SettingsForm, useSavedMessage } from './settings-form.js';
@@ -86,21 +85,20 @@ function Assumed({ form: { control }, disabled }: PartProps) {
 /** Every factor of the design basis, shown to the team and changed by the fire engineer. */
 export function DesignBasisPanel({ project, settings }: { project: ProjectDto; settings: ProjectSettings }) {
   const may = useMay()('edit-design-basis');
-  const query = useProject(project.id);
   const save = useSaveDesignBasis(project.id);
   const saved = useSavedMessage();
-  const values = settings.designBasis;
-  const form = useContractForm(designBasisSchema, { values });
-  const { isDirty } = useFormState({ control: form.control });
-  useServerIssues(form, save.error);
-  const submit = form.handleSubmit((designBasis) => save.mutate({ designBasis, version: project.version }, { onSuccess: () => { form.reset(designBasis); saved(); } }));
+  const { version } = project;
+  const { form, edit } = useEditForm({
+    schema: designBasisSchema, name: `design-basis/${project.id}`, title: 'Design basis', save, onSaved: saved,
+    // whoever changes the settings sees them
+    read: (answer: { settings: ProjectSettings | null; version: number }) => ({ values: (answer.settings ?? settings).designBasis, version: answer.version }),
+    record: useMemo(() => ({ values: settings.designBasis, version }), [settings, version]),
+    body: (designBasis, opened) => ({ designBasis, version: opened.version ?? version }),
+  });
   const part = { form, disabled: !may };
   return (
     <Panel title={<Term name="design-basis" />} sub="EN 1990, EN 1991-1-2 and EN 1993-1-2. Nothing here is a hidden constant.">
-      <SettingsForm
-        onSubmit={(e) => { void submit(e); }} dirty={isDirty} saving={save.isPending} error={save.error} locked={may ? null : whyNot('edit-design-basis')}
-        onReload={() => { void query.refetch(); }} onUndo={() => { form.reset(values); save.reset(); }}
-      >
+      <SettingsForm edit={edit} locked={may ? null : whyNot('edit-design-basis')}>
         <Actions {...part} />
         <Steel {...part} />
         <Assumed {...part} />

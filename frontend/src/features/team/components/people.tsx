@@ -1,13 +1,13 @@
 import { App, Button } from 'antd';
-import { useState } from 'react';
+import { useMemo, useState } from 'react';
 import { membershipInputSchema, roleNames, roles } from '@mantlet/common';
-import type { MembershipDto } from '@mantlet/common';
+import type { MembershipDto, Role } from '@mantlet/common';
 import { rolesInWords, whyNot } from '../../../lib/may.js';
 import { roleDecides } from '../../../lib/role-words.js';
 import { DeleteButton } from '../../../ui/form/delete-button.js';
 import { CheckListField, TextField } from '../../../ui/form/fields.js';
 import { FormDrawer } from '../../../ui/form/form-drawer.js';
-import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
+import { useEditForm } from '../../../ui/form/use-edit-form.js';
 import { Panel } from '../../../ui/panel.js';
 import { ScheduleTable } from '../../../ui/schedule-table.js';
 import { QueryState } from '../../../ui/states.js';
@@ -17,13 +17,12 @@ import { useAddMembership, useMemberships, useRemoveMembership, useSetRoles } fr
 const roleOptions = roles.map((value) => ({ value, label: <>{roleNames[value]}<span className="mt-sub mt-role-says">{roleDecides[value]}</span></> }));
 const roleHelp = 'Contractors, inspectors and readers see issued work only. Whoever prepares a schedule cannot check it.';
 
+const nobody = { values: { email: '', roles: [] as Role[] }, version: null };
 function AddPerson({ projectId, onClose }: { projectId: string; onClose: () => void }) {
   const add = useAddMembership(projectId);
-  const form = useContractForm(membershipInputSchema, { defaultValues: { email: '', roles: [] } });
-  useServerIssues(form, add.error);
-  const submit = form.handleSubmit((body) => add.mutate(body, { onSuccess: onClose }));
+  const { form, edit } = useEditForm({ schema: membershipInputSchema, name: `new-person/${projectId}`, title: 'Add a person', record: nobody, save: add, body: (input) => input, onSaved: onClose });
   return (
-    <FormDrawer title="Add a person" open onClose={onClose} onSubmit={(e) => { void submit(e); }} dirty={form.formState.isDirty && !add.isSuccess} saving={add.isPending} error={add.error} saveText="Add to the team" size={440}>
+    <FormDrawer title="Add a person" open onClose={onClose} edit={edit} saveText="Add to the team" size={440}>
       <TextField control={form.control} name="email" label="E-mail" type="email" help="Of an account that exists already; the administrator makes accounts." />
       <CheckListField control={form.control} name="roles" label="Roles" options={roleOptions} help={roleHelp} />
     </FormDrawer>
@@ -35,12 +34,16 @@ function EditPerson({ projectId, person, onClose }: { projectId: string; person:
   const set = useSetRoles(projectId);
   const remove = useRemoveMembership(projectId);
   const { message } = App.useApp();
-  const form = useContractForm(rolesSchema, { defaultValues: { roles: person.roles } });
-  const submit = form.handleSubmit((body) => set.mutate({ userId: person.userId, ...body }, { onSuccess: onClose }));
+  const { form, edit } = useEditForm({
+    schema: rolesSchema, name: `roles/${projectId}/${person.userId}`, title: `Roles of ${person.name}`, save: set, onSaved: onClose,
+    record: useMemo(() => ({ values: { roles: person.roles }, version: null }), [person.roles]),
+    body: ({ roles: given }, opened) => ({ userId: person.userId, roles: given, was: opened.values }),
+    read: (answer: { roles: Role[] }) => ({ values: { roles: answer.roles }, version: null }),
+  });
   const takeOff = () => remove.mutate(person.userId, { onSuccess: () => { void message.success(`${person.name} is no longer on the team.`); onClose(); } });
   return (
     <FormDrawer
-      title={person.name} open onClose={onClose} onSubmit={(e) => { void submit(e); }} dirty={form.formState.isDirty && !set.isSuccess} saving={set.isPending} error={set.error ?? remove.error} size={440}
+      title={person.name} open onClose={onClose} edit={edit} error={remove.error} size={440}
       extra={<DeleteButton what={`${person.name} from the team`} consequence="What they did stays in the audit trail and on issued revisions." busy={remove.isPending} onDelete={takeOff} />}
     >
       <p className="mt-sub">{person.email}</p>

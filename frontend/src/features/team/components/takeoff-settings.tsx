@@ -1,41 +1,41 @@
 import { useMemo } from 'react';
-import { useFormState } from 'react-hook-form';
 import { takeoffSettingsUpdateSchema } from '@mantlet/common';
 import type { ProjectDto, ProjectSettings } from '@mantlet/common';
 import { whyNot } from '../../../lib/may.js';
 import { CheckField, NumberField, RadioField, SelectField } from '../../../ui/form/fields.js';
-import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
+import { useEditForm } from '../../../ui/form/use-edit-form.js';
 import { Panel } from '../../../ui/panel.js';
 import { Term } from '../../../ui/term.js';
-import { useProject } from '../../projects/api/projects.js';
 import { useMay } from '../../projects/project-context.js';
 import { useSaveTakeoff } from '../api/team.js';
 import { SettingsForm, useSavedMessage } from './settings-form.js';
 
+const words: Record<string, string> = {
+  'readingRules.sectionFactor': 'Between two section factors', 'readingRules.temperature': 'Between two temperatures', 'deductions.endLapMm': 'Deduction at each end',
+  'deductions.openingThresholdM2': 'Openings deducted from', 'deductions.coatBackMm': 'Coat-back', markUpPercent: 'Overheads on printed lines', contractorSeesPrices: 'The contractor sees prices', distribution: 'Distribution list',
+};
 const versionless = takeoffSettingsUpdateSchema.omit({ version: true });
+
+const standing = ({ settings: { designBasis: _, ...values }, version }: { settings: ProjectSettings; version: number }) => ({ values, version });
 
 /** How tables are read and quantities taken off; changed by the specifier. */
 export function TakeoffSettingsPanel({ project, settings }: { project: ProjectDto; settings: ProjectSettings }) {
   const may = useMay()('edit-takeoff');
-  const query = useProject(project.id);
   const save = useSaveTakeoff(project.id);
   const saved = useSavedMessage();
-  const values = useMemo(() => {
-    const { designBasis: _, ...rest } = settings;
-    return rest;
-  }, [settings]);
-  const form = useContractForm(versionless, { values });
-  const { isDirty } = useFormState({ control: form.control });
-  useServerIssues(form, save.error);
-  const submit = form.handleSubmit((body) => save.mutate({ ...body, version: project.version }, { onSuccess: () => { form.reset(body); saved(); } }));
+  const { version } = project;
+  const { form, edit } = useEditForm({
+    schema: versionless, name: `takeoff/${project.id}`, title: 'Takeoff and issue', save, onSaved: saved,
+    // whoever changes the settings sees them
+    read: (answer: { settings: ProjectSettings | null; version: number }) => standing({ settings: answer.settings ?? settings, version: answer.version }),
+    record: useMemo(() => standing({ settings, version }), [settings, version]), body: (input, opened) => ({ ...input, version: opened.version ?? version }),
+    words: { label: (path) => words[path] },
+  });
   const { control } = form;
   const disabled = !may;
   return (
     <Panel title={<><Term name="takeoff">Takeoff</Term> and issue</>}>
-      <SettingsForm
-        onSubmit={(e) => { void submit(e); }} dirty={isDirty} saving={save.isPending} error={save.error} locked={may ? null : whyNot('edit-takeoff')}
-        onReload={() => { void query.refetch(); }} onUndo={() => { form.reset(values); save.reset(); }}
-      >
+      <SettingsForm edit={edit} locked={may ? null : whyNot('edit-takeoff')}>
         <fieldset>
           <legend>Reading thickness tables</legend>
           <RadioField control={control} name="readingRules.sectionFactor" label="Between two section factors" disabled={disabled} options={[{ value: 'linear', label: 'Linear' }, { value: 'next-row-up', label: 'Next row up' }]} />

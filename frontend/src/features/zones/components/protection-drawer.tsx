@@ -1,12 +1,12 @@
 import { useMemo } from 'react';
 import { useWatch } from 'react-hook-form';
 import { environments, memberTypeNames, memberTypes, productKindNames, zoneProtectionSchema } from '@mantlet/common';
-import type { ZoneDto } from '@mantlet/common';
+import type { MemberType, ZoneDto } from '@mantlet/common';
 import { NumberField, RadioField, SelectField } from '../../../ui/form/fields.js';
 import { FormDrawer } from '../../../ui/form/form-drawer.js';
 import { Term } from '../../../ui/term.js';
-import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
-import { useSaveProtection, useZoneProducts, useZones } from '../api/zones.js';
+import { useEditForm } from '../../../ui/form/use-edit-form.js';
+import { useSaveProtection, useZoneProducts } from '../api/zones.js';
 
 const environmentHelp: Record<(typeof environments)[number], string> = {
   C1: 'C1 very low: heated interior', C2: 'C2 low: unheated interior, rural', C3: 'C3 medium: urban, humid interior',
@@ -20,24 +20,33 @@ const policyOptions = [
 ];
 const versionless = zoneProtectionSchema.omit({ version: true });
 
+const standing = ({ environment, targetPolicy, systems, version }: ZoneDto) => ({
+  values: { environment, targetPolicy, systems: memberTypes.map((memberType) => ({ memberType, productId: systems.find((s) => s.memberType === memberType)?.productId ?? null })) }, version,
+});
+
 /** What the specifier decides of a zone: environment, target policy and a system by member type. */
 export function ProtectionDrawer({ projectId, zone, onClose }: { projectId: string; zone: ZoneDto; onClose: () => void }) {
-  const zones = useZones(projectId);
   const products = useZoneProducts(projectId);
   const save = useSaveProtection(projectId, zone.id);
-  const values = useMemo(() => ({
-    environment: zone.environment, targetPolicy: zone.targetPolicy,
-    systems: memberTypes.map((memberType) => ({ memberType, productId: zone.systems.find((s) => s.memberType === memberType)?.productId ?? null })),
-  }), [zone]);
-  const form = useContractForm(versionless, { values });
-  useServerIssues(form, save.error);
+  const title = `Protection of ${zone.code} ${zone.name}`;
+  const productName = (system: unknown) => {
+    const id = (system as { productId?: string | null } | undefined)?.productId;
+    return id ? products.data?.find((p) => p.id === id)?.name ?? 'a product that is no longer in the library' : 'no system';
+  };
+  const { form, edit } = useEditForm({
+    schema: versionless, name: `protection/${zone.id}`, title, read: standing, save, onSaved: onClose,
+    record: useMemo(() => standing(zone), [zone]),
+    body: (input, { version }) => ({ ...input, version: version ?? zone.version }),
+    words: {
+      label: (path) => (path.startsWith('systems.') ? `System of ${memberTypeNames[path.slice('systems.'.length) as MemberType].toLowerCase()}` : path.startsWith('targetPolicy') ? 'Thicknesses in the zone' : undefined),
+      value: (path, value) => (path.startsWith('systems.') ? productName(value) : undefined),
+    },
+  });
   const policy = useWatch({ control: form.control, name: 'targetPolicy.policy' });
-  const submit = form.handleSubmit((body) => save.mutate({ ...body, version: zone.version }, { onSuccess: onClose }));
   const productOptions = (products.data ?? []).map((p) => ({ value: p.id, label: `${p.name} (${productKindNames[p.kind].toLowerCase()})` }));
   return (
     <FormDrawer
-      title={`Protection of ${zone.code} ${zone.name}`} open onClose={onClose} onSubmit={(e) => { void submit(e); }}
-      dirty={form.formState.isDirty && !save.isSuccess} saving={save.isPending} error={save.error} onReload={() => { void zones.refetch(); }}
+      title={title} open onClose={onClose} edit={edit}
     >
       <SelectField control={form.control} name="environment" label="Environment" term="environment" options={environmentOptions} help="Corrosivity category of ISO 12944-2. A product must be assessed for it." />
       <RadioField control={form.control} name="targetPolicy.policy" label="Thicknesses in the zone" term="target-policy" options={policyOptions} help="Members of one system share a target; no member ever gets less than it needs." />

@@ -1,34 +1,46 @@
+import { useMemo } from 'react';
+import type { z } from 'zod';
 import { useWatch } from 'react-hook-form';
 import { fireCurveNames, ratingPeriods, zoneInputSchema } from '@mantlet/common';
-import type { FireCurve, LevelDto, ZoneDto, ZoneInput } from '@mantlet/common';
+import type { FireCurve, LevelDto, ZoneDto, ZoneInput, ZoneUpdate } from '@mantlet/common';
 import { DeleteButton } from '../../../ui/form/delete-button.js';
 import { NumberField, SelectField, TextField } from '../../../ui/form/fields.js';
 import { FormDrawer } from '../../../ui/form/form-drawer.js';
-import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
-import { useDeleteZone, useSaveZone, useZones } from '../api/zones.js';
+import { useEditForm } from '../../../ui/form/use-edit-form.js';
+import { useDeleteZone, useSaveZone } from '../api/zones.js';
 
 const periods = ratingPeriods.map((value) => ({ value, label: `${value} minutes` }));
 const curves = (Object.keys(fireCurveNames) as FireCurve['kind'][]).map((value) => ({ value, label: fireCurveNames[value] }));
 const limits = [{ value: 15, label: '15 min, fast' }, { value: 20, label: '20 min, medium' }, { value: 25, label: '25 min, slow' }];
 const levelName = (l: LevelDto) => `${l.code} ${l.name}`;
 
+type Values = z.input<typeof zoneInputSchema>;
+const standing = ({ levelId, code, name, periodMin, curve, reference, version }: ZoneDto) => ({ values: { levelId, code, name, periodMin, curve, reference } as Values, version });
+const blank = (levelId: string | null) => ({ values: { ...(levelId ? { levelId } : {}), code: '', name: '', curve: { kind: 'standard' }, reference: '' } as Values, version: null });
+
 interface ZoneDrawerProps { projectId: string; zone: ZoneDto | null; levelId: string | null; levels: readonly LevelDto[]; onClose: () => void }
 
 /** What the fire engineer decides of a zone: its period, curve and where the fire strategy says so. */
 export function ZoneDrawer({ projectId, zone, levelId, levels, onClose }: ZoneDrawerProps) {
-  const zones = useZones(projectId);
   const save = useSaveZone(projectId, zone?.id ?? null);
+  const makeAnew = useSaveZone(projectId, null);
   const remove = useDeleteZone(projectId);
-  const form = useContractForm(zoneInputSchema, zone
-    ? { values: { levelId: zone.levelId, code: zone.code, name: zone.name, periodMin: zone.periodMin as ZoneInput['periodMin'], curve: zone.curve, reference: zone.reference } }
-    : { defaultValues: { ...(levelId ? { levelId } : {}), code: '', name: '', curve: { kind: 'standard' }, reference: '' } });
-  useServerIssues(form, save.error);
+  const title = zone ? `Zone ${zone.code}` : 'New zone';
+  const levelOf = (id: unknown) => levels.find((l) => l.id === id);
+  const { form, edit } = useEditForm({
+    schema: zoneInputSchema, name: zone ? `zone/${zone.id}` : `new-zone/${projectId}`, title, read: standing, save, onSaved: onClose,
+    record: useMemo(() => (zone ? standing(zone) : blank(levelId)), [zone, levelId]),
+    body: (input, { version }): ZoneInput | ZoneUpdate => (version === null ? input : { ...input, version }),
+    anew: (input) => makeAnew.mutateAsync(input),
+    words: {
+      label: (path) => ({ levelId: 'Level', periodMin: 'Period', 'curve.kind': 'Fire curve', curve: 'Fire curve' })[path],
+      value: (path, value) => { const level = path === 'levelId' ? levelOf(value) : undefined; return level && levelName(level); },
+    },
+  });
   const kind = useWatch({ control: form.control, name: 'curve.kind' });
-  const submit = form.handleSubmit((body) => save.mutate(zone ? { ...body, version: zone.version } : body, { onSuccess: onClose }));
   return (
     <FormDrawer
-      title={zone ? `Zone ${zone.code}` : 'New zone'} open onClose={onClose} onSubmit={(e) => { void submit(e); }}
-      dirty={form.formState.isDirty && !save.isSuccess} saving={save.isPending} error={save.error ?? remove.error} onReload={() => { void zones.refetch(); }}
+      title={title} open onClose={onClose} edit={edit} error={makeAnew.error ?? remove.error}
       extra={zone && <DeleteButton what={`zone ${zone.code}`} consequence="Only a zone without members can be deleted." busy={remove.isPending} onDelete={() => remove.mutate(zone.id, { onSuccess: onClose })} />}
     >
       <div className="mt-form-row">
