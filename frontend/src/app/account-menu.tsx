@@ -4,24 +4,40 @@ import { useNavigate } from 'react-router-dom';
 import type { MeDto } from '@mantlet/common';
 import { useSignOut } from '../features/session/api/session.js';
 import { PasswordDrawer } from '../features/session/components/password-drawer.js';
+import { draftsOf, forgetDraftsOf } from '../lib/drafts.js';
+import { joinWords } from '../lib/format.js';
+import { leaveUnsaved, unsavedForms } from '../ui/form/use-unsaved-changes.js';
 import { themeChoices, useTheme } from '../ui/theme/theme-provider.js';
 import type { ThemeChoice } from '../ui/theme/theme-provider.js';
 
 const themeNames: Record<ThemeChoice, string> = { system: 'As the system', light: 'Light', dark: 'Dark' };
 
-function useLeave() {
+/** What signing out would lose: forms on this page, and what was left in this browser earlier. */
+const unsavedTitles = (userId: string) => [...new Set([...unsavedForms(), ...draftsOf(userId)].map((form) => form.title))];
+
+function useLeave(user: MeDto | null) {
   const signOut = useSignOut();
-  const { message } = App.useApp();
+  const { message, modal } = App.useApp();
   // the document is loaded anew: whoever signs in next finds nothing of this session, not even the address that was open
+  const leave = () => signOut.mutateAsync().then(() => {
+    if (user) forgetDraftsOf(user.id);
+    leaveUnsaved();
+    window.location.replace('/sign-in');
+  }, (error: Error) => { void message.error(error.message); });
   return () => {
-    signOut.mutateAsync().then(() => window.location.replace('/sign-in'), (error: Error) => { void message.error(error.message); });
+    const titles = user ? unsavedTitles(user.id) : [];
+    if (titles.length === 0) return void leave();
+    modal.confirm({
+      title: 'Sign out without saving?', icon: null, okText: 'Sign out and discard', cancelText: 'Stay here', onOk: leave,
+      content: `Not saved yet: ${joinWords(titles)}. Signing out takes it from this browser, so that nobody after you finds it.`,
+    });
   };
 }
 
 /** At the right of the strip: who is signed in, and what they may set for themselves. */
 export function AccountMenu({ user, roles }: { user: MeDto | null; roles: string }) {
   const { choice, choose } = useTheme();
-  const leave = useLeave();
+  const leave = useLeave(user);
   const navigate = useNavigate();
   const [password, setPassword] = useState(false);
   if (!user) return null;
@@ -58,7 +74,7 @@ export function AccountMenu({ user, roles }: { user: MeDto | null; roles: string
 /** The same choices inside the menu drawer of small screens. */
 export function AccountMenuItems({ user, roles, onDone }: { user: MeDto | null; roles: string; onDone: () => void }) {
   const { choice, choose } = useTheme();
-  const leave = useLeave();
+  const leave = useLeave(user);
   const [password, setPassword] = useState(false);
   if (!user) return null;
   return (

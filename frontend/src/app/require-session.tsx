@@ -1,12 +1,13 @@
 import { useQueryClient } from '@tanstack/react-query';
 import { useEffect, useState } from 'react';
 import { Navigate, Outlet, useLocation } from 'react-router-dom';
-import { DraftOwner } from '../ui/form/use-draft.js';
-import { pruneDrafts } from '../lib/drafts.js';
+import type { MeDto } from '@mantlet/common';
 import { useSession } from '../features/session/api/session.js';
 import { SessionEndedDialog } from '../features/session/components/session-ended-dialog.js';
 import { onSignedOut } from '../lib/api-client.js';
+import { pruneDrafts } from '../lib/drafts.js';
 import { sessionKey } from '../lib/query-client.js';
+import { DraftOwner } from '../ui/form/use-draft.js';
 import { LeaveGuard } from '../ui/form/use-unsaved-changes.js';
 import { ErrorState, LoadingState } from '../ui/states.js';
 
@@ -19,6 +20,8 @@ export function RequireSession() {
   const location = useLocation();
   const client = useQueryClient();
   const [ended, setEnded] = useState(false);
+  // who was working here: while the page is open they sign in over it, however the end of their session became known
+  const [known, setKnown] = useState<MeDto | null>(null);
   useEffect(() => {
     pruneDrafts();
     onSignedOut(() => setEnded(true));
@@ -28,13 +31,14 @@ export function RequireSession() {
     return session.error ? <ErrorState error={session.error} retry={() => { void session.refetch(); }} /> : <LoadingState what="Mantlet" />;
   }
   if (session.data.needsSetUp) return <Navigate to="/set-up" replace />;
-  const { user } = session.data;
+  if (session.data.user && session.data.user.id !== known?.id) setKnown(session.data.user);
+  const user = session.data.user ?? known;
   if (!user) return <Navigate to={`/sign-in?to=${encodeURIComponent(location.pathname + location.search)}`} replace />;
   return (
     <DraftOwner value={user.id}>
       <LeaveGuard />
       <Outlet />
-      {ended && (
+      {(ended || !session.data.user) && (
         <SessionEndedDialog
           user={user}
           onBack={() => { setEnded(false); void client.invalidateQueries({ predicate: (q) => q.queryKey[0] !== sessionKey[0] }); }}

@@ -7,28 +7,20 @@ export const sessionQuery = () =>
   queryOptions({ queryKey: sessionKey, queryFn: ({ signal }) => api.get<SessionDto>('/session', undefined, signal), staleTime: 60_000 });
 export const useSession = () => useQuery(sessionQuery());
 
-/** Signing in keeps nothing of whoever was here before. */
-function useOpenSession<T>(path: string) {
+/** Signing in keeps nothing of whoever was here before; who signs in again over their page finds it as it was. */
+function useOpenSession<T>(path: string, samePerson = false) {
   const client = useQueryClient();
   return useMutation({
     mutationFn: (body: T) => api.postPublic<SessionDto>(path, body),
     onSuccess: (session) => {
-      client.removeQueries({ predicate: (q) => q.queryKey[0] !== sessionKey[0] });
+      if (!samePerson) client.removeQueries({ predicate: (q) => q.queryKey[0] !== sessionKey[0] });
       client.setQueryData(sessionKey, session);
     },
   });
 }
-export const useSignIn = () => useOpenSession<SignIn>('/session');
+export const useSignIn = (samePerson: boolean) => useOpenSession<SignIn>('/session', samePerson);
 export const useSetUp = () => useOpenSession<SetUp>('/set-up');
 
-export function useSignOut() {
-  const client = useQueryClient();
-  return useMutation({
-    mutationFn: () => api.delete('/session'),
-    onSuccess: () => {
-      client.setQueryData<SessionDto>(sessionKey, { user: null, needsSetUp: false });
-      client.removeQueries({ predicate: (q) => q.queryKey[0] !== sessionKey[0] });
-    },
-  });
-}
+/** Whoever signs out leaves the document as well, and with it everything that was fetched. */
+export const useSignOut = () => useMutation({ mutationFn: () => api.delete('/session') });
 export const useChangePassword = () => useMutation({ mutationFn: (body: PasswordChange) => api.put('/session/password', body) });

@@ -9,7 +9,7 @@ import { useSignIn } from '../api/session.js';
 
 /** E-mail and password. Used by the sign-in page, and over a page whose session has ended. */
 export function SignInForm({ known, onSignedIn }: { known?: MeDto; onSignedIn: (session: SessionDto) => void }) {
-  const signIn = useSignIn();
+  const signIn = useSignIn(known !== undefined);
   const form = useContractForm(signInSchema, { defaultValues: { email: known?.email ?? '', password: '' } });
   const submit = form.handleSubmit((body) => signIn.mutate(body, { onSuccess: onSignedIn }));
   const refused = signIn.error instanceof ApiError && signIn.error.isSignedOut;
