@@ -15,8 +15,9 @@ export function SettingsForm({ edit, locked, children }: SettingsFormProps) {
   const { dirty, saving, comparison } = edit;
   return (
     <div>
-      {locked ? <p className="mt-sub">{locked}</p> : <EditNotices edit={edit} />}
+      {!locked && <EditNotices edit={edit} />}
       <form className="mt-form" noValidate onSubmit={edit.submit} hidden={comparison !== null}>
+        {locked && <p className="mt-sub">{locked}</p>}
         {children}
         {!locked && (
           <div className="mt-form-foot">
