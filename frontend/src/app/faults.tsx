@@ -9,6 +9,15 @@ export function RouteFault() {
   return <ErrorState error={error} retry={() => window.location.reload()} />;
 }
 
+/** A project that is not there and one that is not theirs are told apart to nobody. */
+export function NoSuchProject() {
+  return (
+    <Page title="Not found" heading="There is no such project, or you are not on its team" sub="If you were on it until now, somebody has taken you off: its fire engineer or specifier can say. What you saved is kept.">
+      <p><LinkButton to="/projects" type="primary">Go to the projects</LinkButton></p>
+    </Page>
+  );
+}
+
 export function NotFound() {
   return (
     <Page title="Not found" heading="There is no page at this address" sub="It may have been mistyped, or belong to something that was deleted.">

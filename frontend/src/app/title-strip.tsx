@@ -21,13 +21,14 @@ export function TitleStrip({ project, user, onMenu }: { project: ProjectDto | un
   const design = project ? may(project.roles, 'see-design') : false;
   const shownState = state ?? (project && design ? stateOf(project) : undefined);
   const revision = project && (design ? project.revision : project.issuedRevision && { ...project.issuedRevision, state: 'issued' as const });
+  const shownRevision = state?.revision ?? (revision ? `${revision.code} ${revisionStateNames[revision.state].toLowerCase()}` : null);
   return (
     <header className="mt-strip">
       <Link className="mt-strip-brand" to="/projects" aria-label="Mantlet, all projects"><Mark /><span>Mantlet</span></Link>
       <dl>
         {project && <div className="mt-strip-cell mt-strip-project"><dt>Project {project.number}</dt><dd title={project.name}><Link to={`/projects/${project.id}`}>{project.name}</Link></dd></div>}
-        <div className="mt-strip-cell mt-strip-page"><dt>{project ? <><span className="mt-strip-wide">Page</span><span className="mt-strip-narrow">{project.number}{revision ? `, ${revision.code} ${revisionStateNames[revision.state].toLowerCase()}` : ''}</span></> : 'Page'}</dt><dd title={title}>{title || '…'}</dd></div>
-        {project && <div className="mt-strip-cell mt-strip-revision"><dt>Revision</dt><dd>{revision ? `${revision.code} ${revisionStateNames[revision.state].toLowerCase()}` : 'None yet'}</dd></div>}
+        <div className="mt-strip-cell mt-strip-page"><dt>{project ? <><span className="mt-strip-wide">Page</span><span className="mt-strip-narrow">{project.number}{shownRevision ? `, ${shownRevision}` : ''}</span></> : 'Page'}</dt><dd title={title}>{title || '…'}</dd></div>
+        {project && <div className="mt-strip-cell mt-strip-revision"><dt>Revision</dt><dd>{shownRevision ?? 'None yet'}</dd></div>}
         {shownState && <div className="mt-strip-cell mt-strip-state"><dt>State</dt><dd className={shownState.kind === 'neutral' ? '' : `mt-${shownState.kind}`}>{shownState.word}</dd></div>}
       </dl>
       <AccountMenu user={user} roles={standing(project, user)} />

@@ -3,7 +3,10 @@ import type { ReactNode } from 'react';
 import type { StatusKind } from './status-word.js';
 
 /** What a page tells the title strip about itself. */
-export interface PageInfo { title: string; state?: { word: string; kind: StatusKind } | undefined }
+export interface PageInfo {
+  title: string;
+  state?: { word: string; kind: StatusKind; /** the revision that the page shows, where it is not the project's current one */ revision?: string | undefined } | undefined;
+}
 interface Store { info: PageInfo; set: (info: PageInfo) => void }
 const PageInfoContext = createContext<Store>({ info: { title: '' }, set: () => undefined });
 
@@ -19,8 +22,9 @@ export function useTitle(title: string, projectName?: string, state?: PageInfo['
   const { set } = useContext(PageInfoContext);
   const word = state?.word;
   const kind = state?.kind;
+  const revision = state?.revision;
   useEffect(() => {
-    set({ title, state: word && kind ? { word, kind } : undefined });
+    set({ title, state: word && kind ? { word, kind, revision } : undefined });
     document.title = [title, projectName, 'Mantlet'].filter(Boolean).join(' · ');
-  }, [set, title, projectName, word, kind]);
+  }, [set, title, projectName, word, kind, revision]);
 }

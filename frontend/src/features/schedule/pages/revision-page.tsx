@@ -20,7 +20,7 @@ export default function RevisionPage() {
   return (
     <Page
       title={revision ? `Schedule ${revision.code}` : 'Schedule'} projectName={project.name} heading={revision ? revisionHeading(revision) : 'Revision'} sub={revision?.purpose || undefined}
-      state={revision ? stateWord(revision.state) : undefined} actions={<Link to={`/projects/${project.id}/schedule`}>All revisions</Link>}
+      state={revision ? { ...stateWord(revision.state), revision: `${revision.code} ${stateWord(revision.state).word.toLowerCase()}` } : undefined} actions={<Link to={`/projects/${project.id}/schedule`}>All revisions</Link>}
     >
       <QueryState query={query} what="the revision">
         {(r) => (

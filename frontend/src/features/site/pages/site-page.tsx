@@ -107,7 +107,7 @@ export default function SitePage() {
     <Page
       title="Site" projectName={project.name} heading={site ? siteHeading(site, project.roles) : 'Site'}
       sub={revision && site?.project ? <>{site.project.number} {site.project.name}{site.project.place && `, ${site.project.place}`}. Issued {formatDate(revision.issuedAt)}. <span title={revision.pdfSha256}>PDF {revision.pdfSha256.slice(0, 12)}…</span></> : undefined}
-      state={revision ? { word: 'Issued', kind: 'settled' } : site ? { word: 'Not issued', kind: 'neutral' } : undefined}
+      state={revision ? { word: 'Issued', kind: 'settled', revision: `${revision.code} issued` } : site ? { word: 'Not issued', kind: 'neutral' } : undefined}
       actions={revision ? <>
         <Button onClick={() => window.print()}>{oneFloor ? 'Print this floor' : 'Print all floors'}</Button>
         {revision.pdfAvailable && <Button href={pdfUrl(project.id, revision.id, true)} download>Specification PDF</Button>}

@@ -132,7 +132,7 @@ export function ZoneTree({ rows, projectId, openZones, onOpenZones, actions, mar
   const columns = useColumns(actions, projectId, commonCurve(rows.flatMap((r) => (r.kind === 'zone' ? [r.zone] : []))) !== null);
   return (
     <ScheduleTable<ZoneRow>
-      caption="Levels and zones" minWidth={1120} columns={columns} rows={rows} rowKey={keyOf} className="mt-zones"
+      caption="Levels and zones" minWidth={1000} columns={columns} rows={rows} rowKey={keyOf} className="mt-zones"
       rowClassName={(row) => (row.kind === 'level' ? 'mt-row-group' : row.zone.id === marked ? 'mt-row-marked' : '')}
       onRow={(row) => ({ id: `row-${keyOf(row)}` })}
       expandable={{
