@@ -70,6 +70,7 @@ export const accessTable: Record<string, string> = {
   // members
   'GET /api/projects/:projectId/members': 'design team',
   'GET /api/projects/:projectId/members/:memberId': 'design team',
+  'GET /api/projects/:projectId/members/:memberId/neighbours': 'design team',
   'POST /api/projects/:projectId/members': 'specifier',
   'PATCH /api/projects/:projectId/members/:memberId': 'specifier',
   'PUT /api/projects/:projectId/members/:memberId/structural': 'structural-engineer',

@@ -68,6 +68,21 @@ describe('members', () => {
     expect(neighbours).toEqual(['B1', 'B2a']);
   });
 
+  it('have neighbours in the list as it is filtered and sorted, and none outside it', async () => {
+    for (const mark of ['B10', 'B2', 'B1', 'A3', 'B2a']) await make({ mark });
+    const items = (await list()).items;
+    const id = (mark: string) => items.find((row) => row.mark === mark)!.id;
+    const around = async (mark: string, query: Record<string, string>) => {
+      const { body } = await team.specifier.get(`/api/projects/${project.id}/members/${id(mark)}/neighbours`).query(query).expect(200);
+      return [body.previousId, body.nextId].map((found) => items.find((row) => row.id === found)?.mark ?? null);
+    };
+    expect(await around('B2', {})).toEqual(['B1', 'B2a']);
+    expect(await around('B2', { direction: 'desc' })).toEqual(['B2a', 'B1']);
+    expect(await around('B2a', { search: 'B2' })).toEqual(['B2', null]);
+    expect(await around('A3', { search: 'B2' })).toEqual([null, null]);
+    expect(await around('B10', { page: '7', pageSize: '1' })).toEqual(['B2a', null]);
+  });
+
   it("keep each role to its own part", async () => {
     const made = await make();
     const basis = { way: 'declared', temperatureC: 560, reference: 'Calculation 12' };

@@ -6,6 +6,7 @@ export * from './contracts/sections.responses.js';
 export * from './contracts/fire.js';
 export * from './contracts/actions.js';
 export * from './contracts/products.js';
+export * from './contracts/evidence-range.js';
 export * from './contracts/products.responses.js';
 export * from './contracts/settings.js';
 export * from './contracts/assessment.js';

@@ -60,3 +60,6 @@ export const membersAcceptedDtoSchema = z.object({ accepted: z.number() });
 export type MembersAcceptedDto = z.infer<typeof membersAcceptedDtoSchema>;
 export const acceptancesWithdrawnDtoSchema = z.object({ withdrawn: z.number() });
 export type AcceptancesWithdrawnDto = z.infer<typeof acceptancesWithdrawnDtoSchema>;
+/** Before and after a member in the list as it is filtered and sorted; null at its ends, and where the member is not in it. */
+export const memberNeighboursDtoSchema = z.object({ previousId: idSchema.nullable(), nextId: idSchema.nullable() });
+export type MemberNeighboursDto = z.infer<typeof memberNeighboursDtoSchema>;

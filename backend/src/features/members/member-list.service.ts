@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { exposureNames, memberSentence, memberTypeNames, wayNames } from '@mantlet/common';
-import type { MemberPageDto, MemberQuery, MemberRowDto, MemberValue, MemberValuesDto, Message } from '@mantlet/common';
+import type { MemberNeighboursDto, MemberPageDto, MemberQuery, MemberRowDto, MemberValue, MemberValuesDto, Message } from '@mantlet/common';
 import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource } from 'typeorm';
 import { searchMembers, sortBy } from './member-search.js';
@@ -46,6 +46,17 @@ export class MemberListService {
     const rows = await found.offset((query.page - 1) * query.pageSize).limit(query.pageSize)
       .getRawMany<Omit<MemberRowDto, 'sentence'> & { reason: Message | null }>();
     return { items: rows.map(toRow), total, page: query.page, pageSize: query.pageSize, project };
+  }
+
+  /** Before and after the member in the list as the query filters and sorts it; a page or window plays no part. */
+  async neighbours(projectId: string, memberId: string, query: MemberQuery): Promise<MemberNeighboursDto> {
+    const direction = query.direction === 'desc' ? 'DESC' : 'ASC';
+    const order = `${sortBy[query.sort]} ${direction} NULLS LAST${query.sort === 'mark' ? '' : ', m.mark ASC'}`;
+    const found = searchMembers(this.dataSource.manager, projectId, query).select([]).addSelect('m.id', 'id')
+      .addSelect(`lag(m.id) OVER (ORDER BY ${order})`, 'previousId').addSelect(`lead(m.id) OVER (ORDER BY ${order})`, 'nextId');
+    const [sql, parameters] = found.getQueryAndParameters();
+    const [row] = await this.dataSource.query<MemberNeighboursDto[]>(`SELECT "previousId", "nextId" FROM (${sql}) listed WHERE id = $${parameters.length + 1}`, [...parameters, memberId]);
+    return row ?? { previousId: null, nextId: null };
   }
 
   private async whole(projectId: string): Promise<MemberPageDto['project']> {

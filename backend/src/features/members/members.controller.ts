@@ -1,11 +1,11 @@
 import { Body, Controller, Delete, Get, HttpCode, HttpStatus, Param, Patch, Post, Put, Query } from '@nestjs/common';
 import {
   acceptanceSchema, acceptancesWithdrawnDtoSchema, acceptanceWithdrawalSchema, bulkMemberSchema, bulkStructuralSchema, foundQuerySchema, foundSummaryDtoSchema,
-  memberChoiceSchema, memberDeleteQuerySchema, memberDtoSchema, memberInputSchema, memberPageDtoSchema, memberQuerySchema, membersAcceptedDtoSchema,
+  memberChoiceSchema, memberDeleteQuerySchema, memberDtoSchema, memberInputSchema, memberNeighboursDtoSchema, memberPageDtoSchema, memberQuerySchema, membersAcceptedDtoSchema,
   membersChangedDtoSchema, membersDeletedDtoSchema, memberSheetDtoSchema, memberStructuralSchema, memberUpdateSchema, memberValuesDtoSchema, previewAnswerDtoSchema,
 } from '@mantlet/common';
 import type {
-  Acceptance, AcceptanceWithdrawal, MembersChangedDto, BulkMember, BulkStructural, FoundQuery, FoundSummaryDto, MemberChoice, MemberDto, MemberInput, MemberPageDto,
+  Acceptance, AcceptanceWithdrawal, MembersChangedDto, BulkMember, BulkStructural, FoundQuery, FoundSummaryDto, MemberChoice, MemberDto, MemberInput, MemberNeighboursDto, MemberPageDto,
   MemberQuery, MemberSheetDto, MemberStructural, MemberUpdate, MemberValuesDto, PreviewAnswerDto,
 } from '@mantlet/common';
 import { DesignTeam, Roles, Scope } from '../../shared/access.js';
@@ -52,6 +52,14 @@ export class MembersController {
   @Returns(foundSummaryDtoSchema, 'What a filter finds: how many members, under which stamp, and what of them may be accepted.')
   found(@Scope() scope: ProjectScope, @Body({ schema: foundQuerySchema }) query: FoundQuery): Promise<FoundSummaryDto> {
     return this.choice.summary(scope.projectId, query);
+  }
+
+  /** To go from sheet to sheet in the order of the list that was left. */
+  @Get(':memberId/neighbours')
+  @DesignTeam()
+  @Returns(memberNeighboursDtoSchema, 'The members before and after it in the list as the query filters and sorts it.')
+  neighbours(@Scope() scope: ProjectScope, @Param('memberId', idParam) memberId: string, @Query({ schema: memberQuerySchema }) query: MemberQuery): Promise<MemberNeighboursDto> {
+    return this.lists.neighbours(scope.projectId, memberId, query);
   }
 
   @Get(':memberId')

@@ -1,3 +1,4 @@
+import { evidenceRange } from '@mantlet/common';
 import type { Evidence, ProductDto, ProductInput, ProductSummaryDto } from '@mantlet/common';
 import { canonicalJson, sha256 } from '../../shared/canonical-json.js';
 import { changesBetween } from '../audit/audit.service.js';
@@ -28,8 +29,8 @@ export const toProductDto = (product: Product): ProductDto => ({ ...withoutEvide
 /** A product as those see it who neither keep the library nor work on a project that uses it: what it costs is not theirs to know. */
 export const withoutRates = <T extends Pick<ProductDto, 'supply'>>(product: T): T => ({ ...product, supply: { ...product.supply, materialRate: null, labourRate: null } });
 
-export const toProductSummaryDto = (product: Product, form: Evidence['form'], usedByZones: number): ProductSummaryDto =>
-  ({ ...withoutEvidence(product), form, usedByZones });
+export const toProductSummaryDto = (product: Product, usedByZones: number): ProductSummaryDto =>
+  ({ ...withoutEvidence(product), form: product.evidence.form, range: evidenceRange(product.evidence), usedByZones });
 
 /** What changed, for the trail. Evidence is large: it is told by what it holds and its digest. */
 export function productChanges(before: Partial<ProductInput>, after: ProductInput): Change[] {

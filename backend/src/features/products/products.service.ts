@@ -1,6 +1,6 @@
 import { HttpStatus, Injectable } from '@nestjs/common';
 import { message, sentence } from '@mantlet/common';
-import type { Evidence, ProductDto, ProductInput, ProductSummaryDto, ProductUpdate } from '@mantlet/common';
+import type { ProductDto, ProductInput, ProductSummaryDto, ProductUpdate } from '@mantlet/common';
 import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource, IsNull, Not } from 'typeorm';
 import type { EntityManager, FindOptionsWhere } from 'typeorm';
@@ -32,23 +32,20 @@ export class ProductsService {
   /** By kind and name; a project sees the shared library and its own. Zones are counted within the project, else everywhere. */
   async list(projectId: string | null): Promise<ProductSummaryDto[]> {
     const { manager } = this.dataSource;
-    // evidence is large and stays where it is
-    const columns = manager.connection.getMetadata(Product).columns.map((column) => column.propertyName).filter((name) => !['evidence', 'evidenceFile'].includes(name));
+    // of the evidence only its range goes out; the report itself stays where it is
+    const columns = manager.connection.getMetadata(Product).columns.map((column) => column.propertyName).filter((name) => name !== 'evidenceFile');
     const products = await manager.find(Product, {
       where: visibleTo(projectId), select: Object.fromEntries(columns.map((name) => [name, true])), order: { kind: 'ASC', name: 'ASC', evidenceEdition: 'ASC' },
     });
-    const facts: { id: string; form: Evidence['form']; zones: string }[] = await manager.query(
-      `SELECT p.id, p.evidence->>'form' AS form,
-              (SELECT count(DISTINCT z.id) FROM zone_systems s JOIN zones z ON z.id = s.zone_id
-                WHERE s.product_id = p.id AND ($1::uuid IS NULL OR z.project_id = $1)) AS zones
-         FROM products p WHERE p.project_id IS NULL OR p.project_id = $1`,
+    const uses: { id: string; zones: string }[] = await manager.query(
+      `SELECT s.product_id AS id, count(DISTINCT z.id) AS zones
+         FROM zone_systems s JOIN zones z ON z.id = s.zone_id
+        WHERE $1::uuid IS NULL OR z.project_id = $1
+        GROUP BY s.product_id`,
       [projectId],
     );
-    const byId = new Map(facts.map((fact) => [fact.id, fact]));
-    return products.flatMap((product) => {
-      const fact = byId.get(product.id);
-      return fact ? [toProductSummaryDto(product, fact.form, Number(fact.zones))] : [];
-    });
+    const zones = new Map(uses.map((use) => [use.id, Number(use.zones)]));
+    return products.map((product) => toProductSummaryDto(product, zones.get(product.id) ?? 0));
   }
 
   async get(projectId: string | null, productId: string): Promise<ProductDto> {

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import type { WorkingStepDto } from '@mantlet/common';
-import { figure, resultText, workingLine } from './working.js';
+import { figure, resultParts, resultText, workingAsText, workingLine } from './working.js';
 
 const step = (equation: string, inputs: WorkingStepDto['inputs']): WorkingStepDto => ({ what: '', equation, inputs, value: 1, unit: '', source: '' });
 const input = (symbol: string, value: number, unit = '') => ({ symbol, value, unit });
@@ -39,5 +39,17 @@ describe('figures', () => {
     expect(resultText({ value: 615.98, unit: '°C' })).toBe('615.9\u00a0°C');
     expect(resultText({ value: 615, unit: '°C' })).toBe('615.0\u00a0°C');
     expect(workingLine(step('k_y,θ by Table 3.1', [input('θ_a', 615.98, '°C')])).rest[0]?.text).toBe('615.9\u00a0°C');
+  });
+});
+
+describe('the working in columns and as text', () => {
+  it('parts a result at its decimal mark', () => {
+    expect(resultParts({ value: 522_213_518, unit: 'N·mm' })).toEqual({ whole: '522', fraction: '.2', unit: 'kNm' });
+    expect(resultParts({ value: 1, unit: '' })).toEqual({ whole: '1', fraction: '', unit: '' });
+    expect(resultParts({ value: null, unit: 'mm' })).toBeNull();
+  });
+  it('copies every step with its numbers, result and source', () => {
+    const step = { what: 'Section factor', equation: 'A_m/V = A_m/A·1000', inputs: [{ symbol: 'A_m', value: 1442, unit: 'mm' }, { symbol: 'A', value: 8551, unit: 'mm²' }], value: 168.6, unit: '1/m', source: 'EN 1993-1-2 Table 4.2' };
+    expect(workingAsText('Member B2-014', [step])).toBe('Member B2-014\n\n1  Section factor: 168.6\u00a0m⁻¹\n   A_m/V = A_m/A·1000\n   = 1442/8551·1000\n   EN 1993-1-2 Table 4.2');
   });
 });

@@ -73,3 +73,25 @@ export function workingLine(step: WorkingStepDto): WorkingLine {
   const rest = step.inputs.filter(({ symbol }) => !used.has(symbol)).map((input) => ({ ...input, number: inputFigure(input) })).map(({ symbol, number, unit }) => ({ symbol, text: `${number}${unit ? `\u00a0${unit === '1/m' ? 'm⁻¹' : unit}` : ''}` }));
   return { equation: step.equation, numbers: used.size > 0 ? text : null, rest };
 }
+
+/** A result in the three parts that line up in a column: before the decimal mark, from it on, and the unit. */
+export function resultParts(step: Pick<WorkingStepDto, 'value' | 'unit'>): { whole: string; fraction: string; unit: string } | null {
+  const text = resultText(step);
+  if (text === null) return null;
+  const [number = '', unit = ''] = text.split('\u00a0');
+  const mark = number.indexOf('.');
+  return mark < 0 ? { whole: number, fraction: '', unit } : { whole: number.slice(0, mark), fraction: number.slice(mark), unit };
+}
+
+/** The working as plain text, to paste into a report: what, equation, numbers, result and source of each step. */
+export function workingAsText(heading: string, working: readonly WorkingStepDto[]): string {
+  const steps = working.map((step, i) => {
+    const { equation, numbers, rest } = workingLine(step);
+    const result = resultText(step);
+    return [
+      `${i + 1}  ${step.what}${result === null ? '' : `: ${result}`}`, ...(equation ? [`   ${equation}`] : []), ...(numbers ? [`   = ${numbers}`] : []),
+      ...(rest.length > 0 ? [`   with ${rest.map(({ symbol, text }) => `${symbol} = ${text}`).join(', ')}`] : []), ...(step.note ? [`   ${step.note}`] : []), `   ${step.source}`,
+    ].join('\n');
+  });
+  return [heading, ...steps].join('\n\n');
+}

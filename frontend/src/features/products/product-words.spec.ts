@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import type { Evidence, ProductSummaryDto, ThicknessTable } from '@mantlet/common';
 import { pickTable } from './components/evidence-view.js';
 import { hasTable, numbersOf, withTable } from './forms/product-form.js';
+import { evidenceRange } from '@mantlet/common';
 import { expiryWords, libraryWords, productHeading, rangeWords } from './product-words.js';
 
 // invented: no real product behaves like this
@@ -12,10 +13,10 @@ const today = new Date('2026-06-01T12:00:00Z');
 
 describe('what evidence reaches, in words', () => {
   it('reads the range of tables without the cells that are outside', () =>
-    expect(rangeWords(tables, 'coating')).toEqual({ sectionFactor: 'A/V 60 to 300', temperature: '400 to 550 °C', period: 'R 30 to R 60', thickness: '200 to 900 µm' }));
+    expect(rangeWords(evidenceRange(tables), 'coating')).toEqual({ sectionFactor: 'A/V 60 to 300', temperature: '400 to 550 °C', period: 'R 30 to R 60', thickness: '200 to 900 µm' }));
   it('reads an open lower end as up to', () => {
     const thermal: Evidence = { form: 'thermal', properties: { conductivityWPerMK: 0.2, densityKgPerM3: 800, specificHeatJPerKgK: 1700, moisturePercent: 3, minThicknessMm: 12.5, maxThicknessMm: 60, minSectionFactorPerM: 30, maxSectionFactorPerM: 350, maxTemperatureC: 750, maxPeriodMin: 180, stockThicknessesMm: [], maxLayers: 1, thicknessStepMm: 1 } };
-    expect(rangeWords(thermal, 'board')).toEqual({ sectionFactor: 'A/V 30 to 350', temperature: 'up to 750 °C', period: 'up to R 180', thickness: '12.5 to 60 mm' });
+    expect(rangeWords(evidenceRange(thermal), 'board')).toEqual({ sectionFactor: 'A/V 30 to 350', temperature: 'up to 750 °C', period: 'up to R 180', thickness: '12.5 to 60 mm' });
     expect(productHeading(thermal)).toBe('Assessed for 180 minutes, up to A/V 350');
   });
 });

@@ -1,5 +1,5 @@
-import type { Evidence, ProductKind, ProductSummaryDto, RegressionFit, ThicknessTable } from '@mantlet/common';
-import { productKindNames } from '@mantlet/common';
+import type { Evidence, EvidenceRange, ProductKind, ProductSummaryDto, RegressionFit, ThicknessTable } from '@mantlet/common';
+import { evidenceRange, productKindNames } from '@mantlet/common';
 import { count, countWord, formatNumber } from '../../lib/format.js';
 import type { StatusKind } from '../../ui/status-word.js';
 
@@ -34,41 +34,12 @@ export function expiryWords(product: { evidenceExpiresOn: string; expired: boole
   return { word: 'Valid', kind: 'settled' };
 }
 
-export interface EvidenceRange { sectionFactorPerM: [number, number]; temperatureC: [number | null, number]; periodMin: [number | null, number]; thickness: [number, number] }
-const span = (values: readonly number[]): [number, number] => [Math.min(...values), Math.max(...values)];
-
-/** The box within which the evidence gives a thickness at all; single tables may hold less. */
-export function rangeOf(evidence: Evidence): EvidenceRange {
-  if (evidence.form === 'thermal') {
-    const p = evidence.properties;
-    return {
-      sectionFactorPerM: [p.minSectionFactorPerM, p.maxSectionFactorPerM], temperatureC: [null, p.maxTemperatureC], periodMin: [null, p.maxPeriodMin],
-      thickness: [p.minThicknessMm, p.maxThicknessMm],
-    };
-  }
-  if (evidence.form === 'regression') {
-    const f = evidence.fits;
-    return {
-      sectionFactorPerM: [Math.min(...f.map((x) => x.minSectionFactorPerM)), Math.max(...f.map((x) => x.maxSectionFactorPerM))],
-      temperatureC: [Math.min(...f.map((x) => x.minTemperatureC)), Math.max(...f.map((x) => x.maxTemperatureC))],
-      periodMin: [Math.min(...f.map((x) => x.minPeriodMin)), Math.max(...f.map((x) => x.maxPeriodMin))],
-      thickness: [Math.min(...f.map((x) => x.minThickness)), Math.max(...f.map((x) => x.maxThickness))],
-    };
-  }
-  const t = evidence.tables;
-  return {
-    sectionFactorPerM: span(t.flatMap((x) => x.sectionFactorsPerM)), temperatureC: span(t.flatMap((x) => x.temperaturesC)), periodMin: span(t.map((x) => x.periodMin)),
-    thickness: span(t.flatMap((x) => x.thickness.flat().filter((v) => v !== null))),
-  };
-}
-
 const whole = (value: number) => formatNumber(value, Number.isInteger(value) ? 0 : 1);
 const between = ([from, to]: readonly [number | null, number], unit = '') =>
   from === null ? `up to ${whole(to)}${unit}` : from === to ? `${whole(to)}${unit}` : `${whole(from)} to ${whole(to)}${unit}`;
 
 export interface RangeWords { sectionFactor: string; temperature: string; period: string; thickness: string }
-export function rangeWords(evidence: Evidence, kind: ProductKind): RangeWords {
-  const range = rangeOf(evidence);
+export function rangeWords(range: EvidenceRange, kind: ProductKind): RangeWords {
   return {
     sectionFactor: `A/V ${between(range.sectionFactorPerM)}`,
     temperature: between(range.temperatureC, ' °C'),
@@ -79,7 +50,7 @@ export function rangeWords(evidence: Evidence, kind: ProductKind): RangeWords {
 
 /** The product page's heading: what the evidence reaches. */
 export function productHeading(evidence: Evidence): string {
-  const range = rangeOf(evidence);
+  const range = evidenceRange(evidence);
   return `Assessed for ${whole(range.periodMin[1])} minutes, up to A/V ${whole(range.sectionFactorPerM[1])}`;
 }
 

@@ -5,8 +5,9 @@ import { formatNumber, joinWords } from '../../lib/format.js';
 import { HatchPattern } from '../hatch.js';
 import { SymbolText } from './symbol-text.js';
 import { DimensionLine } from './dimension-line.js';
-import type { Box } from './label-layout.js';
-import { loopPath, markedLength, placeSection, runPath, stretches } from './section-path.js';
+import { layoutSection, mm, sectionDimensions } from './section-layout.js';
+import type { SectionLayout } from './section-layout.js';
+import { loopPath, markedLength, runPath, stretches } from './section-path.js';
 import type { SectionPlace } from './section-path.js';
 import { exposedFaces, surroundings } from './section-surroundings.js';
 import { useElementWidth } from './use-element-width.js';
@@ -24,21 +25,6 @@ interface SectionDrawingProps {
 }
 
 const heated = (s: OutlineSegment) => s.heated;
-const mm = (value: number) => (Number.isInteger(value) ? formatNumber(value) : formatNumber(value, 1));
-
-interface Layout { width: number; height: number; place: SectionPlace; section: Box; reach: number }
-function layoutSection({ widthMm, heightMm }: SectionOutline, exposure: Exposure | undefined, width: number, maxHeight: number): Layout {
-  const surrounded = exposure !== undefined && exposure.arrangement !== 'four-sides';
-  const top = surrounded ? 44 : 10;
-  const [side, right, bottom] = [surrounded ? 48 : 16, 58, 40];
-  const scale = Math.min((width - side - right) / widthMm, (maxHeight - top - bottom) / heightMm);
-  const size = { width: widthMm * scale, height: heightMm * scale };
-  const x = side + (width - side - right - size.width) / 2;
-  return {
-    width, height: top + size.height + bottom, section: { x, y: top, ...size }, reach: Math.min(x - 4, Math.max(34, size.width * 0.3)),
-    place: placeSection(scale, x + size.width / 2, top + size.height / 2),
-  };
-}
 
 function Heated({ loop, place }: { loop: readonly OutlineSegment[]; place: SectionPlace }) {
   return stretches(loop, heated).map(({ segments, closed }) => (
@@ -46,7 +32,7 @@ function Heated({ loop, place }: { loop: readonly OutlineSegment[]; place: Secti
   ));
 }
 
-function Around({ exposure, layout, hatch }: { exposure: Exposure; layout: Layout; hatch: string }) {
+function Around({ exposure, layout, hatch }: { exposure: Exposure; layout: SectionLayout; hatch: string }) {
   return (
     <g aria-hidden="true">
       {surroundings(exposure, layout.section, layout.reach).map((part) => (
@@ -76,10 +62,10 @@ export function SectionDrawing({ outline, name, exposure, details = [], maxHeigh
   const { ref, width: measured } = useElementWidth<HTMLDivElement>(260);
   const hatch = useId();
   const layout = layoutSection(outline, exposure, Math.min(measured, 340), maxHeight);
-  const { section: box, place } = layout;
+  const { place } = layout;
   const words = exposure ? sectionInWords(outline, exposure) : '';
   const size = `${mm(outline.heightMm)} mm high and ${mm(outline.widthMm)} mm wide`;
-  const dimX = Math.min(box.x + box.width + (exposure && exposure.arrangement !== 'four-sides' ? 24 : 18), layout.width - 26);
+  const dimensions = sectionDimensions(outline, layout, exposure !== undefined && exposure.arrangement !== 'four-sides');
   return (
     <figure className="mt-figure" ref={ref}>
       <svg className="mt-drawing mt-section" viewBox={`0 0 ${layout.width} ${layout.height}`} style={{ maxWidth: layout.width }} role="img" aria-label={`Cross-section of ${name}, ${size}. ${words}`}>
@@ -89,8 +75,8 @@ export function SectionDrawing({ outline, name, exposure, details = [], maxHeigh
         {outline.loops.map((loop, i) => <Heated key={i} loop={loop} place={place} />)}
         {outline.box && <path className="d-box" d={loopPath(outline.box, place)} />}
         {outline.box && <Heated loop={outline.box} place={place} />}
-        <DimensionLine from={[dimX, box.y]} to={[dimX, box.y + box.height]} text={mm(outline.heightMm)} />
-        <DimensionLine from={[box.x, box.y + box.height + 18]} to={[box.x + box.width, box.y + box.height + 18]} text={mm(outline.widthMm)} />
+        <DimensionLine {...dimensions.height} />
+        <DimensionLine {...dimensions.width} />
       </svg>
       <figcaption className="mt-figure-note">
         {words && <p>{words}</p>}

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { layoutThicknessMap, stepCell, thinLabels } from './thickness-map-layout.js';
+import { labelBox, overlap } from './label-layout.js';
+import { layoutThicknessMap, stepCell, stepLabels, stepLines, thinLabels } from './thickness-map-layout.js';
 
 // invented: no real product behaves like this
 const data = { sectionFactorsPerM: [60, 100, 160], temperaturesC: [400, 500], thickness: [[300, 200], [400, 250], [600, null]] };
@@ -40,4 +41,27 @@ describe('reading cell by cell', () => {
     expect(stepCell({ row: 0, column: 0 }, 'a', 3, 2)).toBeNull();
   });
   it('leaves out labels that would touch', () => expect(thinLabels([0, 10, 20, 30], (v) => v * 2, 30)).toEqual([0, 20]));
+});
+
+describe('lines where the thickness passes a round figure', () => {
+  it('part the cells below it from the others, and none from what is outside', () => {
+    const layout = layoutThicknessMap(data, 600);
+    const lines = stepLines(layout, data);
+    expect(lines.map((l) => l.level)).toEqual([300, 400, 500, 600]);
+    const at300 = lines[0]!.edges;
+    // 200 | 250 above 300 | 400 | 600: below 300 lie both upper cells, to their right lies the one outside
+    expect(at300).toHaveLength(2);
+    for (const edge of at300) expect(edge.y1).toBe(edge.y2);
+    expect(lines.find((l) => l.level === 500)?.edges).toEqual([{ x1: layout.x(100), x2: layout.x(100), y1: layout.y(500), y2: layout.y(400) }]);
+  });
+  it.each([280, 640, 1400])('carry figures that never cover one another, at %d px', (width) => {
+    const factors = Array.from({ length: 120 }, (_, i) => 40 + i * 3);
+    const temperatures = Array.from({ length: 40 }, (_, i) => 350 + i * 10);
+    const fine = { sectionFactorsPerM: factors, temperaturesC: temperatures, thickness: factors.map((f, i) => temperatures.map((t, j) => (i + 3 * j < 30 ? null : 100 + f * 12 - t))) };
+    const layout = layoutThicknessMap(fine, width);
+    const labels = stepLabels(stepLines(layout, fine), layout, (level) => `${level} µm`);
+    expect(labels.length).toBeGreaterThan(2);
+    const boxes = labels.map((l) => labelBox(l.text, 11.5, l.place));
+    for (const [i, a] of boxes.entries()) for (const b of boxes.slice(i + 1)) expect(overlap(a, b)).toBe(false);
+  });
 });

@@ -1,4 +1,6 @@
-import { linearScale } from './chart-scale.js';
+import { linearScale, niceTicks } from './chart-scale.js';
+import { placeLabels } from './label-layout.js';
+import type { Place } from './label-layout.js';
 import type { Scale } from './chart-scale.js';
 
 export interface ThicknessMapData {
@@ -66,4 +68,41 @@ export function thinLabels(values: readonly number[], px: (value: number) => num
     if (last === undefined || Math.abs(px(value) - px(last)) >= least) kept.push(value);
   }
   return kept;
+}
+
+export interface StepLine { level: number; edges: { x1: number; y1: number; x2: number; y2: number }[] }
+/**
+ * Lines on the map where the thickness passes a round figure. They run along the cells' edges, since the table is read in steps:
+ * a smooth line would promise values between them. No line is drawn against what is outside.
+ */
+export function stepLines({ cells }: MapLayout, data: ThicknessMapData): StepLine[] {
+  const values = data.thickness.flat().filter((v) => v !== null);
+  if (values.length === 0) return [];
+  const [least, greatest] = [Math.min(...values), Math.max(...values)];
+  const at = new Map(cells.map((c) => [`${c.row} ${c.column}`, c]));
+  return niceTicks(least, greatest, 6).filter((level) => level > least && level <= greatest).map((level) => ({
+    level,
+    edges: cells.flatMap((cell) => {
+      const differs = (other: MapCell | undefined) => other?.value != null && cell.value !== null && (cell.value >= level) !== (other.value >= level);
+      const right = at.get(`${cell.row + 1} ${cell.column}`);
+      const above = at.get(`${cell.row} ${cell.column + 1}`);
+      return [
+        ...(differs(right) ? [{ x1: cell.x + cell.width, x2: cell.x + cell.width, y1: cell.y, y2: cell.y + cell.height }] : []),
+        ...(differs(above) ? [{ x1: cell.x, x2: cell.x + cell.width, y1: cell.y, y2: cell.y }] : []),
+      ];
+    }),
+  })).filter((line) => line.edges.length > 0);
+}
+
+export interface StepLabel { level: number; text: string; place: Place }
+/** Figures on the lines; for maps whose cells are too small to hold their own. One that fits nowhere without covering another is left out. */
+export function stepLabels(lines: readonly StepLine[], { plot }: MapLayout, write: (level: number) => string): StepLabel[] {
+  const wishes = lines.map(({ level, edges }) => ({
+    level, text: write(level), fontSize: 11.5,
+    places: [0.5, 0.3, 0.7, 0.15, 0.85].map((share): Place => {
+      const edge = edges[Math.min(edges.length - 1, Math.floor(edges.length * share))] as StepLine['edges'][number];
+      return { x: (edge.x1 + edge.x2) / 2, y: (edge.y1 + edge.y2) / 2 + 4, anchor: 'middle' };
+    }),
+  }));
+  return placeLabels(wishes, plot).flatMap((place, i) => (place ? [{ level: (wishes[i] as { level: number }).level, text: (wishes[i] as { text: string }).text, place }] : []));
 }

@@ -2,7 +2,8 @@ import { useId, useMemo, useState } from 'react';
 import type { KeyboardEvent } from 'react';
 import { formatNumber } from '../../lib/format.js';
 import { HatchPattern } from '../hatch.js';
-import { layoutThicknessMap, stepCell, thinLabels } from './thickness-map-layout.js';
+import { layoutThicknessMap, stepCell, stepLabels, stepLines, thinLabels } from './thickness-map-layout.js';
+import { round } from './chart-scale.js';
 import type { MapCell, MapLayout, ThicknessMapData } from './thickness-map-layout.js';
 import './charts.css';
 import './thickness-map.css';
@@ -64,6 +65,19 @@ const Cells = ({ cells, unit, hatch, onPoint }: { cells: readonly MapCell[]; uni
   </g>
 );
 
+/** Where the thickness passes a round figure; the figure itself stands on the line where the cells hold none. */
+function Steps({ layout, data, unit }: { layout: MapLayout; data: ThicknessMapData; unit: 'µm' | 'mm' }) {
+  const lines = useMemo(() => stepLines(layout, data), [layout, data]);
+  const figured = layout.cells.some((c) => c.value !== null && c.width >= figureRoom.width && c.height >= figureRoom.height);
+  const labels = figured ? [] : stepLabels(lines, layout, (level) => `${figure(level, unit)} ${unit}`);
+  return (
+    <g aria-hidden="true" pointerEvents="none">
+      {lines.map(({ level, edges }) => <path key={level} className="mt-map-step" d={edges.map((e) => `M${round(e.x1)} ${round(e.y1)}L${round(e.x2)} ${round(e.y2)}`).join('')} />)}
+      {labels.map(({ level, text, place }) => <text key={level} className="d-label" x={place.x} y={place.y} fontSize="11.5" fontWeight="600" textAnchor={place.anchor}>{text}</text>)}
+    </g>
+  );
+}
+
 /** A thickness table drawn over A/V and temperature: the deeper the tint, the thicker. Pointer and arrow keys read a cell; the table below has all. */
 export function ThicknessMap({ data, unit, label }: ThicknessMapProps) {
   const { ref, width } = useElementWidth<HTMLDivElement>(680);
@@ -89,11 +103,12 @@ export function ThicknessMap({ data, unit, label }: ThicknessMapProps) {
         >
           <defs><HatchPattern id={hatch} color="var(--ink-3)" spacing={6} opacity={0.7} /></defs>
           <Cells cells={layout.cells} unit={unit} hatch={hatch} onPoint={setAt} />
+          <Steps layout={layout} data={data} unit={unit} />
           <Axes layout={layout} data={data} />
           {active && <rect className="mt-map-active" x={active.x} y={active.y} width={active.width} height={active.height} pointerEvents="none" />}
         </svg>
       </div>
-      <p className="mt-map-said" aria-live="polite">{said ?? `Thickness in ${unit}. Point at a cell, or use the arrow keys, to read it. Hatched: outside the assessment.`}</p>
+      <p className="mt-map-said" aria-live="polite">{said ?? `Thickness in ${unit}. Point at a cell, or use the arrow keys, to read it. The deeper the tint, the thicker; heavy lines mark round figures. Hatched: outside the assessment.`}</p>
       <MapTable data={data} unit={unit} label={label} />
     </figure>
   );

@@ -1,5 +1,5 @@
 import { keepPreviousData, queryOptions, useQuery } from '@tanstack/react-query';
-import type { Acceptance, AcceptanceDto, BulkMember, MemberChoice, MemberDto, MemberInput, MemberQuery, MemberSheetDto, MemberStructural, MemberUpdate, MembersChangedDto, MemberPageDto } from '@mantlet/common';
+import type { Acceptance, AcceptanceDto, BulkMember, MemberChoice, MemberDto, MemberInput, MemberNeighboursDto, MemberQuery, MemberSheetDto, MemberStructural, MemberUpdate, MembersChangedDto, MemberPageDto } from '@mantlet/common';
 import { api } from '../../../lib/api-client.js';
 import { projectKey } from '../../../lib/query-client.js';
 import { useProjectMutation } from '../../projects/api/projects.js';
@@ -18,6 +18,12 @@ export const useMembers = (projectId: string, query: Partial<MemberQuery>) => us
 export const memberQuery = (projectId: string, memberId: string) =>
   queryOptions({ queryKey: projectKey(projectId, 'member', memberId), queryFn: ({ signal }) => api.get<MemberSheetDto>(`${at(projectId)}/${memberId}`, undefined, signal) });
 export const useMember = (projectId: string, memberId: string) => useQuery(memberQuery(projectId, memberId));
+
+/** Before and after in the list as it was filtered and sorted; asked beside the sheet, which has its own by mark. */
+export const useMemberNeighbours = (projectId: string, memberId: string, filter: Partial<MemberQuery> | null) => useQuery({
+  queryKey: projectKey(projectId, 'member', memberId, 'neighbours', filter), enabled: filter !== null,
+  queryFn: ({ signal }) => api.get<MemberNeighboursDto>(`${at(projectId)}/${memberId}/neighbours`, filter ?? undefined, signal),
+});
 
 export interface SavedMember { id: string }
 export const useCreateMember = (projectId: string) => useProjectMutation<MemberInput, SavedMember>(projectId, (body) => api.post(at(projectId), body));

@@ -1,5 +1,5 @@
 import { App, Button } from 'antd';
-import { useState } from 'react';
+import { useMemo, useState } from 'react';
 import { useLocation, useNavigate, useParams } from 'react-router-dom';
 import type { MemberSheetDto } from '@mantlet/common';
 import { ApiError } from '../../../lib/api-client.js';
@@ -8,7 +8,7 @@ import { Page } from '../../../ui/page.js';
 import type { PageInfo } from '../../../ui/page-info.js';
 import { QueryState } from '../../../ui/states.js';
 import { RequireRight, useCurrentProject, useMay } from '../../projects/project-context.js';
-import { useDeleteMembers, useMember } from '../api/members.js';
+import { useDeleteMembers, useMember, useMemberNeighbours } from '../api/members.js';
 import { MemberDrawing } from '../components/member-drawing.js';
 import { Acceptances, MemberFacts } from '../components/member-facts.js';
 import { MemberHistory } from '../components/member-history.js';
@@ -18,6 +18,7 @@ import { WorkingTable } from '../components/working-table.js';
 import { AcceptanceDrawer } from '../forms/acceptance-drawer.js';
 import { EditMemberDrawer } from '../forms/member-drawer.js';
 import { StructuralDrawer } from '../forms/structural-drawer.js';
+import { filterOfAddress } from '../member-filter.js';
 import { sheetHeading, sheetSub, verdictNames } from '../member-words.js';
 import '../members.css';
 
@@ -77,20 +78,25 @@ function Sheet({ sheet }: { sheet: MemberSheetDto }) {
   const location = useLocation();
   const [open, setOpen] = useState<Open>(null);
   const list = (location.state as { list?: unknown } | null)?.list;
+  const filter = useMemo(() => (typeof list === 'string' && list ? filterOfAddress(new URLSearchParams(list)) : null), [list]);
+  const neighbours = useMemberNeighbours(project.id, sheet.member.id, filter);
+  const { previousId, nextId } = neighbours.data ?? sheet;
   const back = `/projects/${project.id}/members${typeof list === 'string' && list ? `?${list}` : ''}`;
   return (
     <Page
       title={`Member ${sheet.member.mark}`} projectName={project.name} heading={sheetHeading(sheet)} sub={sheetSub(sheet)} state={stateOf(sheet)}
-      actions={<><Actions sheet={sheet} setOpen={setOpen} /><MemberPager back={back} projectId={project.id} previousId={sheet.previousId} nextId={sheet.nextId} state={location.state} /></>}
+      actions={<><Actions sheet={sheet} setOpen={setOpen} /><MemberPager back={back} projectId={project.id} previousId={previousId} nextId={nextId} state={location.state} /></>}
     >
       <OpenNotice sheet={sheet} heading={sheetHeading(sheet)} />
       <MemberDrawing sheet={sheet} />
-      <WorkingTable working={sheet.working} />
-      <div className="mt-sheet-foot">
-        <MemberFacts sheet={sheet} />
-        <div className="mt-stack">
-          <Acceptances projectId={project.id} memberId={sheet.member.id} acceptances={sheet.member.acceptances} />
-          <MemberHistory history={sheet.history} />
+      <div className="mt-sheet-body">
+        <WorkingTable working={sheet.working} heading={`Member ${sheet.member.mark}: ${sheetHeading(sheet)}`} />
+        <div className="mt-sheet-foot">
+          <MemberFacts sheet={sheet} />
+          <div className="mt-stack">
+            <Acceptances projectId={project.id} memberId={sheet.member.id} acceptances={sheet.member.acceptances} />
+            <MemberHistory history={sheet.history} />
+          </div>
         </div>
       </div>
       <Drawers sheet={sheet} open={open} close={() => setOpen(null)} />

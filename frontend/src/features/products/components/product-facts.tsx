@@ -1,4 +1,4 @@
-import { fireCurveNames } from '@mantlet/common';
+import { evidenceRange, fireCurveNames } from '@mantlet/common';
 import type { ProductDto, ProductSupply } from '@mantlet/common';
 import { formatDate, formatNumber, joinWords } from '../../../lib/format.js';
 import { Panel } from '../../../ui/panel.js';
@@ -7,7 +7,7 @@ import { expiryWords, formNames, rangeWords } from '../product-words.js';
 
 export function EvidenceFacts({ product }: { product: ProductDto }) {
   const expiry = expiryWords(product);
-  const range = rangeWords(product.evidence, product.kind);
+  const range = rangeWords(evidenceRange(product.evidence), product.kind);
   return (
     <Panel title="Assessment">
       <dl className="mt-facts">

@@ -11,26 +11,36 @@ import { ScheduleTable } from '../../../ui/schedule-table.js';
 import { EmptyState, QueryState } from '../../../ui/states.js';
 import { RequireRight, useMay, useProjectIfAny } from '../../projects/project-context.js';
 import { useSession } from '../../session/api/session.js';
-import { useProduct, useProducts } from '../api/products.js';
+import { useProducts } from '../api/products.js';
 import type { Library } from '../api/products.js';
 import { Invented, Validity } from '../components/product-marks.js';
+import { RangeGlyph, spanOf } from '../components/range-glyph.js';
+import type { RangeSpan } from '../components/range-glyph.js';
 import { ProductDrawer } from '../forms/product-drawer.js';
 import { formNames, libraryWords, rangeWords } from '../product-words.js';
 import '../products.css';
 
-/** The range stands in the evidence, which the list leaves out because it is large. */
-function Range({ library, product }: { library: Library; product: ProductSummaryDto }) {
-  const { data, isError } = useProduct(library, product.id);
-  if (!data) return <span className="mt-sub">{isError ? 'Not loaded' : '…'}</span>;
-  const range = rangeWords(data.evidence, data.kind);
-  return <>{range.sectionFactor}, {range.temperature}<br /><span className="mt-sub">{range.period}, {range.thickness}</span></>;
+/** The assessed range in words, beside a small map of it: all of the list to one scale, so that ranges compare at a glance. */
+function Range({ product, span }: { product: ProductSummaryDto; span: RangeSpan }) {
+  const words = rangeWords(product.range, product.kind);
+  return (
+    <div className="mt-range">
+      <RangeGlyph range={product.range} span={span} />
+      <div>
+        {words.sectionFactor}, {words.temperature}
+        <div className="mt-sub">{words.period}, {words.thickness}</div>
+        <div className="mt-sub">{product.curves.map((c) => fireCurveNames[c]).join(', ')}{product.environments.length ? `; ${product.environments.join(', ')}` : ''}</div>
+      </div>
+    </div>
+  );
 }
 
 function ProductTable({ library, products, at }: { library: Library; products: readonly ProductSummaryDto[]; at: string }) {
+  const span = spanOf(products.map((p) => p.range));
   return (
     <Panel flush label="Products">
       <ScheduleTable
-        caption="Products" rows={products} rowKey={(p) => p.id} minWidth={1060}
+        caption="Products" rows={products} rowKey={(p) => p.id} minWidth={1100}
         columns={[
           {
             title: 'Product', key: 'name', width: 250, render: (_, p) => (
@@ -40,7 +50,7 @@ function ProductTable({ library, products, at }: { library: Library; products: r
           { title: 'Kind', key: 'kind', width: 130, render: (_, p) => productKindNames[p.kind] },
           { title: 'Evidence', key: 'evidence', width: 210, render: (_, p) => <div>{p.evidenceReference}, edition {p.evidenceEdition}<div className="mt-sub">{formNames[p.form]}</div></div> },
           { title: 'Valid until', key: 'valid', width: 140, render: (_, p) => <Validity product={p} /> },
-          { title: 'Range', key: 'range', width: 240, render: (_, p) => <div><Range library={library} product={p} /><div className="mt-sub">{p.curves.map((c) => fireCurveNames[c]).join(', ')}{p.environments.length ? `; ${p.environments.join(', ')}` : ''}</div></div> },
+          { title: 'Range', key: 'range', width: 320, render: (_, p) => <Range product={p} span={span} /> },
           { title: 'Zones', foldLabel: 'Used by zones', key: 'zones', width: 76, numeric: true, render: (_, p) => <Quantity value={p.usedByZones} what="Zones that use it" /> },
           ...(library ? [{ title: 'Kept by', key: 'owner', width: 110, render: (_: unknown, p: ProductSummaryDto) => (p.projectId ? 'This project' : 'Shared library') }] : []),
         ]}
