@@ -12,10 +12,16 @@ function waitingWords(keynotes: readonly Keynote[]): string {
   return mine === 1 ? ' One line waits on you.' : ` ${countWord(mine)} lines wait on you.`;
 }
 
-export function buildingWords({ members, settled, open, levels }: BuildingDto, keynotes: readonly Keynote[] = []): Words {
+export function buildingWords({ members, settled, open, unassessed, levels }: BuildingDto, keynotes: readonly Keynote[] = []): Words {
   if (levels.length === 0) return { heading: 'No levels yet', sub: 'The building is drawn from its levels and zones.' };
   if (members === 0) return { heading: 'No members yet', sub: 'The levels are there; the member schedule is not.' };
   if (open === 0 && settled === members) return { heading: `All ${formatNumber(members)} members settled`, sub: 'Nothing is open; the schedule can be prepared.' };
+  if (unassessed > 0) {
+    return {
+      heading: `${formatNumber(settled)} of ${formatNumber(members)} members settled, ${formatNumber(unassessed)} being recalculated`,
+      sub: `The new results come zone by zone; what is open is known when all are there.${waitingWords(keynotes)}`,
+    };
+  }
   const rest = open === 0 ? 'No member is open.' : `${countWord(open)} ${open === 1 ? 'is' : 'are'} open; the schedule can be prepared when ${open === 1 ? 'it is' : 'they are'} closed.`;
   return { heading: `${formatNumber(settled)} of ${formatNumber(members)} members settled`, sub: rest + waitingWords(keynotes) };
 }
@@ -31,7 +37,7 @@ export function issuedWords({ revision, protectedMembers, bareMembers, protected
 
 type Place = Pick<BuildingLevelDto, 'code'>;
 export const sayZone = (zone: BuildingZoneDto, level: Place): string =>
-  `Zone ${zone.code} ${zone.name}, level ${level.code}: R ${zone.periodMin}, ${formatNumber(zone.protectedAreaM2)} m² protected, ` +
+  `Zone ${zone.code} ${zone.name}, level ${level.code}: R ${zone.periodMin}, ${zone.unassessed ? 'being recalculated' : `${formatNumber(zone.protectedAreaM2)} m² protected`}, ` +
   `${zone.settled} of ${zone.members} members settled, ${zone.open} open, ${zone.issuedMembers} issued`;
 export const sayIssued = (zone: IssuedZoneDto, level: Place): string =>
   `Zone ${zone.code} ${zone.name}, level ${level.code}: R ${zone.periodMin}, ${formatNumber(zone.protectedAreaM2)} m² to protect, ` +

@@ -6,7 +6,8 @@ const own = (q: Pick<QuantitiesDto, 'lines'>, kind: ProductKind) => q.lines.filt
 const rounded = (values: readonly string[], places: number) => formatNumber(roundDecimal(sumDecimals(values), places).toFixed(places), places);
 
 /** "3118 m² of coating, 2846 L; 298 sheets of board; 21.4 m³ of spray" */
-export function quantitiesHeading(q: Pick<QuantitiesDto, 'lines' | 'purchases'>): string {
+export function quantitiesHeading(q: Pick<QuantitiesDto, 'lines' | 'purchases'> & Partial<Pick<QuantitiesDto, 'unassessed'>>): string {
+  if (q.unassessed) return `Not complete: ${formatNumber(q.unassessed)} ${q.unassessed === 1 ? 'member is' : 'members are'} being recalculated`;
   const parts: string[] = [];
   const coating = own(q, 'coating');
   if (coating.length > 0) {

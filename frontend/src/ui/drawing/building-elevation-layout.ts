@@ -2,6 +2,8 @@
 export interface ElevationZone {
   id: string; code: string; name: string; periodMin: number; protectedAreaM2: number;
   members: number; settled: number; open: number; issuedMembers: number;
+  /** being recalculated: the area is not known until then */
+  unassessed?: number;
 }
 export interface ElevationLevel { id: string; code: string; name: string; elevationM: number; heightM: number; zones: readonly ElevationZone[] }
 

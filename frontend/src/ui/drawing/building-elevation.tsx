@@ -48,7 +48,7 @@ interface ZoneProps extends Pick<BuildingElevationProps, 'zoneHref' | 'rails' | 
 function Zone({ box, zoneHref, rails, say, hatch, keynotes, pointed, onPoint, focusable }: ZoneProps) {
   const { zone, level, x, y, width, height } = box;
   const own = height >= 30 ? rails(zone) : rails(zone).slice(0, 1);
-  const labels = labelZone(box, { strong: `R ${zone.periodMin}`, code: zone.code, name: zone.name, aside: `${formatNumber(zone.protectedAreaM2)} m²`, keynotes }, railsPx(own.length));
+  const labels = labelZone(box, { strong: `R ${zone.periodMin}`, code: zone.code, name: zone.name, aside: zone.unassessed ? 'recalculating' : `${formatNumber(zone.protectedAreaM2)} m²`, keynotes }, railsPx(own.length));
   const on = pointed.zoneId === zone.id;
   return (
     <g

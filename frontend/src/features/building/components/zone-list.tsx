@@ -17,7 +17,7 @@ export function ZoneList({ levels, zoneHref }: { levels: readonly BuildingLevelD
           { title: 'Zone', key: 'zone', render: (_, r) => <Link to={zoneHref(r.zone)}>{r.zone.code} {r.zone.name}</Link> },
           { title: 'Level', key: 'level', render: (_, r) => `${r.level.code} ${formatLevel(r.level.elevationM)} m` },
           { title: 'Period', key: 'period', render: (_, r) => `R ${r.zone.periodMin}, ${fireCurveNames[r.zone.curve]}` },
-          { title: 'Area m²', key: 'area', numeric: true, render: (_, r) => <Quantity value={r.zone.protectedAreaM2} decimals={1} unit="m²" bare what="Protected area" /> },
+          { title: 'Area m²', key: 'area', numeric: true, render: (_, r) => <Quantity value={r.zone.unassessed ? null : r.zone.protectedAreaM2} decimals={1} unit="m²" bare what="Protected area" reason="being recalculated" /> },
           { title: 'Members', key: 'members', numeric: true, render: (_, r) => <Quantity value={r.zone.members} /> },
           { title: 'Settled', key: 'settled', numeric: true, render: (_, r) => <Quantity value={r.zone.settled} /> },
           { title: 'Open', key: 'open', numeric: true, render: (_, r) => <span className={r.zone.open ? 'mt-attention' : ''}><Quantity value={r.zone.open} /></span> },
