@@ -41,6 +41,20 @@ describe.each([['light', false], ['dark', true]] as const)('on a %s ground', (gr
     expect(await violations(page)).toEqual([]);
   });
 
+  it('the projects page has none', async () => {
+    await page.goto('/projects');
+    await page.locator('.mt-project svg.mt-drawing').waitFor();
+    expect(await violations(page)).toEqual([]);
+    await page.goBack();
+  });
+
+  it('the building as issued, for those who see nothing else, has none', async () => {
+    const contractor = await people.person('Contractor', { dark });
+    await goTo(contractor, 'Building');
+    await contractor.getByRole('region', { name: 'Elevation' }).waitFor();
+    expect(await violations(contractor)).toEqual([]);
+  });
+
   it('a member’s sheet has none', async () => {
     await openMember(page, 'L0-TB01');
     await page.waitForLoadState('networkidle');
