@@ -101,7 +101,7 @@ describe('nothing typed is lost', () => {
     expect(await place(page).inputValue()).toBe('Typed and not saved');
     await page.locator('.mt-strip-who').click();
     await page.getByText('Sign out', { exact: true }).click();
-    await page.getByText('Sign out without saving?').waitFor();
+    await page.getByText('Sign out without saving?').first().waitFor();
     await page.getByRole('button', { name: 'Stay here' }).click();
     expect(await place(page).inputValue()).toBe('Typed and not saved');
     await page.locator('.mt-strip-who').click();

@@ -7,9 +7,11 @@ const bounds = { '<=': 'at most', '>=': 'at least', '<': 'below', '>': 'above' }
 /** "must be above 0" needs its subject; "say why" and a whole sentence stand alone; what a schema says of itself is put plainly. */
 export function fieldSentence(label: string, problem: string): string {
   if (/^Invalid input/.test(problem)) return `${label} is needed.`;
-  if (/^Invalid option/.test(problem)) return `${label}: choose one of the values offered.`;
-  const limit = /^Too (?:big|small): expected number to be (<=|>=|<|>)\s?(-?[\d.]+)/.exec(problem);
+  if (/^Invalid (?:option|discriminator|UUID)/.test(problem)) return `${label}: choose one of the values offered.`;
+  const limit = /^Too (?:big|small): expected (?:number|int) to be (<=|>=|<|>)\s?(-?[\d.]+)/.exec(problem);
   if (limit) return `${label} must be ${bounds[limit[1] as keyof typeof bounds]} ${limit[2]}.`;
+  const entries = /^Too (big|small): expected array to have [<>]=?\s?(\d+)/.exec(problem);
+  if (entries) return `${label} needs at ${entries[1] === 'big' ? 'most' : 'least'} ${entries[2]} ${entries[2] === '1' ? 'entry' : 'entries'}.`;
   const length = /^Too (big|small): expected string to have [<>]=?\s?(\d+)/.exec(problem);
   if (length) return `${label} is ${length[1] === 'big' ? 'longer' : 'shorter'} than ${length[2]} characters.`;
   const asked = /^(say|choose|give|name|state)\b/.test(problem) ? problem.charAt(0).toUpperCase() + problem.slice(1) : problem;
