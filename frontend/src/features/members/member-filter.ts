@@ -1,16 +1,15 @@
-import { memberQuerySchema } from '@mantlet/common';
-import type { MemberQuery } from '@mantlet/common';
+import { memberNarrowingSchema, memberQuerySchema } from '@mantlet/common';
+import type { MemberNarrowing, MemberQuery } from '@mantlet/common';
 
-/** What the list shows, as it stands in the address: without defaults. */
-export type MemberFilter = Partial<MemberQuery>;
-export const defaultPageSize = 100;
+/** What the list shows, as it stands in the address: without defaults. Which window of it is on screen is no part of it. */
+export type MemberFilter = Partial<Omit<MemberQuery, 'page' | 'pageSize'>>;
 
-const fields = memberQuerySchema.shape;
+const { page: _page, pageSize: _pageSize, ...fields } = memberQuerySchema.shape;
 type Key = keyof typeof fields;
 const keys = Object.keys(fields) as Key[];
-const plain: Partial<Record<Key, unknown>> = { sort: 'mark', direction: 'asc', page: 1, pageSize: defaultPageSize };
-/** The parts that narrow the list, not those that order or page it. */
-export const narrowingKeys = ['search', 'zoneIds', 'levelIds', 'memberTypes', 'verdicts', 'productIds', 'memberIds', 'open'] as const satisfies readonly Key[];
+const plain: Partial<Record<Key, unknown>> = { sort: 'mark', direction: 'asc' };
+/** The parts that narrow the list, not those that order it. */
+export const narrowingKeys = Object.keys(memberNarrowingSchema.shape) as (keyof MemberNarrowing)[];
 
 const isEmpty = (value: unknown) => value === undefined || value === null || value === '' || (Array.isArray(value) && value.length === 0);
 
@@ -37,8 +36,8 @@ export function addressOfFilter(filter: MemberFilter, others: URLSearchParams = 
   return params;
 }
 
-export const isNarrowed = (filter: MemberFilter): boolean => narrowingKeys.some((key) => !isEmpty(filter[key]) && filter[key] !== 'false');
-/** Another filter begins at its first page. */
-export const changed = (filter: MemberFilter, change: MemberFilter): MemberFilter => ({ ...filter, page: 1, ...change });
-export const cleared = ({ sort, direction, pageSize }: MemberFilter): MemberFilter =>
-  ({ ...(sort && { sort }), ...(direction && { direction }), ...(pageSize && { pageSize }) });
+export const isNarrowed = (filter: MemberFilter): boolean => narrowingKeys.some((key) => !isEmpty(filter[key]));
+export const cleared = ({ sort, direction }: MemberFilter): MemberFilter => ({ ...(sort && { sort }), ...(direction && { direction }) });
+/** The filter alone, as the server is asked to find everything by it. */
+export const narrowing = (filter: MemberFilter): MemberNarrowing =>
+  Object.fromEntries(narrowingKeys.filter((key) => !isEmpty(filter[key])).map((key) => [key, filter[key]])) as MemberNarrowing;

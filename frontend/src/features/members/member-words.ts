@@ -1,6 +1,6 @@
 import type { MemberRowDto, MemberSheetDto, VerdictKind } from '@mantlet/common';
 import { exposureNames, formatPeriod, formatThickness, memberTypeNames } from '@mantlet/common';
-import { count, countWord, formatNumber } from '../../lib/format.js';
+import { countWord, formatNumber } from '../../lib/format.js';
 import type { StatusKind } from '../../ui/status-word.js';
 
 export const verdictNames: Record<VerdictKind, string> = {
@@ -41,8 +41,6 @@ export function sheetSub({ member, section, zone, level }: MemberSheetDto): stri
   return `${section.designation}, ${member.grade}, ${memberTypeNames[member.memberType].toLowerCase()}, ${formatNumber(member.lengthMm / 1000, 2)} m, ${member.quantity} off. ` +
     `Level ${level.code} ${level.name}, ${zone.code} ${zone.name}, ${formatPeriod(zone.periodMin)}. ${exposure}${why.replace(/\.$/, '')}.`;
 }
-
-export const changedWords = (n: number): string => (n === 0 ? 'Nothing was different' : `${count(n, 'member')} changed`);
 
 /** Why a member with a result still counts as open, as far as its row tells; null where the result itself says it. */
 export function openReason(row: Pick<MemberRowDto, 'open' | 'verdict' | 'assumed' | 'criticalTemperatureC'>, secondSignatureAboveC: number): string | null {

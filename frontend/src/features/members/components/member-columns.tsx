@@ -1,41 +1,73 @@
+import type { ReactNode } from 'react';
 import { Link } from 'react-router-dom';
-import type { MemberRowDto } from '@mantlet/common';
-import { formatLimitTemperature, memberTypeNames } from '@mantlet/common';
+import type { MemberRowDto, MemberSortKey } from '@mantlet/common';
+import { exposureNames, formatLimitTemperature, formatThickness, memberTypeNames, wayNames } from '@mantlet/common';
 import { Quantity } from '../../../ui/quantity.js';
-import type { ScheduleColumn } from '../../../ui/schedule-table.js';
 import { StatusWord } from '../../../ui/status-word.js';
-import type { MemberFilter } from '../member-filter.js';
 import { openReason, rowResult, rowState } from '../member-words.js';
 
+export interface MemberColumn {
+  key: string;
+  /** as it is called in lists and by screen readers */
+  name: string;
+  head?: ReactNode;
+  sort?: MemberSortKey;
+  numeric?: boolean;
+  width: number;
+  /** takes what is left of the width */
+  grows?: boolean;
+  cell: (row: MemberRowDto, context: { to: string; open: () => void; aboveC: number }) => ReactNode;
+}
+
 const whyNone = (row: MemberRowDto) => (row.verdict === null ? 'not assessed yet' : row.sentence);
+const thickness = (row: MemberRowDto, value: number | null, what: string) => (
+  <span className="mt-quantity" title={value === null || row.thicknessUnit === null ? `${what}: ${whyNone(row)}` : `${what}: ${formatThickness(value, row.thicknessUnit)}`}>
+    {value === null || row.thicknessUnit === null ? '–' : formatThickness(value, row.thicknessUnit)}
+  </span>
+);
 
 function CriticalTemperature({ row }: { row: MemberRowDto }) {
   const { criticalTemperatureC: at } = row;
   return <span className="mt-quantity" title={at === null ? `Critical temperature: ${whyNone(row)}` : `Critical temperature: ${formatLimitTemperature(at)}${row.assumed ? ', assumed' : ''}`}>{at === null ? '–' : formatLimitTemperature(at).replace(/ °C$/, '')}</span>;
 }
 
-function Result({ row, aboveC }: { row: MemberRowDto; aboveC: number }) {
+/** The result and why it is open, in one line; the whole of it on hover, and always in the text that is read out. */
+export function Result({ row, aboveC }: { row: MemberRowDto; aboveC: number }) {
   const why = openReason(row, aboveC);
-  return <StatusWord kind={rowState(row)}>{rowResult(row)}{why && <span className="mt-small mt-why">{why}</span>}</StatusWord>;
+  const words = why ? `${rowResult(row)}. ${why}` : rowResult(row);
+  return <span className="mt-one-line" title={words}><StatusWord kind={rowState(row)}>{words}</StatusWord></span>;
 }
 
-/** The schedule of members. Keys of sortable columns are the server's sort keys; the sorter's state comes from the address. */
-export function memberColumns(projectId: string, filter: MemberFilter, search: string, secondSignatureAboveC: number): ScheduleColumn<MemberRowDto>[] {
-  const sorted = (key: NonNullable<MemberFilter['sort']>) => ({
-    key, sorter: true, showSorterTooltip: false,
-    sortOrder: (filter.sort ?? 'mark') === key ? (filter.direction === 'desc' ? ('descend' as const) : ('ascend' as const)) : null,
-  });
-  return [
-    { ...sorted('mark'), title: 'Mark', width: 96, render: (_, r) => <Link className="mt-strong" to={`/projects/${projectId}/members/${r.id}`} state={{ list: search }}>{r.mark}</Link> },
-    { ...sorted('level'), title: 'Level', width: 66, render: (_, r) => r.levelCode },
-    { ...sorted('zone'), title: 'Zone', width: 66, render: (_, r) => r.zoneCode },
-    { ...sorted('type'), title: 'Type', width: 124, render: (_, r) => memberTypeNames[r.memberType] },
-    { ...sorted('section'), title: 'Section', width: 134, render: (_, r) => r.section },
-    { key: 'grade', title: 'Grade', width: 62, className: 'mt-sub', render: (_, r) => r.grade },
-    { ...sorted('length'), title: 'Length, m', foldLabel: 'Length, m', numeric: true, width: 88, render: (_, r) => <Quantity value={r.lengthMm / 1000} decimals={3} unit="m" bare what="Length" /> },
-    { ...sorted('quantity'), title: 'No.', foldLabel: 'Number off', numeric: true, width: 56, render: (_, r) => r.quantity },
-    { ...sorted('sectionFactor'), title: <>A/V, m<sup>−1</sup></>, foldLabel: 'A/V, 1/m', numeric: true, width: 82, render: (_, r) => <Quantity value={r.sectionFactorPerM} unit="1/m" bare what="Section factor" reason={whyNone(r)} /> },
-    { ...sorted('criticalTemperature'), title: <>θ<sub>cr</sub>, °C</>, foldLabel: 'Critical temperature, °C', numeric: true, width: 74, render: (_, r) => <CriticalTemperature row={r} /> },
-    { ...sorted('verdict'), title: 'Result', render: (_, r) => <Result row={r} aboveC={secondSignatureAboveC} /> },
-  ];
+export const memberColumns: readonly MemberColumn[] = [
+  { key: 'mark', name: 'Mark', sort: 'mark', width: 100, cell: (r, { to, open }) => <Link className="mt-strong" to={to} tabIndex={-1} onClick={open}>{r.mark}</Link> },
+  { key: 'level', name: 'Level', sort: 'level', width: 62, cell: (r) => r.levelCode },
+  { key: 'zone', name: 'Zone', sort: 'zone', width: 66, cell: (r) => r.zoneCode },
+  { key: 'type', name: 'Type', sort: 'type', width: 128, cell: (r) => memberTypeNames[r.memberType] },
+  { key: 'section', name: 'Section', sort: 'section', width: 138, cell: (r) => r.section },
+  { key: 'family', name: 'Section family', head: 'Family', sort: 'family', width: 80, cell: (r) => r.family },
+  { key: 'grade', name: 'Steel grade', head: 'Grade', sort: 'grade', width: 68, cell: (r) => r.grade },
+  { key: 'length', name: 'Length, m', sort: 'length', numeric: true, width: 92, cell: (r) => <Quantity value={r.lengthMm / 1000} decimals={3} unit="m" bare what="Length" /> },
+  { key: 'quantity', name: 'Number off', head: 'No.', sort: 'quantity', numeric: true, width: 58, cell: (r) => r.quantity },
+  { key: 'exposure', name: 'Exposure', sort: 'exposure', width: 180, cell: (r) => exposureNames[r.exposure] },
+  { key: 'form', name: 'Protection form', head: 'Form', sort: 'form', width: 80, cell: (r) => (r.protectionForm === 'boxed' ? 'Boxed' : 'Profile') },
+  { key: 'sectionFactor', name: 'A/V, 1/m', head: <>A/V, m<sup>−1</sup></>, sort: 'sectionFactor', numeric: true, width: 86, cell: (r) => <Quantity value={r.sectionFactorPerM} unit="1/m" bare what="Section factor" reason={whyNone(r)} /> },
+  { key: 'criticalTemperature', name: 'Critical temperature, °C', head: <>θ<sub>cr</sub>, °C</>, sort: 'criticalTemperature', numeric: true, width: 78, cell: (r) => <CriticalTemperature row={r} /> },
+  { key: 'way', name: 'How its temperature came about', head: 'Temperature', sort: 'way', width: 170, cell: (r) => wayNames[r.way] },
+  { key: 'utilisation', name: 'Utilisation in fire', head: 'Utilisation', sort: 'utilisation', numeric: true, width: 92, cell: (r) => <Quantity value={r.utilisation} decimals={2} what="Utilisation in fire" reason="not calculated" /> },
+  { key: 'period', name: 'Period, min', sort: 'period', numeric: true, width: 96, cell: (r) => r.periodMin },
+  { key: 'required', name: 'Required thickness', head: 'Required', sort: 'thickness', numeric: true, width: 92, cell: (r) => thickness(r, r.requiredThickness, 'Required thickness') },
+  { key: 'applied', name: 'Applied thickness', head: 'Applied', sort: 'applied', numeric: true, width: 92, cell: (r) => thickness(r, r.appliedThickness, 'Thickness by the zone’s policy') },
+  { key: 'product', name: 'Product', sort: 'product', width: 150, cell: (r) => r.productName ?? '–' },
+  { key: 'area', name: 'Protected area, m²', head: 'Area, m²', sort: 'area', numeric: true, width: 88, cell: (r) => <Quantity value={r.areaM2} decimals={1} unit="m²" bare what="Protected area" reason="nothing protected" /> },
+  { key: 'note', name: 'Note', width: 200, cell: (r) => <span className="mt-one-line" title={r.note}>{r.note}</span> },
+  { key: 'verdict', name: 'Result', sort: 'verdict', width: 330, grows: true, cell: (r, { aboveC }) => <Result row={r} aboveC={aboveC} /> },
+];
+export const usualColumns = ['mark', 'level', 'zone', 'type', 'section', 'grade', 'length', 'quantity', 'sectionFactor', 'criticalTemperature', 'verdict'];
+
+const byKey = new Map(memberColumns.map((column) => [column.key, column]));
+/** Columns as named in an address or kept: what is unknown or named twice is passed over; the mark is always there, first if it was left out. */
+export function columnKeys(text: string | null): string[] | null {
+  const keys = [...new Set((text ?? '').split(','))].filter((key) => byKey.has(key));
+  return keys.length === 0 ? null : keys.includes('mark') ? keys : ['mark', ...keys];
 }
+export const columnsOf = (keys: readonly string[]): MemberColumn[] => keys.flatMap((key) => byKey.get(key) ?? []);

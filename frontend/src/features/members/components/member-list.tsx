@@ -1,75 +1,102 @@
-import { Button, Pagination } from 'antd';
-import { useState } from 'react';
+import { useEffect, useState } from 'react';
+import { flushSync } from 'react-dom';
+import { Button } from 'antd';
 import type { ReactNode } from 'react';
 import { useQueryClient } from '@tanstack/react-query';
-import { defaultDesignBasis } from '@mantlet/common';
-import type { MemberQuery, MemberRowDto, Page } from '@mantlet/common';
+import type { MemberRowDto, MemberSortKey, MemberValuesDto } from '@mantlet/common';
 import { formatNumber } from '../../../lib/format.js';
-import { ScheduleTable } from '../../../ui/schedule-table.js';
 import { EmptyState } from '../../../ui/states.js';
-import { useCurrentProject, useMay } from '../../projects/project-context.js';
-import { membersQuery } from '../api/members.js';
-import { addressOfFilter, cleared, defaultPageSize, isNarrowed } from '../member-filter.js';
+import { useMay } from '../../projects/project-context.js';
+import { chipWords, chosenFields, without } from '../filter-fields.js';
+import { addressOfFilter, cleared, isNarrowed } from '../member-filter.js';
 import type { MemberFilter } from '../member-filter.js';
+import { useChoice } from '../use-choice.js';
+import { windowQuery } from '../use-member-windows.js';
+import type { MemberWindows } from '../use-member-windows.js';
+import { useRowWindow } from '../use-row-window.js';
 import { ChoiceBar } from './choice-bar.js';
-import { memberColumns } from './member-columns.js';
+import { columnsOf } from './member-columns.js';
+import type { MemberColumn } from './member-columns.js';
+import { MemberGrid } from './member-grid.js';
 
-interface MemberListProps { projectId: string; page: Page<MemberRowDto>; stale: boolean; filter: MemberFilter; setFilter: (next: MemberFilter) => void; firstStep: ReactNode }
-const gatherSize = 500;
+const mostOnPaper = 1000;
 
-/** One page of the schedule, ordered and paged by the server. Choosing reaches over pages. */
-export function MemberList({ projectId, page, stale, filter, setFilter, firstStep }: MemberListProps) {
+/** Rows for paper: all that are found, up to a limit that is said. The key for printing fetches what was never on screen. */
+function usePrint(projectId: string, filter: MemberFilter, total: number) {
   const client = useQueryClient();
-  const aboveC = (useCurrentProject().settings?.designBasis ?? defaultDesignBasis).secondSignatureAboveC;
+  const [paper, setPaper] = useState<readonly MemberRowDto[] | null>(null);
+  useEffect(() => {
+    const onKey = (event: KeyboardEvent) => {
+      if (event.key.toLowerCase() !== 'p' || !(event.ctrlKey || event.metaKey) || total === 0) return;
+      event.preventDefault();
+      const pages = Array.from({ length: Math.ceil(Math.min(total, mostOnPaper) / 500) }, (_, i) => i + 1);
+      void Promise.all(pages.map((page) => client.fetchQuery(windowQuery(projectId, filter, page, 500)))).then((fetched) => {
+        flushSync(() => setPaper(fetched.flatMap((p) => p.items)));
+        window.print();
+      });
+    };
+    const after = () => setPaper(null);
+    window.addEventListener('keydown', onKey);
+    window.addEventListener('afterprint', after);
+    return () => { window.removeEventListener('keydown', onKey); window.removeEventListener('afterprint', after); };
+  }, [client, projectId, filter, total]);
+  return paper;
+}
+
+function Paper({ rows, total, columns, aboveC }: { rows: readonly MemberRowDto[]; total: number; columns: readonly MemberColumn[]; aboveC: number }) {
+  return (
+    <div className="mt-paper">
+      {rows.length < total && <p>The first {formatNumber(rows.length)} of {formatNumber(total)} members: narrow the list to print the others.</p>}
+      <table>
+        <thead><tr>{columns.map((c) => <th key={c.key} className={c.numeric ? 'mt-num' : undefined}>{c.head ?? c.name}</th>)}</tr></thead>
+        <tbody>{rows.map((row) => <tr key={row.id}>{columns.map((c) => <td key={c.key} className={c.numeric ? 'mt-num' : undefined}>{c.key === 'mark' ? row.mark : c.cell(row, { to: '', open: () => undefined, aboveC })}</td>)}</tr>)}</tbody>
+      </table>
+    </div>
+  );
+}
+
+function NothingFits({ filter, values, setFilter }: { filter: MemberFilter; values: MemberValuesDto | undefined; setFilter: (next: MemberFilter) => void }) {
+  return (
+    <EmptyState
+      title="No member fits all of these"
+      action={<>{filter.search && <Button onClick={() => setFilter({ ...filter, search: '' })}>Without the search for “{filter.search}”</Button>}
+        {chosenFields(filter).map((field) => <Button key={field.key} onClick={() => setFilter(without(filter, field))}>Without {chipWords(field, filter, values)}</Button>)}
+        <Button type="primary" onClick={() => setFilter(cleared(filter))}>Show all</Button></>}
+    >
+      Take one of them out, or look for another mark.
+    </EmptyState>
+  );
+}
+
+interface MemberListProps {
+  projectId: string; windows: MemberWindows; filter: MemberFilter; setFilter: (next: MemberFilter) => void; columnKeys: readonly string[]; aboveC: number; firstStep: ReactNode;
+  values: MemberValuesDto | undefined; address: string;
+}
+
+/** The schedule in one scroll, what is chosen of it, and what it says where there is nothing. */
+export function MemberList({ projectId, windows, filter, setFilter, columnKeys, aboveC, firstStep, values, address }: MemberListProps) {
+  const { total, rowAt, stale, show } = windows;
   const may = useMay();
-  const [chosen, setChosen] = useState<readonly MemberRowDto[]>([]);
-  const mayChoose = may('edit-members') || may('accept-temperatures');
-  // rows as last fetched stand for the chosen ones, so that an acceptance sees fresh values
-  const fresh = new Map(page.items.map((r) => [r.id, r]));
-  const current = chosen.map((r) => fresh.get(r.id) ?? r);
-  const chooseAll = async () => {
-    const all: MemberRowDto[] = [];
-    for (let number = 1; all.length < page.total; number += 1) {
-      const next = await client.fetchQuery(membersQuery(projectId, { ...filter, page: number, pageSize: gatherSize }));
-      if (next.items.length === 0) break;
-      all.push(...next.items);
-    }
-    setChosen(all);
-  };
-  const empty = isNarrowed(filter)
-    ? <EmptyState title="No member fits" action={<Button onClick={() => setFilter(cleared(filter))}>Clear the filter</Button>}>Take something out of the filter, or look for another mark.</EmptyState>
-    : firstStep;
+  const rows = useRowWindow(`members:${projectId}`, addressOfFilter(filter).toString(), total);
+  const chosen = useChoice(projectId, filter, windows);
+  const columns = columnsOf(columnKeys);
+  const paper = usePrint(projectId, filter, total);
+  const items = rows.virtualizer.getVirtualItems();
+  const [from, to] = [items[0]?.index ?? 0, items.at(-1)?.index ?? 0];
+  useEffect(() => show(from, to), [show, from, to]);
+  const mayChoose = may('edit-members') || may('accept-temperatures') || may('edit-structural');
+  const sort = (key: MemberSortKey) => setFilter({ ...filter, sort: key, direction: (filter.sort ?? 'mark') === key && filter.direction !== 'desc' ? 'desc' : 'asc' });
+  if (total === 0) return isNarrowed(filter) ? <NothingFits filter={filter} values={values} setFilter={setFilter} /> : firstStep;
   return (
     <>
-      <ChoiceBar projectId={projectId} chosen={current} found={page.total} clear={() => setChosen([])} chooseAll={chooseAll} />
-      <div className="mt-members" aria-busy={stale}>
-        <ScheduleTable<MemberRowDto>
-          caption="Members" rows={page.items} rowKey={(r) => r.id} columns={memberColumns(projectId, filter, addressOfFilter(filter).toString(), aboveC)} loading={stale} empty={empty} tableLayout="fixed"
-          scroll={{ x: 1120 }}
-          {...(mayChoose && {
-            rowSelection: {
-              selectedRowKeys: chosen.map((r) => r.id), preserveSelectedRowKeys: true, columnWidth: 40, getCheckboxProps: (r: MemberRowDto) => ({ 'aria-label': `Choose ${r.mark}` } as object),
-              onChange: (keys: React.Key[]) => {
-                const known = new Map([...chosen, ...page.items].map((r) => [r.id, r]));
-                setChosen(keys.flatMap((key) => known.get(String(key)) ?? []));
-              },
-            },
-          })}
-          onChange={(_, __, sorter) => {
-            const one = Array.isArray(sorter) ? sorter[0] : sorter;
-            setFilter({ ...filter, page: 1, sort: (one?.order ? String(one.columnKey) : 'mark') as MemberQuery['sort'], direction: one?.order === 'descend' ? 'desc' : 'asc' });
-          }}
+      <ChoiceBar projectId={projectId} chosen={chosen} found={total} />
+      <div className={paper ? 'mt-members mt-noprint' : 'mt-members'}>
+        <MemberGrid
+          total={total} rowAt={rowAt} stale={stale} columns={columns} filter={filter} sort={sort} choice={mayChoose ? chosen.grid : null} aboveC={aboveC}
+          sheetOf={(id) => `/projects/${projectId}/members/${id}`} list={address} rows={rows} leave={rows.leave}
         />
       </div>
-      {page.total > 0 && (
-        <div className="mt-list-foot">
-          <span className="mt-sub">{formatNumber(page.total)} found</span>
-          <Pagination
-            size="small" current={page.page} pageSize={page.pageSize} total={page.total} showSizeChanger pageSizeOptions={[50, defaultPageSize, 250, 500]} showLessItems
-            onChange={(number, pageSize) => setFilter({ ...filter, page: pageSize === page.pageSize ? number : 1, pageSize })}
-          />
-        </div>
-      )}
+      {paper && <Paper rows={paper} total={total} columns={columns} aboveC={aboveC} />}
     </>
   );
 }

@@ -1,26 +1,34 @@
 import { App, Button } from 'antd';
 import { useCallback, useMemo, useState } from 'react';
 import { useSearchParams } from 'react-router-dom';
+import { defaultDesignBasis } from '@mantlet/common';
+import { formatNumber } from '../../../lib/format.js';
 import { Page } from '../../../ui/page.js';
 import { Panel } from '../../../ui/panel.js';
 import { EmptyState, QueryState } from '../../../ui/states.js';
 import { RequireRight, useCurrentProject, useMay } from '../../projects/project-context.js';
-import { useMembers } from '../api/members.js';
+import { useSession } from '../../session/api/session.js';
+import { useMemberValues } from '../api/member-list.js';
 import { LinkButton } from '../../../ui/link-button.js';
-import { MemberFilters } from '../components/member-filters.js';
+import { ColumnsDrawer } from '../components/columns-drawer.js';
+import { FilterBar } from '../components/filter-bar.js';
+import { KeptLists } from '../components/kept-lists.js';
 import { MemberList } from '../components/member-list.js';
 import { NewMemberDrawer } from '../forms/member-drawer.js';
-import { addressOfFilter, defaultPageSize, filterOfAddress } from '../member-filter.js';
+import { addressOfFilter, filterOfAddress, isNarrowed } from '../member-filter.js';
 import type { MemberFilter } from '../member-filter.js';
 import { listHeading } from '../member-words.js';
+import { useColumns } from '../use-columns.js';
+import { useMemberWindows } from '../use-member-windows.js';
 import '../members.css';
 
-/** The filter as it stands in the address: going back and sending a link both work. */
-function useFilter(): [MemberFilter, (next: MemberFilter) => void] {
+/** The filter as it stands in the address: going back and sending a link both work. What is typed letter by letter leaves one step behind. */
+function useFilter() {
   const [params, setParams] = useSearchParams();
   const filter = useMemo(() => filterOfAddress(params), [params]);
-  const setFilter = useCallback((next: MemberFilter) => setParams((now) => addressOfFilter(next, now), { replace: true }), [setParams]);
-  return [filter, setFilter];
+  const setFilter = useCallback((next: MemberFilter, how?: 'typing') => setParams((now) => addressOfFilter(next, now), { replace: how === 'typing' }), [setParams]);
+  const setColumns = (keys: readonly string[]) => setParams((now) => { const next = new URLSearchParams(now); next.set('columns', keys.join(',')); return next; }, { replace: true });
+  return { filter, setFilter, setColumns, address: params.toString(), columns: params.get('columns') };
 }
 
 function FirstStep({ importAt, add }: { importAt: string; add: () => void }) {
@@ -36,33 +44,45 @@ function FirstStep({ importAt, add }: { importAt: string; add: () => void }) {
 function Members() {
   const project = useCurrentProject();
   const may = useMay();
+  const me = useSession().data?.user?.id ?? '';
   const { message } = App.useApp();
-  const [filter, setFilter] = useFilter();
-  const [adding, setAdding] = useState(false);
-  const members = useMembers(project.id, { pageSize: defaultPageSize, ...filter });
-  const all = useMembers(project.id, { pageSize: 1 });
-  const open = useMembers(project.id, { open: 'true', pageSize: 1 });
-  const words = listHeading(all.data?.total, open.data?.total);
+  const { filter, setFilter, setColumns, address, columns } = useFilter();
+  const [keys, remember] = useColumns(me, columns);
+  const [open, setOpen] = useState<'add' | 'columns' | null>(null);
+  const windows = useMemberWindows(project.id, filter);
+  const values = useMemberValues(project.id).data;
+  const aboveC = (project.settings?.designBasis ?? defaultDesignBasis).secondSignatureAboveC;
+  const whole = windows.first.data?.project;
+  const words = listHeading(whole?.members, whole?.open);
   const importAt = `/projects/${project.id}/members/import`;
   const [onlyZone] = filter.zoneIds?.length === 1 ? filter.zoneIds : [null];
-  const actions = may('edit-members') && (
+  const found = whole ? (isNarrowed(filter) ? `${formatNumber(windows.total)} of ${formatNumber(whole.members)}` : `All ${formatNumber(whole.members)}`) : '';
+  const actions = (
     <>
-      <Button onClick={() => setAdding(true)}>Add a member</Button>
-      <LinkButton to={importAt} type="primary">Import members</LinkButton>
+      <Button onClick={() => setOpen('columns')}>Columns</Button>
+      {may('edit-members') && <Button onClick={() => setOpen('add')}>Add a member</Button>}
+      {may('edit-members') && <LinkButton to={importAt} type="primary">Import members</LinkButton>}
     </>
   );
   return (
     <Page title="Members" projectName={project.name} heading={words.heading} sub={words.sub} actions={actions}>
       <Panel flush label="Members">
-        <MemberFilters projectId={project.id} filter={filter} onChange={setFilter} />
-        <QueryState query={members} what="the members">
-          {(page) => <MemberList projectId={project.id} page={page} stale={members.isPlaceholderData} filter={filter} setFilter={setFilter} firstStep={<FirstStep importAt={importAt} add={() => setAdding(true)} />} />}
+        {whole?.members !== 0 && <KeptLists projectId={project.id} query={address} aboveC={aboveC} />}
+        {whole?.members !== 0 && <FilterBar filter={filter} values={values} found={found} onChange={setFilter} />}
+        <QueryState query={windows.first} what="the members">
+          {() => (
+            <MemberList
+              projectId={project.id} windows={windows} filter={filter} setFilter={setFilter} columnKeys={keys} aboveC={aboveC} values={values} address={address}
+              firstStep={<FirstStep importAt={importAt} add={() => setOpen('add')} />}
+            />
+          )}
         </QueryState>
       </Panel>
-      {adding && (
+      {open === 'columns' && <ColumnsDrawer keys={keys} onChange={(next) => { remember(next); setColumns(next); }} onClose={() => setOpen(null)} />}
+      {open === 'add' && (
         <NewMemberDrawer
-          projectId={project.id} zoneId={onlyZone ?? null} onClose={() => setAdding(false)}
-          onAdded={(mark) => { setAdding(false); void message.success(`${mark} added`); }}
+          projectId={project.id} zoneId={onlyZone ?? null} onClose={() => setOpen(null)}
+          onAdded={(mark) => { setOpen(null); void message.success(`${mark} added`); }}
         />
       )}
     </Page>
