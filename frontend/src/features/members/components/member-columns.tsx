@@ -60,7 +60,7 @@ export const memberColumns: readonly MemberColumn[] = [
   { key: 'product', name: 'Product', sort: 'product', width: 150, cell: (r) => r.productName ?? '–' },
   { key: 'area', name: 'Protected area, m²', head: 'Area, m²', sort: 'area', numeric: true, width: 88, cell: (r) => <Quantity value={r.areaM2} decimals={1} unit="m²" bare what="Protected area" reason="nothing protected" /> },
   { key: 'note', name: 'Note', width: 200, cell: (r) => <span className="mt-one-line" title={r.note}>{r.note}</span> },
-  { key: 'verdict', name: 'Result', sort: 'verdict', width: 330, grows: true, cell: (r, { aboveC }) => <Result row={r} aboveC={aboveC} /> },
+  { key: 'verdict', name: 'Result', sort: 'verdict', width: 225, grows: true, cell: (r, { aboveC }) => <Result row={r} aboveC={aboveC} /> },
 ];
 export const usualColumns = ['mark', 'level', 'zone', 'type', 'section', 'grade', 'length', 'quantity', 'sectionFactor', 'criticalTemperature', 'verdict'];
 

@@ -51,7 +51,7 @@ function Head({ columns, filter, sort, choice, template }: Pick<MemberGridProps,
           return (
             <span key={column.key} role="columnheader" className={column.numeric ? 'mt-num' : undefined} aria-sort={on ? (down ? 'descending' : 'ascending') : undefined}>
               {key === undefined ? column.head ?? column.name
-                : <button type="button" title={`Order by ${column.name}`} aria-label={column.name} onClick={() => sort(key)}>{column.head ?? column.name}<span aria-hidden="true" className="mt-grid-arrow">{on ? (down ? '▾' : '▴') : ''}</span></button>}
+                : <button type="button" title={`Order by ${column.name}`} onClick={() => sort(key)}>{column.head ?? column.name}<span aria-hidden="true" className="mt-grid-arrow">{on ? (down ? '▾' : '▴') : ''}</span></button>}
             </span>
           );
         })}

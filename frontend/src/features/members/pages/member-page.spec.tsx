@@ -1,6 +1,6 @@
 import { fireEvent, screen, waitFor, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import type { MemberRowDto, MemberSheetDto, Role } from '@mantlet/common';
 import { projectId, renderPage, serve, testProject } from '../../../test/render.js';
 import MemberPage from './member-page.js';
@@ -10,7 +10,7 @@ const memberId = '22222222-2222-4222-8222-222222222222';
 const at = `/projects/${projectId}/members`;
 const sheet: MemberSheetDto = {
   member: {
-    id: memberId, version: 4, zoneId: projectId, mark: 'B2-014', memberType: 'beam', sectionId: projectId, grade: 'S355', lengthMm: 7500, quantity: 2,
+    id: memberId, version: 4, zoneId: projectId, mark: 'B2-014', memberType: 'beam', sectionId: projectId, grade: 'S355', family: 'UB', periodMin: 60, note: '', utilisation: null, lengthMm: 7500, quantity: 2,
     exposure: { arrangement: 'three-sides', reason: 'concrete slab' }, protectionForm: 'profile', coatBackConnections: 0, coatBackGirthMm: 0, deductionM2: 0, onSite: true, note: '',
     basis: { way: 'none' }, basisSetBy: null, basisSetAt: null, acceptances: [],
   },
@@ -64,19 +64,21 @@ describe('the sheet of a member', () => {
 });
 
 const row: MemberRowDto = {
-  id: memberId, mark: 'B2-014', zoneId: projectId, zoneCode: 'Z07', levelCode: 'L2', memberType: 'beam', sectionId: projectId, section: 'UB 457x191x67', grade: 'S355', lengthMm: 7500, quantity: 2,
+  id: memberId, mark: 'B2-014', zoneId: projectId, zoneCode: 'Z07', levelCode: 'L2', memberType: 'beam', sectionId: projectId, section: 'UB 457x191x67', grade: 'S355', family: 'UB', periodMin: 60, note: '', utilisation: null, lengthMm: 7500, quantity: 2,
   exposure: 'three-sides', protectionForm: 'profile', way: 'none', verdict: 'not-determined', sectionFactorPerM: 168.6, criticalTemperatureC: null, assumed: false, requiredThickness: null, appliedThickness: null,
   thicknessUnit: null, productName: null, areaM2: null, open: true, sentence: 'Not determined: no actions given', version: 1,
 };
 
 describe('the list of members', () => {
   it('keeps its filter in the address and a reader without rights from editing', async () => {
-    serve({ [`GET ${at}`]: { body: { items: [row], total: 1, page: 1, pageSize: 100 } }, [`GET /projects/${projectId}/zones`]: { body: [] }, [`GET /projects/${projectId}/levels`]: { body: [] } });
+    serve({ [`GET ${at}`]: { body: { items: [row], total: 1, page: 1, pageSize: 100, project: { members: 1, open: 1 } } }, [`GET ${at}/values`]: { body: {} }, [`GET /projects/${projectId}/member-views`]: { body: [] } });
+    // rows are drawn for the height that is there, and this document has none of its own
+    vi.spyOn(HTMLElement.prototype, 'offsetHeight', 'get').mockReturnValue(600);
     const { router } = renderPage(<MembersPage />, { project: testProject(['structural-engineer']), path: '/projects/:projectId/members', at });
     expect(await screen.findByRole('link', { name: 'B2-014' })).toHaveAttribute('href', `${at}/${memberId}`);
     expect(screen.getByRole('heading', { level: 1 })).toHaveTextContent('0 of 1 members settled');
     expect(screen.queryByRole('button', { name: 'Add a member' })).toBeNull();
-    await userEvent.click(screen.getByRole('checkbox', { name: 'Open only' }));
+    await userEvent.click(screen.getByRole('link', { name: 'Open' }));
     await waitFor(() => expect(router.state.location.search).toBe('?open=true'));
     await userEvent.click(screen.getByRole('button', { name: 'Clear all' }));
     await waitFor(() => expect(router.state.location.search).toBe(''));
