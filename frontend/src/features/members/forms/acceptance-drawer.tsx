@@ -1,4 +1,4 @@
-import { useMemo } from 'react';
+import { useState } from 'react';
 import type { z } from 'zod';
 import { acceptanceKinds, acceptanceFormSchema, defaultDesignBasis } from '@mantlet/common';
 import type { Acceptance, FoundSummaryDto, MembersFound } from '@mantlet/common';
@@ -30,9 +30,10 @@ export function AcceptanceDrawer({ members, found, onClose, onAccepted }: Accept
   const words: Record<AcceptanceKind, string> = { assumed: 'An assumed critical temperature', 'high-temperature': `A critical temperature above ${aboveC} °C`, bare: 'Staying bare' };
   const number = (kind: AcceptanceKind) => (found ? found.summary.acceptable[kind] : by[kind].length);
   const first = acceptanceKinds.find((kind) => number(kind) > 0);
+  const [record] = useState(() => ({ values: { ...(first && { kind: first }), reason: '' } as z.input<typeof acceptanceFormSchema>, version: null }));
   const { form, edit } = useEditForm({
     schema: acceptanceFormSchema, name: `accept/${members.length === 1 ? members[0]?.id : project.id}`, title: 'Accept', save: accept,
-    record: useMemo(() => ({ values: { ...(first && { kind: first }), reason: '' } as z.input<typeof acceptanceFormSchema>, version: null }), [first]),
+    record,
     body: (input: Omit<Acceptance, 'memberIds' | 'found'>) => (found ? { ...input, found: found.choice } : { ...input, memberIds: by[input.kind].map((m) => m.id) }), onSaved: ({ accepted }) => onAccepted(accepted),
   });
   const kind = useWatch({ control: form.control, name: 'kind' }) as AcceptanceKind | undefined;
