@@ -10,6 +10,8 @@ export default defineConfig({
     alias: { '@mantlet/common': fileURLToPath(new URL('../common/src/index.ts', import.meta.url)) },
   },
   server: { port: 4710, proxy: { '/api': api } },
+  // the server puts the nonce of each answer in its place
+  html: { cspNonce: 'MANTLET_NONCE' },
   build: { outDir: 'dist/app', chunkSizeWarningLimit: 1200 },
   test: {
     environment: 'jsdom',

@@ -8,7 +8,7 @@ import { startServer } from './lib/postgres.mjs';
 import { postgresPackage } from './lib/postgres-programs.mjs';
 import { holderOf, isFree, portFrom } from './lib/ports.mjs';
 import { identity, startProcess } from './lib/processes.mjs';
-import { accountLines, demoAccounts, mustStay, prepareDatabase, serverEnvironment, untilAnswering } from './lib/server.mjs';
+import { accountLines, demoAccounts, mustStay, prepareDatabase, serverEnvironment, startMailFake, untilAnswering } from './lib/server.mjs';
 import { claimInstallation, databaseFolder, secrets } from './lib/state.mjs';
 
 const clientPort = 4710;
@@ -35,7 +35,9 @@ await runCommand(
     const server = await startServer({ dataDir: await databaseFolder(), port: portFrom('MANTLET_DATABASE_PORT', 4701), mayMove: !process.env.MANTLET_DATABASE_PORT, passwords });
     const ownState = path.join(stateDir, 'demo');
     const databaseUrl = await prepareDatabase(server, { name: 'mantlet', demo: true, stateDir: ownState });
-    const env = serverEnvironment({ databaseUrl, host: '127.0.0.1', port, sessionSecret, clientDir: built.client, stateDir: ownState });
+    const mail = await startMailFake(ownState);
+    // links in mail open the client that reloads
+    const env = serverEnvironment({ mail: { MANTLET_PUBLIC_URL: clientUrl, ...mail }, databaseUrl, host: '127.0.0.1', port, sessionSecret, clientDir: built.client, stateDir: ownState });
 
     const compiler = startProcess(process.execPath, [tool.tsc, '-b', 'common', 'backend', '--watch', '--preserveWatchOutput'], { name: 'the compiler', cwd: root });
     const api = startProcess(process.execPath, ['--watch', '--watch-preserve-output', '--enable-source-maps', built.server], { name: 'the server', env });

@@ -8,7 +8,7 @@ import { startServer } from './lib/postgres.mjs';
 import { postgresPackage } from './lib/postgres-programs.mjs';
 import { holderOf, isFree, portFrom } from './lib/ports.mjs';
 import { identity } from './lib/processes.mjs';
-import { accountLines, demoAccounts, mustStay, prepareDatabase, startApplication, startWorker } from './lib/server.mjs';
+import { accountLines, demoAccounts, mustStay, prepareDatabase, startApplication, startMailFake, startWorker } from './lib/server.mjs';
 import { claimInstallation, databaseFolder, secrets } from './lib/state.mjs';
 
 const help = `npm start                 the demo scenario, its data kept between starts
@@ -33,7 +33,7 @@ async function checkPort(port, host) {
   throw new Problem(`Port ${port} on ${host} is in use${await holderOf(port)} or not ours to use. Stop that program, or choose another port: PORT=${port + 100} npm start`);
 }
 
-function announce({ url, host, empty }) {
+function announce({ url, host, empty, caught }) {
   say(`\nMantlet is ready: ${url}\n`);
   if (empty) {
     say('This installation is empty. Whoever opens it first makes the administrator’s account.');
@@ -44,6 +44,7 @@ function announce({ url, host, empty }) {
       say(`\nCaution: the demo passwords are public and the server listens on ${host}. Use --empty for anything but a demonstration.`);
     }
   }
+  if (caught) say(`\nMail does not leave this machine: invitations and the like can be read at ${url}/caught-mail`);
   say('\nResults support, and do not replace, design by licensed engineers; local codes govern.');
   say('Ctrl-C stops the server and its database; the data stays.');
 }
@@ -76,10 +77,11 @@ await runCommand(
     const kind = wish.empty ? 'empty' : 'demo';
     const ownState = path.join(stateDir, kind);
     const databaseUrl = await prepareDatabase(server, { name: wish.empty ? 'mantlet_empty' : 'mantlet', demo: !wish.empty, stateDir: ownState });
-    const application = await startApplication({ databaseUrl, host, port, sessionSecret, clientDir: built.client, stateDir: ownState });
+    const mail = await startMailFake(ownState);
+    const application = await startApplication({ mail, databaseUrl, host, port, sessionSecret, clientDir: built.client, stateDir: ownState });
     const worker = startWorker({ databaseUrl, stateDir: ownState });
     running.add({ children: [application, worker].map((one) => identity(one.child.pid)) });
-    announce({ url, host, empty: wish.empty });
+    announce({ url, host, empty: wish.empty, caught: 'MANTLET_CAUGHT_MAIL_DIR' in mail });
     await Promise.race([mustStay(application, 'The server'), mustStay(worker, 'The worker')]);
     return undefined;
   },

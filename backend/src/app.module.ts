@@ -7,6 +7,10 @@ import { AuditModule } from './features/audit/audit.module.js';
 import { AuthModule } from './features/auth/auth.module.js';
 import { EventsModule } from './features/events/events.module.js';
 import { JobsModule } from './features/jobs/jobs.module.js';
+import { CaughtMailModule } from './features/caught-mail/caught-mail.module.js';
+import { noMail } from './features/mail/mail-options.js';
+import type { MailOptions } from './features/mail/mail-options.js';
+import { MailModule } from './features/mail/mail.module.js';
 import { MembersModule } from './features/members/members.module.js';
 import { ImportsModule } from './features/imports/imports.module.js';
 import { QuantitiesModule } from './features/quantities/quantities.module.js';
@@ -22,9 +26,16 @@ import { UsersModule } from './features/users/users.module.js';
 /** The features of the server, one module each. */
 export const featureModules = [AuditModule, UsersModule, AuthModule, SectionsModule, AssessmentModule, QuantitiesModule, LevelsModule, ProjectsModule, ZonesModule, ProductsModule, MembersModule, ImportsModule, RevisionsModule, SiteModule, EventsModule, JobsModule];
 
+export interface AppModuleOptions {
+  mail?: MailOptions | undefined;
+  /** where a local fake writes mail; anybody can read it here then */
+  caughtMailDir?: string | undefined;
+}
+
 @Module({})
 export class AppModule {
-  static forDatabase(url: string): DynamicModule {
-    return { module: AppModule, imports: [TypeOrmModule.forRoot(dataSourceOptions(url)), ...featureModules] };
+  static forDatabase(url: string, { mail = noMail, caughtMailDir }: AppModuleOptions = {}): DynamicModule {
+    const caught = caughtMailDir ? [CaughtMailModule.forFolder(caughtMailDir)] : [];
+    return { module: AppModule, imports: [TypeOrmModule.forRoot(dataSourceOptions(url)), MailModule.forRoot(mail), ...featureModules, ...caught] };
   }
 }

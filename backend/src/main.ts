@@ -1,9 +1,12 @@
 import 'reflect-metadata';
 import { Logger } from '@nestjs/common';
 import { createApp } from './create-app.js';
-import { clientDir, databaseUrl, host, port, secureCookies, sessionSecret } from './shared/environment.js';
+import { caughtMailDir, clientDir, databaseUrl, host, mailFrom, port, publicUrl, secureCookies, sessionSecret, smtpUrl } from './shared/environment.js';
 
-const app = await createApp({ databaseUrl: databaseUrl(), sessionSecret: sessionSecret(), secureCookies: secureCookies(), clientDir: clientDir() });
+const app = await createApp({
+  databaseUrl: databaseUrl(), sessionSecret: sessionSecret(), secureCookies: secureCookies(), clientDir: clientDir(), caughtMailDir: caughtMailDir(),
+  mail: { smtpUrl: smtpUrl(), from: mailFrom(), publicUrl: publicUrl(), caught: caughtMailDir() !== undefined, retryDelaysMs: [5_000, 30_000, 120_000] },
+});
 app.enableShutdownHooks();
 await app.listen(port(), host());
 new Logger('Mantlet').log(`Listening on http://${host()}:${port()}`);

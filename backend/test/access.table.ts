@@ -10,9 +10,20 @@ export const accessTable: Record<string, string> = {
   'DELETE /api/session': 'signed-in',
   'PUT /api/session/password': 'signed-in',
   'POST /api/set-up': 'public',
+  'GET /api/sessions': 'signed-in',
+  'DELETE /api/sessions': 'signed-in',
+  'DELETE /api/sessions/:sessionId': 'signed-in',
+  'POST /api/password-resets': 'public',
+  'POST /api/account-links/look-up': 'public',
+  'POST /api/account-links/use': 'public',
   'GET /api/users': 'administrator',
   'POST /api/users': 'administrator',
   'PATCH /api/users/:userId': 'administrator',
+  'POST /api/users/:userId/invitation': 'administrator',
+  'DELETE /api/users/:userId/invitation': 'administrator',
+  // on demonstration and development servers only
+  'GET /api/caught-mail': 'public',
+  'GET /api/caught-mail/:mailId': 'public',
 
   // projects
   'GET /api/projects': 'signed-in',

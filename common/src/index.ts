@@ -26,6 +26,7 @@ export * from './contracts/zones.js';
 export * from './contracts/zones.responses.js';
 export * from './contracts/projects.js';
 export * from './contracts/projects.responses.js';
+export * from './contracts/mail.js';
 export * from './contracts/accounts.js';
 export * from './contracts/accounts.responses.js';
 export * from './contracts/quantities.js';

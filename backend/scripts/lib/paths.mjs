@@ -26,6 +26,7 @@ export const built = {
   worker: at('backend/dist/worker/main.js'),
   migrate: at('backend/dist/database/migrate.js'),
   seedDemo: at('backend/dist/database/seed-demo.js'),
+  smtpFake: at('backend/dist/smtp-fake/smtp-fake.js'),
   bench: at('backend/dist/bench/bench.js'),
   client: at('frontend/dist/app'),
 };

@@ -1,6 +1,8 @@
 /** The Mantlet server as a child of a command, on a database that is migrated and, for the demo, filled. */
 import { existsSync, mkdirSync, readFileSync } from 'node:fs';
-import { Problem, isClosing, say } from './house.mjs';
+import path from 'node:path';
+import { pathToFileURL } from 'node:url';
+import { Problem, isClosing, onClose, say } from './house.mjs';
 import { at, built } from './paths.mjs';
 import { ensureDatabase, remarkOn, setRemark } from './postgres.mjs';
 import { answers } from './ports.mjs';
@@ -30,10 +32,25 @@ export async function prepareDatabase(server, { name, demo, stateDir, env: base 
 }
 
 /**
- * @param {{ databaseUrl: string, host: string, port: number, sessionSecret: string, clientDir: string, stateDir: string, env?: NodeJS.ProcessEnv }} wish
+ * A mail server of this command's own, which keeps every mail in the state folder and passes none on; the application shows them.
+ * Not where a real one is named, nor behind TLS, where strangers may come.
+ * @param {string} stateDir @param {NodeJS.ProcessEnv} env
+ * @returns {Promise<NodeJS.ProcessEnv>} what the server needs to know of it
+ */
+export async function startMailFake(stateDir, env = process.env) {
+  if (env.MANTLET_SMTP_URL || env.MANTLET_SECURE_COOKIES === '1') return {};
+  const { startSmtpFake } = await import(pathToFileURL(built.smtpFake).href);
+  const folder = path.join(stateDir, 'mail');
+  const fake = await startSmtpFake(folder);
+  onClose('the mail fake', fake.close);
+  return { MANTLET_SMTP_URL: fake.url, MANTLET_CAUGHT_MAIL_DIR: folder };
+}
+
+/**
+ * @param {{ databaseUrl: string, host: string, port: number, sessionSecret: string, clientDir: string, stateDir: string, mail?: NodeJS.ProcessEnv, env?: NodeJS.ProcessEnv }} wish
  * @returns {NodeJS.ProcessEnv} what backend/dist/main.js reads
  */
-export const serverEnvironment = ({ databaseUrl, host, port, sessionSecret, clientDir, stateDir, env = process.env }) => ({
+export const serverEnvironment = ({ databaseUrl, host, port, sessionSecret, clientDir, stateDir, mail = {}, env = process.env }) => ({
   ...env,
   MANTLET_DATABASE_URL: databaseUrl,
   HOST: host,
@@ -41,6 +58,7 @@ export const serverEnvironment = ({ databaseUrl, host, port, sessionSecret, clie
   MANTLET_SESSION_SECRET: sessionSecret,
   MANTLET_CLIENT_DIR: clientDir,
   MANTLET_STATE_DIR: stateDir,
+  ...mail,
 });
 
 /** Waits until the port answers. @throws {Problem} when the process ends first or a minute passes */

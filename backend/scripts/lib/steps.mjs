@@ -6,7 +6,7 @@ import { countReportFile, countTap, failure, single } from './counts.mjs';
 import { at, root, tool } from './paths.mjs';
 import { freePort } from './ports.mjs';
 import { show } from './processes.mjs';
-import { prepareDatabase, startApplication, startWorker } from './server.mjs';
+import { prepareDatabase, startApplication, startMailFake, startWorker } from './server.mjs';
 
 /**
  * @typedef {object} Run what a step is given
@@ -54,7 +54,8 @@ async function serve({ folder, env, database }, clientDir, name, demo) {
   const port = await freePort();
   // low, so that a whole building of the demo's size is already left to the worker
   const own = { ...env, MANTLET_RECALCULATE_IN_PLACE_MAX: '300' };
-  await startApplication({ databaseUrl, host: '127.0.0.1', port, sessionSecret: 'only for this run, on this machine', clientDir, stateDir, env: own });
+  const mail = await startMailFake(stateDir, env);
+  await startApplication({ mail, databaseUrl, host: '127.0.0.1', port, sessionSecret: 'only for this run, on this machine', clientDir, stateDir, env: own });
   startWorker({ databaseUrl, stateDir, env: own });
   return `http://127.0.0.1:${port}`;
 }

@@ -15,3 +15,15 @@ export const recalculateInPlaceMax = (): number => Number(process.env['MANTLET_R
 export const clientDir = (): string | undefined => process.env['MANTLET_CLIENT_DIR'];
 /** behind TLS the cookie must be secure */
 export const secureCookies = (): boolean => process.env['MANTLET_SECURE_COOKIES'] === '1';
+
+/** smtp://… or smtps://…, with name and password where the mail server wants them; unset, no mail is sent */
+export const smtpUrl = (): string | undefined => process.env['MANTLET_SMTP_URL'] || undefined;
+export const mailFrom = (): string => process.env['MANTLET_MAIL_FROM'] || 'Mantlet <mantlet@localhost>';
+/** where a local fake writes mail, on demonstration and development servers */
+export const caughtMailDir = (): string | undefined => process.env['MANTLET_CAUGHT_MAIL_DIR'] || undefined;
+/** The address at which people reach this installation; mailed links begin with it. */
+export function publicUrl(): string {
+  const given = process.env['MANTLET_PUBLIC_URL'];
+  if (given && !(URL.canParse(given) && /^https?:$/.test(new URL(given).protocol))) throw new Error(`MANTLET_PUBLIC_URL is “${given}”. Give an address such as https://mantlet.example.test.`);
+  return given || `http://${['0.0.0.0', '::'].includes(host()) ? 'localhost' : host()}:${port()}`;
+}

@@ -11,6 +11,7 @@ import { PasswordService } from '../../src/features/users/password.service.js';
 import { User } from '../../src/features/users/user.entity.js';
 import { AnswerCheck } from './answers.js';
 import { createTestDatabase } from './database.js';
+import { TestMail } from './mail.js';
 
 export type Agent = ReturnType<typeof request.agent>;
 const PASSWORD = 'a long test password';
@@ -24,21 +25,29 @@ export class TestApp {
   private constructor(
     readonly app: NestExpressApplication,
     readonly dataSource: DataSource,
+    /** what was mailed */
+    readonly mail: TestMail,
     private readonly dropDatabase: () => Promise<void>,
   ) {
     this.answers = new AnswerCheck(app);
   }
 
-  static async start(options: { catalogue?: boolean; secureCookies?: boolean } = {}): Promise<TestApp> {
+  static async start(options: { catalogue?: boolean; secureCookies?: boolean; smtpUrl?: string; clientDir?: string } = {}): Promise<TestApp> {
     const database = await createTestDatabase(options.catalogue ? 'catalogue' : 'migrated');
-    const app = await createApp({ databaseUrl: database.url, sessionSecret: 'test secret', secureCookies: options.secureCookies ?? false, quiet: true });
+    const mail = await TestMail.start();
+    const secureCookies = options.secureCookies ?? false;
+    const app = await createApp({
+      databaseUrl: database.url, sessionSecret: 'test secret', secureCookies, quiet: true, clientDir: options.clientDir, caughtMailDir: secureCookies ? undefined : mail.folder,
+      mail: { smtpUrl: options.smtpUrl ?? mail.smtpUrl, from: 'Mantlet <mantlet@example.test>', publicUrl: 'http://mantlet.example.test', caught: !secureCookies, retryDelaysMs: [20, 20] },
+    });
     await app.init();
-    return new TestApp(app, app.get(DataSource), database.drop);
+    return new TestApp(app, app.get(DataSource), mail, database.drop);
   }
 
   /** Fails where an answer did not fit what its route states. */
   async stop(): Promise<void> {
     await this.app.close();
+    await this.mail.stop();
     await this.dropDatabase();
     if (this.answers.faults.size) throw new Error(`answers that do not fit what their routes state:\n${[...this.answers.faults].join('\n')}`);
   }

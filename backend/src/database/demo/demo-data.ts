@@ -2,7 +2,7 @@ import { readFile } from 'node:fs/promises';
 import path from 'node:path';
 import {
   acceptanceKinds, codeSchema, criticalTemperatureBasisSchema, emailSchema, evidenceSchema, levelInputSchema, memberTypes, productInputSchema, projectInputSchema,
-  revisionInputSchema, takeoffSettingsUpdateSchema, userInputSchema, zoneInputSchema, zoneProtectionSchema,
+  revisionInputSchema, setUpSchema, takeoffSettingsUpdateSchema, zoneInputSchema, zoneProtectionSchema,
 } from '@mantlet/common';
 import type { CriticalTemperatureBasis, MemberType, ProductInput, ThicknessTable } from '@mantlet/common';
 import { parse } from 'csv-parse/sync';
@@ -11,7 +11,7 @@ import { z } from 'zod';
 /** The same place seen from the sources and from the build: both lie three folders below the package. */
 const folder = path.resolve(import.meta.dirname, '../../../../seeds/demo');
 
-const accountSchema = userInputSchema.omit({ administrator: true }).extend({ role: z.string() });
+const accountSchema = setUpSchema.extend({ role: z.string() });
 const scheduleSchema = z.object({ members: z.string(), structural: z.string() });
 const systemsSchema = z.partialRecord(z.enum(memberTypes), z.string());
 const scenarioSchema = z.object({

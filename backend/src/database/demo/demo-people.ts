@@ -29,7 +29,7 @@ export async function makePeople(app: INestApplicationContext, scenario: Scenari
   if (!office) throw new Error(`The demo's administrator ${scenario.administrator} has no account.`);
   const administrator: Actor = office;
   for (const { name, email, password } of accounts) {
-    if (!all.some((user) => user.email === email)) await users.create({ name, email, password, administrator: false }, administrator);
+    if (!all.some((user) => user.email === email)) await users.create({ name, email, password }, administrator);
   }
   const actors = new Map<string, Actor>((await users.list()).map(({ id, name, email, administrator: holds }) => [email, { id, name, email, administrator: holds }]));
   const as = (key: TeamKey, projectId: string): ProjectScope => {
@@ -45,7 +45,7 @@ export async function makeTeam(app: INestApplicationContext, scenario: Scenario,
   const memberships = app.get(MembershipsService, { strict: false });
   const there = new Set((await memberships.list(projectId)).map((one) => one.email));
   for (const [key, email] of Object.entries(scenario.team) as [TeamKey, string][]) {
-    if (!there.has(email)) await memberships.add(people.as('fireEngineer', projectId), { email, roles: rolesOfTeam[key] });
+    if (!there.has(email)) await memberships.add(people.as('fireEngineer', projectId), { email, roles: rolesOfTeam[key] }, { tell: false });
   }
 }
 

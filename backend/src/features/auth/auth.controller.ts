@@ -5,30 +5,35 @@ import type { Response } from 'express';
 import { CurrentActor, Public, SignedIn } from '../../shared/access.js';
 import type { Actor, ScopedRequest } from '../../shared/access.js';
 import { Returns, ReturnsNothing } from '../../shared/openapi/returns.js';
+import { MailService } from '../mail/mail.service.js';
 import { UsersService } from '../users/users.service.js';
+import { AccountThrottlerGuard } from './account-throttler.guard.js';
 import { LocalAuthGuard } from './local-auth.guard.js';
+import { openSession } from './open-session.js';
 import { SESSION_COOKIE } from './session.js';
-import { SignInThrottlerGuard } from './sign-in-throttler.guard.js';
 
 @Controller()
 export class AuthController {
-  constructor(private readonly users: UsersService) {}
+  constructor(
+    private readonly users: UsersService,
+    private readonly mail: MailService,
+  ) {}
 
   /** Who is signed in, if anybody; and whether the installation still waits for its first account. */
   @Get('session')
   @Public()
   @Returns(sessionDtoSchema, 'Who is signed in, if anybody; and whether the installation still waits for its first account.')
   async session(@Req() request: ScopedRequest): Promise<SessionDto> {
-    return { user: request.user ?? null, needsSetUp: !request.user && (await this.users.isEmpty()) };
+    return this.answer(request.user ?? null, !request.user && (await this.users.isEmpty()));
   }
 
   @Post('session')
   @HttpCode(200)
   @Public()
   @Returns(sessionDtoSchema, 'Signs in and sets the session cookie.')
-  @UseGuards(SignInThrottlerGuard, LocalAuthGuard)
+  @UseGuards(AccountThrottlerGuard, LocalAuthGuard)
   signIn(@Body({ schema: signInSchema }) _input: SignIn, @Req() request: ScopedRequest): SessionDto {
-    return { user: request.user ?? null, needsSetUp: false };
+    return this.answer(request.user ?? null);
   }
 
   @Delete('session')
@@ -44,18 +49,23 @@ export class AuthController {
   @Post('set-up')
   @Public()
   @Returns(sessionDtoSchema, 'Makes the first account of an empty installation, the administrator, and signs in.')
-  @UseGuards(SignInThrottlerGuard)
+  @UseGuards(AccountThrottlerGuard)
   async setUp(@Body({ schema: setUpSchema }) input: SetUp, @Req() request: ScopedRequest): Promise<SessionDto> {
     const user = await this.users.setUp(input);
-    await new Promise<void>((done, fail) => request.logIn(user, (error: unknown) => (error ? fail(error) : done())));
-    return { user, needsSetUp: false };
+    await openSession(request, user);
+    return this.answer(user);
   }
 
   @Put('session/password')
   @HttpCode(204)
   @SignedIn()
   @ReturnsNothing('Changes the password of the caller; their other sessions end.')
+  @UseGuards(AccountThrottlerGuard)
   changePassword(@Body({ schema: passwordChangeSchema }) input: PasswordChange, @CurrentActor() actor: Actor, @Req() request: ScopedRequest): Promise<void> {
     return this.users.changePassword(actor, input, request.sessionID);
+  }
+
+  private answer(user: Actor | null, needsSetUp = false): SessionDto {
+    return { user, needsSetUp, caughtMail: this.mail.caught };
   }
 }

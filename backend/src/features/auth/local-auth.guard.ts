@@ -2,15 +2,17 @@ import { HttpStatus, Injectable } from '@nestjs/common';
 import type { ExecutionContext } from '@nestjs/common';
 import { message } from '@mantlet/common';
 import { AuthGuard } from '@nestjs/passport';
-import type { Request } from 'express';
+import type { ScopedRequest } from '../../shared/access.js';
 import { Refusal } from '../../shared/refusal.js';
+import { openSession } from './open-session.js';
 
 /** Checks e-mail and password, then signs in; passport gives the session a new identifier as it does. */
 @Injectable()
 export class LocalAuthGuard extends AuthGuard('local') {
   override async canActivate(context: ExecutionContext): Promise<boolean> {
     await super.canActivate(context);
-    await super.logIn(context.switchToHttp().getRequest<Request>());
+    const request = context.switchToHttp().getRequest<ScopedRequest>();
+    if (request.user) await openSession(request, request.user);
     return true;
   }
 

@@ -5,7 +5,8 @@ import passport from 'passport';
 import pg from 'pg';
 
 export const SESSION_COOKIE = 'mantlet.sid';
-const HOURS = 60 * 60 * 1000;
+/** without a request in between */
+export const SESSION_HOURS = 12;
 
 /** Sessions live in PostgreSQL, so that any server process can answer and a restart signs nobody out. */
 export function useSessions(app: INestApplication, options: { url: string; secret: string; secure: boolean }): { close: () => Promise<void> } {
@@ -20,7 +21,7 @@ export function useSessions(app: INestApplication, options: { url: string; secre
       resave: false,
       saveUninitialized: false,
       rolling: true,
-      cookie: { httpOnly: true, sameSite: 'lax', secure: options.secure, maxAge: 12 * HOURS },
+      cookie: { httpOnly: true, sameSite: 'lax', secure: options.secure, maxAge: SESSION_HOURS * 60 * 60 * 1000 },
     }),
   );
   app.use(passport.initialize());

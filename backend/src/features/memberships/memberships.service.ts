@@ -1,12 +1,13 @@
 import { Injectable } from '@nestjs/common';
-import { message, roles as allRoles } from '@mantlet/common';
+import { message, roleNames, roles as allRoles } from '@mantlet/common';
 import type { MembershipDto, MembershipInput, MembershipRoles, Role } from '@mantlet/common';
 import { InjectDataSource, InjectRepository } from '@nestjs/typeorm';
-import { DataSource, Repository } from 'typeorm';
+import { DataSource, IsNull, Not, Repository } from 'typeorm';
 import type { EntityManager } from 'typeorm';
 import type { ProjectScope } from '../../shared/access.js';
 import { conflict, notFound, unprocessable } from '../../shared/refusal.js';
 import { AuditService } from '../audit/audit.service.js';
+import { MailService } from '../mail/mail.service.js';
 import { Project } from '../projects/project.entity.js';
 import { User } from '../users/user.entity.js';
 import { Membership } from './membership.entity.js';
@@ -24,6 +25,7 @@ export class MembershipsService {
     @InjectRepository(Membership) private readonly memberships: Repository<Membership>,
     @InjectDataSource() private readonly dataSource: DataSource,
     private readonly audit: AuditService,
+    private readonly mail: MailService,
   ) {}
 
   async rolesOf(projectId: string, userId: string): Promise<Role[]> {
@@ -50,17 +52,26 @@ export class MembershipsService {
     return { projectId, actor, roles: membership.roles };
   }
 
-  /** Brings somebody who has an account onto the team. */
-  async add(scope: ProjectScope, input: MembershipInput): Promise<MembershipDto> {
-    return this.dataSource.transaction(async (manager) => {
+  /** Brings somebody who has an account onto the team, and tells them by mail. */
+  async add(scope: ProjectScope, input: MembershipInput, { tell } = { tell: true }): Promise<MembershipDto> {
+    const { added, send } = await this.dataSource.transaction(async (manager) => {
       await this.lockTeam(manager, scope.projectId);
-      const user = await manager.findOneBy(User, { email: input.email, disabled: false });
+      // an invitation that waits to be accepted is no account yet, and whether there is one is the administrator's to know
+      const user = await manager.findOneBy(User, { email: input.email, disabled: false, passwordHash: Not(IsNull()) });
       if (!user) throw unprocessable(message('team.no-account', { email: input.email }), [{ path: 'email', message: 'has no account' }]);
       if (await manager.existsBy(Membership, { projectId: scope.projectId, userId: user.id })) throw conflict(message('team.already-on', { name: user.name }));
       const membership = await manager.save(manager.create(Membership, { projectId: scope.projectId, userId: user.id, roles: inOrder(input.roles) }));
       await this.record(manager, scope, 'joined the team', user, [], membership.roles);
-      return toMembershipDto({ ...membership, user });
+      return { added: toMembershipDto({ ...membership, user }), send: tell ? await this.notice(manager, scope, user, membership.roles) : null };
     });
+    send?.();
+    return added;
+  }
+
+  private async notice(manager: EntityManager, { projectId, actor }: ProjectScope, user: User, held: readonly Role[]): Promise<() => void> {
+    const { number, name } = await manager.findOneOrFail(Project, { where: { id: projectId }, select: { id: true, number: true, name: true } });
+    const roles = new Intl.ListFormat('en').format(held.map((role) => roleNames[role].toLowerCase()));
+    return this.mail.prepare(manager, 'added-to-team', user, { name: user.name, addedBy: actor.name, project: `${number} ${name}`, roles, link: this.mail.link(`/projects/${projectId}`) });
   }
 
   async setRoles(scope: ProjectScope, userId: string, { roles, was }: MembershipRoles): Promise<MembershipDto> {

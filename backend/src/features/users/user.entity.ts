@@ -7,8 +7,8 @@ export class User {
   @Column('text') name!: string;
   /** lower case */
   @Column('text', { unique: true }) email!: string;
-  /** argon2id */
-  @Column('text', { select: false }) passwordHash!: string;
+  /** argon2id; null until the invitation is accepted */
+  @Column('text', { select: false, nullable: true }) passwordHash!: string | null;
   @Column('boolean', { default: false }) administrator!: boolean;
   @Column('boolean', { default: false }) disabled!: boolean;
   @Column(nullableTimestamp) lastSignedInAt!: Date | null;

@@ -1,0 +1,13 @@
+import type { EntityManager } from 'typeorm';
+import type { Actor } from '../../shared/access.js';
+import type { User } from './user.entity.js';
+
+export function toActor(user: User): Actor {
+  return { id: user.id, name: user.name, email: user.email, administrator: user.administrator };
+}
+
+/** All of a person's sessions, or all but the one given. */
+export async function endSessionsOf(manager: EntityManager, userId: string, but = ''): Promise<number> {
+  const [, ended] = (await manager.query(`DELETE FROM "session" WHERE sess->'passport'->>'user' = $1 AND sid <> $2`, [userId, but])) as [unknown, number];
+  return ended;
+}
