@@ -5,7 +5,7 @@ export const projectMessages = {
   'project.take-a-leading-role': (_: Record<string, never>) =>
     "Take the fire engineer's or the specifier's role: without either, nobody could bring the others onto the team. It can be handed on later.",
   'team.no-account': (p: { email: string }) =>
-    `Nobody has an account with the e-mail address ${p.email}. Ask the administrator to make one, then add the person here.`,
+    `Nobody has an account with the e-mail address ${p.email}. Ask the administrator to invite the person; once they have chosen a password, add them here.`,
   'team.already-on': (p: { name: string }) => `${p.name} is on the team already. Change their roles in the list instead.`,
   'team.needs-a-lead': (_: Record<string, never>) =>
     "The team must keep at least one fire engineer or specifier, or nobody could change it any more. Give that role to another person first.",

@@ -1,9 +1,7 @@
 import { App, Button, Dropdown, Radio } from 'antd';
-import { useState } from 'react';
 import { useNavigate } from 'react-router-dom';
 import type { MeDto } from '@mantlet/common';
 import { useSignOut } from '../features/session/api/session.js';
-import { PasswordDrawer } from '../features/session/components/password-drawer.js';
 import { draftsOf, forgetDraftsOf } from '../lib/drafts.js';
 import { joinWords } from '../lib/format.js';
 import { leaveUnsaved, unsavedForms } from '../ui/form/use-unsaved-changes.js';
@@ -39,35 +37,31 @@ export function AccountMenu({ user, roles }: { user: MeDto | null; roles: string
   const { choice, choose } = useTheme();
   const leave = useLeave(user);
   const navigate = useNavigate();
-  const [password, setPassword] = useState(false);
   if (!user) return null;
   return (
-    <>
-      <Dropdown
-        trigger={['click']} placement="bottomRight"
-        menu={{
-          selectable: true, selectedKeys: [choice],
-          items: [
-            { type: 'group', label: user.email, children: [{ key: 'password', label: 'Change password' }, { key: 'help', label: 'Help' }] },
-            { type: 'group', label: 'Ground', children: themeChoices.map((c) => ({ key: c, label: `${themeNames[c]}${c === choice ? ' (chosen)' : ''}` })) },
-            { type: 'divider' },
-            { key: 'leave', label: 'Sign out' },
-          ],
-          onClick: ({ key }) => {
-            if (key === 'leave') leave();
-            else if (key === 'password') setPassword(true);
-            else if (key === 'help') void navigate('/help');
-            else choose(key as ThemeChoice);
-          },
-        }}
-      >
-        <button type="button" className="mt-strip-who" aria-haspopup="menu" title={`${user.name}: ${roles}`}>
-          <span className="mt-strip-label">{roles === user.name ? 'Signed in' : `Signed in: ${user.name}`}</span>
-          <span className="mt-strip-value"><span className="mt-ellipsis">{roles}</span><span aria-hidden="true">▾</span></span>
-        </button>
-      </Dropdown>
-      <PasswordDrawer open={password} onClose={() => setPassword(false)} />
-    </>
+    <Dropdown
+      trigger={['click']} placement="bottomRight"
+      menu={{
+        selectable: true, selectedKeys: [choice],
+        items: [
+          { type: 'group', label: user.email, children: [{ key: 'account', label: 'Your account' }, { key: 'help', label: 'Help' }] },
+          { type: 'group', label: 'Ground', children: themeChoices.map((c) => ({ key: c, label: `${themeNames[c]}${c === choice ? ' (chosen)' : ''}` })) },
+          { type: 'divider' },
+          { key: 'leave', label: 'Sign out' },
+        ],
+        onClick: ({ key }) => {
+          if (key === 'leave') leave();
+          else if (key === 'account') void navigate('/account');
+          else if (key === 'help') void navigate('/help');
+          else choose(key as ThemeChoice);
+        },
+      }}
+    >
+      <button type="button" className="mt-strip-who" aria-haspopup="menu" title={`${user.name}: ${roles}`}>
+        <span className="mt-strip-label">{roles === user.name ? 'Signed in' : `Signed in: ${user.name}`}</span>
+        <span className="mt-strip-value"><span className="mt-ellipsis">{roles}</span><span aria-hidden="true">▾</span></span>
+      </button>
+    </Dropdown>
   );
 }
 
@@ -75,17 +69,16 @@ export function AccountMenu({ user, roles }: { user: MeDto | null; roles: string
 export function AccountMenuItems({ user, roles, onDone }: { user: MeDto | null; roles: string; onDone: () => void }) {
   const { choice, choose } = useTheme();
   const leave = useLeave(user);
-  const [password, setPassword] = useState(false);
+  const navigate = useNavigate();
   if (!user) return null;
   return (
     <div className="mt-menu-account">
       <div className="mt-sub">Signed in as {user.name}{roles && roles !== user.name ? `, ${roles.charAt(0).toLowerCase()}${roles.slice(1)}` : ''}</div>
       <Radio.Group aria-label="Ground" value={choice} onChange={(e) => choose(e.target.value as ThemeChoice)} options={themeChoices.map((c) => ({ value: c, label: themeNames[c] }))} className="mt-radios" />
       <div className="mt-actions">
-        <Button onClick={() => setPassword(true)}>Change password</Button>
+        <Button onClick={() => { onDone(); void navigate('/account'); }}>Your account</Button>
         <Button onClick={() => { onDone(); leave(); }}>Sign out</Button>
       </div>
-      <PasswordDrawer open={password} onClose={() => setPassword(false)} />
     </div>
   );
 }

@@ -53,6 +53,11 @@ const routes = (client: QueryClient): RouteObject[] => [
     errorElement: <RouteFault />,
     hydrateFallbackElement: <LoadingState what="Mantlet" />,
     children: [
+      page('/forgotten-password', () => import('../features/session/pages/forgotten-password-page.js')),
+      page('/accept-invitation', () => import('../features/session/pages/accept-invitation-page.js')),
+      page('/reset-password', () => import('../features/session/pages/reset-password-page.js')),
+      page('/caught-mail', () => import('../features/session/pages/caught-mail-page.js')),
+      page('/caught-mail/:mailId', () => import('../features/session/pages/caught-mail-page.js')),
       page('/sign-in', () => import('../features/session/pages/sign-in-page.js')),
       page('/set-up', () => import('../features/session/pages/set-up-page.js')),
       {
@@ -67,6 +72,7 @@ const routes = (client: QueryClient): RouteObject[] => [
               page('/products', () => import('../features/products/pages/products-page.js')),
               page('/products/:productId', () => import('../features/products/pages/product-page.js')),
               page('/help', () => import('../features/help/pages/help-page.js')),
+              page('/account', () => import('../features/session/pages/account-page.js')),
               page('/accounts', () => import('../features/team/pages/accounts-page.js')),
               { path: '*', element: <NotFound /> },
             ])],

@@ -36,6 +36,9 @@ function useWish(wish: () => MediaQueryList): boolean {
   return holds;
 }
 
+/** What lets style elements of our own into the page; the server writes it into each answer. Nothing where no policy holds. */
+const nonce = document.querySelector<HTMLMetaElement>('meta[property=csp-nonce]')?.nonce;
+
 export function ThemeProvider({ children }: { children: ReactNode }) {
   const [choice, setChoice] = useState(remembered);
   const systemDark = useWish(darkWanted);
@@ -56,8 +59,8 @@ export function ThemeProvider({ children }: { children: ReactNode }) {
   }, [ground, still]);
   return (
     <ThemeContext value={state}>
-      <style>{paletteCss}</style>
-      <ConfigProvider theme={config} button={{ autoInsertSpace: false }} wave={{ disabled: true }}>
+      <style nonce={nonce}>{paletteCss}</style>
+      <ConfigProvider theme={config} {...(nonce ? { csp: { nonce } } : {})} button={{ autoInsertSpace: false }} wave={{ disabled: true }}>
         <App component={false}>{children}</App>
       </ConfigProvider>
     </ThemeContext>

@@ -8,7 +8,7 @@ export const sessionQuery = () =>
 export const useSession = () => useQuery(sessionQuery());
 
 /** Signing in keeps nothing of whoever was here before; who signs in again over their page finds it as it was. */
-function useOpenSession<T>(path: string, samePerson = false) {
+export function useOpenSession<T>(path: string, samePerson = false) {
   const client = useQueryClient();
   return useMutation({
     mutationFn: (body: T) => api.postPublic<SessionDto>(path, body),
@@ -23,4 +23,5 @@ export const useSetUp = () => useOpenSession<SetUp>('/set-up');
 
 /** Whoever signs out leaves the document as well, and with it everything that was fetched. */
 export const useSignOut = () => useMutation({ mutationFn: () => api.delete('/session') });
+/** The server ends the other sessions with it. */
 export const useChangePassword = () => useMutation({ mutationFn: (body: PasswordChange) => api.put('/session/password', body) });

@@ -1,6 +1,7 @@
-import { Navigate, useNavigate, useSearchParams } from 'react-router-dom';
+import { Link, Navigate, useNavigate, useSearchParams } from 'react-router-dom';
 import { LoadingState } from '../../../ui/states.js';
 import { useSession } from '../api/session.js';
+import { CaughtMailNote } from '../components/caught-mail-note.js';
 import { Gate } from '../components/gate.js';
 import { SignInForm } from '../components/sign-in-form.js';
 
@@ -18,7 +19,8 @@ export default function SignInPage() {
   return (
     <Gate title="Sign in" heading="Sign in" sub="From a steel frame and a fire strategy to a checked protection schedule.">
       <SignInForm onSignedIn={() => { void navigate(to, { replace: true }); }} />
-      <p className="mt-sub">No account, or a lost password? Ask the administrator of this installation.</p>
+      <p className="mt-sub"><Link to="/forgotten-password">Forgotten password?</Link> No account? The administrator of this installation invites people by e-mail.</p>
+      {session.data?.caughtMail && <CaughtMailNote />}
     </Gate>
   );
 }

@@ -23,7 +23,7 @@ function AddPerson({ projectId, onClose }: { projectId: string; onClose: () => v
   const { form, edit } = useEditForm({ schema: membershipInputSchema, name: `new-person/${projectId}`, title: 'Add a person', record: nobody, save: add, body: (input) => input, onSaved: onClose });
   return (
     <FormDrawer title="Add a person" open onClose={onClose} edit={edit} saveText="Add to the team" size={440}>
-      <TextField control={form.control} name="email" label="E-mail" type="email" help="Of an account that exists already; the administrator makes accounts." />
+      <TextField control={form.control} name="email" label="E-mail" type="email" help="Of somebody who has an account here; they are told by e-mail. Who has none is invited by the administrator first." />
       <CheckListField control={form.control} name="roles" label="Roles" options={roleOptions} help={roleHelp} />
     </FormDrawer>
   );
