@@ -2,6 +2,7 @@ import 'reflect-metadata';
 import type { Role } from '@mantlet/common';
 import { defaultProjectSettings, roles } from '@mantlet/common';
 import type { NestExpressApplication } from '@nestjs/platform-express';
+import passport from 'passport';
 import request from 'supertest';
 import { DataSource } from 'typeorm';
 import { createApp } from '../../src/create-app.js';
@@ -35,6 +36,8 @@ export class TestApp {
   static async start(options: { catalogue?: boolean; secureCookies?: boolean; smtpUrl?: string; clientDir?: string } = {}): Promise<TestApp> {
     const database = await createTestDatabase(options.catalogue ? 'catalogue' : 'migrated');
     const mail = await TestMail.start();
+    // passport keeps one list for the process, and would ask the first application who signs in to the second
+    Object.assign(passport, { _serializers: [], _deserializers: [] });
     const secureCookies = options.secureCookies ?? false;
     const app = await createApp({
       databaseUrl: database.url, sessionSecret: 'test secret', secureCookies, quiet: true, clientDir: options.clientDir, caughtMailDir: secureCookies ? undefined : mail.folder,

@@ -1,7 +1,7 @@
 /** first match wins: many browsers name others as well */
 const browsers: [RegExp, string][] = [
   [/\bEdgA?\/|\bEdgiOS\//, 'Edge'], [/\bOPR\//, 'Opera'], [/\bFirefox\/|\bFxiOS\//, 'Firefox'],
-  [/\bChrome\/|\bCriOS\/|\bChromium\//, 'Chrome'], [/\bVersion\/.*\bSafari\//, 'Safari'],
+  [/(\b|Headless)Chrome\/|\bCriOS\/|\bChromium\//, 'Chrome'], [/\bVersion\/.*\bSafari\//, 'Safari'],
 ];
 const systems: [RegExp, string][] = [
   [/\bAndroid\b/, 'Android'], [/\biPhone\b/, 'an iPhone'], [/\biPad\b/, 'an iPad'], [/\bWindows\b/, 'Windows'], [/\bMac OS X\b|\bMacintosh\b/, 'a Mac'],

@@ -7,7 +7,7 @@ export interface ReadMail {
 
 export function readMail(raw: string): ReadMail {
   const { headers, body } = split(raw);
-  return { to: inWords(headers.get('to') ?? ''), subject: inWords(headers.get('subject') ?? ''), text: plainText(headers, body) };
+  return { to: inWords(headers.get('to') ?? ''), subject: inWords(headers.get('subject') ?? ''), text: plainText(headers, body).replace(/\r\n/g, '\n') };
 }
 
 function split(raw: string): { headers: Map<string, string>; body: string } {

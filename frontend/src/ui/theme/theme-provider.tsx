@@ -3,6 +3,7 @@ import { createContext, useContext, useEffect, useLayoutEffect, useMemo, useStat
 import type { ReactNode } from 'react';
 import { antdTheme } from './antd-theme.js';
 import { dark, light, paletteCss } from './palette.js';
+import { styleNonce } from './style-nonce.js';
 
 export const themeChoices = ['system', 'light', 'dark'] as const;
 export type ThemeChoice = (typeof themeChoices)[number];
@@ -36,9 +37,6 @@ function useWish(wish: () => MediaQueryList): boolean {
   return holds;
 }
 
-/** What lets style elements of our own into the page; the server writes it into each answer. Nothing where no policy holds. */
-const nonce = document.querySelector<HTMLMetaElement>('meta[property=csp-nonce]')?.nonce;
-
 export function ThemeProvider({ children }: { children: ReactNode }) {
   const [choice, setChoice] = useState(remembered);
   const systemDark = useWish(darkWanted);
@@ -59,8 +57,8 @@ export function ThemeProvider({ children }: { children: ReactNode }) {
   }, [ground, still]);
   return (
     <ThemeContext value={state}>
-      <style nonce={nonce}>{paletteCss}</style>
-      <ConfigProvider theme={config} {...(nonce ? { csp: { nonce } } : {})} button={{ autoInsertSpace: false }} wave={{ disabled: true }}>
+      <style nonce={styleNonce}>{paletteCss}</style>
+      <ConfigProvider theme={config} {...(styleNonce ? { csp: { nonce: styleNonce } } : {})} button={{ autoInsertSpace: false }} wave={{ disabled: true }}>
         <App component={false}>{children}</App>
       </ConfigProvider>
     </ThemeContext>

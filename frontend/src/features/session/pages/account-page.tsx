@@ -11,7 +11,7 @@ export default function AccountPage() {
   const user = useSession().data?.user;
   const sessions = useOwnSessions();
   const here = sessions.data?.length;
-  const heading = here === undefined ? 'Your account' : here === 1 ? 'You are signed in here only' : `You are signed in on ${count(here, 'device or browser', 'devices or browsers')}`;
+  const heading = here === undefined ? 'Your account' : here === 1 ? 'You are signed in here only' : `You are signed in with ${count(here, 'browser')}`;
   return (
     <Page title="Your account" heading={heading} sub="A session ends by itself twelve hours after it was last used." width="narrow">
       <OwnSessions query={sessions} />

@@ -12,6 +12,7 @@ import { StatusWord } from '../../../ui/status-word.js';
 import { useSession } from '../../session/api/session.js';
 import { useInviteAgain, useUsers } from '../api/users.js';
 import { EditAccount, Invite } from '../components/account-drawer.js';
+import './accounts-page.css';
 
 /** "7 accounts in use, 2 invitations open" */
 export function accountsHeading(users: readonly UserDto[]): string {
