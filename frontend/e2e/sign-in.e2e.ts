@@ -35,7 +35,7 @@ describe('who comes in, and what they find', () => {
     const page = await people.visitor();
     await signIn(page, account('Administrator'));
     expect(await page.getByText('Marrow Gate Civic Library').count()).toBe(0);
-    await page.getByRole('link', { name: 'Accounts' }).click();
+    await page.getByRole('link', { name: 'Accounts', exact: true }).click();
     await page.getByText(account('Contractor').email).waitFor();
   });
 
@@ -50,7 +50,7 @@ describe('who comes in, and what they find', () => {
     await page.getByText('Password needs at least 12 characters.').waitFor();
     await page.getByLabel('Password', { exact: true }).fill('four unrelated words here');
     await page.getByRole('button', { name: 'Make the account' }).click();
-    await page.getByRole('link', { name: 'Accounts' }).waitFor();
+    await page.getByRole('link', { name: 'Accounts', exact: true }).waitFor();
     const second = await people.visitor({ empty: true });
     await second.goto('/set-up');
     await second.getByRole('button', { name: 'Sign in' }).waitFor();

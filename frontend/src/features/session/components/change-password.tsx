@@ -18,7 +18,7 @@ export function ChangePassword() {
   const form = useContractForm(passwordChangeSchema, { defaultValues: { current: '', next: '' } });
   const { isDirty } = useFormState({ control: form.control });
   useServerIssues(form, change.error);
-  useUnsavedChanges(isDirty && !change.isPending);
+  useUnsavedChanges(isDirty && !change.isPending, 'Change password');
   // what is wrong with one of the two fields stands beside it; saying it above as well would say it twice
   const besideField = change.error instanceof ApiError && change.error.issues.some((issue) => issue.path !== '');
   const done = () => {
