@@ -43,16 +43,16 @@ function ProductTable({ library, products, at }: { library: Library; products: r
         caption="Products" rows={products} rowKey={(p) => p.id} minWidth={1100}
         columns={[
           {
-            title: 'Product', key: 'name', width: 250, render: (_, p) => (
+            title: 'Product', key: 'name', width: 228, render: (_, p) => (
               <div><Link className="mt-strong" to={`${at}/${p.id}`}>{p.name}</Link><div className="mt-sub">{p.maker}</div>{p.invented && <Invented />}</div>
             ),
           },
-          { title: 'Kind', key: 'kind', width: 130, render: (_, p) => productKindNames[p.kind] },
-          { title: 'Evidence', key: 'evidence', width: 210, render: (_, p) => <div>{p.evidenceReference}, edition {p.evidenceEdition}<div className="mt-sub">{formNames[p.form]}</div></div> },
-          { title: 'Valid until', key: 'valid', width: 140, render: (_, p) => <Validity product={p} /> },
-          { title: 'Range', key: 'range', width: 320, render: (_, p) => <Range product={p} span={span} /> },
-          { title: 'Zones', foldLabel: 'Used by zones', key: 'zones', width: 76, numeric: true, render: (_, p) => <Quantity value={p.usedByZones} what="Zones that use it" /> },
-          ...(library ? [{ title: 'Kept by', key: 'owner', width: 110, render: (_: unknown, p: ProductSummaryDto) => (p.projectId ? 'This project' : 'Shared library') }] : []),
+          { title: 'Kind', key: 'kind', width: 122, render: (_, p) => productKindNames[p.kind] },
+          { title: 'Evidence', key: 'evidence', width: 196, render: (_, p) => <div>{p.evidenceReference}, edition {p.evidenceEdition}<div className="mt-sub">{formNames[p.form]}</div></div> },
+          { title: 'Valid until', key: 'valid', width: 124, render: (_, p) => <Validity product={p} /> },
+          { title: 'Range', key: 'range', width: 304, render: (_, p) => <Range product={p} span={span} /> },
+          { title: 'Zones', foldLabel: 'Used by zones', key: 'zones', width: 66, numeric: true, render: (_, p) => <Quantity value={p.usedByZones} what="Zones that use it" /> },
+          ...(library ? [{ title: 'Kept by', key: 'owner', width: 116, render: (_: unknown, p: ProductSummaryDto) => (p.projectId ? 'This project' : 'Shared library') }] : []),
         ]}
       />
     </Panel>
