@@ -1,30 +1,31 @@
 import { useWatch } from 'react-hook-form';
 import { wayNames } from '@mantlet/common';
-import type { MemberChoice, MembersChangedDto, MemberStructural } from '@mantlet/common';
+import type { MemberChoice, MembersChangedDto } from '@mantlet/common';
 import { count as counted } from '../../../lib/format.js';
 import { NumberField, SelectField, TextField } from '../../../ui/form/fields.js';
 import { FormDrawer } from '../../../ui/form/form-drawer.js';
-import { useContractForm, useServerIssues } from '../../../ui/form/use-contract-form.js';
+import { useEditForm } from '../../../ui/form/use-edit-form.js';
 import { useBulkStructural } from '../api/member-list.js';
 import { structuralFormSchema, structuralValues } from './structural-form.js';
-import type { StructuralValues } from './structural-form.js';
 
 // actions are each member's own, so that "calculated" is set on its sheet
 const ways = (['declared', 'utilisation', 'ambient-utilisation', 'assumed', 'none'] as const).map((value) => ({ value, label: wayNames[value] }));
+const start = { values: { basis: { ...structuralValues({ way: 'none' }).basis, way: 'declared' as const } }, version: null };
 
 interface BulkStructuralDrawerProps { projectId: string; choice: MemberChoice; count: number; onClose: () => void; onChanged: (answer: MembersChangedDto) => void }
 
 /** The same way to a critical temperature for many members: the structural engineer's alone. */
 export function BulkStructuralDrawer({ projectId, choice, count, onClose, onChanged }: BulkStructuralDrawerProps) {
   const save = useBulkStructural(projectId);
-  const form = useContractForm<StructuralValues, MemberStructural>(structuralFormSchema, { defaultValues: structuralValues({ way: 'declared' } as never, 1) });
-  useServerIssues(form, save.error);
+  const { form, edit } = useEditForm({
+    schema: structuralFormSchema, name: `bulk-structural/${projectId}`, title: 'Critical temperature of several members', record: start, save,
+    body: ({ basis }) => ({ ...choice, basis }), onSaved: onChanged,
+  });
   const { control } = form;
   const way = useWatch({ control, name: 'basis.way' });
-  const submit = form.handleSubmit(({ basis }) => save.mutate({ ...choice, basis }, { onSuccess: onChanged }));
   const reference = <TextField control={control} name="basis.reference" label="Reference" help="Where the value comes from: calculation, sheet, date." />;
   return (
-    <FormDrawer title={`Critical temperature of ${counted(count, 'member')}`} open onClose={onClose} onSubmit={(e) => { void submit(e); }} dirty={form.formState.isDirty && !save.isSuccess} saving={save.isPending} error={save.error} saveText={`Set on ${counted(count, 'member')}`}>
+    <FormDrawer title={`Critical temperature of ${counted(count, 'member')}`} open onClose={onClose} edit={edit} saveText={`Set on ${counted(count, 'member')}`}>
       <p className="mt-sub">All {count} get the same, under your name and today’s date; what each had before stays in its history. Actions are set on a member’s own sheet.</p>
       <SelectField control={control} name="basis.way" label="How it comes about" options={ways} />
       {way === 'declared' && <NumberField control={control} name="basis.temperatureC" label="Critical temperature" unit="°C" help="100 to 1200 °C." />}
