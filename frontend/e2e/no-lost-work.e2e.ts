@@ -99,9 +99,12 @@ describe('nothing typed is lost', () => {
     await page.getByText(/^You left changes here/).waitFor();
     await page.getByRole('button', { name: 'Put them back' }).click();
     expect(await place(page).inputValue()).toBe('Typed and not saved');
+    await particulars(page).getByRole('button', { name: 'Undo my changes' }).click();
+    expect(await place(page).inputValue()).not.toBe('Typed and not saved');
+    await place(page).fill('Typed and not saved');
     await page.locator('.mt-strip-who').click();
     await page.getByText('Sign out', { exact: true }).click();
-    await page.getByText('Sign out without saving?').first().waitFor();
+    await page.getByText('Sign out without saving?').last().waitFor();
     await page.getByRole('button', { name: 'Stay here' }).click();
     expect(await place(page).inputValue()).toBe('Typed and not saved');
     await page.locator('.mt-strip-who').click();

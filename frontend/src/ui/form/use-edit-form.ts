@@ -75,6 +75,10 @@ export interface EditForm {
 }
 
 interface Compared<In> { base: In; mine: In; theirs: Standing<In>; shown: Comparison }
+/** Every field as given: the form's own options would keep what was typed, also where it was just given up. */
+const afresh = { keepDirtyValues: false } as const;
+/** The same, on the ground the form has. */
+const onGround = { ...afresh, keepDefaultValues: true } as const;
 /** a record that is saved by others again and again between two of our tries */
 const mostTries = 3;
 
@@ -100,8 +104,8 @@ export function useEditForm<In extends FieldValues, Out, Sent, Result, Current =
   const fill = (standing: Standing<In>, values: In) => {
     opened.current = standing;
     setMovedOn(false);
-    form.reset(standing.values as DefaultValues<In>);
-    if (!sameValue(standing.values, values)) form.reset(values as DefaultValues<In>, { keepDefaultValues: true });
+    form.reset(standing.values as DefaultValues<In>, afresh);
+    if (!sameValue(standing.values, values)) form.reset(values as DefaultValues<In>, onGround);
   };
   /** typing is untouched by somebody's change of other fields of the same record */
   const othersOnly = (base: In, mine: In, theirs: In) => differencesOf(base, mine, theirs).every(({ by }) => by === 'mine');
@@ -144,11 +148,11 @@ export function useEditForm<In extends FieldValues, Out, Sent, Result, Current =
     const mine = structuredClone(form.getValues());
     if (!isDirty) {
       opened.current = record;
-      form.reset(record.values as DefaultValues<In>);
+      form.reset(record.values as DefaultValues<In>, afresh);
     } else if (differencesOf(opened.current.values, mine, record.values).every(({ by }) => by === 'mine')) {
       opened.current = record;
-      form.reset(record.values as DefaultValues<In>);
-      form.reset(mine as DefaultValues<In>, { keepDefaultValues: true });
+      form.reset(record.values as DefaultValues<In>, afresh);
+      form.reset(mine as DefaultValues<In>, onGround);
     } else setMovedOn(true);
   }, [record, isDirty, saving, compared, form]);
 
