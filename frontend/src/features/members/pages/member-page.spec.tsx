@@ -73,7 +73,7 @@ describe('the list of members', () => {
   it('keeps its filter in the address and a reader without rights from editing', async () => {
     serve({ [`GET ${at}`]: { body: { items: [row], total: 1, page: 1, pageSize: 100, project: { members: 1, open: 1 } } }, [`GET ${at}/values`]: { body: {} }, [`GET /projects/${projectId}/member-views`]: { body: [] } });
     // rows are drawn for the height that is there, and this document has none of its own
-    vi.spyOn(HTMLElement.prototype, 'offsetHeight', 'get').mockReturnValue(600);
+    vi.spyOn(Element.prototype, 'clientHeight', 'get').mockReturnValue(600);
     const { router } = renderPage(<MembersPage />, { project: testProject(['structural-engineer']), path: '/projects/:projectId/members', at });
     expect(await screen.findByRole('link', { name: 'B2-014' })).toHaveAttribute('href', `${at}/${memberId}`);
     expect(screen.getByRole('heading', { level: 1 })).toHaveTextContent('0 of 1 members settled');
