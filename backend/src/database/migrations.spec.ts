@@ -1,3 +1,4 @@
+import { criticalTemperatureBasisSchema } from '@mantlet/common';
 import { DataSource } from 'typeorm';
 import { createTestDatabase } from '../../test/support/database.js';
 import { dataSourceOptions } from './data-source-options.js';
@@ -16,6 +17,38 @@ describe('migrations', () => {
         `SELECT count(*) AS n FROM information_schema.tables WHERE table_schema = 'public' AND table_name NOT IN ('migrations', 'typeorm_metadata')`,
       );
       expect(tables[0]?.n).toBe('0');
+    } finally {
+      await dataSource.destroy();
+      await database.drop();
+    }
+  });
+
+  it('give members calculated before beams could be described what the contract now holds', async () => {
+    const database = await createTestDatabase();
+    const dataSource = await new DataSource(dataSourceOptions(database.url)).initialize();
+    try {
+      await dataSource.runMigrations();
+      await dataSource.undoLastMigration();
+      const design = { bucklingLengthYMm: 3000, bucklingLengthZMm: null, bucklingRule: 'given', lateralRestraint: 'continuous', continuousBeam: true, composite: false, webOpenings: false };
+      const effects = { axialKn: 1, momentYKnm: 2, shearZKn: 3 };
+      const bases = [
+        { way: 'calculated', reference: 'r', design: { ...design, actions: { given: 'fire-effect', effect: effects } } },
+        { way: 'calculated', reference: 'r', design: { ...design, actions: { given: 'characteristic', permanent: effects, leading: { ...effects, category: 'B' }, accompanying: [{ ...effects, category: 'wind' }] } } },
+        { way: 'calculated', reference: 'r', design: { ...design, actions: { given: 'characteristic', permanent: effects, leading: null, accompanying: [] } } },
+        { way: 'declared', temperatureC: 560, reference: 'r' },
+      ];
+      const runner = dataSource.createQueryRunner();
+      // one connection without foreign keys: only the members matter here
+      await runner.query('SET session_replication_role = replica');
+      for (const [i, basis] of bases.entries()) {
+        await runner.query(
+          `INSERT INTO members (project_id, zone_id, mark, member_type, section_id, grade, length_mm, quantity, exposure, protection_form, basis, version)
+           VALUES (gen_random_uuid(), gen_random_uuid(), $1, 'beam', gen_random_uuid(), 'S355', 6000, 1, '{}', 'profile', $2, 1)`, [`M${i}`, JSON.stringify(basis)]);
+      }
+      await runner.release();
+      await dataSource.runMigrations();
+      const stored: { basis: unknown }[] = await dataSource.query('SELECT basis FROM members ORDER BY mark');
+      expect(stored.map(({ basis }) => basis)).toEqual(bases.map((basis) => criticalTemperatureBasisSchema.parse(basis)));
     } finally {
       await dataSource.destroy();
       await database.drop();

@@ -1,4 +1,4 @@
-import { defaultDesignBasis, sentence } from '@mantlet/common';
+import { defaultDesignBasis, memberDesignSchema, sentence } from '@mantlet/common';
 import type { CriticalTemperatureBasis, FireCurve, SectionShape, ThicknessTable } from '@mantlet/common';
 import fc from 'fast-check';
 import { sectionProperties } from '../sections/index.js';
@@ -29,10 +29,7 @@ const says = (c: MemberCase): string => {
 };
 const loaded = (momentYKnm: number): CriticalTemperatureBasis => ({
   way: 'calculated', reference: 'Calculation 12',
-  design: {
-    actions: { given: 'fire-effect', effect: { axialKn: 0, momentYKnm, shearZKn: 0 } }, bucklingLengthYMm: null, bucklingLengthZMm: null, bucklingRule: 'given',
-    lateralRestraint: 'continuous', continuousBeam: false, composite: false, webOpenings: false,
-  },
+  design: memberDesignSchema.parse({ actions: { given: 'fire-effect', effect: { momentYKnm } } }),
 });
 
 describe('one member', () => {

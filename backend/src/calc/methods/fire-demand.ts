@@ -14,7 +14,9 @@ export interface FireDemand {
   beam: { described: DescribedBeam; diagram: BeamDiagram; loads: BeamLoad[]; factors: [VariableAction, number][] } | null;
 }
 
-const subsets = <T>(items: readonly T[]): T[][] => items.reduce<T[][]>((all, item) => [...all, ...all.map((one) => [...one, item])], [[]]);
+function subsets<T>(items: readonly T[]): T[][] {
+  return items.reduce<T[][]>((all, item) => [...all, ...all.map((one) => [...one, item])], [[]]);
+}
 
 /** Which variable actions act, and by which ψ: every choice of those present, each in turn as the leading one (EN 1990 6.4.3.3). */
 function combinations(categories: readonly VariableAction[], { psi, psiFi }: DesignBasis): [VariableAction, number][][] {

@@ -1,11 +1,12 @@
 import { actionsSchema, defaultDesignBasis } from '@mantlet/common';
 import { fireEffect, reductionFactorEtaFi } from './fire-effect.js';
+import type { EffectActions } from './fire-effect.js';
 
 describe('effects in fire (EN 1990 6.4.3.3)', () => {
   const actions = actionsSchema.parse({
     given: 'characteristic', permanent: { momentYKnm: 60, shearZKn: 40 }, leading: { momentYKnm: 50, shearZKn: 30, category: 'C' },
     accompanying: [{ momentYKnm: 20, shearZKn: 10, category: 'A' }, { momentYKnm: -100, category: 'E' }],
-  });
+  }) as EffectActions;
 
   it('adds ψ_1 of the leading and ψ_2 of the accompanying actions; a favourable one is left out', () => {
     // 60 + 0.7·50 + 0.3·20 = 101; 40 + 0.7·30 + 0.3·10 = 64 (ψ of EN 1990 Table A1.1)
@@ -21,7 +22,7 @@ describe('effects in fire (EN 1990 6.4.3.3)', () => {
   });
 
   it('finds the reversed moment where that is greater', () => {
-    const reversed = actionsSchema.parse({ given: 'characteristic', permanent: { momentYKnm: 10 }, leading: { momentYKnm: -100, category: 'B' } });
+    const reversed = actionsSchema.parse({ given: 'characteristic', permanent: { momentYKnm: 10 }, leading: { momentYKnm: -100, category: 'B' } }) as EffectActions;
     expect(fireEffect(reversed, defaultDesignBasis).momentYNmm / 1e6).toBeCloseTo(40, 9);
   });
 

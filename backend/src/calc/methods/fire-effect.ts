@@ -4,6 +4,9 @@ import type { WorkingStep } from '../formula.js';
 import { accidentalCombinationFormula } from '../standards/en-1990/clause-6-4-3-3-accidental.js';
 import { reductionFactorFormula } from '../standards/en-1993-1-2/clause-2-4-2-reduction-factor.js';
 
+/** Actions given as effects rather than as the loads of a described beam. */
+export type EffectActions = Exclude<Actions, { given: 'loads' }>;
+
 /** Design effects in fire, in N and N·mm, none below 0. Compression and tension may both occur in different combinations. */
 export interface FireEffect {
   compressionN: number;
@@ -47,7 +50,7 @@ function envelope(actions: Extract<Actions, { given: 'characteristic' }>, design
  * Combines characteristic effects for fire by EN 1990 6.4.3.3 with the project's ψ, or takes the effect as given.
  * A variable action that acts favourably is left out, per effect.
  */
-export function fireEffect(actions: Exclude<Actions, { given: 'loads' }>, design: DesignBasis, working: WorkingStep[] | null = null): FireEffect {
+export function fireEffect(actions: EffectActions, design: DesignBasis, working: WorkingStep[] | null = null): FireEffect {
   if (actions.given === 'fire-effect') {
     const { axialKn, momentYKnm, momentZKnm, shearZKn } = actions.effect;
     return { compressionN: Math.max(axialKn, 0) * 1e3, tensionN: Math.max(-axialKn, 0) * 1e3, momentYNmm: Math.abs(momentYKnm) * 1e6, momentZNmm: Math.abs(momentZKnm) * 1e6, shearZN: Math.abs(shearZKn) * 1e3 };

@@ -4,6 +4,7 @@ import { defaultDesignBasis, memberDesignSchema } from '@mantlet/common';
 import type { Exposure, SectionShape } from '@mantlet/common';
 import { criticalTemperature } from '../methods/critical-temperature.js';
 import { fireEffect } from '../methods/fire-effect.js';
+import type { EffectActions } from '../methods/fire-effect.js';
 import { bareMinutes, unprotectedTemperature } from '../methods/heating.js';
 import { sectionFactor, sectionProperties } from '../sections/index.js';
 import { sectionClass, yieldStrength } from '../standards/index.js';
@@ -32,7 +33,7 @@ function programValues(): Record<string, number> {
     leading: { category: 'B', momentYKnm: (20 * 7.5 ** 2) / 8, shearZKn: (20 * 7.5) / 2 },
   };
   const design = memberDesignSchema.parse({ actions });
-  const effect = fireEffect(design.actions, defaultDesignBasis);
+  const effect = fireEffect(design.actions as EffectActions, defaultDesignBasis);
   const result = criticalTemperature({
     basis: { way: 'calculated', design, reference: 'worked member' }, memberType: 'secondary-beam', shape, properties,
     steel: { grade: 'S355', yieldStrengthMPa: steel.value }, exposure, design: defaultDesignBasis, accepted: false,
