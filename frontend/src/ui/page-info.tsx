@@ -17,14 +17,15 @@ export function PageInfoProvider({ children }: { children: ReactNode }) {
 }
 export const usePageInfo = () => useContext(PageInfoContext).info;
 
-/** Sets the strip's page and state and the browser's title: "Members · Tern Quay Library · Mantlet". */
-export function useTitle(title: string, projectName?: string, state?: PageInfo['state']): void {
+/** Sets the strip's page and state and the browser's title: "Members · Tern Quay Library · Mantlet", "G-B4 · Members · Tern Quay Library · Mantlet". */
+export function useTitle(title: string, projectName?: string, state?: PageInfo['state'], trail?: readonly string[]): void {
   const { set } = useContext(PageInfoContext);
   const word = state?.word;
   const kind = state?.kind;
   const revision = state?.revision;
+  const words = (trail ?? [title]).join(' · ');
   useEffect(() => {
     set({ title, state: word && kind ? { word, kind, revision } : undefined });
-    document.title = [title, projectName, 'Mantlet'].filter(Boolean).join(' · ');
-  }, [set, title, projectName, word, kind, revision]);
+    document.title = [words, projectName, 'Mantlet'].filter(Boolean).join(' · ');
+  }, [set, title, words, projectName, word, kind, revision]);
 }

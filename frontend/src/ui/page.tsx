@@ -5,6 +5,8 @@ import type { PageInfo } from './page-info.js';
 interface PageProps {
   /** short name for the strip and the browser's title */
   title: string;
+  /** what the browser's title begins with instead: the thing, then the page it belongs to, so that tabs and bookmarks are told apart */
+  trail?: readonly string[] | undefined;
   /** name of the project, for the browser's title */
   projectName?: string | undefined;
   /** the answer, in a sentence without a full stop */
@@ -21,8 +23,8 @@ interface PageProps {
 }
 
 /** The frame of every page: heading that is the answer, a line below it, actions, then the content. */
-export function Page({ title, projectName, heading, sub, actions, state, width = 'full', children }: PageProps) {
-  useTitle(title, projectName, state);
+export function Page({ title, trail, projectName, heading, sub, actions, state, width = 'full', children }: PageProps) {
+  useTitle(title, projectName, state, trail);
   return (
     <article className={`mt-page mt-page-${width}`}>
       <header className="mt-page-head">

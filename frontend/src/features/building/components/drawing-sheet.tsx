@@ -13,12 +13,12 @@ interface DrawingSheetProps {
 /** A drawing on its sheet: the drawing, the line that reads out what is pointed at, the key and, in the corner, what the sheet is. */
 export function DrawingSheet({ reading, block, legend, children, label }: DrawingSheetProps) {
   return (
-    <section className="mt-panel mt-panel-flush mt-sheet" aria-label={label}>
+    <section className="mt-panel mt-panel-flush mt-elevation-sheet" aria-label={label}>
       {children}
-      <p className="mt-sheet-reading mt-noprint" aria-hidden="true">{reading ?? 'Point at a zone, or move between zones with the arrow keys, to read its figures here.'}</p>
-      <div className="mt-sheet-foot">
-        <div className="mt-sheet-key">{legend}</div>
-        <dl className="mt-sheet-block">{block.map(({ term, value }) => <div key={term}><dt>{term}</dt><dd>{value}</dd></div>)}</dl>
+      <p className="mt-elevation-reading mt-noprint" aria-hidden="true">{reading ?? 'Point at a zone, or move between zones with the arrow keys, to read its figures here.'}</p>
+      <div className="mt-elevation-foot">
+        <div className="mt-elevation-key">{legend}</div>
+        <dl className="mt-elevation-block">{block.map(({ term, value }) => <div key={term}><dt>{term}</dt><dd>{value}</dd></div>)}</dl>
       </div>
     </section>
   );

@@ -84,7 +84,7 @@ function Sheet({ sheet }: { sheet: MemberSheetDto }) {
   const back = `/projects/${project.id}/members${typeof list === 'string' && list ? `?${list}` : ''}`;
   return (
     <Page
-      title={`Member ${sheet.member.mark}`} projectName={project.name} heading={sheetHeading(sheet)} sub={sheetSub(sheet)} state={stateOf(sheet)}
+      title={`Member ${sheet.member.mark}`} trail={[sheet.member.mark, 'Members']} projectName={project.name} heading={sheetHeading(sheet)} sub={sheetSub(sheet)} state={stateOf(sheet)}
       actions={<><Actions sheet={sheet} setOpen={setOpen} /><MemberPager back={back} projectId={project.id} previousId={previousId} nextId={nextId} state={location.state} /></>}
     >
       <OpenNotice sheet={sheet} heading={sheetHeading(sheet)} />

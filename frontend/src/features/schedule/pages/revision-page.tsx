@@ -19,7 +19,7 @@ export default function RevisionPage() {
   const readiness = useReadiness(project.id, design && revision?.state === 'draft');
   return (
     <Page
-      title={revision ? `Schedule ${revision.code}` : 'Schedule'} projectName={project.name} heading={revision ? revisionHeading(revision) : 'Revision'} sub={revision?.purpose || undefined}
+      title={revision ? `Schedule ${revision.code}` : 'Schedule'} trail={revision ? [revision.code, 'Schedule'] : undefined} projectName={project.name} heading={revision ? revisionHeading(revision) : 'Revision'} sub={revision?.purpose || undefined}
       state={revision ? { ...stateWord(revision.state), revision: `${revision.code} ${stateWord(revision.state).word.toLowerCase()}` } : undefined} actions={<Link to={`/projects/${project.id}/schedule`}>All revisions</Link>}
     >
       <QueryState query={query} what="the revision">

@@ -91,11 +91,12 @@ function Zones({ project }: { project: ProjectDto }) {
   const zones = useZones(project.id);
   const may = useMay();
   const asked = useSearchParams()[0].get('zone');
+  const code = zones.data?.find((z) => z.id === asked)?.code;
   const [editing, setEditing] = useState<Editing>(null);
   const addLevel = may('edit-levels') && levels.data?.length ? <Button onClick={() => setEditing({ what: 'level', id: null })}>Add level</Button> : null;
   const words = levels.data && zones.data ? zonesWords(levels.data, zones.data) : { heading: 'Zones', sub: undefined };
   return (
-    <Page title="Zones" projectName={project.name} heading={words.heading} sub={words.sub} actions={addLevel}>
+    <Page title="Zones" trail={code ? [code, 'Zones'] : undefined} projectName={project.name} heading={words.heading} sub={words.sub} actions={addLevel}>
       <QueryState query={levels} what="the levels">
         {(l) => <QueryState query={zones} what="the zones">{(z) => <Content key={`${project.id} ${asked}`} project={project} levels={l} zones={z} asked={asked} editing={editing} setEditing={setEditing} />}</QueryState>}
       </QueryState>
