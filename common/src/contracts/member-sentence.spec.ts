@@ -16,7 +16,7 @@ describe('memberSentence', () => {
 
   it('says so where steel may stay bare or nothing was assessed', () => {
     expect(memberSentence({ ...result, verdict: 'bare' })).toBe('May stay bare');
-    expect(memberSentence({ ...result, verdict: null })).toBe('Not determined: not assessed yet');
+    expect(memberSentence({ ...result, verdict: null })).toBe('Not determined: being recalculated');
   });
 
   it('opens with the verdict once, whether or not the reason brings it', () => {
