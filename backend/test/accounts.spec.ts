@@ -1,5 +1,6 @@
 import { createHash } from 'node:crypto';
 import type { OwnSessionDto, UserDto } from '@mantlet/common';
+import { PasswordService } from '../src/features/users/password.service.js';
 import type { User } from '../src/features/users/user.entity.js';
 import { TestApp } from './support/app.js';
 import type { Agent } from './support/app.js';
@@ -261,6 +262,75 @@ describe('accounts', () => {
       await there.get('/api/sessions').expect(401);
       await here.get('/api/sessions').expect(200);
       expect((await app.mail.wait(user.email))[0]?.subject).toBe('Your password on Mantlet was changed');
+    });
+  });
+
+  describe('while their password is being changed', () => {
+    /** The next check of a password is answered, rightly, but only once the gate is opened. */
+    const holdNextCheck = (): { reached: Promise<void>; release: () => void } => {
+      const passwords = app.app.get(PasswordService);
+      const verify = passwords.verify.bind(passwords);
+      let [arrive, release] = [() => {}, () => {}];
+      const reached = new Promise<void>((done) => { arrive = done; });
+      const gate = new Promise<void>((done) => { release = done; });
+      jest.spyOn(passwords, 'verify').mockImplementationOnce(async (stored, password) => {
+        const right = await verify(stored, password);
+        arrive();
+        await gate;
+        return right;
+      });
+      return { reached, release: () => release() };
+    };
+    const resetPassword = async (user: User): Promise<void> => {
+      await app.anonymous().post('/api/password-resets').send({ email: user.email }).expect(202);
+      await use(await app.mail.token(user.email), 'password-reset').expect(200);
+    };
+    afterEach(() => jest.restoreAllMocks());
+
+    it('are not entered by a sign-in that was under way with the old one', async () => {
+      const user = await app.makeUser('In Flight');
+      const here = await app.signIn(user);
+      const late = app.anonymous();
+      const check = holdNextCheck();
+      const signingIn = late.post('/api/session').send({ email: user.email, password: 'a long test password' }).then((answer) => answer);
+      await check.reached;
+      await here.put('/api/session/password').send({ current: 'a long test password', next: PASSWORD }).expect(204);
+      check.release();
+      await signingIn;
+      expect((await late.get('/api/session').expect(200)).body.user).toBeNull();
+      await late.get('/api/projects').expect(401);
+      await here.get('/api/projects').expect(200);
+    });
+
+    it('keep the one chosen by the mailed link, against a change with the old one that was under way', async () => {
+      const user = await app.makeUser('Taken Back');
+      const thief = await app.signIn(user);
+      const check = holdNextCheck();
+      const changing = thief.put('/api/session/password').send({ current: 'a long test password', next: 'what the thief would like' }).then((answer) => answer);
+      await check.reached;
+      await resetPassword(user);
+      check.release();
+      expect((await changing).status).toBe(422);
+      await signIn(user.email, 'what the thief would like').expect(401);
+      await signIn(user.email, PASSWORD).expect(200);
+    });
+
+    it('open to one of two links that are used at the same moment, and never wait for each other', async () => {
+      const user = await app.makeUser('Two Links');
+      for (const n of [1, 2]) {
+        await app.anonymous().post('/api/password-resets').send({ email: user.email }).expect(202);
+        await app.mail.wait(user.email, n);
+      }
+      const tokens = (await app.mail.to(user.email)).map((mail) => /#([\w-]+)/.exec(mail.text)?.[1] ?? '');
+      const statuses = (await Promise.all(tokens.map((token) => use(token, 'password-reset')))).map((answer) => answer.status);
+      expect(statuses.sort()).toEqual([200, 410]);
+    });
+
+    it('are held by a session that is no longer good once the hash behind it is another', async () => {
+      const user = await app.makeUser('Replaced');
+      const agent = await app.signIn(user);
+      await app.dataSource.query('UPDATE users SET password_hash = $2 WHERE id = $1', [user.id, await app.app.get(PasswordService).hash(PASSWORD)]);
+      await agent.get('/api/projects').expect(401);
     });
   });
 

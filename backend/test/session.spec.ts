@@ -36,6 +36,29 @@ describe('session', () => {
     await agent.get('/api/users').expect(401);
   });
 
+  it('takes no identifier that somebody else chose or held before', async () => {
+    const user = await app.makeUser('Fix');
+    const cookieOf = (answer: { headers: Record<string, unknown> }): string => /mantlet\.sid=[^;]+/.exec(String(answer.headers['set-cookie']))?.[0] ?? '';
+    const signIn = (cookie: string) => app.anonymous().post('/api/session').set('Cookie', cookie).send({ email: user.email, password: 'a long test password' }).expect(200);
+    const planted = 'mantlet.sid=s%3Aplanted.signature';
+    const first = cookieOf(await signIn(planted));
+    expect(first).not.toBe('');
+    expect(first).not.toBe(planted);
+    const second = cookieOf(await signIn(first));
+    expect(second).not.toBe('');
+    expect(second).not.toBe(first);
+    // whoever kept the old one is not carried along
+    await app.anonymous().get('/api/projects').set('Cookie', first).expect(401);
+    await app.anonymous().get('/api/projects').set('Cookie', second).expect(200);
+  });
+
+  it('does not believe a proxy that nobody put there: another address in the header is no other address', async () => {
+    const user = await app.makeUser('Spoofed');
+    const statuses: number[] = [];
+    for (let i = 0; i < 11; i += 1) statuses.push((await app.anonymous().post('/api/session').set('X-Forwarded-For', `203.0.113.${i}`).send({ email: user.email, password: 'wrong' })).status);
+    expect(statuses.at(-1)).toBe(429);
+  });
+
   it('throttles guesses at one account', async () => {
     const user = await app.makeUser('Di');
     const statuses: number[] = [];

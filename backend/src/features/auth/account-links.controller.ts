@@ -39,8 +39,8 @@ export class AccountLinksController {
   @Public()
   @Returns(sessionDtoSchema, 'Sets the password, ends every other session of the person and signs them in here.')
   async use(@Body({ schema: accountLinkUseSchema }) input: AccountLinkUse, @Req() request: ScopedRequest): Promise<SessionDto> {
-    const user = await this.links.use(input);
-    await openSession(request, user);
-    return { user, needsSetUp: false, caughtMail: this.mail.caught };
+    const proved = await this.links.use(input);
+    await openSession(request, proved);
+    return { user: proved.actor, needsSetUp: false, caughtMail: this.mail.caught };
   }
 }

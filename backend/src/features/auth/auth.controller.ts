@@ -51,9 +51,9 @@ export class AuthController {
   @Returns(sessionDtoSchema, 'Makes the first account of an empty installation, the administrator, and signs in.')
   @UseGuards(AccountThrottlerGuard)
   async setUp(@Body({ schema: setUpSchema }) input: SetUp, @Req() request: ScopedRequest): Promise<SessionDto> {
-    const user = await this.users.setUp(input);
-    await openSession(request, user);
-    return this.answer(user);
+    const proved = await this.users.setUp(input);
+    await openSession(request, proved);
+    return this.answer(proved.actor);
   }
 
   @Put('session/password')

@@ -4,6 +4,7 @@ import { message } from '@mantlet/common';
 import { AuthGuard } from '@nestjs/passport';
 import type { ScopedRequest } from '../../shared/access.js';
 import { Refusal } from '../../shared/refusal.js';
+import type { Authenticated } from '../users/user-records.js';
 import { openSession } from './open-session.js';
 
 /** Checks e-mail and password, then signs in; passport gives the session a new identifier as it does. */
@@ -12,7 +13,8 @@ export class LocalAuthGuard extends AuthGuard('local') {
   override async canActivate(context: ExecutionContext): Promise<boolean> {
     await super.canActivate(context);
     const request = context.switchToHttp().getRequest<ScopedRequest>();
-    if (request.user) await openSession(request, request.user);
+    // as the strategy gave it; opening the session puts the person there
+    await openSession(request, request.user as unknown as Authenticated);
     return true;
   }
 

@@ -2,7 +2,7 @@ import { Injectable } from '@nestjs/common';
 import { signInSchema } from '@mantlet/common';
 import { PassportStrategy } from '@nestjs/passport';
 import { Strategy } from 'passport-local';
-import type { Actor } from '../../shared/access.js';
+import type { Authenticated } from '../users/user-records.js';
 import { UsersService } from '../users/users.service.js';
 
 @Injectable()
@@ -11,7 +11,7 @@ export class LocalStrategy extends PassportStrategy(Strategy) {
     super({ usernameField: 'email', passwordField: 'password' });
   }
 
-  async validate(email: string, password: string): Promise<Actor | false> {
+  async validate(email: string, password: string): Promise<Authenticated | false> {
     const input = signInSchema.safeParse({ email, password });
     return input.success ? ((await this.users.authenticate(input.data.email, input.data.password)) ?? false) : false;
   }

@@ -1,20 +1,20 @@
+import type { IncomingMessage } from 'node:http';
 import { Injectable } from '@nestjs/common';
-import { PassportSerializer } from '@nestjs/passport';
-import type { Actor } from '../../shared/access.js';
+import passport from 'passport';
+import type { Actor, ScopedRequest } from '../../shared/access.js';
 import { UsersService } from '../users/users.service.js';
 
-/** The session holds the account's id only; who that is, is asked anew at each request. */
+/**
+ * The session holds the account's id, and a sign of the password that opened it; who that is, is asked anew at each request.
+ * So a sign-in that was under way while the password was changed opens nothing, whatever the order in which the two are written.
+ */
 @Injectable()
-export class SessionSerializer extends PassportSerializer {
+export class SessionSerializer {
   constructor(private readonly users: UsersService) {
-    super();
-  }
-
-  override serializeUser(user: Actor, done: (error: unknown, id?: string) => void): void {
-    done(null, user.id);
-  }
-
-  override deserializeUser(id: string, done: (error: unknown, user?: Actor | false) => void): void {
-    this.users.findActor(id).then((actor) => done(null, actor ?? false), done);
+    passport.serializeUser((user, done) => done(null, (user as Actor).id));
+    // with the request, which the framework's own serializer does not hand on
+    passport.deserializeUser<string, IncomingMessage>((request, id, done) => {
+      this.users.findActor(id, (request as ScopedRequest).session.opened?.stamp).then((actor) => done(null, actor ?? false), done);
+    });
   }
 }

@@ -5,14 +5,14 @@ import type { AccountLink, AccountLinkDto, AccountLinkUse, LinkPurpose } from '@
 import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource, IsNull, MoreThan } from 'typeorm';
 import type { EntityManager } from 'typeorm';
-import type { Actor } from '../../shared/access.js';
 import { Refusal } from '../../shared/refusal.js';
 import { AuditService } from '../audit/audit.service.js';
 import { MailService } from '../mail/mail.service.js';
 import { AccountLinkRecord } from './account-link.entity.js';
 import { PasswordService } from './password.service.js';
 import { User } from './user.entity.js';
-import { endSessionsOf, toActor } from './user-records.js';
+import { endSessionsOf, passwordStamp, toActor } from './user-records.js';
+import type { Authenticated } from './user-records.js';
 
 export const INVITATION_DAYS = 7;
 export const RESET_MINUTES = 60;
@@ -53,22 +53,22 @@ export class AccountLinksService {
   }
 
   /** Sets the password and closes every other way in that stood open before. Of two who use a link at once, one succeeds. */
-  async use({ purpose, token, password }: AccountLinkUse): Promise<Actor> {
-    await this.open(purpose, token);
+  async use({ purpose, token, password }: AccountLinkUse): Promise<Authenticated> {
+    const { userId } = await this.open(purpose, token);
     const passwordHash = await this.passwords.hash(password);
     return this.dataSource.transaction(async (manager) => {
-      const taken = await manager.update(AccountLinkRecord, { tokenHash: digest(token), purpose, usedAt: IsNull(), expiresAt: MoreThan(new Date()) }, { usedAt: new Date() });
-      if (!taken.affected) throw ended(purpose);
-      const { userId } = await manager.findOneByOrFail(AccountLinkRecord, { tokenHash: digest(token) });
+      // the account before its links, as everywhere, so that nobody who does the same at the same time waits for us
       const user = await manager.findOne(User, { where: { id: userId }, lock: { mode: 'pessimistic_write' } });
       if (!user || user.disabled) throw ended(purpose);
+      const taken = await manager.update(AccountLinkRecord, { tokenHash: digest(token), purpose, usedAt: IsNull(), expiresAt: MoreThan(new Date()) }, { usedAt: new Date() });
+      if (!taken.affected) throw ended(purpose);
       await manager.update(User, userId, { passwordHash, lastSignedInAt: new Date() });
       await this.endAll(manager, userId);
       await endSessionsOf(manager, userId);
       const actor = toActor(user);
       const action = purpose === 'invitation' ? 'invitation accepted' : 'password chosen by a mailed link';
       await this.audit.record(manager, { projectId: null, actor, action, entity: 'user', entityId: userId, label: user.email });
-      return actor;
+      return { actor, stamp: passwordStamp(passwordHash) };
     });
   }
 

@@ -3,14 +3,15 @@ import { message, sentence } from '@mantlet/common';
 import type { MailFailure, MailTemplate, PasswordChange, SetUp, UserDto, UserUpdate } from '@mantlet/common';
 import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource, IsNull, Not } from 'typeorm';
-import type { EntityManager } from 'typeorm';
+import type { EntityManager, SelectQueryBuilder } from 'typeorm';
 import type { Actor } from '../../shared/access.js';
 import { Refusal, conflict, notFound } from '../../shared/refusal.js';
 import { AuditService, changesBetween } from '../audit/audit.service.js';
 import { MailService } from '../mail/mail.service.js';
 import { AccountLinksService } from './account-links.service.js';
 import { PasswordService } from './password.service.js';
-import { endSessionsOf, toActor } from './user-records.js';
+import { endSessionsOf, passwordStamp, toActor } from './user-records.js';
+import type { Authenticated } from './user-records.js';
 import { User } from './user.entity.js';
 
 /** Accounts: who may sign in, and the administrator's say over them. */
@@ -29,18 +30,20 @@ export class UsersService {
   }
 
   /** The account if e-mail and password belong together and it is in use, else null. */
-  async authenticate(email: string, password: string): Promise<Actor | null> {
+  async authenticate(email: string, password: string): Promise<Authenticated | null> {
     const users = this.dataSource.getRepository(User);
     const user = await users.createQueryBuilder('u').addSelect('u.passwordHash').where('u.email = :email', { email }).getOne();
     const matches = await this.passwords.verify(user?.passwordHash ?? null, password);
-    if (!user || !matches || user.disabled) return null;
+    if (!user?.passwordHash || !matches || user.disabled) return null;
     await users.update(user.id, { lastSignedInAt: new Date() });
-    return toActor(user);
+    return { actor: toActor(user), stamp: passwordStamp(user.passwordHash) };
   }
 
-  async findActor(id: string): Promise<Actor | null> {
-    const user = await this.dataSource.manager.findOneBy(User, { id, disabled: false });
-    return user ? toActor(user) : null;
+  /** Whose session it is, unless the account was closed or has got another password than the one that opened it. */
+  async findActor(id: string, stamp: string | undefined): Promise<Actor | null> {
+    const user = await withPassword(this.dataSource.manager, id).getOne();
+    const stands = user?.passwordHash && !user.disabled && passwordStamp(user.passwordHash) === stamp;
+    return stands ? toActor(user) : null;
   }
 
   async list(): Promise<UserDto[]> {
@@ -54,11 +57,12 @@ export class UsersService {
   }
 
   /** Only while nobody has an account; two who try at once cannot both succeed. */
-  async setUp(input: SetUp): Promise<Actor> {
+  async setUp(input: SetUp): Promise<Authenticated> {
     return this.dataSource.transaction(async (manager) => {
       await manager.query('LOCK TABLE users IN EXCLUSIVE MODE');
       if (await manager.exists(User)) throw conflict(message('account.set-up-already', {}));
-      return toActor(await this.insert(manager, { ...input, administrator: true }, { id: null, name: 'First visitor' }));
+      const user = await this.insert(manager, { ...input, administrator: true }, { id: null, name: 'First visitor' });
+      return { actor: toActor(user), stamp: passwordStamp(user.passwordHash ?? '') };
     });
   }
 
@@ -99,13 +103,16 @@ export class UsersService {
 
   /** Ends the person's other sessions and any link that is under way. */
   async changePassword(actor: Actor, input: PasswordChange, sessionId: string): Promise<void> {
-    if (!(await this.authenticate(actor.email, input.current))) {
-      throw new Refusal(HttpStatus.UNPROCESSABLE_ENTITY, message('account.sign-in-failed', {}), { issues: [{ path: 'current', message: 'This is not your present password.' }] });
-    }
+    const proved = await this.authenticate(actor.email, input.current);
+    if (!proved) throw notPresent();
     const passwordHash = await this.passwords.hash(input.next);
     const send = await this.dataSource.transaction(async (manager) => {
+      const user = await withPassword(manager, actor.id).setLock('pessimistic_write').getOne();
+      // by a mailed link, say, while this was under way: whoever knew the old password does not undo that
+      if (!user?.passwordHash || passwordStamp(user.passwordHash) !== proved.stamp) throw notPresent();
       await manager.update(User, actor.id, { passwordHash });
       await endSessionsOf(manager, actor.id, sessionId);
+      await manager.query(`UPDATE "session" SET sess = jsonb_set(sess::jsonb, '{opened,stamp}', to_jsonb($2::text)) WHERE sid = $1`, [sessionId, passwordStamp(passwordHash)]);
       await this.links.endAll(manager, actor.id);
       await this.audit.record(manager, { projectId: null, actor, action: 'password changed', entity: 'user', entityId: actor.id, label: actor.email });
       return this.mail.prepare(manager, 'password-changed', actor, { name: actor.name, link: this.mail.link('/forgotten-password') });
@@ -124,6 +131,12 @@ export class UsersService {
       ORDER BY u.name, u.email`, [id]);
   }
 }
+
+const notPresent = (): Refusal =>
+  new Refusal(HttpStatus.UNPROCESSABLE_ENTITY, message('account.sign-in-failed', {}), { issues: [{ path: 'current', message: 'This is not your present password.' }] });
+
+const withPassword = (manager: EntityManager, id: string): SelectQueryBuilder<User> =>
+  manager.createQueryBuilder(User, 'u').addSelect('u.passwordHash').where('u.id = :id', { id });
 
 interface UserRow extends Actor {
   disabled: boolean;
