@@ -11,7 +11,7 @@ const codeWords: Record<string, string> = {
 };
 /** Fields whose stored name does not say what they hold. What is accepted of a member is always its critical temperature. */
 const fieldWords: Record<string, string> = {
-  mu0: 'utilisation μ0', etaFi: 'ηfi', gammaG: 'γG', gammaQ: 'γQ', gammaMFi: 'γM,fi', psiFi: 'ψ in fire', way: 'basis of the critical temperature',
+  email: 'e-mail', mu0: 'utilisation μ0', etaFi: 'ηfi', gammaG: 'γG', gammaQ: 'γQ', gammaMFi: 'γM,fi', psiFi: 'ψ in fire', way: 'basis of the critical temperature',
   bare: 'critical temperature', 'high-temperature': 'critical temperature', assumed: 'critical temperature',
   pdfSha256: 'SHA-256 of the PDF', snapshotSha256: 'SHA-256 of the snapshot',
 };

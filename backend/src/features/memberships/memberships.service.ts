@@ -58,7 +58,7 @@ export class MembershipsService {
       await this.lockTeam(manager, scope.projectId);
       // an invitation that waits to be accepted is no account yet, and whether there is one is the administrator's to know
       const user = await manager.findOneBy(User, { email: input.email, disabled: false, passwordHash: Not(IsNull()) });
-      if (!user) throw unprocessable(message('team.no-account', { email: input.email }), [{ path: 'email', message: 'has no account' }]);
+      if (!user) throw unprocessable(message('team.no-account', { email: input.email }), [{ path: 'email', message: 'belongs to nobody with an account here' }]);
       if (await manager.existsBy(Membership, { projectId: scope.projectId, userId: user.id })) throw conflict(message('team.already-on', { name: user.name }));
       const membership = await manager.save(manager.create(Membership, { projectId: scope.projectId, userId: user.id, roles: inOrder(input.roles) }));
       await this.record(manager, scope, 'joined the team', user, [], membership.roles);

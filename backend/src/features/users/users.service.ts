@@ -62,6 +62,8 @@ export class UsersService {
       await manager.query('LOCK TABLE users IN EXCLUSIVE MODE');
       if (await manager.exists(User)) throw conflict(message('account.set-up-already', {}));
       const user = await this.insert(manager, { ...input, administrator: true }, { id: null, name: 'First visitor' });
+      // whoever makes the first account is signed in with it
+      await manager.update(User, user.id, { lastSignedInAt: new Date() });
       return { actor: toActor(user), stamp: passwordStamp(user.passwordHash ?? '') };
     });
   }

@@ -27,7 +27,8 @@ export function TextField<T extends FieldValues>(props: FieldProps<T> & { type?:
   const given = { ...aria, ref, name: path, onBlur, onChange, value: value ?? '', status, disabled, placeholder, autoComplete: autoComplete ?? 'off', autoFocus };
   return (
     <FieldFrame {...frame(props)} id={id} error={error}>
-      {rows ? <Input.TextArea {...given} autoSize={{ minRows: rows, maxRows: 12 }} /> : <Input {...given} type={type} />}
+      {/* grows by CSS: antd's own autoSize measures with a style attribute, which the content security policy refuses */}
+      {rows ? <Input.TextArea {...given} rows={rows} className="mt-grow" style={{ minHeight: `calc(${rows}lh + 12px)` }} /> : <Input {...given} type={type} />}
     </FieldFrame>
   );
 }

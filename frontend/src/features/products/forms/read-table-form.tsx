@@ -74,7 +74,7 @@ export function ReadTableForm({ library, kind, tables, onRead }: ReadTableFormPr
       </div>
       <div className="mt-field">
         <label className="mt-label" htmlFor={pasteId}>Cells, pasted from the report or a sheet</label>
-        <Input.TextArea id={pasteId} value={pasted} onChange={(e) => setPasted(e.target.value)} autoSize={{ minRows: 3, maxRows: 10 }} placeholder={'A/V\t350\t400\t450\n60\t420\t380\t340'} />
+        <Input.TextArea id={pasteId} value={pasted} onChange={(e) => setPasted(e.target.value)} rows={3} className="mt-grow" style={{ minHeight: 'calc(3lh + 12px)' }} placeholder={'A/V\t350\t400\t450\n60\t420\t380\t340'} />
         <p className="mt-help">First row: design temperatures in °C. First column: section factors in 1/m. An empty cell or a dash is outside the assessment.</p>
       </div>
       <div className="mt-file-row">

@@ -1,13 +1,13 @@
 import type { z } from 'zod';
 import { useNavigate } from 'react-router-dom';
-import { projectCreateSchema, roleNames, roles } from '@mantlet/common';
+import { projectCreateSchema } from '@mantlet/common';
 import { CheckListField, SelectField, TextField } from '../../../ui/form/fields.js';
 import { FormDrawer } from '../../../ui/form/form-drawer.js';
 import { useEditForm } from '../../../ui/form/use-edit-form.js';
 import { useCreateProject } from '../api/projects.js';
+import { roleOptions } from './role-options.js';
 
 const currencies = projectCreateSchema.shape.currency.unwrap().options.map((value) => ({ value, label: value }));
-const roleOptions = roles.map((value) => ({ value, label: roleNames[value] }));
 
 const blank = { values: { number: '', name: '', place: '', currency: 'EUR', note: '', roles: [] } as z.input<typeof projectCreateSchema>, version: null };
 

@@ -5,6 +5,7 @@ import { may, rolesFor } from '../../../lib/may.js';
 import { LinkButton } from '../../../ui/link-button.js';
 import { Panel } from '../../../ui/panel.js';
 import { StatusWord } from '../../../ui/status-word.js';
+import { useMemberships } from '../../team/api/team.js';
 import { useZones } from '../../zones/api/zones.js';
 import { firstSteps } from '../first-steps.js';
 import type { FirstStep } from '../first-steps.js';
@@ -34,13 +35,14 @@ function Step({ step, number, next, project }: { step: FirstStep; number: number
 export function FirstSteps({ project, building }: { project: ProjectDto; building: Pick<BuildingDto, 'members' | 'settled' | 'openItems'> }) {
   const walked = building.settled > 0 || project.issuedRevision !== null;
   const zones = useZones(project.id, !walked);
-  if (walked || zones.data === undefined) return null;
-  const steps = firstSteps(project, building, zones.data);
+  const team = useMemberships(project.id, !walked);
+  if (walked || zones.data === undefined || team.data === undefined) return null;
+  const steps = firstSteps(project, building, zones.data, team.data);
   const left = steps.filter((s) => !s.done).length;
   const next = steps.find((s) => !s.done);
   if (!next) return null;
   return (
-    <Panel title="First steps" sub={`${countWord(left)} of ${steps.length} to go. From then on, this page lists what is open.`} className="mt-first">
+    <Panel title="First steps" sub={`${countWord(left)} ${left === 1 ? 'step' : 'steps'} to go. From then on, this page lists what is open.`} className="mt-first">
       <ol>{steps.map((step, i) => <Step key={step.key} step={step} number={i + 1} next={step === next} project={project} />)}</ol>
     </Panel>
   );

@@ -38,7 +38,7 @@ const columns: ScheduleColumn<ProjectListItemDto>[] = [
 function headingOf(projects: readonly ProjectListItemDto[]): { heading: string; sub: string } {
   const waiting = projects.filter((p) => p.waitsOnMe > 0);
   const items = waiting.reduce((sum, p) => sum + p.waitsOnMe, 0);
-  if (projects.length === 0) return { heading: 'You are on no project yet', sub: 'Start one, or ask its fire engineer or specifier to add you to the team.' };
+  if (projects.length === 0) return { heading: 'You are on no project yet', sub: 'Others add you to theirs, or you start one.' };
   if (items === 0) return { heading: 'Nothing waits on you', sub: `${countWord(projects.length)} ${projects.length === 1 ? 'project' : 'projects'} with you on the team.` };
   return {
     heading: items === 1 ? 'One item waits on you' : `${countWord(items)} items wait on you`,

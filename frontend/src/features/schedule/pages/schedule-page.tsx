@@ -33,7 +33,7 @@ function Nothing({ projectId, design, canStart, onStart }: { projectId: string; 
   if (!design) return <Panel label="Revisions"><EmptyState title="Nothing has been issued yet">Revisions appear here once a specifier issues the schedule. <AwaitedFrom projectId={projectId} /></EmptyState></Panel>;
   return (
     <Panel label="Revisions">
-      <EmptyState title="Start the first revision" action={canStart ? <Button type="primary" onClick={onStart}>Start a revision</Button> : null}>
+      <EmptyState title={canStart ? 'Start the first revision' : 'No revision yet'} action={canStart ? <Button type="primary" onClick={onStart}>Start a revision</Button> : null}>
         {canStart ? 'A revision starts as a draft. Preparing it freezes the schedule; another specifier checks it; then it is issued.' : whyNot('edit-revisions')}
       </EmptyState>
     </Panel>

@@ -29,7 +29,8 @@ const words: Record<LinkPurpose, Words> = {
 /** The page that a mailed link opens. The link's token is in the fragment of the address, which is sent to nobody. */
 export function ChoosePassword({ purpose }: { purpose: LinkPurpose }) {
   const token = useLocation().hash.slice(1);
-  const link = useAccountLink({ purpose, token });
+  const use = useUseLink();
+  const link = useAccountLink({ purpose, token }, use.isPending || use.isSuccess);
   const session = useSession();
   const { title, heading, sub, ended, next } = words[purpose];
   const over = token === '' || (link.error instanceof ApiError && [400, 410].includes(link.error.status));
@@ -46,7 +47,7 @@ export function ChoosePassword({ purpose }: { purpose: LinkPurpose }) {
   if (user && user.email !== link.data.email) return <SomebodyElse user={user} link={link.data} title={title} />;
   return (
     <Gate title={title} heading={heading(link.data)} sub={sub(link.data)}>
-      <PasswordForm key={token} link={{ purpose, token }} dto={link.data} />
+      <PasswordForm key={token} link={{ purpose, token }} dto={link.data} use={use} />
     </Gate>
   );
 }
@@ -66,9 +67,8 @@ function SomebodyElse({ user, link, title }: { user: MeDto; link: AccountLinkDto
 }
 
 const passwordOnly = accountLinkUseSchema.pick({ password: true });
-function PasswordForm({ link, dto }: { link: AccountLink; dto: AccountLinkDto }) {
+function PasswordForm({ link, dto, use }: { link: AccountLink; dto: AccountLinkDto; use: ReturnType<typeof useUseLink> }) {
   const navigate = useNavigate();
-  const use = useUseLink();
   const form = useContractForm(passwordOnly, { defaultValues: { password: '' } });
   useServerIssues(form, use.error);
   const submit = form.handleSubmit(({ password }) => use.mutate({ ...link, password }, { onSuccess: () => { void navigate('/projects', { replace: true }); } }));

@@ -8,7 +8,7 @@ const at = (projectId: string) => `/projects/${projectId}`;
 
 export const membershipsQuery = (projectId: string) =>
   queryOptions({ queryKey: projectKey(projectId, 'memberships'), queryFn: ({ signal }) => api.get<MembershipDto[]>(`${at(projectId)}/memberships`, undefined, signal) });
-export const useMemberships = (projectId: string) => useQuery(membershipsQuery(projectId));
+export const useMemberships = (projectId: string, enabled = true) => useQuery({ ...membershipsQuery(projectId), enabled });
 export const useAddMembership = (projectId: string) =>
   useProjectMutation<MembershipInput, MembershipDto>(projectId, (body) => api.post(`${at(projectId)}/memberships`, body));
 export const useSetRoles = (projectId: string) =>

@@ -1,6 +1,6 @@
 import { App, Button } from 'antd';
 import { useMemo, useState } from 'react';
-import { membershipInputSchema, roleNames, roles } from '@mantlet/common';
+import { membershipInputSchema } from '@mantlet/common';
 import type { MembershipDto, Role } from '@mantlet/common';
 import { rolesInWords, whyNot } from '../../../lib/may.js';
 import { roleDecides } from '../../../lib/role-words.js';
@@ -11,10 +11,10 @@ import { useEditForm } from '../../../ui/form/use-edit-form.js';
 import { Panel } from '../../../ui/panel.js';
 import { ScheduleTable } from '../../../ui/schedule-table.js';
 import { QueryState } from '../../../ui/states.js';
+import { roleOptions } from '../../projects/components/role-options.js';
 import { useMay } from '../../projects/project-context.js';
 import { useAddMembership, useMemberships, useRemoveMembership, useSetRoles } from '../api/team.js';
 
-const roleOptions = roles.map((value) => ({ value, label: <>{roleNames[value]}<span className="mt-sub mt-role-says">{roleDecides[value]}</span></> }));
 const roleHelp = 'Contractors, inspectors and readers see issued work only. Whoever prepares a schedule cannot check it.';
 
 const nobody = { values: { email: '', roles: [] as Role[] }, version: null };

@@ -79,7 +79,7 @@ function Content({ project, levels, zones, asked, editing, setEditing }: Content
         )}
       </Panel>
       <p className="mt-sub">
-        The three materials are what each policy would take: litres of coating, m³ of board and spray. The chosen one is bold. {may('edit-zones') ? '' : `${whyNot('edit-zones')} `}{may('edit-protection') ? '' : whyNot('edit-protection')}
+        {zones.length > 0 && 'The three materials are what each policy would take: litres of coating, m³ of board and spray. The chosen one is bold. '}{may('edit-zones') ? '' : `${whyNot('edit-zones')} `}{may('edit-protection') ? '' : whyNot('edit-protection')}
       </p>
       <Editor editing={editing} project={project} levels={levels} zones={zones} onClose={() => setEditing(null)} />
     </>
