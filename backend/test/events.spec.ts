@@ -130,6 +130,36 @@ describe('changes as they happen', () => {
     await until('a place is free', async () => (await listen(fire.user, base, cookie)).status === 200);
   });
 
+  it('are for five windows even where all are opened at once, and for thirty of one person', async () => {
+    const cookies: string[] = [];
+    for (let i = 0; i < 7; i += 1) cookies.push(await cookieOf(app, fire.user));
+    const opened = await Promise.all(Array.from({ length: 8 }, () => listen(fire.user, base, cookies[0])));
+    expect(opened.filter((one) => one.status === 200)).toHaveLength(5);
+    for (const cookie of cookies.slice(1, 6)) await Promise.all(Array.from({ length: 5 }, () => listen(fire.user, base, cookie)));
+    const beyond = await listen(fire.user, base, cookies[6]);
+    expect(beyond.status).toBe(429);
+    expect(beyond.refusal?.message).toBe(sentence(message('live.too-many-in-all', { windows: 30 })));
+    // nobody else is kept out by it
+    expect((await listen((await join('structural-engineer')).user)).status).toBe(200);
+  });
+
+  it('outlive an announcement that cannot be read', async () => {
+    const listener = await listen(fire.user);
+    for (const nonsense of ['', 'not JSON', '{"projectId":1}', JSON.stringify({ projectId: project.id, audience: 'everybody', topics: ['levels'], entityIds: [], by: null, at: 'yesterday', text: 'Boo' })]) {
+      await app.dataSource.query(`SELECT pg_notify('mantlet_changes', $1)`, [nonsense]);
+    }
+    await addLevel('L3').expect(201);
+    await until('the change is told', () => listener.changes.length > 0);
+    expect(listener.texts()).toEqual([`${fire.user.name} added level L3 Ground`]);
+  });
+
+  it('tell of people’s longest words without losing the change', async () => {
+    const listener = await listen(fire.user);
+    const long = '🔥\u0001'.repeat(66) + '<b>"';
+    await fire.agent.post(`/api/projects/${project.id}/levels`).send({ code: 'L4', name: long, elevationM: 16, heightM: 4 }).expect(201);
+    await until('the change is told', () => listener.changes.length > 0);
+  });
+
   it('are refused to whoever does not listen, with a sentence', async () => {
     const answer = await fire.agent.get(`/api/projects/${project.id}/events`).expect(406);
     expect((answer.body as { message: string }).message).toBe(sentence(message('live.not-a-stream', {})));

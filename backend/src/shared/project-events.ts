@@ -6,7 +6,8 @@ export const CHANGES_CHANNEL = 'mantlet_changes';
 export const ACCESS_CHANNEL = 'mantlet_access';
 
 /** Who may learn of a change: everybody on the team, or those who see work in progress. */
-export type Audience = 'team' | 'design-team';
+export const audiences = ['team', 'design-team'] as const;
+export type Audience = (typeof audiences)[number];
 export interface PublishedEvent extends ProjectEventDto {
   projectId: string;
   audience: Audience;

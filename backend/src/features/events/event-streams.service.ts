@@ -1,4 +1,4 @@
-import { HttpStatus, Injectable } from '@nestjs/common';
+import { HttpStatus, Injectable, Logger } from '@nestjs/common';
 import type { BeforeApplicationShutdown } from '@nestjs/common';
 import { message, projectEventSchema } from '@mantlet/common';
 import type { Role, StreamReadyDto } from '@mantlet/common';
@@ -6,9 +6,9 @@ import { InjectDataSource } from '@nestjs/typeorm';
 import type { Response } from 'express';
 import { DataSource } from 'typeorm';
 import type { PostgresDataSourceOptions } from 'typeorm/driver/postgres/PostgresDataSourceOptions.js';
+import { z } from 'zod';
 import { isDesigner } from '../../shared/access.js';
-import { ACCESS_CHANNEL, CHANGES_CHANNEL } from '../../shared/project-events.js';
-import type { PublishedEvent } from '../../shared/project-events.js';
+import { ACCESS_CHANNEL, CHANGES_CHANNEL, audiences } from '../../shared/project-events.js';
 import { Refusal } from '../../shared/refusal.js';
 import { DatabaseListener } from './database-listener.js';
 import { EventStream } from './event-stream.js';
@@ -16,10 +16,23 @@ import type { StreamHolder } from './event-stream.js';
 
 /** a browser keeps six connections to a server: the pages must have one left to ask with */
 export const STREAMS_PER_SESSION = 5;
+/** each is a connection of the server's as well, and anybody may sign in again and again */
+export const STREAMS_PER_PERSON = 30;
 const BEAT_MS = 20_000;
 const RECHECK_MS = 60_000;
 /** changes this recent may have been committed after the page read and before its stream was open */
 const RECENT = '60 seconds';
+
+const announcementSchema = z.string()
+  .transform((text, context): unknown => {
+    try {
+      return JSON.parse(text);
+    } catch {
+      context.addIssue({ code: 'custom', message: 'is not JSON' });
+      return z.NEVER;
+    }
+  })
+  .pipe(projectEventSchema.extend({ projectId: z.string(), audience: z.enum(audiences) }));
 
 /** The open streams of this process: tells them what the database announces, and ends them with the right to hear it. */
 @Injectable()
@@ -29,6 +42,7 @@ export class EventStreamsService implements BeforeApplicationShutdown {
   private timers: NodeJS.Timeout[] = [];
   private recheckSoon: NodeJS.Timeout | null = null;
   private closing = false;
+  private readonly logger = new Logger('Events');
 
   constructor(@InjectDataSource() private readonly dataSource: DataSource) {
     const { url } = dataSource.options as PostgresDataSourceOptions;
@@ -40,11 +54,10 @@ export class EventStreamsService implements BeforeApplicationShutdown {
   }
 
   async open(holder: StreamHolder, response: Response): Promise<void> {
-    if ([...this.streams].filter((one) => one.holder.sessionId === holder.sessionId).length >= STREAMS_PER_SESSION) {
-      throw new Refusal(HttpStatus.TOO_MANY_REQUESTS, message('live.too-many', { windows: STREAMS_PER_SESSION }));
-    }
     if (this.closing || !(await this.listener.listening())) throw new Refusal(HttpStatus.SERVICE_UNAVAILABLE, message('live.unavailable', {}));
     if (response.destroyed) return;
+    // counted without a pause before the stream is among them, so that many who ask at once are not all let in
+    this.requirePlace(holder);
     const stream = new EventStream(holder, response);
     this.streams.add(stream);
     response.on('close', () => this.forget(stream));
@@ -62,9 +75,21 @@ export class EventStreamsService implements BeforeApplicationShutdown {
     await this.listener.close();
   }
 
+  private requirePlace({ sessionId, userId }: StreamHolder): void {
+    const own = [...this.streams].filter((one) => one.holder.userId === userId);
+    const windows = own.filter((one) => one.holder.sessionId === sessionId).length;
+    if (windows >= STREAMS_PER_SESSION) throw new Refusal(HttpStatus.TOO_MANY_REQUESTS, message('live.too-many', { windows: STREAMS_PER_SESSION }));
+    if (own.length >= STREAMS_PER_PERSON) throw new Refusal(HttpStatus.TOO_MANY_REQUESTS, message('live.too-many-in-all', { windows: STREAMS_PER_PERSON }));
+  }
+
+  /** What cannot be read is of no project that anybody could be told of; it must not stop the server either. */
   private tell(payload: string): void {
-    const { projectId, audience, ...rest } = JSON.parse(payload) as PublishedEvent;
-    const event = projectEventSchema.parse(rest);
+    const announced = announcementSchema.safeParse(payload);
+    if (!announced.success) {
+      this.logger.warn('An announcement of the database could not be read.');
+      return;
+    }
+    const { projectId, audience, ...event } = announced.data;
     for (const stream of this.streams) {
       if (stream.holder.projectId === projectId && (audience === 'team' || isDesigner({ roles: [...stream.holder.roles] }))) stream.send('change', event);
     }
