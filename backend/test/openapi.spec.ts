@@ -176,9 +176,9 @@ describe('the check of answers', () => {
     expect(app.answers.checked).toBe(2);
     const check = new AnswerCheck(app.app);
     const answered = { method: 'GET', path: '/api/session', status: 200, type: 'application/json', text: '' };
-    check.check({ ...answered, body: { user: null, needsSetUp: true } });
+    check.check({ ...answered, body: { user: null, needsSetUp: true, caughtMail: false } });
     expect([...check.faults]).toEqual([]);
-    check.check({ ...answered, body: { user: null, needsSetUp: true, sessions: 12 } });
+    check.check({ ...answered, body: { user: null, needsSetUp: true, caughtMail: false, sessions: 12 } });
     check.check({ ...answered, status: 201, body: {} });
     check.check({ ...answered, status: 404, body: { message: 'No.', code: 'x', stack: 'at …' } });
     expect([...check.faults]).toEqual([

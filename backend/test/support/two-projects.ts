@@ -1,4 +1,5 @@
 import { roles } from '@mantlet/common';
+import { Job } from '../../src/features/jobs/job.entity.js';
 import { Member } from '../../src/features/members/member.entity.js';
 import type { Agent, TestApp } from './app.js';
 import { makeScheduleProject } from './schedule-project.js';
@@ -21,10 +22,11 @@ export async function furnish(app: TestApp): Promise<Furnished> {
   const revision = await everything.post(p.url('revisions')).send({ code: 'P01', purpose: '' }).expect(201);
   const upload = await everything.post(p.url('imports')).attach('file', Buffer.from('Mark,Zone\nN1,Z01\n'), 'members.csv').expect(201);
   const view = await everything.post(p.url('member-views')).send({ name: 'Open ones', query: '' }).expect(201);
+  const job = await app.dataSource.manager.save(app.dataSource.manager.create(Job, { projectId: p.project.id, kind: 'recalculation', state: 'failed' }));
   const things = {
     levelId: p.zones.Z01.levelId, zoneId: p.zones.Z01.id, memberId: member.id, sectionId: member.sectionId, productId: p.products['Testcoat']!.id,
     revisionId: (revision.body as { id: string }).id, importId: (upload.body as { id: string }).id, userId: user.id,
-    viewId: (view.body as { id: string }).id,
+    viewId: (view.body as { id: string }).id, jobId: job.id,
   };
   return { ...p, everything, things };
 }

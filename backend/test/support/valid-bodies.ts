@@ -3,7 +3,7 @@ import { inventedCoating } from './products.js';
 
 /** Things that a path or a body may name. */
 export interface Things {
-  levelId: string; zoneId: string; memberId: string; sectionId: string; productId: string; revisionId: string; importId: string; userId: string; viewId: string;
+  levelId: string; zoneId: string; memberId: string; sectionId: string; productId: string; revisionId: string; importId: string; userId: string; viewId: string; jobId: string;
 }
 const { designBasis, ...takeoff } = defaultProjectSettings;
 const basis = { way: 'declared', temperatureC: 561, reference: 'Calculation 9, invented' };

@@ -24,5 +24,5 @@ export const notOneChoice = { error: 'choose members, or all that a filter finds
 export const memberChoiceSchema = z.object(memberChoiceShape).refine(isOneChoice, notOneChoice);
 
 /** All that a filter finds, before anything is done with it: how many, under which stamp, and what may be accepted of them. */
-export const foundQuerySchema = foundSchema.omit({ count: true, stamp: true });
-export type FoundQuery = z.infer<typeof foundQuerySchema>;
+export const foundRequestSchema = foundSchema.omit({ count: true, stamp: true });
+export type FoundRequest = z.infer<typeof foundRequestSchema>;

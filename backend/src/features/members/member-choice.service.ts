@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { message } from '@mantlet/common';
-import type { FoundQuery, FoundSummaryDto, MemberChoice, MembersFound } from '@mantlet/common';
+import type { FoundRequest, FoundSummaryDto, MemberChoice, MembersFound } from '@mantlet/common';
 import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource, In } from 'typeorm';
 import type { EntityManager, SelectQueryBuilder } from 'typeorm';
@@ -21,7 +21,7 @@ export class MemberChoiceService {
   ) {}
 
   /** What a filter finds, under a stamp that moves with any of its members, its version or its result. */
-  async summary(projectId: string, query: FoundQuery): Promise<FoundSummaryDto> {
+  async summary(projectId: string, query: FoundRequest): Promise<FoundSummaryDto> {
     const { manager } = this.dataSource;
     const { settings } = await manager.findOneByOrFail(Project, { id: projectId });
     const found = finds(manager, projectId, query);
@@ -70,7 +70,7 @@ export class MemberChoiceService {
   }
 }
 
-function finds(manager: EntityManager, projectId: string, { filter, except }: FoundQuery): SelectQueryBuilder<Member> {
+function finds(manager: EntityManager, projectId: string, { filter, except }: FoundRequest): SelectQueryBuilder<Member> {
   const found = searchMembers(manager, projectId, filter);
   return except.length ? found.andWhere('m.id NOT IN (:...except)', { except }) : found;
 }

@@ -3,7 +3,9 @@ import { exposureNames, memberSentence, memberTypeNames, wayNames } from '@mantl
 import type { MemberNeighboursDto, MemberPageDto, MemberQuery, MemberRowDto, MemberValue, MemberValuesDto, Message } from '@mantlet/common';
 import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource } from 'typeorm';
+import { notFound } from '../../shared/refusal.js';
 import { searchMembers, sortBy } from './member-search.js';
+import { Member } from './member.entity.js';
 
 const columns: Record<Exclude<keyof MemberRowDto, 'sentence'> | 'reason', string> = {
   id: 'm.id', mark: 'm.mark', version: 'm.version', levelCode: 'l.code', zoneId: 'm.zoneId', zoneCode: 'z.code', periodMin: 'z.periodMin',
@@ -56,7 +58,10 @@ export class MemberListService {
       .addSelect(`lag(m.id) OVER (ORDER BY ${order})`, 'previousId').addSelect(`lead(m.id) OVER (ORDER BY ${order})`, 'nextId');
     const [sql, parameters] = found.getQueryAndParameters();
     const [row] = await this.dataSource.query<MemberNeighboursDto[]>(`SELECT "previousId", "nextId" FROM (${sql}) listed WHERE id = $${parameters.length + 1}`, [...parameters, memberId]);
-    return row ?? { previousId: null, nextId: null };
+    if (row) return row;
+    // one that the filter leaves out has no neighbours in the list; one of another project is not there at all
+    if (!(await this.dataSource.manager.existsBy(Member, { id: memberId, projectId }))) throw notFound('member');
+    return { previousId: null, nextId: null };
   }
 
   private async whole(projectId: string): Promise<MemberPageDto['project']> {

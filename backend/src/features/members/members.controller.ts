@@ -1,11 +1,11 @@
 import { Body, Controller, Delete, Get, HttpCode, HttpStatus, Param, Patch, Post, Put, Query } from '@nestjs/common';
 import {
-  acceptanceSchema, acceptancesWithdrawnDtoSchema, acceptanceWithdrawalSchema, bulkMemberSchema, bulkStructuralSchema, foundQuerySchema, foundSummaryDtoSchema,
+  acceptanceSchema, acceptancesWithdrawnDtoSchema, acceptanceWithdrawalSchema, bulkMemberSchema, bulkStructuralSchema, foundRequestSchema, foundSummaryDtoSchema,
   memberChoiceSchema, memberDeleteQuerySchema, memberDtoSchema, memberInputSchema, memberNeighboursDtoSchema, memberPageDtoSchema, memberQuerySchema, membersAcceptedDtoSchema,
   membersChangedDtoSchema, membersDeletedDtoSchema, memberSheetDtoSchema, memberStructuralSchema, memberUpdateSchema, memberValuesDtoSchema, previewAnswerDtoSchema,
 } from '@mantlet/common';
 import type {
-  Acceptance, AcceptanceWithdrawal, MembersChangedDto, BulkMember, BulkStructural, FoundQuery, FoundSummaryDto, MemberChoice, MemberDto, MemberInput, MemberNeighboursDto, MemberPageDto,
+  Acceptance, AcceptanceWithdrawal, MembersChangedDto, BulkMember, BulkStructural, FoundRequest, FoundSummaryDto, MemberChoice, MemberDto, MemberInput, MemberNeighboursDto, MemberPageDto,
   MemberQuery, MemberSheetDto, MemberStructural, MemberUpdate, MemberValuesDto, PreviewAnswerDto,
 } from '@mantlet/common';
 import { DesignTeam, Roles, Scope } from '../../shared/access.js';
@@ -50,7 +50,7 @@ export class MembersController {
   @HttpCode(HttpStatus.OK)
   @DesignTeam()
   @Returns(foundSummaryDtoSchema, 'What a filter finds: how many members, under which stamp, and what of them may be accepted.')
-  found(@Scope() scope: ProjectScope, @Body({ schema: foundQuerySchema }) query: FoundQuery): Promise<FoundSummaryDto> {
+  found(@Scope() scope: ProjectScope, @Body({ schema: foundRequestSchema }) query: FoundRequest): Promise<FoundSummaryDto> {
     return this.choice.summary(scope.projectId, query);
   }
 

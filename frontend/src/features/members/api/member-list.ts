@@ -1,5 +1,5 @@
 import { queryOptions, useQuery } from '@tanstack/react-query';
-import type { BulkMember, BulkStructural, FoundQuery, FoundSummaryDto, MembersChangedDto, MemberValuesDto, MemberViewDto, MemberViewInput, PreviewAnswerDto } from '@mantlet/common';
+import type { BulkMember, BulkStructural, FoundRequest, FoundSummaryDto, MembersChangedDto, MemberValuesDto, MemberViewDto, MemberViewInput, PreviewAnswerDto } from '@mantlet/common';
 import { api } from '../../../lib/api-client.js';
 import { projectKey } from '../../../lib/query-client.js';
 import { useProjectMutation } from '../../projects/api/projects.js';
@@ -12,7 +12,7 @@ export const memberValuesQuery = (projectId: string) =>
 export const useMemberValues = (projectId: string) => useQuery(memberValuesQuery(projectId));
 
 /** All that a filter finds; asked for once somebody means all of it. */
-export const useFound = (projectId: string, query: FoundQuery | null) =>
+export const useFound = (projectId: string, query: FoundRequest | null) =>
   useQuery({
     queryKey: projectKey(projectId, 'members-found', query), enabled: query !== null, gcTime: 0, staleTime: 0,
     queryFn: () => api.post<FoundSummaryDto>(`${members(projectId)}/found`, query),
