@@ -1,4 +1,4 @@
-import { designRoles } from '@mantlet/common';
+import { designRoles, memberDesignSchema } from '@mantlet/common';
 import type { MemberResultDto, OpenItemDto, ProjectListItemDto } from '@mantlet/common';
 import { AssessmentService } from '../src/features/assessment/assessment.service.js';
 import { MemberResult } from '../src/features/assessment/member-result.entity.js';
@@ -11,10 +11,7 @@ import type { MemberSpec, ScheduleProject } from './support/schedule-project.js'
 
 const effect = (momentYKnm: number): MemberSpec['basis'] => ({
   way: 'calculated', reference: 'invented',
-  design: {
-    actions: { given: 'fire-effect', effect: { axialKn: 0, momentYKnm, shearZKn: 0 } }, bucklingLengthYMm: null, bucklingLengthZMm: null, bucklingRule: 'given',
-    lateralRestraint: 'continuous', continuousBeam: false, composite: false, webOpenings: false,
-  },
+  design: memberDesignSchema.parse({ actions: { given: 'fire-effect', effect: { axialKn: 0, momentYKnm, shearZKn: 0 } } }),
 });
 
 /** Blockers that wait on each role: as the list of projects counts them, and as the project lists them. */

@@ -30,11 +30,11 @@ const table = [...readFileSync(path.resolve(import.meta.dirname, '../../../backe
   .map(([, method = '', route = '', rule = '']) => ({ method, route, rule, roles: rule === 'design team' ? [...designRoles] : rule.split(', ') }));
 /** the routes that each right stands for, by what they begin with */
 const routesOf: Record<Right, RegExp> = {
-  'see-design': /^GET \/(building|audit|levels|zones|sections|products|members(?!hips)|quantities|readiness)|^POST \/recalculate/,
+  'see-design': /^GET \/(building|audit|levels|zones|sections|products|members(?!hips)|quantities|readiness)|^POST \/(recalculate|jobs|members\/found)|^\w+ \/member-views/,
   'edit-project': /^PATCH $/, 'edit-team': /^(?!GET)\w+ \/memberships/, 'edit-levels': /^(?!GET)\w+ \/levels/,
   'edit-zones': /^(?!GET)\w+ \/zones(?!.*protection)/, 'edit-protection': /^PUT \/zones\/.*protection/, 'edit-design-basis': /^PUT \/design-basis/,
-  'edit-takeoff': /^PUT \/takeoff-settings/, 'accept-temperatures': /^(?!GET)\w+ \/acceptances/, 'edit-members': /^(?!GET)\w+ \/members(?!hips|.*structural)/,
-  'edit-structural': /^PUT \/members\/.*structural/, 'import-members': /^\w+ \/imports/, 'edit-sections': /^(?!GET)\w+ \/sections/,
+  'edit-takeoff': /^PUT \/takeoff-settings/, 'accept-temperatures': /^(?!GET)\w+ \/acceptances/, 'edit-members': /^(?!GET)\w+ \/members(?!hips|.*structural|\/found)/,
+  'edit-structural': /^(PUT|POST) \/members\/.*structural/, 'import-members': /^\w+ \/imports/, 'edit-sections': /^(?!GET)\w+ \/sections/,
   'edit-products': /^(?!GET)\w+ \/products/, 'edit-revisions': /^(?!GET)\w+ \/revisions/,
 };
 const named = ({ method, route }: { method: string; route: string }) => `${method} ${route}`;

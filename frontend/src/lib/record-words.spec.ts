@@ -4,7 +4,7 @@ import { fieldName, partsOfChange, valueInWords } from './record-words.js';
 describe('stored fields and values in words', () => {
   it('names fields without their unit', () => {
     expect(['periodMin', 'lengthMm', 'class4TemperatureC', 'temperatureC', 'name', 'markUpPercent', 'curve.fireLoadTotalMjPerM2', 'high-temperature', 'design.actions.leading.axialKn'].map(fieldName))
-      .toEqual(['period', 'length', 'class4 temperature', 'temperature', 'name', 'mark up', 'curve fire load total', 'critical temperature', 'design actions leading axial']);
+      .toEqual(['period', 'length', 'class4 temperature', 'temperature', 'name', 'mark up', 'curve fire load total', 'critical temperature', 'design actions leading variable action axial force N']);
   });
   it('gives the unit to the number and cuts a limit of temperature down', () => {
     expect(valueInWords('lengthMm', 4500)).toBe('4\u202f500\u00a0mm');
@@ -21,6 +21,15 @@ describe('stored fields and values in words', () => {
     expect(valueInWords('basis', { way: 'declared', temperatureC: 560, note: '' })).toBe('basis of the critical temperature Declared; temperature 560\u00a0°C');
     expect(valueInWords('note', 'x'.repeat(300))).toHaveLength(160);
     expect(valueInWords('pdfSha256', 'ab'.repeat(32))).toBe('abababababab…');
+  });
+  it('says a beam and its loads as an engineer would', () => {
+    const loads = [{ kind: 'distributed', action: 'permanent', fromMm: 0, toMm: 7500, startKnPerM: 12.5, endKnPerM: 12.5 }, { kind: 'distributed', action: 'B', fromMm: 0, toMm: 3000, startKnPerM: 0, endKnPerM: 6 }, { kind: 'point', action: 'wind', atMm: null, forceKn: 40 }];
+    expect(valueInWords('basis.design.actions.loads', loads))
+      .toBe('Permanent, 12.5\u00a0kN/m from 0 to 7\u202f500\u00a0mm; B office, 0 to 6\u00a0kN/m from 0 to 3\u202f000\u00a0mm; Wind, 40\u00a0kN at …\u00a0mm');
+    expect(valueInWords('basis.design.actions.supports', 'fixed')).toBe('Built in at both ends');
+    expect(valueInWords('note', 'fixed')).toBe('fixed');
+    expect(valueInWords('lateralSupportsMm', [2500, 5000])).toBe('2\u202f500\u00a0mm, 5\u202f000\u00a0mm');
+    expect(fieldName('lateralSupportsMm')).toBe('lateral supports between the ends');
   });
   it('takes a record apart into what differs, and leaves identifiers out', () => {
     const change = { field: 'basis', old: { way: 'none' }, new: { way: 'utilisation', mu0: 0.46 } };

@@ -2,6 +2,7 @@ import { Button } from 'antd';
 import { useFieldArray, useWatch } from 'react-hook-form';
 import type { FieldPath } from 'react-hook-form';
 import { actionCategories, actionCategoryNames, beamSupportNames, beamSupports } from '@mantlet/common';
+import { BeamDrawing } from '../../../ui/drawing/beam-drawing.js';
 import { NumberField, SelectField } from '../../../ui/form/fields.js';
 import type { StructuralControl, StructuralForm } from './action-fields.js';
 import { newLoad } from './structural-form.js';
@@ -58,6 +59,14 @@ function LateralSupports({ form }: { form: StructuralForm }) {
   );
 }
 
+/** Follows what is typed. Held along its length, the places between its ends say nothing, and are not drawn. */
+function Sketch({ control }: { control: StructuralControl }) {
+  const [supports, spanMm, loads, lateralSupportsMm, restraint] = useWatch({
+    control, name: [`${actions}.supports`, `${actions}.spanMm`, `${actions}.loads`, `${actions}.lateralSupportsMm`, 'basis.design.lateralRestraint'],
+  });
+  return <BeamDrawing beam={{ supports, spanMm, loads: loads ?? [], lateralSupportsMm: lateralSupportsMm ?? [] }} showLateral={restraint === 'at-points'} />;
+}
+
 /** The beam as it stands: supports, loads where they are, and what holds it sideways. Moments and shears follow from it. */
 export function BeamFields({ form }: { form: StructuralForm }) {
   const { control } = form;
@@ -73,6 +82,7 @@ export function BeamFields({ form }: { form: StructuralForm }) {
       </fieldset>
       <fieldset>
         <legend>Characteristic loads</legend>
+        <Sketch control={control} />
         {loads.fields.map((field, i) => <LoadFields key={field.id} control={control} index={i} onRemove={() => loads.remove(i)} />)}
         <div className="mt-actions">
           <Button size="small" disabled={loads.fields.length >= 50} onClick={() => loads.append(newLoad('distributed') as never)}>Add a distributed load</Button>

@@ -1,22 +1,29 @@
 import { describe, expect, it } from 'vitest';
-import { customSectionSchema } from '@mantlet/common';
+import { customSectionSchema, memberDesignSchema } from '@mantlet/common';
 import type { CriticalTemperatureBasis } from '@mantlet/common';
 import { acceptable } from './acceptance.js';
 import { bulkFormSchema, emptyBulk } from './bulk-form.js';
 import { completeShape, dimensionsOf, sectionKindNames, shapeOfKind } from './custom-section.js';
 import { structuralFormSchema, structuralValues } from './structural-form.js';
 
-const design = {
-  actions: { given: 'characteristic' as const, permanent: { axialKn: 0, momentYKnm: 211, shearZKn: 0 }, leading: { axialKn: 0, momentYKnm: 170, shearZKn: 0, category: 'C' as const }, accompanying: [] },
-  bucklingLengthYMm: null, bucklingLengthZMm: null, bucklingRule: 'given' as const, lateralRestraint: 'continuous' as const, continuousBeam: true, composite: false, webOpenings: false,
-};
+const design = memberDesignSchema.parse({
+  actions: { given: 'characteristic', permanent: { axialKn: 0, momentYKnm: 211, shearZKn: 0 }, leading: { axialKn: 0, momentYKnm: 170, shearZKn: 0, category: 'C' }, accompanying: [] },
+  bucklingRule: 'given', lateralRestraint: 'continuous', continuousBeam: true,
+});
+const described = memberDesignSchema.parse({
+  actions: {
+    given: 'loads', supports: 'cantilever', spanMm: 2500, axialInFireKn: 12, lateralSupportsMm: [1250, 2500],
+    loads: [{ kind: 'distributed', action: 'permanent', fromMm: 0, toMm: 2500, startKnPerM: 4, endKnPerM: 6 }, { kind: 'point', action: 'B', atMm: 2500, forceKn: 9 }],
+  },
+  lateralRestraint: 'at-points', loadHeight: 'shear-centre',
+});
 const ways: CriticalTemperatureBasis[] = [
   { way: 'declared', temperatureC: 560, reference: 'Letter' }, { way: 'utilisation', mu0: 0.55, mayBuckle: true, reference: 'Sheet 1' },
-  { way: 'ambient-utilisation', utilisation: 0.8, etaFi: null, mayBuckle: false, reference: 'Sheet 2' }, { way: 'calculated', design, reference: 'Sheet 3' }, { way: 'assumed' }, { way: 'none' },
+  { way: 'ambient-utilisation', utilisation: 0.8, etaFi: null, mayBuckle: false, reference: 'Sheet 2' }, { way: 'calculated', design, reference: 'Sheet 3' }, { way: 'calculated', design: described, reference: 'Sheet 4' }, { way: 'assumed' }, { way: 'none' },
 ];
 
 describe('the structural form', () => {
-  it.each(ways.map((w) => [w.way, w] as const))('%s comes back from the form as it is stored', (_, basis) => {
+  it.each(ways.map((w) => [w.way, 'reference' in w ? w.reference : '', w] as const))('%s (%s) comes back from the form as it is stored', (_, __, basis) => {
     expect(structuralFormSchema.parse(structuralValues(basis))).toEqual({ basis });
   });
   it('sends nothing of the ways not chosen, but keeps them in the form', () => {

@@ -96,8 +96,10 @@ function WayFields({ form, memberType }: { form: StructuralForm; memberType: Mem
 interface StructuralDrawerProps { projectId: string; member: MemberDto; onClose: () => void }
 
 const standing = ({ basis, version }: MemberDto) => ({ values: structuralValues(basis), version });
-/** "basis.design.actions.permanent.axialKn" → "permanent axial"; the form itself says that all of it is the basis. */
-const label = (path: string): string | undefined => (path === 'basis.way' ? 'How it comes about' : path.startsWith('basis.') ? capital(fieldName(path.replace(/^basis\.(design\.(actions\.)?)?/, ''))) : undefined);
+/** Fields that this form calls otherwise than the record does. */
+const formWords: Record<string, string> = { 'basis.way': 'How it comes about', 'basis.temperatureC': 'Critical temperature', 'basis.mu0': 'Degree of utilisation μ0', 'basis.etaFi': 'Reduction factor ηfi' };
+/** "basis.design.actions.permanent.axialKn" → "Permanent action axial force N"; the form itself says that all of it is the basis. */
+const label = (path: string): string | undefined => formWords[path] ?? (path.startsWith('basis.') ? capital(fieldName(path.replace(/^basis\.(design\.(actions\.)?)?/, ''))) : undefined);
 const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
 
 /** How the critical temperature of a member comes about: the structural engineer's alone, kept with name, date and reference. */

@@ -44,9 +44,10 @@ describe('the sheet of a member', () => {
     for (const name of withheld) expect(screen.queryByRole('button', { name })).toBeNull();
   });
   it('keeps what was typed when somebody else was faster, and offers the saved version', async () => {
+    const theirs = { ...sheet.member, version: 5, basis: { way: 'declared', temperatureC: 530, reference: 'Letter' } };
     const calls = serve({
       [`GET ${at}/${memberId}`]: { body: sheet },
-      [`PUT ${at}/${memberId}/structural`]: { status: 409, body: { message: 'Ida changed this member meanwhile.' } },
+      [`PUT ${at}/${memberId}/structural`]: { status: 409, body: { message: 'Ida changed this member meanwhile.', code: 'shared.stale', issues: [], current: theirs, by: 'Ida Holm', at: '2026-03-02T09:00:00.000Z' } },
     });
     open(['structural-engineer']);
     await userEvent.click(await screen.findByRole('button', { name: 'Critical temperature' }));
@@ -56,9 +57,12 @@ describe('the sheet of a member', () => {
     fireEvent.change(drawer.getByLabelText(/^Critical temperature/), { target: { value: '560' } });
     fireEvent.change(drawer.getByLabelText('Reference'), { target: { value: 'Sheet 12' } });
     await userEvent.click(drawer.getByRole('button', { name: 'Save' }));
-    expect(await drawer.findByText('Ida changed this member meanwhile.')).toBeInTheDocument();
+    const table = within(await drawer.findByRole('table', { name: 'Fields in which the two versions differ' }));
+    expect(table.getByRole('radio', { name: /^Critical temperature: Yours, 560\s°C$/ })).not.toBeChecked();
+    expect(table.getByRole('radio', { name: /^Critical temperature: Ida Holm, .*530\s°C$/ })).not.toBeChecked();
+    expect(table.getByRole('radio', { name: /^Reference: Yours, Sheet 12$/ })).toBeInTheDocument();
+    await userEvent.click(drawer.getByRole('button', { name: 'Back to the form' }));
     expect(drawer.getByLabelText('Reference')).toHaveValue('Sheet 12');
-    expect(drawer.getByRole('button', { name: /Load the saved version/ })).toBeInTheDocument();
     expect(calls.find((c) => c.method === 'PUT')?.body).toEqual({ basis: { way: 'declared', temperatureC: 560, reference: 'Sheet 12' }, version: 4 });
   });
 });
