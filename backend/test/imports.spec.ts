@@ -239,7 +239,7 @@ describe('imports', () => {
       expect(made.notes).toContain('Row 1: columns C and D are both headed "Length (mm)". Choose which of them holds Length.');
       await unchanged(async () => {
         const answer = await team.specifier.put(at(`/${made.id}/mapping`)).send(made.mapping).expect(422);
-        expect(answer.body).toMatchObject({ code: 'import.needed-for-new', message: 'Length: no column is chosen, and 1 row is a new member that needs it.' });
+        expect(answer.body).toMatchObject({ code: 'import.needed-for-new', message: 'Length: no column is chosen, and 1 row is a new member that needs it. Choose the column, or a value for new members below the rows.' });
       });
       expect((await preview(made, { columns: { ...made.mapping.columns, length: 3 } })).counts.new).toBe(1);
     });

@@ -67,7 +67,7 @@ export const intakeMessages = {
   'import.column-twice': (p: { column: string; fields: string[] }) => `Column ${p.column} is chosen for ${p.fields.join(' and for ')}. Choose one of them.`,
   'import.mark-needed': (_: Record<string, never>) => 'Choose the column that holds the mark: without marks no row can be told from another.',
   'import.needed-for-new': (p: { fields: string[]; count: number }) =>
-    `${listed(p.fields, 12)}: no column${p.fields.length === 1 ? ' is' : 's are'} chosen, and ${many(p.count, 'row is a new member', 'rows are new members')} that ${p.count === 1 ? 'needs' : 'need'} ${p.fields.length === 1 ? 'it' : 'them'}.`,
+    `${listed(p.fields, 12)}: no column${p.fields.length === 1 ? ' is' : 's are'} chosen, and ${many(p.count, 'row is a new member', 'rows are new members')} that ${p.count === 1 ? 'needs' : 'need'} ${p.fields.length === 1 ? 'it' : 'them'}. Choose the column, or a value for new members below the rows.`,
 
   // rows
   'import.row-needed': (p: { field: string }) => `${p.field} is needed; the cell is empty.`,

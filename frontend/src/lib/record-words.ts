@@ -19,7 +19,7 @@ const codesOfField: Record<string, Record<string, string>> = {
 };
 /** Fields whose stored name does not say what they hold. What is accepted of a member is always its critical temperature. */
 const fieldWords: Record<string, string> = {
-  email: 'e-mail', mu0: 'utilisation μ0', etaFi: 'ηfi', gammaG: 'γG', gammaQ: 'γQ', gammaMFi: 'γM,fi', psiFi: 'ψ in fire', way: 'basis of the critical temperature',
+  columns: '', email: 'e-mail', mu0: 'utilisation μ0', etaFi: 'ηfi', gammaG: 'γG', gammaQ: 'γQ', gammaMFi: 'γM,fi', psiFi: 'ψ in fire', way: 'basis of the critical temperature',
   bare: 'critical temperature', 'high-temperature': 'critical temperature', assumed: 'critical temperature',
   given: 'actions given as', leading: 'leading variable action', permanent: 'permanent action', effect: 'effect in fire', accompanying: 'accompanying variable actions',
   axialKn: 'axial force N', momentYKnm: 'moment My', momentZKnm: 'moment Mz', shearZKn: 'shear Vz', axialInFireKn: 'axial force in fire beside the loads',
@@ -42,7 +42,7 @@ export function fieldName(field: string): string {
     const ending = part === lastOf(field) ? endingOf(part) : undefined;
     const bare = ending ? part.replace(ending[0], '') : part;
     return fieldWords[part] ?? bare.replace(/([a-z\d])([A-Z])/g, '$1 $2').replaceAll('-', ' ').trim().toLowerCase();
-  }).join(' ');
+  }).filter(Boolean).join(' ');
 }
 
 /** At most three decimals: what arithmetic leaves behind the value someone gave says nothing. */

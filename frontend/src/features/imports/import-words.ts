@@ -38,7 +38,7 @@ export function columnName(index: number): string {
 /** The values of a row that say what it is, in one line and always in the same order. A member already there as the file has it needs none. */
 export function rowInWords({ state, values }: Pick<ImportRowDto, 'state' | 'values'>): string {
   if (state === 'unchanged') return 'As it stands';
-  return importFields.filter((field) => field !== 'mark' && values[field]).map((field) => `${importFieldNames[field]} ${values[field] ?? ''}`).join(' · ');
+  return importFields.filter((field) => field !== 'mark' && values[field]).map((field) => `${importFieldNames[field]} ${values[field] ?? ''}`).join(', ');
 }
 
 const limitMb = 10;

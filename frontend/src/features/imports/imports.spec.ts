@@ -34,7 +34,7 @@ describe('the first rows of the file', () => {
 describe('steps and words', () => {
   it('says a new row in a fixed order, and nothing of one that stays as it is', () => {
     const values = { note: 'Trimmer', section: 'IPE 240', zone: 'Z01', mark: 'B1', grade: '' };
-    expect(rowInWords({ state: 'new', values })).toMatch(/Z01 · .*IPE 240 · .*Trimmer$/);
+    expect(rowInWords({ state: 'new', values })).toMatch(/Z01, .*IPE 240, .*Trimmer$/);
     expect(rowInWords({ state: 'unchanged', values })).toBe('As it stands');
   });
   it('stands where the server left it, and goes back to the columns until it is confirmed', () => {

@@ -59,7 +59,7 @@ export function PreviewStep({ projectId, importId, onDone, onBack, onAbandon }: 
       {(data) => {
         const { counts } = data;
         const right = counts.new + counts.changed;
-        const blocked = right === 0 ? 'There is nothing to write: no row is new or changed.' : counts.wrong > 0 && !leaveOut ? `${count(counts.wrong, 'row')} ${counts.wrong === 1 ? 'is' : 'are'} wrong. Correct the file and choose it again, or leave them out.` : null;
+        const blocked = right === 0 ? 'There is nothing to write: no row is new or changed.' : counts.wrong > 0 && !leaveOut ? `${count(counts.wrong, 'row')} ${counts.wrong === 1 ? 'is' : 'are'} wrong. Correct the file and choose it again, or leave ${counts.wrong === 1 ? 'it' : 'them'} out.` : null;
         return (
           <>
             {data.notes.length > 0 && <Alert type="info" title="Not read from the file" description={<ul className="mt-notes">{data.notes.map((note) => <li key={note}>{note}</li>)}</ul>} />}
@@ -70,7 +70,7 @@ export function PreviewStep({ projectId, importId, onDone, onBack, onAbandon }: 
             </Panel>
             <FailedSave error={confirm.error} />
             <div className="mt-form-foot">
-              {counts.wrong > 0 && right > 0 && <Checkbox checked={leaveOut} onChange={(e) => setLeaveOut(e.target.checked)}>Leave out the {count(counts.wrong, 'wrong row')}</Checkbox>}
+              {counts.wrong > 0 && right > 0 && <Checkbox checked={leaveOut} onChange={(e) => setLeaveOut(e.target.checked)}>Leave out {counts.wrong === 1 ? 'the wrong row' : `the ${count(counts.wrong, 'wrong row')}`}</Checkbox>}
               <Button type="primary" loading={confirm.isPending} disabled={blocked !== null} onClick={() => { void send(); }}>{confirm.isPending ? 'Writing and assessing' : `Write ${count(right, 'member')}`}</Button>
               <Button onClick={onBack}>Back to the columns</Button>
               {onAbandon}

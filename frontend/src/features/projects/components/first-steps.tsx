@@ -4,6 +4,7 @@ import { countWord, joinWords } from '../../../lib/format.js';
 import { may, rolesFor } from '../../../lib/may.js';
 import { LinkButton } from '../../../ui/link-button.js';
 import { Panel } from '../../../ui/panel.js';
+import { LoadingState } from '../../../ui/states.js';
 import { StatusWord } from '../../../ui/status-word.js';
 import { useMemberships } from '../../team/api/team.js';
 import { useZones } from '../../zones/api/zones.js';
@@ -36,7 +37,8 @@ export function FirstSteps({ project, building }: { project: ProjectDto; buildin
   const walked = building.settled > 0 || project.issuedRevision !== null;
   const zones = useZones(project.id, !walked);
   const team = useMemberships(project.id, !walked);
-  if (walked || zones.data === undefined || team.data === undefined) return null;
+  if (walked || zones.isError || team.isError) return null;
+  if (zones.data === undefined || team.data === undefined) return <Panel title="First steps"><LoadingState what="the first steps" /></Panel>;
   const steps = firstSteps(project, building, zones.data, team.data);
   const left = steps.filter((s) => !s.done).length;
   const next = steps.find((s) => !s.done);

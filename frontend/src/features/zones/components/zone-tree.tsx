@@ -91,19 +91,19 @@ function useColumns(actions: ZoneTreeActions, projectId: string, /** said once a
   const specifier = may('edit-protection');
   const columns: ScheduleColumn<ZoneRow>[] = [
     {
-      title: 'Level and zone', term: 'zone', key: 'name', foldLabel: '', width: 210, className: 'mt-fold-head',
+      title: 'Level and zone', term: 'zone', key: 'name', foldLabel: '', width: 190, className: 'mt-fold-head',
       onCell: (row) => (row.kind === 'level' ? { colSpan: zoneColumns } : {}),
       render: (_, row) => row.kind === 'level'
         ? <span>{row.level.code} {row.level.name} <span className="mt-unit mt-level-facts">{formatLevel(row.level.elevationM)} m, {formatNumber(row.level.heightM, 2)} m high</span></span>
         : <div className="mt-tree-1"><Link to={`/projects/${projectId}/members?zoneIds=${row.zone.id}`}>{row.zone.code} {row.zone.name}</Link><FoldedZone zone={row.zone} /></div>,
     },
-    { title: 'Period', term: 'period', key: 'period', width: sameCurve ? 72 : 112, className: 'mt-fold-hide', render: zoneOnly((z) => <><span className="mt-strong">R {z.periodMin}</span>{!sameCurve && <div className="mt-sub">{fireCurveNames[z.curve.kind]}</div>}</>) },
+    { title: 'Period', term: 'period', key: 'period', width: sameCurve ? 68 : 112, className: 'mt-fold-hide', render: zoneOnly((z) => <><span className="mt-strong">R {z.periodMin}</span>{!sameCurve && <div className="mt-sub">{fireCurveNames[z.curve.kind]}</div>}</>) },
     { title: 'Environment', term: 'environment', key: 'environment', width: 96, className: 'mt-fold-hide', render: zoneOnly((z) => z.environment) },
     { title: 'Systems', term: 'system', key: 'systems', className: 'mt-fold-hide', render: zoneOnly((z) => <Systems zone={z} />) },
-    { title: 'Target', term: 'target-policy', key: 'target', width: 106, className: 'mt-fold-hide', render: zoneOnly((z) => targetPolicyName(z.targetPolicy)) },
-    { title: 'Each its own', key: 'own', numeric: true, width: 96, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="own" />) },
-    { title: 'Bands', term: 'band', key: 'bands', numeric: true, width: 84, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="bands" />) },
-    { title: 'One for all', key: 'one', numeric: true, width: 84, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="one" />) },
+    { title: 'Target', term: 'target-policy', key: 'target', width: 98, className: 'mt-fold-hide', render: zoneOnly((z) => targetPolicyName(z.targetPolicy)) },
+    { title: 'Each its own', key: 'own', numeric: true, width: 90, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="own" />) },
+    { title: 'Bands', term: 'band', key: 'bands', numeric: true, width: 78, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="bands" />) },
+    { title: 'One for all', key: 'one', numeric: true, width: 78, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="one" />) },
     {
       title: 'Members', key: 'members', numeric: true, width: 76, className: 'mt-fold-hide',
       render: zoneOnly((z) => <><Quantity value={z.members} what="Members" />{z.open > 0 && <div className="mt-attention">{z.open} open</div>}</>),
@@ -124,6 +124,9 @@ function useColumns(actions: ZoneTreeActions, projectId: string, /** said once a
   return columns;
 }
 
+/** What the columns take and room for the name of a system; narrower, the table scrolls sideways. */
+const treeWidth = 1130;
+
 interface ZoneTreeProps { rows: ZoneRow[]; projectId: string; openZones: string[]; onOpenZones: (ids: string[]) => void; actions: ZoneTreeActions; marked: string | null }
 const keyOf = (row: ZoneRow) => (row.kind === 'zone' ? row.zone.id : row.level.id);
 
@@ -132,7 +135,7 @@ export function ZoneTree({ rows, projectId, openZones, onOpenZones, actions, mar
   const columns = useColumns(actions, projectId, commonCurve(rows.flatMap((r) => (r.kind === 'zone' ? [r.zone] : []))) !== null);
   return (
     <ScheduleTable<ZoneRow>
-      caption="Levels and zones" minWidth={1000} columns={columns} rows={rows} rowKey={keyOf} className="mt-zones"
+      caption="Levels and zones" minWidth={treeWidth} columns={columns} rows={rows} rowKey={keyOf} className="mt-zones"
       rowClassName={(row) => (row.kind === 'level' ? 'mt-row-group' : row.zone.id === marked ? 'mt-row-marked' : '')}
       onRow={(row) => ({ id: `row-${keyOf(row)}` })}
       expandable={{
