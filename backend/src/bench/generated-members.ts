@@ -86,7 +86,7 @@ function basisOf(random: () => number, memberType: MemberType, areaMm2: number, 
   const bucklingLength = column ? 2500 + 2000 * random() : null;
   return {
     way: 'calculated', reference: 'generated',
-    design: memberDesignSchema.parse({ actions: { given: 'fire-effect', effect }, bucklingLengthYMm: bucklingLength, bucklingLengthZMm: bucklingLength }),
+    design: memberDesignSchema.parse({ actions: { given: 'fire-effect', effect }, bucklingLengthYMm: bucklingLength, bucklingLengthZMm: bucklingLength, lateralRestraint: 'continuous' }),
   };
 }
 

@@ -2,6 +2,7 @@ import { criticalTemperatureBasisSchema } from '@mantlet/common';
 import { DataSource } from 'typeorm';
 import { createTestDatabase } from '../../test/support/database.js';
 import { dataSourceOptions } from './data-source-options.js';
+import { DescribedBeams1764633900000 } from './migrations/1764633900000-described-beams.js';
 import { migrations } from './migrations/index.js';
 
 describe('migrations', () => {
@@ -28,7 +29,8 @@ describe('migrations', () => {
     const dataSource = await new DataSource(dataSourceOptions(database.url)).initialize();
     try {
       await dataSource.runMigrations();
-      await dataSource.undoLastMigration();
+      // back to before described beams, whatever came since
+      for (const _ of migrations.slice(migrations.indexOf(DescribedBeams1764633900000))) await dataSource.undoLastMigration();
       const design = { bucklingLengthYMm: 3000, bucklingLengthZMm: null, bucklingRule: 'given', lateralRestraint: 'continuous', continuousBeam: true, composite: false, webOpenings: false };
       const effects = { axialKn: 1, momentYKnm: 2, shearZKn: 3 };
       const bases = [
@@ -37,17 +39,20 @@ describe('migrations', () => {
         { way: 'calculated', reference: 'r', design: { ...design, actions: { given: 'characteristic', permanent: effects, leading: null, accompanying: [] } } },
         { way: 'declared', temperatureC: 560, reference: 'r' },
       ];
+      const column = bases[0]!;
       // only the members matter here: what they would point at is left out
       const keys: { name: string }[] = await dataSource.query(`SELECT conname AS name FROM pg_constraint WHERE conrelid = 'members'::regclass AND contype = 'f'`);
       for (const { name } of keys) await dataSource.query(`ALTER TABLE members DROP CONSTRAINT "${name}"`);
-      for (const [i, basis] of bases.entries()) {
+      for (const [i, basis] of [...bases, column].entries()) {
         await dataSource.query(
           `INSERT INTO members (project_id, zone_id, mark, member_type, section_id, grade, length_mm, quantity, exposure, protection_form, basis, version)
-           VALUES (gen_random_uuid(), gen_random_uuid(), $1, 'beam', gen_random_uuid(), 'S355', 6000, 1, '{}', 'profile', $2, 1)`, [`M${i}`, JSON.stringify(basis)]);
+           VALUES (gen_random_uuid(), gen_random_uuid(), $1, $3, gen_random_uuid(), 'S355', 6000, 1, '{}', 'profile', $2, 1)`, [`M${i}`, JSON.stringify(basis), i < bases.length ? 'beam' : 'column']);
       }
       await dataSource.runMigrations();
       const stored: { basis: unknown }[] = await dataSource.query('SELECT basis FROM members ORDER BY mark');
-      expect(stored.map(({ basis }) => basis)).toEqual(bases.map((basis) => criticalTemperatureBasisSchema.parse(basis)));
+      // that a beam is held along its length was asked; of a column it was not
+      const asked = { ...column, design: { ...design, lateralRestraint: null, actions: { given: 'fire-effect', effect: effects } } };
+      expect(stored.map(({ basis }) => basis)).toEqual([...bases, asked].map((basis) => criticalTemperatureBasisSchema.parse(basis)));
     } finally {
       await dataSource.destroy();
       await database.drop();

@@ -100,13 +100,17 @@ export const memberDesignSchema = z.object({
   bucklingLengthYMm: positiveSchema.max(100_000).nullable().default(null),
   bucklingLengthZMm: positiveSchema.max(100_000).nullable().default(null),
   bucklingRule: z.enum(bucklingRules).default('given'),
-  lateralRestraint: z.enum(['continuous', 'at-points']).default('continuous'),
+  /**
+   * How a bent member is held sideways: along its length or at points; null where it is not said. Of a described beam it is the top flange
+   * that is held along its length, so that a hogging moment is checked all the same; of effects alone, the compression flange.
+   */
+  lateralRestraint: z.enum(['continuous', 'at-points']).nullable().default(null),
   /** distance between the points that hold the compression flange, where the loads are not described, in mm */
   lateralSpacingMm: positiveSchema.max(100_000).nullable().default(null),
   /** uniform unless said otherwise, which is the safe side */
   momentShapeY: momentShapeSchema.default({ kind: 'end-moments', ratio: 1 }),
   momentShapeZ: momentShapeSchema.default({ kind: 'end-moments', ratio: 1 }),
-  /** the top flange unless said otherwise, which is the safe side */
+  /** the top flange unless said otherwise, which is the safe side for loads that act downward; no help is counted from upward ones there */
   loadHeight: z.enum(loadHeights).default('top-flange'),
   /** over the supports of a statically indeterminate beam: κ2 = 0.85 */
   continuousBeam: z.boolean().default(false),

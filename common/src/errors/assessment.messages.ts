@@ -16,6 +16,8 @@ export const assessmentMessages = {
   'assessment.no-buckling-length': (p: { axis: 'y' | 'z' }) => `Not determined: no buckling length about ${p.axis}.`,
   'assessment.lateral-torsional': (_: Record<string, never>) =>
     'Not determined: lateral-torsional buckling is calculated here for I, rectangular hollow and box sections with equal flanges. Give the utilisation in fire, marked as able to buckle, or declare the temperature.',
+  'assessment.no-lateral-restraint': (_: Record<string, never>) =>
+    'Not determined: it is not said how the compression flange is held sideways. Say whether it is held along its length or at points only.',
   'assessment.no-lateral-spacing': (_: Record<string, never>) =>
     'Not determined: the distance between the points that hold the compression flange is missing. Give it, or describe the beam with its loads and lateral supports.',
   'assessment.cantilever-tip': (_: Record<string, never>) =>

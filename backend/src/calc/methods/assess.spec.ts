@@ -29,7 +29,7 @@ const says = (c: MemberCase): string => {
 };
 const loaded = (momentYKnm: number): CriticalTemperatureBasis => ({
   way: 'calculated', reference: 'Calculation 12',
-  design: memberDesignSchema.parse({ actions: { given: 'fire-effect', effect: { momentYKnm } } }),
+  design: memberDesignSchema.parse({ actions: { given: 'fire-effect', effect: { momentYKnm } }, lateralRestraint: 'continuous' }),
 });
 
 describe('one member', () => {

@@ -13,7 +13,7 @@ const he200b: SectionShape = { kind: 'i', hMm: 200, bMm: 200, twMm: 9, tfMm: 15,
 const fy = 275;
 
 function member(design: object, change: Partial<CriticalTemperatureCase> = {}): CriticalTemperatureCase {
-  const basis: CriticalTemperatureBasis = { way: 'calculated', design: memberDesignSchema.parse(design), reference: 'test' };
+  const basis: CriticalTemperatureBasis = { way: 'calculated', design: memberDesignSchema.parse({ lateralRestraint: 'continuous', ...design }), reference: 'test' };
   const shape = change.shape ?? ipe400;
   return {
     basis, memberType: 'beam', shape, properties: sectionProperties(shape), steel: { grade: 'S275', yieldStrengthMPa: fy },
@@ -91,6 +91,39 @@ describe('lateral-torsional buckling', () => {
   });
 });
 
+describe('the side that is compressed', () => {
+  const span = 10_000;
+  const built = (supports: string, more: object = {}, load: object = uniform(20)) =>
+    criticalTemperature(member({ actions: beam([{ ...load, toMm: span }], { supports, spanMm: span }), ...more }));
+
+  it('buckles sideways under a slab only where the moment hogs', () => {
+    expect(determined(built('simple')).limitStates.map((s) => s.name)).not.toContain('lateral-torsional buckling');
+    const fixed = determined(built('fixed'));
+    expect(fixed.limitStates.find((s) => s.name === 'lateral-torsional buckling')?.effect).toBeCloseTo((20 * 100) / 12, 6);
+    // uplift compresses the bottom flange, which the slab does not hold
+    expect(determined(built('simple', {}, uniform(-8))).governing).toBe('lateral-torsional buckling');
+  });
+
+  it('is better off under a slab than free, and with lateral supports near the ends than without', () => {
+    const [free, slab] = [determined(built('fixed', { lateralRestraint: 'at-points', actions: beam([{ ...uniform(10), toMm: span }], { supports: 'fixed', spanMm: span }) })), determined(built('fixed', { actions: beam([{ ...uniform(10), toMm: span }], { supports: 'fixed', spanMm: span }) }))];
+    expect(slab.temperatureC).toBeGreaterThan(free.temperatureC);
+    const braced = determined(built('fixed', { actions: beam([{ ...uniform(10), toMm: span }], { supports: 'fixed', spanMm: span, lateralSupportsMm: [2500, 7500] }) }));
+    expect(braced.temperatureC).toBeGreaterThan(slab.temperatureC);
+  });
+
+  it('counts no help from a load that acts upward at the top flange', () => {
+    const at = (loadHeight: string) => determined(built('simple', { lateralRestraint: 'at-points', loadHeight }, uniform(-1))).temperatureC;
+    expect(at('top-flange')).toBeCloseTo(at('shear-centre'), 6);
+    expect(at('bottom-flange')).toBeLessThan(at('shear-centre'));
+  });
+
+  it('is not determined where nobody says how it is held, unless the section cannot twist', () => {
+    const unsaid = criticalTemperature(member(fire(20, { lateralRestraint: null })));
+    expect(unsaid.kind === 'not-determined' && unsaid.reason.code).toBe('assessment.no-lateral-restraint');
+    expect(criticalTemperature(member(fire(20, { lateralRestraint: null }), { shape: { kind: 'circular-hollow', dMm: 219.1, tMm: 10 } })).kind).toBe('determined');
+  });
+});
+
 describe('a described beam', () => {
   it('combines its loads by EN 1990 6.4.3.3: ψ1 for the leading one in turn, ψ2 for the others', () => {
     const result = determined(criticalTemperature(member({ actions: beam([uniform(10), uniform(8, 'B'), uniform(4, 'wind')]) })));
@@ -105,9 +138,9 @@ describe('a described beam', () => {
 
   it('uses κ2 at built-in ends only', () => {
     const { wplYMm3 } = sectionProperties(ipe400);
-    const result = determined(criticalTemperature(member({ actions: beam([{ ...uniform(25), toMm: 12_000 }], { supports: 'fixed', spanMm: 12_000 }) })));
+    const result = determined(criticalTemperature(member({ actions: beam([{ ...uniform(20), toMm: 12_000 }], { supports: 'fixed', spanMm: 12_000, lateralSupportsMm: [1500, 3000, 9000, 10_500] }) })));
     // wL²/12 at the ends with κ2 = 0.85 against wL²/24 at mid-span
-    const needed = ((25 * 12_000 ** 2) / 12 / (wplYMm3 * fy)) * 0.85;
+    const needed = ((20 * 12_000 ** 2) / 12 / (wplYMm3 * fy)) * 0.85;
     const bent = result.limitStates.find((s) => s.name === 'bending')!;
     expect(kY(bent.temperatureC)).toBeCloseTo(needed, 5);
   });
@@ -126,7 +159,7 @@ describe('a described beam', () => {
 
 describe('axial force with bending', () => {
   const column = (axialKn: number, momentYKnm: number, momentZKnm = 0, more: object = {}) => member({
-    actions: { given: 'fire-effect', effect: { axialKn, momentYKnm, momentZKnm } }, bucklingLengthYMm: 3500, bucklingLengthZMm: 3500, ...more,
+    actions: { given: 'fire-effect', effect: { axialKn, momentYKnm, momentZKnm } }, bucklingLengthYMm: 3500, bucklingLengthZMm: 3500, lateralRestraint: 'continuous', ...more,
   }, { shape: he200b, memberType: 'column' });
 
   it('comes to pure compression as the moments vanish', () => {
@@ -154,6 +187,33 @@ describe('axial force with bending', () => {
     const twisting = determined(criticalTemperature(column(300, 30, 0, { lateralRestraint: 'at-points', lateralSpacingMm: 3500 }))).temperatureC;
     expect(twisting).toBeLessThanOrEqual(one);
     expect(determined(criticalTemperature(column(300, 30, 8))).temperatureC).toBeLessThan(one);
+  });
+
+  it('classes a hollow section bent about z by its deep walls in compression', () => {
+    const deep: SectionShape = { kind: 'rectangular-hollow', hMm: 300, bMm: 100, tMm: 8, outerRadiusMm: 12, innerRadiusMm: 8 };
+    const bent = (effect: object) => criticalTemperature(member({ actions: { given: 'fire-effect', effect } }, { shape: deep, properties: sectionProperties(deep) }));
+    // (300 − 24)/8 = 34.5 is above 42ε = 33.0, below 72ε = 56.6: class 4 about z, class 1 about y
+    expect(determined(bent({ momentZKnm: 5 })).method).toBe('class 4 default');
+    expect(determined(bent({ momentYKnm: 5 })).method).not.toBe('class 4 default');
+  });
+
+  it('reduces the cross-section beside high shear', () => {
+    const { shearAreaZMm2 } = sectionProperties(he200b);
+    const shear = (0.9 * shearAreaZMm2 * fy) / Math.sqrt(3) / 1e3;
+    const used = (shearZKn: number) => determined(criticalTemperature(member(
+      { actions: { given: 'fire-effect', effect: { axialKn: -200, momentYKnm: 60, shearZKn } } }, { shape: he200b },
+    ))).limitStates.find((s) => s.name === 'cross-section')!.utilisation;
+    expect(used(shear)).toBeGreaterThan(used(0) * 1.02);
+    expect(used(0.1 * shear)).toBeCloseTo(used(0), 9);
+  });
+
+  it('says how far the effects go beyond what is carried, also where the axial force alone is too much', () => {
+    const result = criticalTemperature(column(2600, 10));
+    expect(result.kind).toBe('under-strength');
+    if (result.kind === 'under-strength') for (const { utilisation } of result.limitStates) expect(Number.isFinite(utilisation)).toBe(true);
+    // half the effects use half of what is there
+    const half = (n: number, m: number) => determined(criticalTemperature(column(n, m))).limitStates.find((s) => s.name === 'cross-section')!.utilisation;
+    expect(half(400, 30) / half(200, 15)).toBeCloseTo(2, 6);
   });
 
   it('says under-strength where the effects together are too much cold', () => {

@@ -1,15 +1,17 @@
 import { message } from '@mantlet/common';
 import type { LoadHeight, MemberDesign, MomentShape, SectionShape } from '@mantlet/common';
 import { explain } from '../formula.js';
-import { SHEAR_MODULUS_MPA, criticalMomentFormula, lateralSlendernessFormula } from '../standards/en-1993-1-1/clause-6-3-2-2-critical-moment.js';
+import type { WorkingStep } from '../formula.js';
+import { SHEAR_MODULUS_MPA, criticalMomentFormula, heldAxisCriticalMomentFormula, lateralSlendernessFormula } from '../standards/en-1993-1-1/clause-6-3-2-2-critical-moment.js';
 import type { CriticalMomentInput } from '../standards/en-1993-1-1/clause-6-3-2-2-critical-moment.js';
 import { ELASTIC_MODULUS_MPA, bucklingReductionFormula, bucklingShare, slendernessInFireFormula } from '../standards/en-1993-1-2/clause-4-2-3-2-compression.js';
 import { lateralBucklingResistanceFormula } from '../standards/en-1993-1-2/clause-4-2-3-3-lateral-torsional.js';
 import { kE, kY } from '../standards/en-1993-1-2/table-3-1.js';
 import type { CriticalTemperatureCase, Determined } from '../types.js';
 import { greatestMoment } from './beam-analysis/beam-diagram.js';
-import { bucklingFactor, uniformCriticalMoment } from './beam-analysis/lateral-buckling.js';
-import type { LateralLength, LateralLoad, LateralStiffness } from './beam-analysis/lateral-buckling.js';
+import type { BeamDiagram } from './beam-analysis/beam-diagram.js';
+import { factorOf, lateralEnergy, uniformCriticalMoment } from './beam-analysis/lateral-buckling.js';
+import type { LateralEnergy, LateralLength, LateralLoad, LateralStiffness } from './beam-analysis/lateral-buckling.js';
 import { bucklingTemperature, tableStep } from './critical-temperature-limit-states.js';
 import type { LimitState, Material } from './critical-temperature-limit-states.js';
 import type { FireDemand } from './fire-demand.js';
@@ -36,7 +38,7 @@ const hasExpression = (shape: SectionShape): boolean => ['i', 'rectangular-hollo
 /** Unit diagrams of the shapes that may be said instead of loads. */
 function segmentOfShape(shape: MomentShape, lengthMm: number, momentNmm: number, heightMm: number): Segment {
   const l = lengthMm;
-  const base = { lengthMm: l, kinksMm: [], loads: [], loadHeightMm: 0, ends: 'held' as const };
+  const base = { lengthMm: l, kinksMm: [], loads: [], loadHeightMm: 0, ends: 'held' as const, heldHeightMm: null };
   const lengths: Record<MomentShape['kind'], LateralLength> = {
     'end-moments': { ...base, momentAt: (x) => momentNmm * (1 + (((shape.kind === 'end-moments' ? shape.ratio : 1) - 1) * x) / l) },
     distributed: {
@@ -64,21 +66,29 @@ function loadsWithin(loads: NonNullable<FireDemand['beam']>['loads'], fromMm: nu
   });
 }
 
-function segmentsOfBeam(beam: NonNullable<FireDemand['beam']>, heightMm: number): Determined<Segment[]> {
+/** The greatest moment that can buckle a length: any where it is free, a hogging one where its top flange is held along it. */
+function greatestOf(diagram: BeamDiagram, fromMm: number, toMm: number, topHeld: boolean): number {
+  if (!topHeld) return Math.abs(greatestMoment(diagram, fromMm, toMm).momentNmm);
+  return Math.max(0, ...[fromMm, ...diagram.pointsMm.filter((x) => x > fromMm && x < toMm), toMm].map((x) => -diagram.momentAt(x)));
+}
+
+function segmentsOfBeam(beam: NonNullable<FireDemand['beam']>, heightMm: number, topHeldMm: number | null): Determined<Segment[]> {
   const { described, diagram, loads } = beam;
   const span = described.spanMm;
-  const held = described.lateralSupportsMm.filter((x) => x > 0 && x <= span);
-  const tipFree = described.supports === 'cantilever' && !held.includes(span);
-  if (tipFree && held.length) return { ok: false, reason: message('assessment.cantilever-tip', {}) };
-  const places = [...new Set([0, ...held, span])].sort((a, b) => a - b);
+  const supports = described.lateralSupportsMm.filter((x) => x > 0 && x <= span);
+  const tipFree = described.supports === 'cantilever' && !supports.includes(span);
+  if (tipFree && supports.length && topHeldMm === null) return { ok: false, reason: message('assessment.cantilever-tip', {}) };
+  // with a free tip, supports along a cantilever whose top flange is held are left out: the safe side
+  const places = [...new Set([0, ...(tipFree ? [] : supports), span])].sort((a, b) => a - b);
   return {
     ok: true,
     value: places.slice(1).map((toMm, i) => {
       const fromMm = places[i]!;
       return {
-        fromMm, toMm, momentNmm: Math.abs(greatestMoment(diagram, fromMm, toMm).momentNmm),
+        fromMm, toMm, momentNmm: greatestOf(diagram, fromMm, toMm, topHeldMm !== null),
         length: {
-          lengthMm: toMm - fromMm, momentAt: (x: number) => diagram.momentAt(x + fromMm), loadHeightMm: heightMm, ends: tipFree ? 'free-at-right' as const : 'held' as const,
+          lengthMm: toMm - fromMm, momentAt: (x: number) => diagram.momentAt(x + fromMm), loadHeightMm: heightMm, heldHeightMm: topHeldMm,
+          ends: tipFree ? 'free-at-right' as const : 'held' as const,
           kinksMm: diagram.pointsMm.map((x) => x - fromMm), loads: loadsWithin(loads, fromMm, toMm, tipFree),
         },
       };
@@ -88,27 +98,35 @@ function segmentsOfBeam(beam: NonNullable<FireDemand['beam']>, heightMm: number)
 
 function segmentsOf(c: CriticalTemperatureCase, design: MemberDesign, demand: FireDemand): Determined<Segment[]> {
   const heightMm = loadHeightMm(design.loadHeight, c.shape);
-  if (demand.beam) return segmentsOfBeam(demand.beam, heightMm);
+  const topHeldMm = design.lateralRestraint === 'continuous' ? heightOf(c.shape) / 2 : null;
+  if (demand.beam) return segmentsOfBeam(demand.beam, heightMm, topHeldMm);
   if (design.lateralSpacingMm === null) return { ok: false, reason: message('assessment.no-lateral-spacing', {}) };
   return { ok: true, value: [segmentOfShape(design.momentShapeY, design.lateralSpacingMm, demand.effect.momentYNmm, heightMm)] };
 }
 
 /** The numbers of the general expression that give what the energy method found: C1 without the loads' height, then C2. */
-function expressionOf(length: LateralLength, momentNmm: number, stiffness: LateralStiffness): CriticalMomentInput & { criticalMomentNmm: number } {
+function expressionOf(energy: LateralEnergy, { length, momentNmm }: Segment, criticalMomentNmm: number, stiffness: LateralStiffness): CriticalMomentInput {
   const { lengthMm, loadHeightMm: height } = length;
-  const criticalMomentNmm = bucklingFactor(length, stiffness) * momentNmm;
-  const level = height === 0 ? criticalMomentNmm : bucklingFactor({ ...length, loadHeightMm: 0 }, stiffness) * momentNmm;
-  const c1 = level / uniformCriticalMoment(lengthMm, stiffness);
+  const c1 = (factorOf(energy, false) * momentNmm) / uniformCriticalMoment(lengthMm, stiffness);
   const bending = stiffness.modulusMPa * stiffness.izMm4;
   const inner = stiffness.iwMm6 / stiffness.izMm4 + (lengthMm ** 2 * stiffness.shearModulusMPa * stiffness.itMm4) / (Math.PI ** 2 * bending);
   const scaled = (criticalMomentNmm * lengthMm ** 2) / (c1 * Math.PI ** 2 * bending);
   const c2 = height === 0 ? 0 : (inner - scaled ** 2) / (2 * scaled) / height;
-  return { ...stiffness, c1, c2, lengthMm, loadHeightMm: height, criticalMomentNmm };
+  return { ...stiffness, c1, c2, lengthMm, loadHeightMm: height };
 }
 
-function stateOf(c: CriticalTemperatureCase, segment: Segment, stiffness: LateralStiffness, modulusMm3: number, { fy, gamma }: Material, several: boolean): LateralState {
-  const expression = expressionOf(segment.length, segment.momentNmm, stiffness);
-  const slendernessInput = { modulusMm3, yieldStrengthMPa: fy, criticalMomentNmm: expression.criticalMomentNmm };
+function criticalMomentStep(energy: LateralEnergy, segment: Segment, criticalMomentNmm: number, stiffness: LateralStiffness): WorkingStep {
+  if (segment.length.heldHeightMm === null) return explain(criticalMomentFormula, expressionOf(energy, segment, criticalMomentNmm, stiffness)).step;
+  const { momentNmm, length: { lengthMm, heldHeightMm } } = segment;
+  return explain(heldAxisCriticalMomentFormula, { ...stiffness, factor: criticalMomentNmm / momentNmm, momentNmm, lengthMm, heldHeightMm }).step;
+}
+
+/** Null where the length cannot buckle. */
+function stateOf(c: CriticalTemperatureCase, segment: Segment, stiffness: LateralStiffness, modulusMm3: number, { fy, gamma }: Material, several: boolean): LateralState | null {
+  const energy = lateralEnergy(segment.length, stiffness);
+  const criticalMomentNmm = factorOf(energy) * segment.momentNmm;
+  if (criticalMomentNmm === Infinity) return null;
+  const slendernessInput = { modulusMm3, yieldStrengthMPa: fy, criticalMomentNmm };
   const slenderness = lateralSlendernessFormula.evaluate(slendernessInput);
   const imperfection = 0.65 * Math.sqrt(235 / fy);
   const where = several ? `, between ${segment.fromMm} and ${segment.toMm} mm` : '';
@@ -118,8 +136,7 @@ function stateOf(c: CriticalTemperatureCase, segment: Segment, stiffness: Latera
     temperature: () => bucklingTemperature((segment.momentNmm * gamma) / (modulusMm3 * fy), slenderness, imperfection),
     explainAt: (t, steps) => {
       const [ky, ke] = [kY(t), kE(t)];
-      const { criticalMomentNmm: _, ...input } = expression;
-      steps.push(explain(criticalMomentFormula, input).step, explain(lateralSlendernessFormula, slendernessInput).step);
+      steps.push(criticalMomentStep(energy, segment, criticalMomentNmm, stiffness), explain(lateralSlendernessFormula, slendernessInput).step);
       steps.push(tableStep('k_y,θ', t, ky), tableStep('k_E,θ', t, ke));
       if (ky <= 0) return;
       const inFire = explain(slendernessInFireFormula, { slenderness, ky, ke });
@@ -134,7 +151,7 @@ function stateOf(c: CriticalTemperatureCase, segment: Segment, stiffness: Latera
 }
 
 /**
- * Lateral-torsional buckling of each length between lateral supports, the length that fails first; null where none is bent.
+ * Lateral-torsional buckling of each length between lateral supports, the length that fails first; null where none can buckle.
  * Resistance: EN 1993-1-2 4.2.3.3(4), (5). M_cr: see beam-analysis/lateral-buckling.ts.
  */
 export function lateralBuckling(
@@ -146,7 +163,7 @@ export function lateralBuckling(
   const segments = segmentsOf(c, design, demand);
   if (!segments.ok) return segments;
   const bent = segments.value.filter((one) => one.momentNmm > 1e-9 * demand.effect.momentYNmm);
-  const states = bent.map((one) => stateOf(c, one, stiffness, modulusMm3, material, segments.value.length > 1));
+  const states = bent.flatMap((one) => stateOf(c, one, stiffness, modulusMm3, material, segments.value.length > 1) ?? []);
   const lost = (state: LateralState) => state.effect / state.resistance(20, false);
   return { ok: true, value: states.reduce<LateralState | null>((worst, state) => (!worst || firstOf(worst, state, lost) === state ? state : worst), null) };
 }

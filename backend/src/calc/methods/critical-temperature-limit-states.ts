@@ -138,7 +138,7 @@ export function shear(c: CriticalTemperatureCase, effect: number, { fy, gamma }:
  * The part of the modulus that high shear takes away (EN 1993-1-1 6.2.8): A_w²/(4·t_w) for the webs of an I, a rectangular
  * hollow or a box section in class 1 and 2; the whole modulus otherwise, which is the safe side.
  */
-function shearedModulus(c: CriticalTemperatureCase, modulus: number, plastic: boolean): number {
+export function shearedModulus(c: CriticalTemperatureCase, modulus: number, plastic: boolean): number {
   const s = c.shape;
   if (!plastic) return modulus;
   if (s.kind === 'i') return ((s.hMm - 2 * s.tfMm) ** 2 * s.twMm) / 4;

@@ -30,11 +30,12 @@ function shearBuckling(c: CriticalTemperatureCase): Message | null {
 export function refusal(c: CriticalTemperatureCase, design: MemberDesign, effect: FireEffect): Message | null {
   if (design.composite) return message('assessment.composite', {});
   if (design.webOpenings) return message('assessment.web-openings', {});
-  const { compressionN, shearZN } = effect;
+  const { compressionN, momentYNmm, shearZN } = effect;
   if (!calculatedShapes.includes(c.shape.kind)) return message('assessment.shape-not-calculated', { shape: shapeWords[c.shape.kind] });
   if (compressionN > 0 && design.bucklingRule !== 'given' && c.memberType !== 'column') return message('assessment.braced-rule-for-columns', {});
   if (compressionN > 0 && design.bucklingLengthYMm === null) return message('assessment.no-buckling-length', { axis: 'y' });
   if (compressionN > 0 && design.bucklingLengthZMm === null) return message('assessment.no-buckling-length', { axis: 'z' });
+  if (momentYNmm > 0 && design.lateralRestraint === null && !cannotTwist(c)) return message('assessment.no-lateral-restraint', {});
   return shearZN > 0 ? shearBuckling(c) : null;
 }
 

@@ -52,9 +52,16 @@ function classFor(c: CriticalTemperatureCase, { effect }: FireDemand, working: W
   if (!bent && compressionN === 0) return { ok: true, value: null };
   const fy = c.steel.yieldStrengthMPa;
   let found = sectionClass(c.shape, bent ? 'bending' : 'compression', fy);
-  if (bent && compressionN > 0) found = combinedSectionClass(c.shape, compressionN, c.properties.areaMm2, fy);
   let words = bent ? 'bending' : 'compression';
-  if (bent && compressionN > 0) words = 'bending with compression';
+  if (bent && compressionN > 0) {
+    found = combinedSectionClass(c.shape, compressionN, c.properties.areaMm2, fy);
+    words = 'bending with compression';
+  }
+  // bent about z, the walls that are webs about y lie wholly in compression; the web of an I lies at the neutral axis instead
+  if (momentZNmm > 0 && c.shape.kind !== 'i') {
+    found = sectionClass(c.shape, 'compression', fy);
+    words = 'bending about z, classed as in compression';
+  }
   if (found.ok) working?.push(...explainedClass(fy, found.value, words));
   return found;
 }
@@ -79,7 +86,8 @@ function statesOf(c: CriticalTemperatureCase, design: MemberDesign, demand: Fire
     states.push(column);
   }
   if (effect.momentYNmm > 0) states.push(bendingOf(c, design, demand, found.value ?? 3, material));
-  const mayTwist = effect.momentYNmm > 0 && design.lateralRestraint === 'at-points' && !cannotTwist(c);
+  // a top flange that is held along its length leaves the bottom one free where the moment hogs
+  const mayTwist = effect.momentYNmm > 0 && !cannotTwist(c) && (design.lateralRestraint === 'at-points' || (demand.beam !== null && hogs(demand.beam.diagram)));
   const lateral = mayTwist ? lateralBuckling(c, design, demand, moduli.modulusYMm3, material) : null;
   if (lateral && !lateral.ok) return lateral;
   if (lateral?.value) states.push(lateral.value);
@@ -91,6 +99,12 @@ function statesOf(c: CriticalTemperatureCase, design: MemberDesign, demand: Fire
   }
   if (effect.shearZN > 0) states.push(shear(c, effect.shearZN, material));
   return { ok: true, value: { states, class4: found.value === 4 } };
+}
+
+/** Whether the moment compresses the bottom flange anywhere. */
+function hogs({ pointsMm, momentAt }: BeamDiagram): boolean {
+  const moments = pointsMm.map(momentAt);
+  return Math.min(...moments) < -1e-9 * Math.max(...moments.map(Math.abs));
 }
 
 /** Bending of a described beam is checked place by place, each with its own shear; of effects alone, the greatest moment beside the greatest shear. */

@@ -14,7 +14,7 @@ const square: SectionShape = { kind: 'rectangular-hollow', hMm: 150, bMm: 150, t
 
 type Effect = { axialKn?: number; momentYKnm?: number; shearZKn?: number };
 function calculatedBasis(effect: Effect, more: object = {}): CriticalTemperatureBasis {
-  const design = memberDesignSchema.parse({ actions: { given: 'fire-effect', effect }, ...more });
+  const design = memberDesignSchema.parse({ actions: { given: 'fire-effect', effect }, lateralRestraint: 'continuous', ...more });
   return { way: 'calculated', design, reference: 'test' };
 }
 function member(basis: CriticalTemperatureBasis, change: Partial<CriticalTemperatureCase> = {}): CriticalTemperatureCase {
@@ -134,7 +134,7 @@ describe('actions', () => {
   const actions = (permanent: number, leading: number, accompanying: number) => ({
     given: 'characteristic', permanent: { axialKn: permanent }, leading: { axialKn: leading, category: 'B' }, accompanying: [{ axialKn: accompanying, category: 'wind' }, { axialKn: 10, category: 'E' }],
   });
-  const solve = (a: object) => criticalTemperature(member({ way: 'calculated', reference: 'test', design: memberDesignSchema.parse({ actions: a, bucklingLengthYMm: 3000, bucklingLengthZMm: 3000 }) }, { shape: he200b, memberType: 'column' }));
+  const solve = (a: object) => criticalTemperature(member({ way: 'calculated', reference: 'test', design: memberDesignSchema.parse({ actions: a, bucklingLengthYMm: 3000, bucklingLengthZMm: 3000, lateralRestraint: 'continuous' }) }, { shape: he200b, memberType: 'column' }));
 
   it('combines by EN 1990 6.4.3.3: G + ψ1·Q1 + Σψ2·Qi', () => {
     // 200 + 0.5·100 + 0·50 + 0.8·10 = 258
@@ -176,7 +176,7 @@ describe('class', () => {
   const slender: SectionShape = { kind: 'rectangular-hollow', hMm: 300, bMm: 300, tMm: 6.3, outerRadiusMm: 9.45, innerRadiusMm: 6.3 };
   it('gives class 4 the setting of the project, in every way but declared, and not in tension', () => {
     const as = (basis: CriticalTemperatureBasis, memberType: CriticalTemperatureCase['memberType'] = 'column') => determined(criticalTemperature(member(basis, { shape: slender, memberType })));
-    expect(as(calculatedBasis({ axialKn: 100 }, { bucklingLengthYMm: 3000, bucklingLengthZMm: 3000 }))).toMatchObject({ temperatureC: 350, method: 'class 4 default', limitStates: [] });
+    expect(as(calculatedBasis({ axialKn: 100 }, { bucklingLengthYMm: 3000, bucklingLengthZMm: 3000, lateralRestraint: 'continuous' }))).toMatchObject({ temperatureC: 350, method: 'class 4 default', limitStates: [] });
     expect(as({ way: 'utilisation', mu0: 0.3, reference: 'test' })).toMatchObject({ temperatureC: 350, method: 'class 4 default' });
     expect(as({ way: 'assumed' })).toMatchObject({ temperatureC: 350, method: 'class 4 default', assumed: true });
     expect(as({ way: 'declared', temperatureC: 500, reference: 'test' })).toMatchObject({ temperatureC: 500, method: 'declared' });
@@ -185,7 +185,7 @@ describe('class', () => {
   });
 
   it('reports a class 4 member that even its gross section cannot carry', () => {
-    const c = member(calculatedBasis({ axialKn: 5000 }, { bucklingLengthYMm: 3000, bucklingLengthZMm: 3000 }), { shape: slender, memberType: 'column' });
+    const c = member(calculatedBasis({ axialKn: 5000 }, { bucklingLengthYMm: 3000, bucklingLengthZMm: 3000, lateralRestraint: 'continuous' }), { shape: slender, memberType: 'column' });
     expect(criticalTemperature(c).kind).toBe('under-strength');
   });
 

@@ -18,7 +18,7 @@ import { tensionResistanceFormula } from '../standards/en-1993-1-2/clause-4-2-3-
 import { bucklingReductionFormula, compressionResistanceFormula, slendernessFormula, slendernessInFireFormula } from '../standards/en-1993-1-2/clause-4-2-3-2-compression.js';
 import { bendingResistanceFormula, shearReductionFormula, shearResistanceFormula } from '../standards/en-1993-1-2/clause-4-2-3-3-bending.js';
 import { criticalTemperatureFormula } from '../standards/en-1993-1-2/clause-4-2-4-critical-temperature.js';
-import { criticalMomentFormula, lateralSlendernessFormula } from '../standards/en-1993-1-1/clause-6-3-2-2-critical-moment.js';
+import { criticalMomentFormula, heldAxisCriticalMomentFormula, lateralSlendernessFormula } from '../standards/en-1993-1-1/clause-6-3-2-2-critical-moment.js';
 import { elasticCrossSectionFormula, plasticCrossSectionFormula } from '../standards/en-1993-1-1/clause-6-2-9-bending-and-axial.js';
 import { lateralBucklingResistanceFormula } from '../standards/en-1993-1-2/clause-4-2-3-3-lateral-torsional.js';
 import {
@@ -55,7 +55,7 @@ export const formulaChapters: FormulaChapter[] = [
     title: 'Resistance and critical temperature',
     formulas: [
       printed(fireEpsilonFormula), printed(tensionResistanceFormula), printed(slendernessFormula), printed(slendernessInFireFormula), printed(bucklingReductionFormula), printed(coldBucklingReductionFormula),
-      printed(compressionResistanceFormula), printed(bendingResistanceFormula), printed(shearReductionFormula), printed(shearResistanceFormula), printed(criticalMomentFormula),
+      printed(compressionResistanceFormula), printed(bendingResistanceFormula), printed(shearReductionFormula), printed(shearResistanceFormula), printed(criticalMomentFormula), printed(heldAxisCriticalMomentFormula),
       printed(lateralSlendernessFormula), printed(lateralBucklingResistanceFormula), printed(plasticCrossSectionFormula), printed(elasticCrossSectionFormula), printed(muYFormula), printed(muZFormula),
       printed(muLtFormula), printed(amplificationFormula), printed(lateralAmplificationFormula), printed(interactionFormula), printed(criticalTemperatureFormula),
     ],

@@ -32,7 +32,7 @@ function programValues(): Record<string, number> {
     permanent: { momentYKnm: (18 * 7.5 ** 2) / 8, shearZKn: (18 * 7.5) / 2 },
     leading: { category: 'B', momentYKnm: (20 * 7.5 ** 2) / 8, shearZKn: (20 * 7.5) / 2 },
   };
-  const design = memberDesignSchema.parse({ actions });
+  const design = memberDesignSchema.parse({ actions, lateralRestraint: 'continuous' });
   const effect = fireEffect(design.actions as EffectActions, defaultDesignBasis);
   const result = criticalTemperature({
     basis: { way: 'calculated', design, reference: 'worked member' }, memberType: 'secondary-beam', shape, properties,

@@ -108,7 +108,7 @@ function basisOf(row: Record<string, string>): unknown {
     case 'calculated': {
       const actions = { given: 'characteristic', permanent: effects('permanent'), leading: { ...effects('variable'), category: row['category'] } };
       const lengths = { bucklingLengthYMm: number('buckling_length_y_mm'), bucklingLengthZMm: number('buckling_length_z_mm') };
-      return { way, reference, design: { actions, ...lengths, bucklingRule: row['buckling_rule'] || undefined } };
+      return { way, reference, design: { actions, ...lengths, bucklingRule: row['buckling_rule'] || undefined, lateralRestraint: number('permanent_moment_knm') ? 'continuous' : undefined } };
     }
     default: return { way };
   }

@@ -66,7 +66,7 @@ export function acceptanceHolds(acceptances: readonly InputAcceptance[], kind: I
 }
 
 /** Changes whenever the calculation itself does, so that stored results are seen to be older. */
-const METHOD_VERSION = 3;
+const METHOD_VERSION = 4;
 
 /** A digest for each member over everything that enters its result; parts that many share are digested once. */
 export function inputHashes(inputs: ProjectInputs): Map<string, string> {

@@ -7,7 +7,7 @@ const unit = Math.sqrt(narrow.modulusMPa * narrow.izMm4 * narrow.shearModulusMPa
 /** an I section about the size of an IPE 400 */
 const rolled: LateralStiffness = { modulusMPa: 210_000, shearModulusMPa: 81_000, izMm4: 1318e4, itMm4: 51.1e4, iwMm6: 490e9 };
 const L = 6000;
-const plain = (momentAt: (x: number) => number, more: Partial<LateralLength> = {}): LateralLength => ({ lengthMm: L, momentAt, kinksMm: [], loads: [], loadHeightMm: 0, ends: 'held', ...more });
+const plain = (momentAt: (x: number) => number, more: Partial<LateralLength> = {}): LateralLength => ({ lengthMm: L, momentAt, kinksMm: [], loads: [], loadHeightMm: 0, ends: 'held', heldHeightMm: null, ...more });
 
 describe('elastic lateral-torsional buckling', () => {
   // S. P. Timoshenko and J. M. Gere, Theory of Elastic Stability, chapter 6 (memory)

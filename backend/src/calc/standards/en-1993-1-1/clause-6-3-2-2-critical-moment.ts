@@ -43,6 +43,37 @@ export const criticalMomentFormula = defineFormula<CriticalMomentInput>({
   },
 });
 
+interface HeldAxisInput {
+  factor: number;
+  momentNmm: number;
+  modulusMPa: number;
+  shearModulusMPa: number;
+  izMm4: number;
+  itMm4: number;
+  iwMm6: number;
+  lengthMm: number;
+  heldHeightMm: number | null;
+}
+/** N·mm, where the top flange is held along the length and a hogging moment compresses the bottom one. */
+export const heldAxisCriticalMomentFormula = defineFormula<HeldAxisInput>({
+  label: 'Elastic critical moment, top flange held along its length',
+  source: { standard: 'EN 1993-1-1:2005', clause: '6.3.2.2(2)', note: 'the section twists about its held flange; α_cr by minimum energy of a doubly symmetric section for the diagram between the restraints' },
+  expression: 'α_cr·M_Ed',
+  result: { symbol: 'M_cr', meaning: 'elastic critical moment', unit: 'N·mm' },
+  symbols: {
+    factor: { symbol: 'α_cr', meaning: 'factor by which moments and loads must be raised for the length to buckle', unit: '' },
+    momentNmm: { symbol: 'M_Ed', meaning: 'greatest hogging moment in fire on the length', unit: 'N·mm' },
+    modulusMPa: { symbol: 'E', meaning: 'modulus of elasticity', unit: 'MPa' },
+    shearModulusMPa: { symbol: 'G', meaning: 'shear modulus', unit: 'MPa' },
+    izMm4: { symbol: 'I_z', meaning: 'second moment of area about the weak axis', unit: 'mm⁴' },
+    itMm4: { symbol: 'I_t', meaning: 'torsion constant', unit: 'mm⁴' },
+    iwMm6: { symbol: 'I_w', meaning: 'warping constant', unit: 'mm⁶' },
+    lengthMm: { symbol: 'L', meaning: 'length between places held against twist', unit: 'mm' },
+    heldHeightMm: { symbol: 'd', meaning: 'height of the held flange above the shear centre', unit: 'mm' },
+  },
+  evaluate: (i) => i.factor * i.momentNmm,
+});
+
 export const lateralSlendernessFormula = defineFormula<{ modulusMm3: number; yieldStrengthMPa: number; criticalMomentNmm: number }>({
   label: 'Slenderness for lateral-torsional buckling at 20 °C',
   source: { standard: 'EN 1993-1-1:2005', clause: '6.3.2.2(1)' },

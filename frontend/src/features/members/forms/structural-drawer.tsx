@@ -33,7 +33,7 @@ function LateralFields({ control, described }: { control: StructuralForm['contro
       {!described && (
         <div className="mt-form-row">
           <NumberField control={control} name={`${design}.lateralSpacingMm`} label="Distance between lateral supports" unit="mm" min={0} />
-          <SelectField control={control} name={`${design}.momentShapeY.kind`} label="Moment between them" options={shapes} />
+          <SelectField control={control} name={`${design}.momentShapeY.kind`} label="Moment between them" options={shapes} help="A distributed load or a force counts as one without moment at the lateral supports; for a length with moments at its ends, take the end moments." />
           {shape === 'end-moments' && <NumberField control={control} name={`${design}.momentShapeY.ratio` as FieldPath<StructuralValues>} label="Ratio of end moments" min={-1} max={1} help="Smaller over greater; 1 uniform, negative in double curvature." />}
         </div>
       )}
@@ -41,10 +41,15 @@ function LateralFields({ control, described }: { control: StructuralForm['contro
   );
 }
 
+const restraintHelp = {
+  described: 'As by a slab. Where the moment hogs, buckling of the bottom flange is checked all the same between the supports and the lateral supports, which hold against twist.',
+  effects: 'Needed of every member bent about y, columns too. Held at points, lateral-torsional buckling is checked for the length between them, EN 1993-1-2 4.2.3.3(4).',
+};
+
 function CalculatedFields({ form }: { form: StructuralForm }) {
   const { control } = form;
   const restraint = useWatch({ control, name: `${design}.lateralRestraint` });
-  const given = useWatch({ control, name: `${design}.actions.given` });
+  const described = useWatch({ control, name: `${design}.actions.given` }) === 'loads';
   return (
     <>
       <ActionFields form={form} />
@@ -57,10 +62,10 @@ function CalculatedFields({ form }: { form: StructuralForm }) {
         <SelectField control={control} name={`${design}.bucklingRule`} label="Buckling length in fire" options={bucklingRules} help="EN 1993-1-2 4.2.3.2(5). The reductions hold only for continuous columns of a braced frame whose storeys are fire compartments: choosing one confirms that." />
       </fieldset>
       <fieldset>
-        <legend>Beams</legend>
-        <RadioField control={control} name={`${design}.lateralRestraint`} label="Compression flange" options={[{ value: 'continuous', label: 'Held along its length' }, { value: 'at-points', label: 'Held at points only' }]} help="Held at points, lateral-torsional buckling is checked for each length between them, EN 1993-1-2 4.2.3.3(4)." />
-        {restraint === 'at-points' && <LateralFields control={control} described={given === 'loads'} />}
-        <CheckField control={control} name={`${design}.continuousBeam`} label="The moment is over a support of a continuous beam" help="κ2 = 0.85, EN 1993-1-2 4.2.3.3(8)." />
+        <legend>Bending</legend>
+        <RadioField control={control} name={`${design}.lateralRestraint`} label={described ? 'Top flange' : 'Compression flange'} options={[{ value: 'continuous', label: 'Held along its length' }, { value: 'at-points', label: 'Held at points only' }]} help={described ? restraintHelp.described : restraintHelp.effects} />
+        {restraint === 'at-points' && <LateralFields control={control} described={described} />}
+        {!described && <CheckField control={control} name={`${design}.continuousBeam`} label="The moment is over a support of a continuous beam" help="κ2 = 0.85, EN 1993-1-2 4.2.3.3(8). There the bottom flange is compressed, which a slab does not hold." />}
         <CheckField control={control} name={`${design}.composite`} label="Composite with the slab" help="Not calculated here: give its utilisation or declare its temperature." />
         <CheckField control={control} name={`${design}.webOpenings`} label="Has web openings" help="Not calculated here: needs a declared temperature." />
       </fieldset>

@@ -49,7 +49,7 @@ export function structuralValues(basis: CriticalTemperatureBasis): StructuralVal
     basis: {
       temperatureC: null, mu0: null, utilisation: null, etaFi: null, mayBuckle: false, reference: '', ...basis,
       design: {
-        bucklingLengthYMm: null, bucklingLengthZMm: null, bucklingRule: 'given', lateralRestraint: 'continuous', lateralSpacingMm: null, momentShapeY: { kind: 'end-moments', ratio: 1 }, momentShapeZ: { kind: 'end-moments', ratio: 1 },
+        bucklingLengthYMm: null, bucklingLengthZMm: null, bucklingRule: 'given', lateralRestraint: null, lateralSpacingMm: null, momentShapeY: { kind: 'end-moments', ratio: 1 }, momentShapeZ: { kind: 'end-moments', ratio: 1 },
         loadHeight: 'top-flange', continuousBeam: false, composite: false, webOpenings: false,
         ...design, actions: actionsValues(design?.actions ?? null),
       },
