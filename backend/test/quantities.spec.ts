@@ -2,6 +2,7 @@ import { Decimal, splitKeys } from '@mantlet/common';
 import type { QuantitiesDto, QuantityTotals } from '@mantlet/common';
 import ExcelJS from 'exceljs';
 import { plainText } from '../src/features/quantities/quantity-table.js';
+import { ProjectInputsService } from '../src/features/assessment/project-inputs.service.js';
 import { QuantitiesService } from '../src/features/quantities/quantities.service.js';
 import { Zone } from '../src/features/zones/zone.entity.js';
 import { TestApp } from './support/app.js';
@@ -67,7 +68,8 @@ describe('quantities', () => {
   });
 
   it('says what each product covers and what to buy', async () => {
-    const totals = await app.app.get(QuantitiesService, { strict: false }).totalsByProduct(p.project.id);
+    const inputs = await app.app.get(ProjectInputsService, { strict: false }).load(app.dataSource.manager, p.project.id, null);
+    const totals = await app.app.get(QuantitiesService, { strict: false }).totalsByProduct(inputs);
     expect(totals.map((t) => [t.productName, t.members])).toEqual(expect.arrayContaining([['Testcoat', 4], ['Testboard', 2], ['Testspray', 1]]));
     // litres are ordered in whole numbers, never fewer than are needed
     const needed = Number((await get()).purchases.find((purchase) => purchase.kind === 'coating')?.litres);

@@ -42,6 +42,10 @@ export const memberSheetDtoSchema = z.object({
   result: memberResultDtoSchema.nullable(),
   sentence: z.string(),
   areaM2: z.number().nullable(),
+  /** what is stored of it rests on other inputs than there are now, or on an earlier edition of the calculation */
+  outOfDate: z.boolean(),
+  /** the last day of its product's assessment, where that has passed */
+  evidenceExpiredOn: z.string().nullable(),
   outline: sectionOutlineSchema.nullable(),
   working: z.array(workingStepDtoSchema),
   charts: memberChartsDtoSchema.nullable(),

@@ -22,6 +22,10 @@ export interface MemberExplanation {
   working: WorkingStepDto[];
   charts: MemberChartsDto | null;
   outline: SectionOutline | null;
+  /** what is stored of it, which every other page shows, rests on other inputs than these */
+  outOfDate: boolean;
+  /** the last day of its product's assessment, where that has passed */
+  evidenceExpiredOn: string | null;
 }
 
 /** Members and zones whose stored results do not rest on the inputs as they stand. */
@@ -91,9 +95,12 @@ export class AssessmentService {
     const result = withSteelReason(resolved, explained.result);
     const stored = (await storedOutcomes(manager, [place.zoneId])).get(memberId);
     const applies = result.verdict === 'protected' && stored?.verdict === 'protected' && stored.productId === result.productId;
+    const product = result.productId === null ? undefined : zone.products.get(result.productId);
     const outline = determineSectionOutline(resolved.case.shape, resolved.case.exposure, resolved.case.protectionForm);
     return {
       working: explained.working, charts: explained.charts, outline: outline.ok ? outline.value : null,
+      outOfDate: stored !== undefined && stored.inputsHash !== inputHashes({ ...zone, members: [resolved.member] }).get(memberId),
+      evidenceExpiredOn: product?.expired ? product.expiresOn : null,
       result: {
         ...result, assumed: result.assumed && !acceptanceHolds(resolved.member.acceptances, 'assumed', result),
         appliedThickness: applies ? stored.appliedThickness : null, layers: applies ? stored.layers : result.layers,

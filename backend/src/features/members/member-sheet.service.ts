@@ -33,13 +33,13 @@ export class MemberSheetService {
       this.assessment.explain(projectId, memberId),
       this.audit.list(projectId, { entity: 'member', entityId: memberId, page: 1, pageSize: 100 }),
     ]);
-    const { result, working, charts, outline } = explained;
+    const { result, working, charts, outline, outOfDate, evidenceExpiredOn } = explained;
     const product = result.productId ? await manager.findOne(Product, { where: { id: result.productId }, select: { id: true, name: true } }) : null;
     const { id, code, name, periodMin, curve, level } = zone;
     return {
       member, section: toSectionDto(section), zone: { id, code, name, periodMin, curve: curve.kind }, level: { id: level.id, code: level.code, name: level.name },
       productName: product?.name ?? null, result, sentence: sentenceOf(stored && result, product?.name ?? null), areaM2: stored?.areaM2 ?? null,
-      outline, working, charts, history: history.items,
+      outline, working, charts, outOfDate, evidenceExpiredOn, history: history.items,
       ...(await this.neighbours(projectId, member.mark)),
     };
   }

@@ -3,6 +3,8 @@ import type { BuildingDto, BuildingLevelDto, BuildingZoneDto, ZoneDto } from '@m
 import { InjectDataSource } from '@nestjs/typeorm';
 import { DataSource } from 'typeorm';
 import { OpenItemsService } from '../assessment/open-items.service.js';
+import type { ProjectInputs } from '../assessment/project-inputs.service.js';
+import { ProjectInputsService } from '../assessment/project-inputs.service.js';
 import { LevelsService } from '../levels/levels.service.js';
 import { QuantitiesService } from '../quantities/quantities.service.js';
 import { ZonesService, sumTallies } from '../zones/zones.service.js';
@@ -14,21 +16,25 @@ export class BuildingService {
     @InjectDataSource() private readonly dataSource: DataSource,
     private readonly levels: LevelsService,
     private readonly zones: ZonesService,
+    private readonly inputs: ProjectInputsService,
     private readonly openItems: OpenItemsService,
     private readonly quantities: QuantitiesService,
   ) {}
 
   async get(projectId: string): Promise<BuildingDto> {
-    const zones = await this.zones.list(projectId);
-    const issued = await this.issuedMembersByZone(projectId);
-    const levels = (await this.levels.list(projectId)).map(({ id, code, name, elevationM, heightM }): BuildingLevelDto => ({
+    // read once for what is open and for what there is to apply: all members and their evidence are in it
+    const inputs = await this.inputs.load(this.dataSource.manager, projectId, null);
+    const [zones, issued, ofProject, openItems] = await Promise.all([
+      this.zones.list(projectId), this.issuedMembersByZone(projectId), this.levels.list(projectId), this.openItems.itemsOf(this.dataSource.manager, inputs),
+    ]);
+    const levels = ofProject.map(({ id, code, name, elevationM, heightM }): BuildingLevelDto => ({
       id, code, name, elevationM, heightM,
       zones: zones.filter((zone) => zone.levelId === id).map((zone) => toBuildingZone(zone, issued.get(zone.id) ?? 0)),
     }));
     const { members, settled, open, unassessed } = sumTallies(zones);
     return {
-      members, settled, open, unassessed, levels, openItems: await this.openItems.openItems(projectId),
-      protection: await this.protection(projectId, members, unassessed),
+      members, settled, open, unassessed, levels, openItems,
+      protection: await this.protection(projectId, inputs, members, unassessed),
     };
   }
 
@@ -36,8 +42,8 @@ export class BuildingService {
    * Products first, then what may stay bare, then what has no answer yet; the members of all lines add up to the schedule's.
    * While members are being recalculated, how much there is of a product is not known.
    */
-  private async protection(projectId: string, members: number, unassessed: number): Promise<BuildingDto['protection']> {
-    const products = await this.quantities.totalsByProduct(projectId);
+  private async protection(projectId: string, inputs: ProjectInputs, members: number, unassessed: number): Promise<BuildingDto['protection']> {
+    const products = await this.quantities.totalsByProduct(inputs);
     const [row]: { bare: string; protected: string }[] = await this.dataSource.manager.query(
       `SELECT count(*) FILTER (WHERE r.verdict = 'bare') AS bare, count(*) FILTER (WHERE r.verdict = 'protected') AS protected
          FROM members m JOIN member_results r ON r.member_id = m.id WHERE m.project_id = $1`,

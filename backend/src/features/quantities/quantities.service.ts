@@ -62,10 +62,9 @@ export class QuantitiesService {
     return { lines, byLevelAndProduct, purchases, purchasesByLevel, markUpPercent, markUp: priced.markUp, totalWithMarkUp: priced.total };
   }
 
-  async totalsByProduct(projectId: string): Promise<ProductTotal[]> {
-    const { manager } = this.dataSource;
-    const inputs = await this.inputs.load(manager, projectId, null);
-    const { lines, purchases } = await this.takeoffOf(manager, inputs, 'project');
+  /** Of the whole project's inputs. */
+  async totalsByProduct(inputs: ProjectInputs): Promise<ProductTotal[]> {
+    const { lines, purchases } = await this.takeoffOf(this.dataSource.manager, inputs, 'project');
     return purchases.map((purchase) => {
       const own = lines.filter((line) => line.productId === purchase.productId);
       return {

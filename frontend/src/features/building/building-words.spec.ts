@@ -17,6 +17,11 @@ describe('a building that is being recalculated', () => {
     expect(sub).not.toContain('40');
     expect(buildingWords({ ...building, unassessed: 0 }).heading).toBe('60 of 100 members settled');
   });
+  it('does not call members settled whose results are out of date', () => {
+    const stale = { role: 'specifier', kind: 'blocker', code: 'stale', title: '', zoneId: null, zoneLabel: null, memberIds: [], count: 90, page: 'schedule' } as const;
+    const { heading } = buildingWords({ ...building, unassessed: 0, openItems: [stale] });
+    expect(heading).toBe('90 of 100 results are out of date');
+  });
   it('gives no area that is not known', () => {
     expect(sayZone(zone, { code: 'L1' })).toContain('R 60, being recalculated, 0 of 40 members settled');
     expect(sayZone({ ...zone, unassessed: 0, protectedAreaM2: 12 }, { code: 'L1' })).toContain('12 m² protected');

@@ -12,9 +12,16 @@ function waitingWords(keynotes: readonly Keynote[]): string {
   return mine === 1 ? ' One line waits on you.' : ` ${countWord(mine)} lines wait on you.`;
 }
 
-export function buildingWords({ members, settled, open, unassessed, levels }: BuildingDto, keynotes: readonly Keynote[] = []): Words {
+export function buildingWords({ members, settled, open, unassessed, levels, openItems }: BuildingDto, keynotes: readonly Keynote[] = []): Words {
   if (levels.length === 0) return { heading: 'No levels yet', sub: 'The building is drawn from its levels and zones.' };
   if (members === 0) return { heading: 'No members yet', sub: 'The levels are there; the member schedule is not.' };
+  const old = openItems.find((item) => item.code === 'stale');
+  if (old) {
+    return {
+      heading: old.count === 0 ? 'The zones’ targets are out of date' : `${formatNumber(old.count)} of ${formatNumber(members)} results ${old.count === 1 ? 'is' : 'are'} out of date`,
+      sub: `They rest on other inputs than there are now, or on an earlier edition of the calculation; the drawing shows them as they were.${waitingWords(keynotes)}`,
+    };
+  }
   if (open === 0 && settled === members) return { heading: `All ${formatNumber(members)} members settled`, sub: 'Nothing is open; the schedule can be prepared.' };
   if (unassessed > 0) {
     return {

@@ -26,4 +26,9 @@ describe('what is open on a member, and who settles it', () => {
     expect(openMatters(sheet({ verdict: 'protected', assumed: true }), 650)).toMatchObject([{ who: 'structural engineer', what: 'The critical temperature of 560 °C is assumed by member type' }]);
     expect(openMatters(sheet(null, [], 'Not determined: not assessed yet'), 650)).toHaveLength(1);
   });
+  it('says what is older than its inputs, and an assessment that has expired', () => {
+    const protectedBy = { ...sheet({ verdict: 'protected' }), productName: 'Coat' };
+    expect(openMatters({ ...protectedBy, outOfDate: true, evidenceExpiredOn: null }, 650)).toMatchObject([{ who: 'specifier', place: 'schedule' }]);
+    expect(openMatters({ ...protectedBy, outOfDate: false, evidenceExpiredOn: '2026-03-01' }, 650)).toMatchObject([{ who: 'specifier', place: 'zone', what: 'The assessment of Coat expired on 1 Mar 2026' }]);
+  });
 });

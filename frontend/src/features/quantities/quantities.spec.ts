@@ -20,7 +20,7 @@ const noLitres = purchase({ litres: null, containers: null, missing: [{ code: 'p
 describe('the heading', () => {
   it('says what there is of each kind', () => {
     const boards = purchase({ productId: 'B', kind: 'board', litres: null, boards: [plan] });
-    expect(quantitiesHeading({ lines: [line({}), board, line({ kind: 'spray', volumeM3: '21.3600' })], purchases: [purchase({}), boards] })).toBe('100 m² of coating, 107 L; 8 sheets of board; 21.4 m³ of spray');
+    expect(quantitiesHeading({ lines: [line({}), board, line({ kind: 'spray', volumeM3: '21.3600' })], purchases: [purchase({}), boards] })).toBe('100 m² of coating, 108 L; 8 sheets of board; 21.4 m³ of spray');
   });
   it('leaves out litres it cannot justify, and says when there is nothing', () => {
     expect(quantitiesHeading({ lines: [line({})], purchases: [noLitres] })).toBe('100 m² of coating');

@@ -13,7 +13,9 @@ export function quantitiesHeading(q: Pick<QuantitiesDto, 'lines' | 'purchases'> 
   if (coating.length > 0) {
     const litres = q.purchases.filter((p) => p.kind === 'coating').map((p) => p.litres);
     const known = litres.filter((l) => l !== null);
-    parts.push(`${rounded(coating.map((l) => l.netM2), 0)} m² of coating${litres.length > 0 && known.length === litres.length ? `, ${rounded(known, 0)} L` : ''}`);
+    // litres are bought in whole numbers, never fewer than are needed: as on the Building page and in the schedule
+    const enough = formatNumber(sumDecimals(known).ceil().toNumber());
+    parts.push(`${rounded(coating.map((l) => l.netM2), 0)} m² of coating${litres.length > 0 && known.length === litres.length ? `, ${enough} L` : ''}`);
   }
   const board = own(q, 'board');
   if (board.length > 0) {

@@ -34,6 +34,18 @@ function balloonsIn(keynotes: readonly number[], width: number): { shown: number
   return { shown: [], more: '', width: 0 };
 }
 
+/** A name broken between words where it does not fit one line and both parts fit theirs; null where it fits, or cannot. */
+function twoLines(text: string, first: number, second: number): [string, string] | null {
+  const fits = (part: string, width: number) => textWidth(part, 12.5) <= width;
+  if (fits(text, first)) return null;
+  const parts = text.split(' ');
+  for (let n = parts.length - 1; n > 1; n -= 1) {
+    const [above, below] = [parts.slice(0, n).join(' '), parts.slice(n).join(' ')];
+    if (fits(above, first) && fits(below, second)) return [above, below];
+  }
+  return null;
+}
+
 /**
  * Writes on a zone what there is room for, never one thing over another nor over the edge: the strong words first, then the numbers of what is open
  * (on the second line, a line of their own or instead of the aside), then the name, cut if it must be, then the aside.
@@ -75,10 +87,13 @@ export function labelZone(box: Box, words: ZoneWords, railHeight: number): ZoneL
   }
   if (lines >= 2) {
     const beside = room - (onSecond ? onSecond + gap : 0);
-    const named = fitText(`${words.code} ${words.name}`, beside / 1.04, 12.5);
+    const full = `${words.code} ${words.name}`;
+    const wrapped = lines >= 3 && labels.balloons.every(({ cy }) => cy < base(2)) ? twoLines(full, beside, room) : null;
+    const named = wrapped ? wrapped[0] : fitText(full, beside / 1.04, 12.5);
     // a name of two letters says nothing: the code alone then
-    const text = named.length >= words.code.length + 5 || named === `${words.code} ${words.name}` ? named : codeWidth <= beside ? words.code : '';
+    const text = wrapped || named.length >= words.code.length + 5 || named === full ? named : codeWidth <= beside ? words.code : '';
     if (text) labels.texts.push({ role: 'name', text, x: left, y: base(2), size: 12.5, anchor: 'start' });
+    if (wrapped) labels.texts.push({ role: 'name', text: wrapped[1], x: left, y: base(3) - 2, size: 12.5, anchor: 'start' });
   }
   const used = strongWidth + gap + (onFirst ? onFirst + gap : 0);
   // on a single line the code matters more than the aside

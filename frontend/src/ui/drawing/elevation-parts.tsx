@@ -1,5 +1,5 @@
 import { formatLevel } from '../../lib/format.js';
-import { scaleBar, wideFrom } from './building-elevation-layout.js';
+import { fitText, scaleBar, wideFrom } from './building-elevation-layout.js';
 import type { ElevationLayout } from './building-elevation-layout.js';
 import type { ZoneLabels } from './elevation-labels.js';
 
@@ -11,11 +11,12 @@ export function LevelMarks({ layout }: { layout: ElevationLayout }) {
   const wallAt = (y: number) => Math.min(...layout.boxes.filter((b) => Math.abs(b.y + b.height - y) < 0.5).map((b) => b.x), layout.plotLeft + layout.plotWidth);
   return (
     <g aria-hidden="true">
-      {layout.marks.map(({ level, y, labelY }) => (
+      {layout.marks.map(({ level, y, labelY }, i) => (
         <g key={level.id}>
           {!compact && <line className="d-aid" x1={tip} x2={Math.max(layout.plotLeft, wallAt(y))} y1={y} y2={y} strokeWidth="1" strokeDasharray="5 3" />}
           <path d={`M${tip - 5} ${labelY - 9}h10l-5 8z`} fill="var(--ink)" />
           <text className="d-sub" x={tip - 9} y={labelY - 3.5} fontSize="11.5" textAnchor="end">{formatLevel(level.elevationM)}</text>
+          {labelY - (layout.marks[i - 1]?.labelY ?? -Infinity) >= 32 && <text x={tip - 9} y={labelY - 17.5} fontSize="11.5" fontWeight="600" textAnchor="end">{fitText(level.code, tip - 9, 11.5)}</text>}
         </g>
       ))}
     </g>

@@ -43,7 +43,7 @@ const within = (inner: Box, width: number, height: number) =>
 
 describe.each([...readdirSync(folder).filter((f) => f.endsWith('.csv')).map((f) => [f, readShapes(f)] as const), ['sections of a project', own] as const])('%s', (_, shapes) => {
   it('is not empty', () => expect(shapes.length).toBeGreaterThan(5));
-  it.each([200, 250, 340])('at %d px: every section is drawn within its box, its figures inside the drawing and clear of steel, slab and each other', (width) => {
+  it.each([[200, 0], [250, 0], [340, 0], [200, 45], [340, 45]])('at %d px with %d mm round it: every section is drawn within its box, its figures inside the drawing and clear of steel, slab and each other', (width, coverMm) => {
     const wrong: string[] = [];
     for (const [name, shape] of shapes) {
       const outline = shapePreview(shape);
@@ -51,14 +51,16 @@ describe.each([...readdirSync(folder).filter((f) => f.endsWith('.csv')).map((f) 
       const reach = (axis: 0 | 1, size: number) => outline.loops.flat().every((s) => [s.from, s.to].every((p) => Math.abs(p[axis]) <= size / 2 + 1e-6));
       if (!reach(0, outline.widthMm) || !reach(1, outline.heightMm)) wrong.push(`${name} leaves its box`);
       for (const exposure of exposures) {
-        const layout = layoutSection(outline, exposure, width, 330);
+        const layout = layoutSection(outline, exposure, width, 330, coverMm);
         const surrounded = exposure !== undefined && exposure.arrangement !== 'four-sides';
         const { height: tall, width: wide } = sectionDimensions(outline, layout, surrounded);
         const where = `${name}, ${exposure?.arrangement ?? 'no exposure'}`;
-        if (!within(layout.section, layout.width, layout.height)) wrong.push(`${where}: section`);
+        const { section, cover } = layout;
+        const covered = { x: section.x - cover, y: section.y - (surrounded ? 0 : cover), width: section.width + 2 * cover, height: section.height + cover * (surrounded ? 1 : 2) };
+        if (!within(covered, layout.width, layout.height)) wrong.push(`${where}: section`);
         for (const { box } of [tall, wide]) {
           if (!within(box, layout.width, layout.height)) wrong.push(`${where}: a figure leaves the drawing`);
-          if (overlap(box, layout.section)) wrong.push(`${where}: a figure on the steel`);
+          if (overlap(box, covered)) wrong.push(`${where}: a figure on the steel or its protection`);
         }
         if (overlap(tall.box, wide.box)) wrong.push(`${where}: figures cover each other`);
         if (exposure && surroundings(exposure, layout.section, layout.reach).some((part) => part.label !== null && overlap(part, tall.box))) wrong.push(`${where}: a figure on the slab`);

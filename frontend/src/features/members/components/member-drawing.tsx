@@ -19,12 +19,19 @@ function Words({ caption: { title, sub }, children }: { caption: Caption; childr
   return <div className="mt-reading-words"><h2>{title}</h2><p className="mt-sub">{sub}</p>{children}</div>;
 }
 
-function Section({ sheet: { outline, section, member } }: { sheet: MemberSheetDto }) {
+/** What is to be put on; nothing where nothing is determined or the steel stays bare. */
+function protectionOf({ result, productName }: MemberSheetDto) {
+  const thickness = result?.appliedThickness ?? result?.requiredThickness ?? null;
+  return result?.verdict === 'protected' && thickness !== null ? { name: productName ?? 'protection', thickness, unit: result.thicknessUnit ?? 'mm' } : undefined;
+}
+
+function Section({ sheet }: { sheet: MemberSheetDto }) {
+  const { outline, section, member } = sheet;
   return (
     <div className="mt-sheet-section">
       <h2>{section.designation}</h2>
       {outline
-        ? <SectionDrawing outline={outline} name={section.designation} exposure={member.exposure} details={shapeDetails(section.shape)} />
+        ? <SectionDrawing outline={outline} name={section.designation} exposure={member.exposure} details={shapeDetails(section.shape)} protection={protectionOf(sheet)} />
         : <p className="mt-sub">Not drawn: the section and its exposure do not go together.</p>}
     </div>
   );
@@ -79,7 +86,7 @@ function answers(sheet: MemberSheetDto): Answer[] {
     { term: 'critical-temperature', name: 'Critical temperature', value: result?.criticalTemperatureC == null ? missing : formatLimitTemperature(result.criticalTemperatureC), more: result?.assumed ? 'assumed, not accepted' : result?.method ?? '', open: result?.criticalTemperatureC == null || result.assumed },
     { term: 'section-factor', name: 'Section factor', value: result?.sectionFactorPerM == null ? missing : formatSectionFactor(result.sectionFactorPerM).replace('1/m', 'm⁻¹'), more: result?.heatedPerimeterMm == null ? '' : `heated girth ${formatNumber(result.heatedPerimeterMm)} mm`, open: result?.sectionFactorPerM == null },
     bare ? { term: 'bare', name: 'Thickness', value: 'none', more: 'may stay bare' }
-      : { term: 'required-thickness', name: 'Thickness', value: result?.requiredThickness == null ? missing : needs, more: result?.requiredThickness == null ? '' : `${sheet.productName ?? ''}${result.appliedThickness !== null && gets !== needs ? `; its zone gives ${gets}` : ''}`, open: result?.requiredThickness == null },
+      : { term: 'required-thickness', name: 'Thickness', value: result?.requiredThickness == null ? missing : needs, more: result?.requiredThickness == null ? (result?.verdict === 'outside' ? 'outside the assessment' : '') : `${sheet.productName ?? ''}${result.appliedThickness !== null && gets !== needs ? `; its zone gives ${gets}` : ''}`, open: result?.requiredThickness == null },
   ];
 }
 

@@ -15,7 +15,7 @@ export function OpenNotice({ sheet, heading }: { sheet: MemberSheetDto; /** what
       {matters.map(({ what, who, how, place }) => (
         <div key={what}>
           <StatusWord kind="attention">Waits on the {who}</StatusWord>
-          <p>{!heading.startsWith(what) && `${what}. `}{how}{place === 'zone' && <> <Link to={`/projects/${project.id}/zones?zone=${sheet.zone.id}`}>Zone {sheet.zone.code}</Link>.</>}</p>
+          <p>{!heading.startsWith(what) && `${what}. `}{how}{place === 'zone' && <> <Link to={`/projects/${project.id}/zones?zone=${sheet.zone.id}`}>Zone {sheet.zone.code}</Link>.</>}{place === 'schedule' && <> <Link to={`/projects/${project.id}/schedule`}>Schedule</Link>.</>}</p>
         </div>
       ))}
     </section>

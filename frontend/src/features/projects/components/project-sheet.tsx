@@ -1,7 +1,7 @@
 import { Link } from 'react-router-dom';
 import { revisionStateNames } from '@mantlet/common';
 import type { ProjectListItemDto } from '@mantlet/common';
-import { formatNumber, keepUnits } from '../../../lib/format.js';
+import { countWord, formatNumber, keepUnits } from '../../../lib/format.js';
 import { may, rolesInWords } from '../../../lib/may.js';
 import { BuildingSketch } from '../../../ui/drawing/building-sketch.js';
 import type { ElevationLevel } from '../../../ui/drawing/building-elevation-layout.js';
@@ -15,21 +15,24 @@ const notIssued = 'nothing is issued yet';
 const longest = 4;
 
 /** What the reader must act on, line by line; the rest is on the project's front page. */
-function Waiting({ project, items }: { project: ProjectListItemDto; items: readonly { title: string; zoneLabel: string | null; to: string }[] }) {
-  if (project.waitsOnMe === 0) return <StatusWord kind="neutral">Nothing waits on you here</StatusWord>;
-  const more = project.waitsOnMe - Math.min(items.length, longest);
+interface WaitingItem { title: string; zoneLabel: string | null; to: string }
+function Waiting({ project, items }: { project: ProjectListItemDto; /** null until they are known */ items: readonly WaitingItem[] | null }) {
+  const known = items ?? [];
+  const waits = Math.max(project.waitsOnMe, known.length);
+  if (waits === 0) return <StatusWord kind="neutral">Nothing waits on you here</StatusWord>;
+  const more = waits - Math.min(known.length, longest);
   return (
     <>
-      <StatusWord kind="attention">{project.waitsOnMe === 1 ? 'One item waits on you' : `${formatNumber(project.waitsOnMe)} items wait on you`}</StatusWord>
+      <StatusWord kind="attention">{waits === 1 ? 'One item waits on you' : `${countWord(waits)} items wait on you`}</StatusWord>
       <ul>
-        {items.slice(0, longest).map((item) => <li key={item.to + item.title}><Link to={item.to}>{keepUnits(item.title)}</Link>{item.zoneLabel && <span className="mt-sub"> {item.zoneLabel}</span>}</li>)}
-        {more > 0 && <li><Link to={`/projects/${project.id}${items.length === 0 ? '/schedule' : ''}`}>{items.length === 0 ? 'A revision waits for your signature' : `and ${formatNumber(more)} more`}</Link></li>}
+        {known.slice(0, longest).map((item) => <li key={item.to + item.title}><Link to={item.to}>{keepUnits(item.title)}</Link>{item.zoneLabel && <span className="mt-sub"> {item.zoneLabel}</span>}</li>)}
+        {items && more > 0 && <li><Link to={`/projects/${project.id}${known.length === 0 ? '/schedule' : ''}`}>{known.length === 0 ? 'A revision waits for your signature' : `and ${formatNumber(more)} more`}</Link></li>}
       </ul>
     </>
   );
 }
 
-function Sheet({ project, levels, items, drawing }: { project: ProjectListItemDto; levels: readonly ElevationLevel[]; drawing: string; items: readonly { title: string; zoneLabel: string | null; to: string }[] }) {
+function Sheet({ project, levels, items, drawing }: { project: ProjectListItemDto; levels: readonly ElevationLevel[]; drawing: string; items: readonly WaitingItem[] | null }) {
   const revision = project.revision ? `${project.revision.code} ${revisionStateNames[project.revision.state].toLowerCase()}` : 'None yet';
   return (
     <article className="mt-panel mt-project" aria-labelledby={`project-${project.id}`}>
@@ -54,7 +57,7 @@ function Sheet({ project, levels, items, drawing }: { project: ProjectListItemDt
 
 function DesignSheet({ project }: { project: ProjectListItemDto }) {
   const building = useBuilding(project.id);
-  const items = (building.data?.openItems ?? []).filter((item) => project.roles.includes(item.role)).map((item) => ({ title: item.title, zoneLabel: item.zoneLabel, to: openItemLink(project.id, item) }));
+  const items = building.data ? building.data.openItems.filter((item) => item.kind === 'blocker' && project.roles.includes(item.role)).map((item) => ({ title: item.title, zoneLabel: item.zoneLabel, to: openItemLink(project.id, item) })) : null;
   return <Sheet project={project} levels={building.data?.levels ?? []} items={items} drawing={building.data ? 'No levels yet' : ''} />;
 }
 function IssuedSheet({ project }: { project: ProjectListItemDto }) {

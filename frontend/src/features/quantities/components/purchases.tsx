@@ -16,7 +16,7 @@ function ordersOf(p: PurchaseDto, lines: QuantitiesDto['lines']): Order[] {
   if (p.kind === 'board' && p.boards.length > 0) {
     return p.boards.map((plan) => ({ what: `${count(plan.sheets, 'sheet')} of ${plan.thicknessMm} mm`, net: { value: plan.sheetM2.toFixed(2), unit: 'm²', decimals: 0 }, detail: sheetWords(plan) }));
   }
-  if (p.kind === 'coating') return [{ what: p.containers === null ? '' : count(p.containers, 'container'), net: { value: p.litres, unit: 'L', decimals: 0 }, detail: p.containerL === null ? '' : `${p.containerL} L each` }];
+  if (p.kind === 'coating') return [{ what: p.containers === null ? '' : count(p.containers, 'container'), net: { value: p.litres, unit: 'L', decimals: 1 }, detail: p.containerL === null ? '' : `${p.containerL} L each` }];
   const own = lines.filter((line) => line.productId === p.productId && (p.levelId === null || line.levelId === p.levelId));
   const net = { value: sumDecimals(own.map((line) => line.volumeM3)).toFixed(4), unit: 'm³', decimals: 1 };
   return [{ what: p.bags === null ? '' : count(p.bags, 'bag'), net, detail: p.bagKg === null ? '' : `${p.bagKg} kg each` }];

@@ -1,6 +1,6 @@
 import { Button, Select } from 'antd';
 import { useId } from 'react';
-import { useSearchParams } from 'react-router-dom';
+import { Link, useSearchParams } from 'react-router-dom';
 import { deliveryRules, quantityQuerySchema, sentence, splitKeyNames, splitKeys } from '@mantlet/common';
 import type { BuildingDto, ProjectDto, QuantitiesDto, QuantityQuery, SplitKey } from '@mantlet/common';
 import { BuildingQuantities } from '../../../ui/drawing/building-quantities.js';
@@ -9,6 +9,8 @@ import { Page } from '../../../ui/page.js';
 import { Panel } from '../../../ui/panel.js';
 import { Quantity } from '../../../ui/quantity.js';
 import { EmptyState, QueryState } from '../../../ui/states.js';
+import { StatusWord } from '../../../ui/status-word.js';
+import { Term } from '../../../ui/term.js';
 import { useBuilding } from '../../building/api/building.js';
 import { RequireRight, useCurrentProject } from '../../projects/project-context.js';
 import { linesCsvUrl, useQuantities, workbookUrl } from '../api/quantities.js';
@@ -82,7 +84,7 @@ function MoneyLine({ data }: { data: QuantitiesDto }) {
   return (
     <Panel title="Money">
       <dl className="mt-facts">
-        <dt>Material</dt><dd>{money(total.materialCost, 'Material')}</dd>
+        <dt><Term name="rate">Material</Term></dt><dd>{money(total.materialCost, 'Material')}</dd>
         <dt>Labour</dt><dd>{money(total.labourCost, 'Labour')}</dd>
         <dt>Both</dt><dd>{money(total.cost, 'Material and labour')}</dd>
         <dt>Overheads, {data.markUpPercent} %</dt><dd>{money(data.markUp, 'Overheads')}</dd>
@@ -95,8 +97,10 @@ function MoneyLine({ data }: { data: QuantitiesDto }) {
 function Content({ data, choice, project }: { data: QuantitiesDto; choice: Choice; project: ProjectDto }) {
   const building = useBuilding(project.id);
   const { missing } = data.split.total;
+  const stale = building.data?.openItems.find((item) => item.code === 'stale');
   return (
     <>
+      {stale && <p className="mt-old"><StatusWord kind="attention">Out of date</StatusWord> {stale.title.replace(/; recalculate$/, '')}. These figures follow once they are recalculated on the <Link to={`/projects/${project.id}/schedule`}>Schedule page</Link>.</p>}
       {missing.length > 0 && (
         <Panel title="Some quantities are not determined"><ul className="mt-missing">{missing.map(sentence).map((m) => <li key={m}>{m}</li>)}</ul></Panel>
       )}
