@@ -103,9 +103,9 @@ describe('the scenario', () => {
     expect(products.find((product) => product.form === 'table')?.evidenceFile?.name).toBe('coating-tables.csv');
   });
 
-  it('has five people with their roles, and an administrator who is not on the team', async () => {
+  it('has seven people, every role held,, and an administrator who is not on the team', async () => {
     const team = await get<{ email: string; roles: Role[] }[]>(await signIn('Fire engineer'), 'memberships');
-    expect(team.flatMap((one) => one.roles).sort()).toEqual(['contractor', 'fire-engineer', 'specifier', 'specifier', 'structural-engineer']);
+    expect(team.flatMap((one) => one.roles).sort()).toEqual(['contractor', 'fire-engineer', 'inspector', 'reader', 'specifier', 'specifier', 'structural-engineer']);
     expect(accounts.every((account) => account.email.endsWith('.example.test'))).toBe(true);
     const administrator = await signIn('Administrator');
     await administrator.get('/api/users').expect(200);

@@ -32,7 +32,7 @@ describe('numbers that others change', () => {
     await choose(fireEngineer, fireEngineer.getByRole('dialog'), 'Period', longer);
     await fireEngineer.getByRole('dialog').getByRole('button', { name: 'Save' }).click();
     await fireEngineer.getByRole('dialog').waitFor({ state: 'hidden' });
-    await row.getByText(`R ${longer.split(' ')[0]}`).filter({ visible: true }).waitFor();
+    await row.getByText(`R ${longer.split(' ')[0]}`).filter({ visible: true }).first().waitFor();
     await structuralEngineer.getByText(/changed zone Z09 .*, a moment ago/).waitFor();
     // one's own changes are not told
     expect(await fireEngineer.getByText(/a moment ago/).count()).toBe(0);

@@ -58,7 +58,7 @@ describe('from open items to the issued schedule', () => {
     await choose(page, page.getByRole('dialog'), 'Period', '90 minutes');
     await page.getByRole('dialog').getByRole('button', { name: 'Save' }).click();
     await page.getByRole('dialog').waitFor({ state: 'hidden' });
-    await page.getByRole('row', { name: /Z07 Quiet floor/ }).getByText('R 90').filter({ visible: true }).waitFor();
+    await page.getByRole('row', { name: /Z07 Quiet floor/ }).getByText('R 90').filter({ visible: true }).first().waitFor();
     await expect.poll(needs, { timeout: 15_000 }).toBeGreaterThan(before * 1.2);
   });
 

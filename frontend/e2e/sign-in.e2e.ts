@@ -9,18 +9,6 @@ afterAll(async () => {
 });
 
 describe('who comes in, and what they find', () => {
-  it.each([
-    ['Fire engineer', ['Building', 'Zones', 'Members', 'Products', 'Quantities', 'Schedule', 'Site', 'Team and basis']],
-    ['Structural engineer', ['Building', 'Zones', 'Members', 'Products', 'Quantities', 'Schedule', 'Site', 'Team and basis']],
-    ['Specifier', ['Building', 'Zones', 'Members', 'Products', 'Quantities', 'Schedule', 'Site', 'Team and basis']],
-    ['Contractor', ['Site', 'Schedule']],
-  ])('%s signs in and sees the pages that are theirs', async (role, pages) => {
-    const page = await people.person(role);
-    const names = await page.getByRole('navigation', { name: 'Pages' }).locator('a > span:first-child').allTextContents();
-    expect(names.filter((name) => name !== 'All projects')).toEqual(pages);
-    await page.context().close();
-  });
-
   it('a wrong password is refused in words, and the e-mail stays', async () => {
     const page = await people.visitor();
     await page.goto('/');
@@ -29,14 +17,6 @@ describe('who comes in, and what they find', () => {
     await page.getByRole('button', { name: 'Sign in' }).click();
     await page.getByRole('alert').waitFor();
     expect(await page.getByLabel('E-mail').inputValue()).toBe(account('Specifier').email);
-  });
-
-  it('the administrator keeps accounts and reads no project', async () => {
-    const page = await people.visitor();
-    await signIn(page, account('Administrator'));
-    expect(await page.getByText('Marrow Gate Civic Library').count()).toBe(0);
-    await page.getByRole('link', { name: 'Accounts', exact: true }).click();
-    await page.getByText(account('Contractor').email).waitFor();
   });
 
   it('the first visitor of an empty installation makes the administrator’s account', async () => {

@@ -1,7 +1,7 @@
 import { readFileSync } from 'node:fs';
 import path from 'node:path';
 import { chromium } from 'playwright-core';
-import type { Browser, BrowserContext, Locator, Page } from 'playwright-core';
+import type { Browser, BrowserContext, ConsoleMessage, Locator, Page } from 'playwright-core';
 
 function required(name: string): string {
   const value = process.env[name];
@@ -33,7 +33,7 @@ export class People {
     await this.browser.close();
   }
 
-  /** A fresh visitor. Fails the journey where a page throws or the server fails. */
+  /** A fresh visitor. What any of their pages throws, refuses or complains of is a fault. */
   async visitor(options: { empty?: boolean; dark?: boolean } = {}): Promise<Page> {
     const context = await this.browser.newContext({
       baseURL: required(options.empty ? 'MANTLET_E2E_EMPTY_URL' : 'MANTLET_E2E_URL'), viewport: { width: 1440, height: 920 }, locale: 'en-GB',
@@ -42,13 +42,9 @@ export class People {
       reducedMotion: 'reduce',
     });
     this.contexts.push(context);
-    context.setDefaultTimeout(30_000);
-    const page = await context.newPage();
-    page.on('pageerror', (error) => faults.push(error));
-    page.on('response', (response) => {
-      if (response.status() >= 500) faults.push(new Error(`${response.request().method()} ${response.url()} answered ${response.status()}`));
-    });
-    return page;
+    context.setDefaultTimeout(20_000);
+    context.on('page', watch);
+    return context.newPage();
   }
 
   /** Somebody of the demo's team, signed in by the form and on the project's first page. */
@@ -61,8 +57,19 @@ export class People {
   }
 }
 
-/** What pages threw, and where the server failed; a journey's last step asks for none. */
+/** What pages threw or wrote to the console as an error, and where the server failed; a journey's last step asks for none. */
 export const faults: Error[] = [];
+
+/** Answers such as 401 and 409 belong to what is tried; what the page's own policy refuses, and what React complains of, does not. */
+const isFault = (line: ConsoleMessage): boolean => line.type() === 'error' && !line.text().startsWith('Failed to load resource');
+
+function watch(page: Page): void {
+  page.on('pageerror', (error) => faults.push(error));
+  page.on('console', (line) => { if (isFault(line)) faults.push(new Error(`${page.url()} wrote: ${line.text()}`)); });
+  page.on('response', (response) => {
+    if (response.status() >= 500) faults.push(new Error(`${response.request().method()} ${response.url()} answered ${response.status()}`));
+  });
+}
 
 export async function signIn(page: Page, { email, password }: Pick<Account, 'email' | 'password'>): Promise<void> {
   await page.goto('/');
@@ -78,8 +85,21 @@ export async function goTo(page: Page, name: string): Promise<void> {
   await link.click();
   // the old page stays until the new one is there
   await link.and(page.locator('[aria-current=page]')).waitFor();
-  await page.getByRole('heading', { level: 1 }).waitFor();
-  await page.getByText(/^Loading .*…$/).first().waitFor({ state: 'hidden' });
+  await settled(page);
+}
+
+/** Nothing is being fetched that the page waits for. (The stream of changes stays open, so that the network is never idle.) */
+export async function settled(page: Page): Promise<void> {
+  await heading(page).waitFor();
+  await page.locator('main[aria-busy=true], .mt-state-loading, [role=grid][aria-busy=true]').first().waitFor({ state: 'detached' });
+  await page.evaluate(() => document.fonts.ready.then(() => undefined));
+}
+
+/** Signs out by the menu of the strip; the sign-in page is what is left. */
+export async function signOut(page: Page): Promise<void> {
+  await page.locator('.mt-strip-who').click();
+  await page.getByRole('menuitem', { name: 'Sign out' }).click();
+  await page.getByRole('button', { name: 'Sign in' }).waitFor();
 }
 
 /** Opens a select by its label and takes the choice with this text. */

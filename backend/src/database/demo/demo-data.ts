@@ -17,7 +17,10 @@ const systemsSchema = z.partialRecord(z.enum(memberTypes), z.string());
 const scenarioSchema = z.object({
   project: projectInputSchema,
   administrator: emailSchema,
-  team: z.object({ fireEngineer: emailSchema, structuralEngineer: emailSchema, specifier: emailSchema, checker: emailSchema, contractor: emailSchema }),
+  team: z.object({
+    fireEngineer: emailSchema, structuralEngineer: emailSchema, specifier: emailSchema, checker: emailSchema,
+    contractor: emailSchema, inspector: emailSchema, reader: emailSchema,
+  }),
   takeoff: takeoffSettingsUpdateSchema.omit({ version: true }),
   levels: z.array(levelInputSchema).min(1),
   zones: z.array(

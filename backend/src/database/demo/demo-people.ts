@@ -7,11 +7,14 @@ import type { DemoAccount, Scenario } from './demo-data.js';
 
 export type TeamKey = keyof Scenario['team'];
 const rolesOfTeam: Record<TeamKey, Role[]> = {
-  fireEngineer: ['fire-engineer'], structuralEngineer: ['structural-engineer'], specifier: ['specifier'], checker: ['specifier'], contractor: ['contractor'],
+  fireEngineer: ['fire-engineer'], structuralEngineer: ['structural-engineer'], specifier: ['specifier'], checker: ['specifier'],
+  contractor: ['contractor'], inspector: ['inspector'], reader: ['reader'],
 };
 
 export interface DemoPeople {
   administrator: Actor;
+  /** e-mail addresses whose accounts this load made */
+  newcomers: ReadonlySet<string>;
   /** each as they act on the project */
   as: (key: TeamKey, projectId: string) => ProjectScope;
 }
@@ -28,24 +31,23 @@ export async function makePeople(app: INestApplicationContext, scenario: Scenari
   const office = all.find((user) => user.email === scenario.administrator);
   if (!office) throw new Error(`The demo's administrator ${scenario.administrator} has no account.`);
   const administrator: Actor = office;
-  for (const { name, email, password } of accounts) {
-    if (!all.some((user) => user.email === email)) await users.create({ name, email, password }, administrator);
-  }
+  const missing = accounts.filter(({ email }) => !all.some((user) => user.email === email));
+  for (const { name, email, password } of missing) await users.create({ name, email, password }, administrator);
   const actors = new Map<string, Actor>((await users.list()).map(({ id, name, email, administrator: holds }) => [email, { id, name, email, administrator: holds }]));
   const as = (key: TeamKey, projectId: string): ProjectScope => {
     const actor = actors.get(scenario.team[key]);
     if (!actor) throw new Error(`${scenario.team[key]} is on the demo's team and has no account.`);
     return { projectId, roles: rolesOfTeam[key], actor };
   };
-  return { administrator, as };
+  return { administrator, newcomers: new Set(missing.map(({ email }) => email)), as };
 }
 
-/** The fire engineer, who began the project, brings in the others. */
-export async function makeTeam(app: INestApplicationContext, scenario: Scenario, people: DemoPeople, projectId: string): Promise<void> {
+/** The fire engineer, who began the project, brings in the others: all of them, or those alone whom `wanted` names. */
+export async function makeTeam(app: INestApplicationContext, scenario: Scenario, people: DemoPeople, projectId: string, wanted?: ReadonlySet<string>): Promise<void> {
   const memberships = app.get(MembershipsService, { strict: false });
   const there = new Set((await memberships.list(projectId)).map((one) => one.email));
   for (const [key, email] of Object.entries(scenario.team) as [TeamKey, string][]) {
-    if (!there.has(email)) await memberships.add(people.as('fireEngineer', projectId), { email, roles: rolesOfTeam[key] }, { tell: false });
+    if (!there.has(email) && (wanted?.has(email) ?? true)) await memberships.add(people.as('fireEngineer', projectId), { email, roles: rolesOfTeam[key] }, { tell: false });
   }
 }
 

@@ -39,7 +39,11 @@ async function load(app: INestApplicationContext): Promise<string> {
   const projectId = await makeProject(app, scenario, people);
   const demo = { app, scenario, people, projectId };
   const { number, name } = scenario.project;
-  if (await codesOf(demo).then((codes) => codes.includes(scenario.draft.revision.code))) return `The demo scenario ${number} ${name} is loaded already.`;
+  if (await codesOf(demo).then((codes) => codes.includes(scenario.draft.revision.code))) {
+    // whoever the demo has gained since; whoever was taken off the team stays off
+    await makeTeam(app, scenario, people, projectId, people.newcomers);
+    return `The demo scenario ${number} ${name} is loaded already.`;
+  }
   if (!(await isIssued(demo))) {
     await build(demo);
     await issue(demo);
