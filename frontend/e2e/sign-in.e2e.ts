@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { People, account, faults, heading, signIn } from './support/browser.js';
+import { People, account, faults, heading } from './support/browser.js';
 
 let people: People;
 beforeAll(async () => { people = await People.start(); });

@@ -1,10 +1,10 @@
 import { createContext, useContext, useMemo } from 'react';
 import type { ReactNode } from 'react';
 import type { ProjectDto } from '@mantlet/common';
-import { may } from '../../lib/may.js';
+import { may, whyNot } from '../../lib/may.js';
 import type { Right } from '../../lib/may.js';
-import { RefusedState } from '../../ui/states.js';
-import { whyNot } from '../../lib/may.js';
+import { Page } from '../../ui/page.js';
+import { Panel } from '../../ui/panel.js';
 
 const ProjectContext = createContext<ProjectDto | null>(null);
 export function ProjectProvider({ project, children }: { project: ProjectDto; children: ReactNode }) {
@@ -28,5 +28,6 @@ export function useMay(): (right: Right) => boolean {
 
 /** Shows the page only to those who hold the right; the others read who does. */
 export function RequireRight({ right, children }: { right: Right; children: ReactNode }) {
-  return useMay()(right) ? <>{children}</> : <RefusedState>{whyNot(right)}</RefusedState>;
+  if (useMay()(right)) return <>{children}</>;
+  return <Page title="Closed to you" heading="Not yours to see"><Panel label="Why"><p>{whyNot(right)}</p></Panel></Page>;
 }

@@ -44,7 +44,7 @@ function EditPerson({ projectId, person, onClose }: { projectId: string; person:
   return (
     <FormDrawer
       title={person.name} open onClose={onClose} edit={edit} error={remove.error} size={440}
-      extra={<DeleteButton what={`${person.name} from the team`} consequence="What they did stays in the audit trail and on issued revisions." busy={remove.isPending} onDelete={takeOff} />}
+      extra={<DeleteButton verb="Remove" what={`${person.name} from the team`} consequence="What they did stays in the audit trail and on issued revisions." busy={remove.isPending} onDelete={takeOff} />}
     >
       <p className="mt-sub">{person.email}</p>
       <CheckListField control={form.control} name="roles" label="Roles" options={roleOptions} help={roleHelp} />

@@ -45,7 +45,7 @@ export default function AccountsPage() {
         {(rows) => (
           <Panel flush label="Accounts">
             <ScheduleTable
-              caption="Accounts" rows={rows} rowKey={(u) => u.id}
+              caption="Accounts" rows={rows} rowKey={(u) => u.id} minWidth={920}
               columns={[
                 { title: 'Name', key: 'name', className: 'mt-fold-head', render: (_, u) => <><span className="mt-strong">{u.name}</span><div className="mt-sub">{u.email}</div>{u.administrator && <div className="mt-fold-only mt-sub">Administrator</div>}</> },
                 { title: 'Administrator', key: 'administrator', width: 130, className: 'mt-fold-hide', render: (_, u) => (u.administrator ? 'Yes' : 'No') },
