@@ -6,7 +6,7 @@ import {
 } from '../standards/en-1993-1-1/clause-6-2-9-bending-and-axial.js';
 import { bucklingShare } from '../standards/en-1993-1-2/clause-4-2-3-2-compression.js';
 import {
-  amplificationFormula, equivalentMoment, interactionFormula, lateralAmplificationFormula, muLtFormula, muYFormula, muZFormula,
+  amplificationFormula, equivalentMoment, interactionClause, interactionFormula, lateralAmplificationFormula, muLtFormula, muYFormula, muZFormula,
 } from '../standards/en-1993-1-2/clause-4-2-3-5-beam-columns.js';
 import { STRENGTH_ENDS_C, kE, kY, table31Rows } from '../standards/en-1993-1-2/table-3-1.js';
 import type { CriticalTemperatureCase } from '../types.js';
@@ -117,10 +117,10 @@ export function crossSection(c: CriticalTemperatureCase, input: Pick<Interaction
 const spent = (share: number, left: number): number => (share === 0 ? 0 : share / Math.max(left, 0));
 
 /** A formula's value, with its line of working where one is kept. */
-function run<I extends object>(formula: Formula<I>, input: I, steps: WorkingStep[] | null, what?: string): number {
+function run<I extends object>(formula: Formula<I>, input: I, steps: WorkingStep[] | null, own: Partial<WorkingStep> = {}): number {
   if (!steps) return formula.evaluate(input);
   const { value, step } = explain(formula, input);
-  steps.push(what ? { ...step, what } : step);
+  steps.push({ ...step, ...own });
   return value;
 }
 
@@ -166,15 +166,15 @@ export function beamColumn(c: CriticalTemperatureCase, design: MemberDesign, inp
       const own = share > 0 ? steps : null;
       const slenderness = growth * (axis === 'y' ? input.slendernessY : input.slendernessZ);
       const mu = run(axis === 'y' ? muYFormula : muZFormula, { beta: beta[axis], slenderness }, own);
-      return run(amplificationFormula, { mu, axialShare }, own, `Interaction factor about ${axis}`);
+      return run(amplificationFormula, { mu, axialShare }, own, { what: `Interaction factor about ${axis}`, equation: `k_${axis} = min(1 − μ_${axis}·n_${axis} ; 3)` });
     };
     const [factorY, factorZ] = [about('y', my, ny), about('z', mz, nz)];
-    const first = run(interactionFormula, { axialShare: Math.max(ny, nz), factorY, shareY: my, factorZ, shareZ: mz }, steps, 'Axial force with bending, buckling about either axis');
+    const first = run(interactionFormula, { axialShare: Math.max(ny, nz), factorY, shareY: my, factorZ, shareZ: mz }, steps, { what: 'Axial force with bending, buckling about either axis', source: interactionClause(input.plastic, false) });
     if (input.slendernessLt === null) return first;
     const mu = run(muLtFormula, { beta: beta.lt, slenderness: input.slendernessZ * growth }, steps);
     const factorLt = run(lateralAmplificationFormula, { mu, axialShare: nz }, steps);
     const shareLt = my / chi(input.slendernessLt);
-    return Math.max(first, run(interactionFormula, { axialShare: nz, factorY: factorLt, shareY: shareLt, factorZ, shareZ: mz }, steps, 'Axial force with bending, lateral-torsional buckling'));
+    return Math.max(first, run(interactionFormula, { axialShare: nz, factorY: factorLt, shareY: shareLt, factorZ, shareZ: mz }, steps, { what: 'Axial force with bending, lateral-torsional buckling', source: interactionClause(input.plastic, true) }));
   };
   const greatestAt = (t: number): number => {
     const { n } = sharesAt(c, input, demand, material, t, 1);

@@ -4,8 +4,8 @@ import { explain } from '../formula.js';
 import type { WorkingStep } from '../formula.js';
 import { SHEAR_MODULUS_MPA, criticalMomentFormula, heldAxisCriticalMomentFormula, lateralSlendernessFormula } from '../standards/en-1993-1-1/clause-6-3-2-2-critical-moment.js';
 import type { CriticalMomentInput } from '../standards/en-1993-1-1/clause-6-3-2-2-critical-moment.js';
-import { ELASTIC_MODULUS_MPA, bucklingReductionFormula, bucklingShare, slendernessInFireFormula } from '../standards/en-1993-1-2/clause-4-2-3-2-compression.js';
-import { lateralBucklingResistanceFormula } from '../standards/en-1993-1-2/clause-4-2-3-3-lateral-torsional.js';
+import { ELASTIC_MODULUS_MPA, bucklingShare } from '../standards/en-1993-1-2/clause-4-2-3-2-compression.js';
+import { lateralBucklingResistanceFormula, lateralReductionFormula, lateralSlendernessInFireFormula } from '../standards/en-1993-1-2/clause-4-2-3-3-lateral-torsional.js';
 import { kE, kY } from '../standards/en-1993-1-2/table-3-1.js';
 import type { CriticalTemperatureCase, Determined } from '../types.js';
 import { greatestMoment } from './beam-analysis/beam-diagram.js';
@@ -106,7 +106,9 @@ function segmentsOf(c: CriticalTemperatureCase, design: MemberDesign, demand: Fi
 
 /** The numbers of the general expression that give what the energy method found: C1 without the loads' height, then C2. */
 function expressionOf(energy: LateralEnergy, { length, momentNmm }: Segment, criticalMomentNmm: number, stiffness: LateralStiffness): CriticalMomentInput {
-  const { lengthMm, loadHeightMm: height } = length;
+  const { lengthMm } = length;
+  // without loads on the length, the height of loads elsewhere says nothing
+  const height = energy.lifting.some((one) => one !== 0) ? length.loadHeightMm : 0;
   const c1 = (factorOf(energy, false) * momentNmm) / uniformCriticalMoment(lengthMm, stiffness);
   const bending = stiffness.modulusMPa * stiffness.izMm4;
   const inner = stiffness.iwMm6 / stiffness.izMm4 + (lengthMm ** 2 * stiffness.shearModulusMPa * stiffness.itMm4) / (Math.PI ** 2 * bending);
@@ -134,18 +136,14 @@ function stateOf(c: CriticalTemperatureCase, segment: Segment, stiffness: Latera
     name: 'lateral-torsional buckling', clause: `4.2.3.3(4)${where}`, unit: 'kNm', effect: segment.momentNmm, slenderness,
     resistance: (t) => (modulusMm3 * fy * bucklingShare(t, slenderness, imperfection)) / gamma,
     temperature: () => bucklingTemperature((segment.momentNmm * gamma) / (modulusMm3 * fy), slenderness, imperfection),
+    explainFirst: (steps) => steps.push(criticalMomentStep(energy, segment, criticalMomentNmm, stiffness), explain(lateralSlendernessFormula, slendernessInput).step),
     explainAt: (t, steps) => {
       const [ky, ke] = [kY(t), kE(t)];
-      steps.push(criticalMomentStep(energy, segment, criticalMomentNmm, stiffness), explain(lateralSlendernessFormula, slendernessInput).step);
       steps.push(tableStep('k_y,θ', t, ky), tableStep('k_E,θ', t, ke));
       if (ky <= 0) return;
-      const inFire = explain(slendernessInFireFormula, { slenderness, ky, ke });
-      const chi = explain(bucklingReductionFormula, { slendernessInFire: inFire.value, yieldStrengthMPa: fy });
-      steps.push(
-        { ...inFire.step, what: 'Slenderness for lateral-torsional buckling at temperature', source: 'EN 1993-1-2:2005 4.2.3.3(5) (4.15)' },
-        { ...chi.step, what: 'Reduction for lateral-torsional buckling in fire', source: 'EN 1993-1-2:2005 4.2.3.3(5) (4.12) to (4.14)' },
-        explain(lateralBucklingResistanceFormula, { reduction: chi.value, modulusMm3, ky, yieldStrengthMPa: fy, gammaMFi: gamma }).step,
-      );
+      const inFire = explain(lateralSlendernessInFireFormula, { slenderness, ky, ke });
+      const chi = explain(lateralReductionFormula, { slendernessInFire: inFire.value, yieldStrengthMPa: fy });
+      steps.push(inFire.step, chi.step, explain(lateralBucklingResistanceFormula, { reduction: chi.value, modulusMm3, ky, yieldStrengthMPa: fy, gammaMFi: gamma }).step);
     },
   };
 }

@@ -21,6 +21,8 @@ export interface LimitState {
   resistance: (temperatureC: number, bare: boolean) => number;
   /** highest temperature with effect ≤ resistance; asked only where the effect is carried at 20 °C */
   temperature: (bare: boolean) => number;
+  /** the lines of working that hold at every temperature */
+  explainFirst?: (working: WorkingStep[]) => void;
   /** the lines of working at one temperature */
   explainAt: (temperatureC: number, working: WorkingStep[]) => void;
 }

@@ -112,10 +112,12 @@ function explainAt(state: LimitState, temperatureC: number, where: string, worki
 function explainCold(states: LimitState[], results: LimitStateResult[], working: WorkingStep[]): void {
   states.forEach((state, i) => {
     const { effect, resistanceCold, utilisation, unit, name } = results[i]!;
+    state.explainFirst?.(working);
     explainAt(state, 20, 'at 20 °C', working);
+    const together = unit === '';
     working.push({
-      what: `Degree of utilisation in ${name}`, equation: 'μ_0 = E_fi,d/R_fi,d,0',
-      inputs: [{ symbol: 'E_fi,d', value: effect, unit }, { symbol: 'R_fi,d,0', value: resistanceCold, unit }],
+      what: `Degree of utilisation in ${name}`, equation: together ? 'μ_0 = 1/f, with f times every effect just carried' : 'μ_0 = E_fi,d/R_fi,d,0',
+      inputs: together ? [{ symbol: 'f', value: resistanceCold, unit }] : [{ symbol: 'E_fi,d', value: effect, unit }, { symbol: 'R_fi,d,0', value: resistanceCold, unit }],
       value: utilisation, unit: '', source: `EN 1993-1-2:2005 4.2.4(3) with ${state.clause}`, ...(utilisation > 1 ? { note: 'above 1: fails before any fire' } : {}),
     });
   });
@@ -125,11 +127,13 @@ function explainCold(states: LimitState[], results: LimitStateResult[], working:
 function explainStates(states: LimitState[], results: LimitStateResult[], working: WorkingStep[]): void {
   states.forEach((state, i) => {
     const result = results[i]!;
+    state.explainFirst?.(working);
     explainAt(state, 20, 'at 20 °C', working);
     explainAt(state, result.temperatureC, 'at its critical temperature', working);
+    const together = result.unit === '';
     working.push({
-      what: `Critical temperature in ${state.name}`, equation: 'highest θ with E_fi,d ≤ R_fi,d,θ',
-      inputs: [{ symbol: 'E_fi,d', value: result.effect, unit: result.unit }], value: result.temperatureC, unit: '°C', source: `EN 1993-1-2:2005 4.2.4(1) with ${state.clause}`,
+      what: `Critical temperature in ${state.name}`, equation: together ? 'highest θ with U ≤ 1' : 'highest θ with E_fi,d ≤ R_fi,d,θ',
+      inputs: together ? [] : [{ symbol: 'E_fi,d', value: result.effect, unit: result.unit }], value: result.temperatureC, unit: '°C', source: `EN 1993-1-2:2005 4.2.4(1) with ${state.clause}`,
     });
   });
 }

@@ -20,7 +20,7 @@ import { bendingResistanceFormula, shearReductionFormula, shearResistanceFormula
 import { criticalTemperatureFormula } from '../standards/en-1993-1-2/clause-4-2-4-critical-temperature.js';
 import { criticalMomentFormula, heldAxisCriticalMomentFormula, lateralSlendernessFormula } from '../standards/en-1993-1-1/clause-6-3-2-2-critical-moment.js';
 import { elasticCrossSectionFormula, plasticCrossSectionFormula } from '../standards/en-1993-1-1/clause-6-2-9-bending-and-axial.js';
-import { lateralBucklingResistanceFormula } from '../standards/en-1993-1-2/clause-4-2-3-3-lateral-torsional.js';
+import { lateralBucklingResistanceFormula, lateralReductionFormula, lateralSlendernessInFireFormula } from '../standards/en-1993-1-2/clause-4-2-3-3-lateral-torsional.js';
 import {
   amplificationFormula, interactionFormula, lateralAmplificationFormula, muLtFormula, muYFormula, muZFormula,
 } from '../standards/en-1993-1-2/clause-4-2-3-5-beam-columns.js';
@@ -56,7 +56,7 @@ export const formulaChapters: FormulaChapter[] = [
     formulas: [
       printed(fireEpsilonFormula), printed(tensionResistanceFormula), printed(slendernessFormula), printed(slendernessInFireFormula), printed(bucklingReductionFormula), printed(coldBucklingReductionFormula),
       printed(compressionResistanceFormula), printed(bendingResistanceFormula), printed(shearReductionFormula), printed(shearResistanceFormula), printed(criticalMomentFormula), printed(heldAxisCriticalMomentFormula),
-      printed(lateralSlendernessFormula), printed(lateralBucklingResistanceFormula), printed(plasticCrossSectionFormula), printed(elasticCrossSectionFormula), printed(muYFormula), printed(muZFormula),
+      printed(lateralSlendernessFormula), printed(lateralSlendernessInFireFormula), printed(lateralReductionFormula), printed(lateralBucklingResistanceFormula), printed(plasticCrossSectionFormula), printed(elasticCrossSectionFormula), printed(muYFormula), printed(muZFormula),
       printed(muLtFormula), printed(amplificationFormula), printed(lateralAmplificationFormula), printed(interactionFormula), printed(criticalTemperatureFormula),
     ],
   },
