@@ -4,7 +4,7 @@ import { fieldName, partsOfChange, valueInWords } from './record-words.js';
 describe('stored fields and values in words', () => {
   it('names fields without their unit', () => {
     expect(['periodMin', 'lengthMm', 'class4TemperatureC', 'temperatureC', 'name', 'markUpPercent', 'curve.fireLoadTotalMjPerM2', 'high-temperature', 'design.actions.leading.axialKn'].map(fieldName))
-      .toEqual(['period', 'length', 'class4 temperature', 'temperature', 'name', 'mark up', 'curve fire load total', 'critical temperature', 'design actions leading variable action axial force N']);
+      .toEqual(['period', 'length', 'class4 temperature', 'temperature', 'name', 'mark up', 'curve fire load total', 'critical temperature', 'leading variable action axial force N']);
   });
   it('gives the unit to the number and cuts a limit of temperature down', () => {
     expect(valueInWords('lengthMm', 4500)).toBe('4\u202f500\u00a0mm');

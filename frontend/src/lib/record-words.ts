@@ -38,7 +38,8 @@ const endingOf = (field: string) => endings.find(([pattern]) => pattern.test(fie
 
 /** "bucklingLengthYMm" → "buckling length y"; the unit goes with the value. */
 export function fieldName(field: string): string {
-  return field.split('.').map((part) => {
+  // what everything of a calculated member stands under says nothing
+  return field.split('.').filter((part, i, all) => i === all.length - 1 || (part !== 'design' && part !== 'actions')).map((part) => {
     const ending = part === lastOf(field) ? endingOf(part) : undefined;
     const bare = ending ? part.replace(ending[0], '') : part;
     return fieldWords[part] ?? bare.replace(/([a-z\d])([A-Z])/g, '$1 $2').replaceAll('-', ' ').trim().toLowerCase();

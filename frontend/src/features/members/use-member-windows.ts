@@ -12,6 +12,8 @@ export interface MemberWindows {
   rowAt: (index: number) => MemberRowDto | undefined;
   /** the rows on screen answer to an earlier filter or order */
   stale: boolean;
+  /** rows on screen that could not be fetched; null where all arrived or are on their way */
+  failed: { error: unknown; again: () => void } | null;
   /** tells which rows are on screen */
   show: (from: number, to: number) => void;
 }
@@ -31,8 +33,10 @@ export function useMemberWindows(projectId: string, filter: MemberFilter): Membe
   const [from = 1, to = 1] = wanted.split('-').map(Number);
   const pages = Array.from({ length: to - from + 1 }, (_, i) => from + i).filter((page) => page > 1);
   const further = useQueries({ queries: pages.map((page) => ({ ...windowQuery(projectId, filter, page), enabled: !stale, placeholderData: undefined })) });
+  const lost = further.filter((query) => query.isError);
   const rows = new Map<number, MemberPageDto | undefined>([[1, first.data], ...pages.map((page, i) => [page, further[i]?.data] as const)]);
   return {
+    failed: lost[0] ? { error: lost[0].error, again: () => { for (const query of lost) void query.refetch(); } } : null,
     first, stale, total: first.data?.total ?? 0,
     rowAt: (index) => rows.get(Math.floor(index / windowSize) + 1)?.items[index % windowSize],
     show: (a, b) => setSeen(`${Math.floor(a / windowSize) + 1}-${Math.floor(b / windowSize) + 1}`),

@@ -4,6 +4,7 @@ import type { KeyboardEvent, MouseEvent } from 'react';
 import { useNavigate } from 'react-router-dom';
 import { memberTypeNames } from '@mantlet/common';
 import type { MemberRowDto, MemberSortKey } from '@mantlet/common';
+import { BehindTerm } from '../../../ui/term.js';
 import type { MemberFilter } from '../member-filter.js';
 import type { RowWindow } from '../use-row-window.js';
 import { Result } from './member-columns.js';
@@ -14,6 +15,8 @@ interface MemberGridProps {
   total: number;
   rowAt: (index: number) => MemberRowDto | undefined;
   stale: boolean;
+  /** rows on screen could not be fetched */
+  failed: boolean;
   columns: readonly MemberColumn[];
   filter: MemberFilter;
   sort: (key: MemberSortKey) => void;
@@ -38,6 +41,13 @@ const stepOf = (key: string, pageRows: number, last: number): ((at: number) => n
   }
 };
 
+function SortButton({ column, on, down, sort }: { column: MemberColumn & { sort: MemberSortKey }; on: boolean; down: boolean; sort: (key: MemberSortKey) => void }) {
+  const { term, name, head, sort: key } = column;
+  const inside = <>{term ? <span className="mt-term">{head ?? name}</span> : head ?? name}<span aria-hidden="true" className="mt-grid-arrow">{on ? (down ? '▾' : '▴') : ''}</span></>;
+  if (!term) return <button type="button" title={`Order by ${name}`} onClick={() => sort(key)}>{inside}</button>;
+  return <BehindTerm name={term}>{(describedBy) => <button type="button" aria-describedby={describedBy} onClick={() => sort(key)}>{inside}</button>}</BehindTerm>;
+}
+
 function Head({ columns, filter, sort, choice, template }: Pick<MemberGridProps, 'columns' | 'filter' | 'sort' | 'choice'> & { template: string }) {
   const by = filter.sort ?? 'mark';
   return (
@@ -50,8 +60,7 @@ function Head({ columns, filter, sort, choice, template }: Pick<MemberGridProps,
           const down = filter.direction === 'desc';
           return (
             <span key={column.key} role="columnheader" className={column.numeric ? 'mt-num' : undefined} aria-sort={on ? (down ? 'descending' : 'ascending') : undefined}>
-              {key === undefined ? column.head ?? column.name
-                : <button type="button" title={`Order by ${column.name}`} onClick={() => sort(key)}>{column.head ?? column.name}<span aria-hidden="true" className="mt-grid-arrow">{on ? (down ? '▾' : '▴') : ''}</span></button>}
+              {key === undefined ? column.head ?? column.name : <SortButton column={{ ...column, sort: key }} on={on} down={down} sort={sort} />}
             </span>
           );
         })}
@@ -62,7 +71,7 @@ function Head({ columns, filter, sort, choice, template }: Pick<MemberGridProps,
 
 /** The schedule of members as one long scroll. A row has the focus: arrows go on, Enter opens, Space chooses, with Shift from row to row. */
 export function MemberGrid(props: MemberGridProps) {
-  const { total, rowAt, stale, columns, choice, sheetOf, list, aboveC, rows, leave } = props;
+  const { total, rowAt, stale, failed, columns, choice, sheetOf, list, aboveC, rows, leave } = props;
   const { narrow, virtualizer, scroller, active, setActive } = rows;
   const navigate = useNavigate();
   const wantsFocus = useRef(rows.restored);
@@ -118,7 +127,7 @@ export function MemberGrid(props: MemberGridProps) {
             <div key={index} role="row" aria-rowindex={index + 2} aria-selected={choice ? chosen : undefined} tabIndex={index === focusable ? 0 : -1} onFocus={(e) => { if (e.target === e.currentTarget) setActive(index); }}
               onClick={(e) => onClick(e, index)} onDoubleClick={() => open(index)}
               className={`mt-grid-row ${chosen ? 'mt-grid-chosen' : ''}`} style={{ top: start - margin, height: size, ...(narrow ? {} : { gridTemplateColumns: template }) }}>
-              {row === undefined ? <span role="gridcell" className="mt-grid-wait">Row {index + 1} is being fetched</span>
+              {row === undefined ? <span role="gridcell" className="mt-grid-wait">Row {index + 1} {failed ? 'did not arrive' : 'is being fetched'}</span>
                 : narrow ? <NarrowCells row={row} box={box} columns={columns} context={context} />
                   : <>{choice && <span role="gridcell" className="mt-grid-check">{box}</span>}{columns.map((column) => <span key={column.key} role="gridcell" className={column.numeric ? 'mt-num' : 'mt-one-line'}>{column.cell(row, context)}</span>)}</>}
             </div>
