@@ -56,9 +56,10 @@ describe('rights across projects', () => {
     ...(['zoneId', 'sectionId'] as const).flatMap((name): typeof named => [
       ['POST /api/projects/:projectId/members', (mine, theirs) => validBodies['POST /api/projects/:projectId/members']!({ ...mine, [name]: theirs[name] })],
       ['PATCH /api/projects/:projectId/members/:memberId', (mine, theirs) => validBodies['PATCH /api/projects/:projectId/members/:memberId']!({ ...mine, [name]: theirs[name] })],
-      ['POST /api/projects/:projectId/members/bulk', (mine, theirs) => ({ members: [{ id: mine.memberId, version: 1 }], set: { [name]: theirs[name] } })],
+      ...['bulk', 'bulk/preview'].map((tail): typeof named[number] => [`POST /api/projects/:projectId/members/${tail}`, (mine, theirs) => ({ members: [{ id: mine.memberId, version: 1 }], set: { [name]: theirs[name] } })]),
     ]),
-    ...['bulk', 'structural', 'delete'].map((tail) => `POST /api/projects/:projectId/members/${tail}`).flatMap((key): typeof named => [
+    ['PUT /api/projects/:projectId/imports/:importId/mapping', (mine, { zoneId }) => ({ ...validBodies['PUT /api/projects/:projectId/imports/:importId/mapping']!(mine), defaults: { zoneId } })],
+    ...['bulk', 'bulk/preview', 'structural', 'delete'].map((tail) => `POST /api/projects/:projectId/members/${tail}`).flatMap((key): typeof named => [
       [key, (_, theirs) => validBodies[key]!(theirs)],
       [key, (mine, theirs) => ({ ...validBodies[key]!(mine), members: [{ id: mine.memberId, version: 1 }, { id: theirs.memberId, version: 1 }] })],
     ]),
@@ -74,6 +75,21 @@ describe('rights across projects', () => {
     const answer = await a.everything[verb](pathIn(path, a.project.id, a.things)).send(body(a.things, b.things));
     expect([404, 409, 422]).toContain(answer.status);
     expect(await digestOfEverything(app.dataSource)).toEqual(before);
+  });
+
+  it.each(['bulk', 'bulk/preview', 'structural', 'delete', 'acceptances'])('all that a filter finds in another project is not found for %s, whatever the number and stamp seen there', async (tail) => {
+    const filter = { memberIds: [b.things.memberId] };
+    const { body: seen } = await b.everything.post(b.url('members/found')).send({ filter }).expect(200);
+    expect(seen).toMatchObject({ count: 1 });
+    const found = { filter, count: 1, stamp: (seen as { stamp: string }).stamp };
+    const before = await digestOfEverything(app.dataSource);
+    const path = tail === 'acceptances' ? tail : `members/${tail}`;
+    const { members: _, memberIds: __, ...rest } = validBodies[`POST /api/projects/:projectId/${path}`]!(a.things) as Record<string, unknown>;
+    const answer = await a.everything.post(a.url(path)).send({ ...rest, found });
+    expect(answer.status).toBe(409);
+    expect(await digestOfEverything(app.dataSource)).toEqual(before);
+    const { body: none } = await a.everything.post(a.url('members/found')).send({ filter }).expect(200);
+    expect(none).toMatchObject({ count: 0 });
   });
 
   it('a list asked for another project’s things is empty', async () => {
@@ -210,7 +226,7 @@ describe('rights as they change', () => {
     expect((await p.everything.get(p.url('members'))).text).toMatch(secrets);
     for (const role of ['contractor', 'inspector', 'reader'] as const) {
       for (const key of Object.keys(accessTable).filter((one) => one.startsWith('GET '))) {
-        for (const revisionId of [p.things.revisionId, (draft.body as { id: string }).id]) {
+        for (const revisionId of key.includes(':revisionId') ? [p.things.revisionId, (draft.body as { id: string }).id] : [p.things.revisionId]) {
           const answer = await p.team[role].get(pathIn(split(key)[1], p.project.id, { ...p.things, revisionId }));
           expect({ role, key, leaks: secrets.test(answer.text ?? '') }).toEqual({ role, key, leaks: false });
         }

@@ -1,11 +1,23 @@
 import { BadRequestException, StandardSchemaValidationPipe } from '@nestjs/common';
+import type { ArgumentMetadata } from '@nestjs/common';
 import { z } from 'zod';
 import { speakInWords } from './input-words.js';
+import { unstorable } from './storable.js';
+
+/** What fits its contract must also be text that can be kept and read again as it was sent. */
+class InputPipe extends StandardSchemaValidationPipe {
+  override async transform(value: unknown, metadata: ArgumentMetadata): Promise<unknown> {
+    const taken: unknown = await super.transform(value, metadata);
+    const path = metadata.schema ? unstorable(taken) : null;
+    if (path) throw this.exceptionFactory([{ path, message: 'holds a character that cannot be stored' }]);
+    return taken;
+  }
+}
 
 /** Answers 400 with one sentence and the fields at fault, in the words of the schema. */
 export function validationPipe(): StandardSchemaValidationPipe {
   speakInWords();
-  return new StandardSchemaValidationPipe({
+  return new InputPipe({
     exceptionFactory: (found) => {
       const issues = found.slice(0, 50).map((issue) => ({
         path: (issue.path ?? []).map((part) => String(typeof part === 'object' ? part.key : part)).join('.'),

@@ -7,6 +7,20 @@ export interface Things {
 }
 const { designBasis, ...takeoff } = defaultProjectSettings;
 const basis = { way: 'declared', temperatureC: 561, reference: 'Calculation 9, invented' };
+
+/** The same of the routes outside projects, for an account whose password is this. */
+export const validAccountBodies = (email: string, password: string): Record<string, () => object> => ({
+  'POST /api/session': () => ({ email, password }),
+  'POST /api/set-up': () => ({ name: 'First', email: 'first@example.test', password }),
+  'PUT /api/session/password': () => ({ current: password, next: password }),
+  'POST /api/password-resets': () => ({ email }),
+  'POST /api/account-links/look-up': () => ({ purpose: 'invitation', token: 'x'.repeat(43) }),
+  'POST /api/account-links/use': () => ({ purpose: 'invitation', token: 'x'.repeat(43), password }),
+  'POST /api/users': () => ({ name: 'Ines Vited', email: 'invited@example.test', administrator: false }),
+  'PATCH /api/users/:userId': () => ({ name: 'Another name', administrator: false, disabled: false }),
+  'POST /api/products': () => inventedCoating({ name: 'Shared coating' }),
+  'PUT /api/products/:productId': () => ({ ...inventedCoating({ name: 'Shared coating' }), version: 1 }),
+});
 const member = ({ zoneId, sectionId }: Things, mark = 'X-1') => ({
   zoneId, sectionId, mark, memberType: 'beam', grade: 'S275', lengthMm: 5100, quantity: 3, exposure: { arrangement: 'four-sides', reason: 'r' }, protectionForm: 'boxed',
 });
@@ -38,8 +52,11 @@ export const validBodies: Record<string, (things: Things) => object> = {
   'PATCH /api/projects/:projectId/members/:memberId': (things) => ({ ...member(things), version: 1 }),
   'PUT /api/projects/:projectId/members/:memberId/structural': () => ({ basis, version: 1 }),
   'POST /api/projects/:projectId/members/bulk': ({ memberId }) => ({ members: [{ id: memberId, version: 1 }], set: { grade: 'S460' } }),
+  'POST /api/projects/:projectId/members/bulk/preview': ({ memberId }) => ({ members: [{ id: memberId, version: 1 }], set: { grade: 'S460' } }),
+  'POST /api/projects/:projectId/members/found': ({ memberId }) => ({ filter: { memberIds: [memberId], search: 'B', grades: ['S355'] }, except: [] }),
   'POST /api/projects/:projectId/members/structural': ({ memberId }) => ({ members: [{ id: memberId, version: 1 }], basis }),
   'POST /api/projects/:projectId/members/delete': ({ memberId }) => ({ members: [{ id: memberId, version: 1 }] }),
+  'POST /api/projects/:projectId/member-views': () => ({ name: 'Mine', query: '' }),
   'PUT /api/projects/:projectId/member-views/:viewId': () => ({ name: 'Mine', query: '' }),
   'POST /api/projects/:projectId/acceptances': ({ memberId }) => ({ memberIds: [memberId], kind: 'assumed', reason: 'looked at' }),
   'DELETE /api/projects/:projectId/acceptances': ({ memberId }) => ({ memberIds: [memberId], kind: 'assumed' }),

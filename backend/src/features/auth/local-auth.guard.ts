@@ -18,7 +18,9 @@ export class LocalAuthGuard extends AuthGuard('local') {
     return true;
   }
 
-  override handleRequest<T>(_error: unknown, user: T): T {
+  override handleRequest<T>(error: unknown, user: T): T {
+    // a database that cannot be asked is not a wrong password
+    if (error) throw error as Error;
     if (!user) throw new Refusal(HttpStatus.UNAUTHORIZED, message('account.sign-in-failed', {}));
     return user;
   }
