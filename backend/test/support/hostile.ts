@@ -147,7 +147,7 @@ export function hostileFor(given: JsonSchema, components: Components, standing: 
 
 /** The same in an address, already encoded: what does not decode, what comes twice, and what looks like more than text. */
 export const hostileInAddress = (name: string): string[] => [
-  ...['', '%20', '%00', '%ED%A0%80', 'x%00y', 'nonsense', 'NaN', '-1', '0', '1.5', '1e308', '1e400', '9007199254740994', '2147483648', 'null', '%F0%9F%94%A5', '%E2%80%AE', '%25', '%27%3B--', ',,,', 'x'.repeat(5000)].map((value) => `${name}=${value}`),
+  ...['', '%00', '%ED%A0%80', 'x%00y', 'nonsense', '-1', '1.5', '1e308', '1e400', '2147483648', '%F0%9F%94%A5%E2%80%AE', '%25%27%3B--', ',,,', 'x'.repeat(5000)].map((value) => `${name}=${value}`),
   `${name}=${Array(600).fill('x').join(',')}`, `${name}=1&${name}=2`, `${name}[]=1`, `${name}[a]=1`, `${name}[__proto__]=1`, `${name}=%`,
 ];
 
