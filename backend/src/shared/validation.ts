@@ -6,8 +6,8 @@ import { unstorable } from './storable.js';
 
 /** What fits its contract must also be text that can be kept and read again as it was sent. */
 class InputPipe extends StandardSchemaValidationPipe {
-  override async transform(value: unknown, metadata: ArgumentMetadata): Promise<unknown> {
-    const taken: unknown = await super.transform(value, metadata);
+  override async transform<T>(value: T, metadata: ArgumentMetadata): Promise<T> {
+    const taken = await super.transform(value, metadata);
     const path = metadata.schema ? unstorable(taken) : null;
     if (path) throw this.exceptionFactory([{ path, message: 'holds a character that cannot be stored' }]);
     return taken;

@@ -17,7 +17,8 @@ export interface Operation {
   requestBody?: { content: Record<string, { schema: JsonSchema }> };
 }
 export interface Sent { body?: BodyInit; type?: string; encoding?: string }
-export interface Answer { status: number; body: unknown }
+/** misfit: it does not fit what the route states */
+export interface Answer { status: number; body: unknown; misfit?: boolean }
 
 /** what was let through there is gone afterwards, so that all begins anew */
 const destructive = /members\/delete$|confirm$/;
@@ -30,7 +31,8 @@ const jargon = /undefined|\[object|\bnull\b|NaN|Unexpected|at position|Error:|Ex
 export const writing = Object.keys(accessTable).filter((key) => !key.startsWith('GET') && !/evidence-file|read-table|imports$/.test(key));
 
 /** A server's fault, or a refusal that nobody understands. */
-export function faultOf({ status, body }: Answer, said: unknown = ''): string | null {
+export function faultOf({ status, body, misfit }: Answer, said: unknown = ''): string | null {
+  if (misfit) return `${status} does not fit what the route states`;
   if (status >= 500) return String(status);
   if (status < 400) return null;
   const { message } = body as { message: string };
@@ -102,8 +104,9 @@ export class EveryRoute {
     }
     const text = await answer.text();
     const read: unknown = contentType === 'application/json' ? JSON.parse(text) : {};
+    const known = this.app.answers.faults.size;
     this.app.answers.check({ method, path: path.split('?')[0]!, status: answer.status, type: contentType, text, body: read });
-    return { status: answer.status, body: read };
+    return { status: answer.status, body: read, misfit: this.app.answers.faults.size > known };
   }
   sendJson(key: string, body: unknown): Promise<Answer> {
     return this.send(key, this.pathOf(key), { body: written(body), type: 'application/json' });
