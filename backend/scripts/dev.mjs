@@ -35,7 +35,7 @@ await runCommand(
     const server = await startServer({ dataDir: await databaseFolder(), port: portFrom('MANTLET_DATABASE_PORT', 4701), mayMove: !process.env.MANTLET_DATABASE_PORT, passwords });
     const ownState = path.join(stateDir, 'demo');
     const databaseUrl = await prepareDatabase(server, { name: 'mantlet', demo: true, stateDir: ownState });
-    const mail = await startMailFake(ownState);
+    const mail = await startMailFake(ownState, { demo: true });
     // links in mail open the client that reloads
     const env = serverEnvironment({ mail: { MANTLET_PUBLIC_URL: clientUrl, ...mail }, databaseUrl, host: '127.0.0.1', port, sessionSecret, clientDir: built.client, stateDir: ownState });
 

@@ -44,7 +44,7 @@ function announce({ url, host, empty, caught }) {
       say(`\nCaution: the demo passwords are public and the server listens on ${host}. Use --empty for anything but a demonstration.`);
     }
   }
-  if (caught) say(`\nMail does not leave this machine: invitations and the like can be read at ${url}/caught-mail`);
+  if (caught) say(`\nMail does not leave this machine: invitations and the like can be read at ${url}/caught-mail${empty ? ', on this machine only. Name a mail server (MANTLET_SMTP_URL) for real work.' : ''}`);
   say('\nResults support, and do not replace, design by licensed engineers; local codes govern.');
   say('Ctrl-C stops the server and its database; the data stays.');
 }
@@ -77,7 +77,7 @@ await runCommand(
     const kind = wish.empty ? 'empty' : 'demo';
     const ownState = path.join(stateDir, kind);
     const databaseUrl = await prepareDatabase(server, { name: wish.empty ? 'mantlet_empty' : 'mantlet', demo: !wish.empty, stateDir: ownState });
-    const mail = await startMailFake(ownState);
+    const mail = await startMailFake(ownState, { demo: !wish.empty });
     const application = await startApplication({ mail, databaseUrl, host, port, sessionSecret, clientDir: built.client, stateDir: ownState });
     const worker = startWorker({ databaseUrl, stateDir: ownState });
     running.add({ children: [application, worker].map((one) => identity(one.child.pid)) });

@@ -34,16 +34,17 @@ export async function prepareDatabase(server, { name, demo, stateDir, env: base 
 /**
  * A mail server of this command's own, which keeps every mail in the state folder and passes none on; the application shows them.
  * Not where a real one is named, nor behind TLS, where strangers may come.
- * @param {string} stateDir @param {NodeJS.ProcessEnv} env
+ * In a demonstration everybody may read it, as everybody may sign in; elsewhere whoever sits at this machine, since it opens every account.
+ * @param {string} stateDir @param {{ demo?: boolean, env?: NodeJS.ProcessEnv }} [wish]
  * @returns {Promise<NodeJS.ProcessEnv>} what the server needs to know of it
  */
-export async function startMailFake(stateDir, env = process.env) {
+export async function startMailFake(stateDir, { demo = false, env = process.env } = {}) {
   if (env.MANTLET_SMTP_URL || env.MANTLET_SECURE_COOKIES === '1') return {};
   const { startSmtpFake } = await import(pathToFileURL(built.smtpFake).href);
   const folder = path.join(stateDir, 'mail');
   const fake = await startSmtpFake(folder);
   onClose('the mail fake', fake.close);
-  return { MANTLET_SMTP_URL: fake.url, MANTLET_CAUGHT_MAIL_DIR: folder };
+  return { MANTLET_SMTP_URL: fake.url, MANTLET_CAUGHT_MAIL_DIR: folder, ...(demo ? { MANTLET_CAUGHT_MAIL_FOR_EVERYBODY: '1' } : {}) };
 }
 
 /**

@@ -54,7 +54,7 @@ async function serve({ folder, env, database }, clientDir, name, demo) {
   const port = await freePort();
   // low, so that a whole building of the demo's size is already left to the worker
   const own = { ...env, MANTLET_RECALCULATE_IN_PLACE_MAX: '300' };
-  const mail = await startMailFake(stateDir, env);
+  const mail = await startMailFake(stateDir, { env });
   await startApplication({ mail, databaseUrl, host: '127.0.0.1', port, sessionSecret: 'only for this run, on this machine', clientDir, stateDir, env: own });
   startWorker({ databaseUrl, stateDir, env: own });
   return `http://127.0.0.1:${port}`;

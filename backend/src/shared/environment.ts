@@ -21,6 +21,8 @@ export const smtpUrl = (): string | undefined => process.env['MANTLET_SMTP_URL']
 export const mailFrom = (): string => process.env['MANTLET_MAIL_FROM'] || 'Mantlet <mantlet@localhost>';
 /** where a local fake writes mail, on demonstration and development servers */
 export const caughtMailDir = (): string | undefined => process.env['MANTLET_CAUGHT_MAIL_DIR'] || undefined;
+/** else whoever sits at this machine reads it alone */
+export const caughtMailForEverybody = (): boolean => process.env['MANTLET_CAUGHT_MAIL_FOR_EVERYBODY'] === '1';
 /** The address at which people reach this installation; mailed links begin with it. */
 export function publicUrl(): string {
   const given = process.env['MANTLET_PUBLIC_URL'];

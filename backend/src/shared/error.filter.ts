@@ -8,6 +8,9 @@ import type { ErrorBody } from './refusal.js';
 
 const body = (reason: Message): ErrorBody => ({ message: sentence(reason), code: reason.code });
 
+/** what PostgreSQL cannot hold: NUL bytes, half of a surrogate pair in jsonb, numbers beyond their type, dates before its calendar */
+const unstorable = new Set(['22021', '22P02', '22P05', '22003', '22007', '22008']);
+
 /** PostgreSQL's own refusals that stand for a person's mistake rather than ours. */
 function fromDatabase(error: QueryFailedError): { status: HttpStatus; body: ErrorBody } | null {
   const { code, detail } = error.driverError as { code?: string; detail?: string };
@@ -17,9 +20,8 @@ function fromDatabase(error: QueryFailedError): { status: HttpStatus; body: Erro
   }
   if (code === '23503') return { status: HttpStatus.CONFLICT, body: body(message('shared.in-use', { what: 'entry', by: 'something else in the project' })) };
   if (code === '23514') return { status: HttpStatus.UNPROCESSABLE_ENTITY, body: body(message('shared.invalid', { where: 'Input', problem: 'a value is outside what is possible' })) };
-  // text that PostgreSQL cannot hold: NUL bytes, half of a surrogate pair in jsonb, or numbers beyond their type
-  if (code === '22021' || code === '22P02' || code === '22P05' || code === '22003') {
-    return { status: HttpStatus.BAD_REQUEST, body: body(message('shared.invalid', { where: 'Input', problem: 'holds a character or number that cannot be stored' })) };
+  if (code && unstorable.has(code)) {
+    return { status: HttpStatus.BAD_REQUEST, body: body(message('shared.invalid', { where: 'Input', problem: 'holds a character, number or date that cannot be stored' })) };
   }
   // two transactions that waited for each other, or one that could not be set among the others: the database undid this one
   if (code === '40P01' || code === '40001' || code === '55P03') return { status: HttpStatus.CONFLICT, body: body(message('shared.busy', {})) };

@@ -33,7 +33,7 @@ export class TestApp {
     this.answers = new AnswerCheck(app);
   }
 
-  static async start(options: { catalogue?: boolean; secureCookies?: boolean; smtpUrl?: string; clientDir?: string } = {}): Promise<TestApp> {
+  static async start(options: { catalogue?: boolean; secureCookies?: boolean; smtpUrl?: string; clientDir?: string; caughtMail?: 'for-everybody' } = {}): Promise<TestApp> {
     const database = await createTestDatabase(options.catalogue ? 'catalogue' : 'migrated');
     const mail = await TestMail.start();
     // passport keeps one list for the process, and would ask the first application who signs in to the second
@@ -41,7 +41,7 @@ export class TestApp {
     const secureCookies = options.secureCookies ?? false;
     const app = await createApp({
       databaseUrl: database.url, sessionSecret: 'test secret', secureCookies, quiet: true, clientDir: options.clientDir, caughtMailDir: secureCookies ? undefined : mail.folder,
-      mail: { smtpUrl: options.smtpUrl ?? mail.smtpUrl, from: 'Mantlet <mantlet@example.test>', publicUrl: 'http://mantlet.example.test', caught: !secureCookies, retryDelaysMs: [20, 20] },
+      mail: { smtpUrl: options.smtpUrl ?? mail.smtpUrl, from: 'Mantlet <mantlet@example.test>', publicUrl: 'http://mantlet.example.test', caught: !secureCookies && (options.caughtMail ?? 'for-this-machine'), retryDelaysMs: [20, 20] },
     });
     await app.init();
     return new TestApp(app, app.get(DataSource), mail, database.drop);

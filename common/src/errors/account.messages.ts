@@ -6,6 +6,8 @@ export const accountMessages = {
   'account.sign-in-failed': (_: Record<string, never>) => 'The e-mail address and password do not belong together.',
   'account.signed-out': (_: Record<string, never>) => 'You are not signed in, or your session has ended. Sign in to go on.',
   'account.set-up-already': (_: Record<string, never>) => 'This installation already has an administrator. Sign in instead.',
+  'account.mail-elsewhere': (_: Record<string, never>) =>
+    'Caught mail opens every account, so it can be read at the machine that Mantlet runs on only, under its address there. For work with others, have its administrator name a mail server.',
   'account.link-ended': (p: { purpose: LinkPurpose }) =>
     p.purpose === 'invitation'
       ? 'This invitation has expired, was used or replaced already, or its link is not complete. Ask the administrator of this installation to send it again.'

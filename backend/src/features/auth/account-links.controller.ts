@@ -41,6 +41,6 @@ export class AccountLinksController {
   async use(@Body({ schema: accountLinkUseSchema }) input: AccountLinkUse, @Req() request: ScopedRequest): Promise<SessionDto> {
     const proved = await this.links.use(input);
     await openSession(request, proved);
-    return { user: proved.actor, needsSetUp: false, caughtMail: this.mail.caught };
+    return { user: proved.actor, needsSetUp: false, caughtMail: this.mail.isCaughtFor(request) };
   }
 }

@@ -24,7 +24,7 @@ export class AuthController {
   @Public()
   @Returns(sessionDtoSchema, 'Who is signed in, if anybody; and whether the installation still waits for its first account.')
   async session(@Req() request: ScopedRequest): Promise<SessionDto> {
-    return this.answer(request.user ?? null, !request.user && (await this.users.isEmpty()));
+    return this.answer(request, request.user ?? null, !request.user && (await this.users.isEmpty()));
   }
 
   @Post('session')
@@ -33,7 +33,7 @@ export class AuthController {
   @Returns(sessionDtoSchema, 'Signs in and sets the session cookie.')
   @UseGuards(AccountThrottlerGuard, LocalAuthGuard)
   signIn(@Body({ schema: signInSchema }) _input: SignIn, @Req() request: ScopedRequest): SessionDto {
-    return this.answer(request.user ?? null);
+    return this.answer(request, request.user ?? null);
   }
 
   @Delete('session')
@@ -53,7 +53,7 @@ export class AuthController {
   async setUp(@Body({ schema: setUpSchema }) input: SetUp, @Req() request: ScopedRequest): Promise<SessionDto> {
     const proved = await this.users.setUp(input);
     await openSession(request, proved);
-    return this.answer(proved.actor);
+    return this.answer(request, proved.actor);
   }
 
   @Put('session/password')
@@ -65,7 +65,7 @@ export class AuthController {
     return this.users.changePassword(actor, input, request.sessionID);
   }
 
-  private answer(user: Actor | null, needsSetUp = false): SessionDto {
-    return { user, needsSetUp, caughtMail: this.mail.caught };
+  private answer(request: ScopedRequest, user: Actor | null, needsSetUp = false): SessionDto {
+    return { user, needsSetUp, caughtMail: this.mail.isCaughtFor(request) };
   }
 }

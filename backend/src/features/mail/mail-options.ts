@@ -5,8 +5,8 @@ export interface MailOptions {
   from: string;
   /** links begin with it: never with what a request says about its host, which its sender chooses */
   publicUrl: string;
-  /** it goes to the local fake, whose mail anybody can read here */
-  caught: boolean;
+  /** it goes to the local fake, whose mail is read here: by everybody (a demonstration), or by whoever sits at this machine */
+  caught: false | 'for-everybody' | 'for-this-machine';
   /** between attempts */
   retryDelaysMs: readonly number[];
 }

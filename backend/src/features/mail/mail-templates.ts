@@ -67,6 +67,6 @@ ${body}
 }
 
 /** A name that somebody typed with line breaks in it must not look like a paragraph of ours. */
-const oneLine = (text: string): string => text.replace(/\s+/g, ' ').trim();
+export const oneLine = (text: string): string => text.replace(/\s+/g, ' ').trim();
 const signs: Record<string, string> = { '&': '&amp;', '<': '&lt;', '>': '&gt;', '"': '&quot;', "'": '&#39;' };
 const escape = (text: string): string => oneLine(text).replace(/[&<>"']/g, (sign) => signs[sign] ?? sign);

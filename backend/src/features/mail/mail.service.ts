@@ -3,14 +3,16 @@ import { Inject, Injectable, Logger } from '@nestjs/common';
 import type { OnModuleDestroy } from '@nestjs/common';
 import type { MailFailure, MailTemplate } from '@mantlet/common';
 import { InjectDataSource } from '@nestjs/typeorm';
+import type { Request } from 'express';
 import { createTransport } from 'nodemailer';
 import type { Transporter } from 'nodemailer';
 import { DataSource } from 'typeorm';
 import type { EntityManager } from 'typeorm';
+import { isFromThisMachine } from '../../shared/this-machine.js';
 import { failureOf, isWorthAnother } from './mail-failure.js';
 import { MAIL_OPTIONS } from './mail-options.js';
 import type { MailOptions } from './mail-options.js';
-import { writeMail } from './mail-templates.js';
+import { oneLine, writeMail } from './mail-templates.js';
 import type { MailParams, WrittenMail } from './mail-templates.js';
 import { Mail } from './mail.entity.js';
 
@@ -37,9 +39,9 @@ export class MailService implements OnModuleDestroy {
     this.transport = smtpUrl ? createTransport({ url: smtpUrl, connectionTimeout: 10_000, greetingTimeout: 10_000, socketTimeout: 20_000 }) : null;
   }
 
-  /** Whether mail stays on this server, to be read on its own page. */
-  get caught(): boolean {
-    return this.options.caught;
+  /** Whether mail stays on this server, and whoever asks may read it on its own page. */
+  isCaughtFor(request: Request): boolean {
+    return this.options.caught === 'for-everybody' || (this.options.caught === 'for-this-machine' && isFromThisMachine(request));
   }
 
   /** An address of this installation, as a mail gives it. */
@@ -75,7 +77,7 @@ export class MailService implements OnModuleDestroy {
     for (let attempt = 1; ; attempt += 1) {
       try {
         // links must not be followed by whoever carries the mail, so there is nothing to track and no file to fetch
-        await this.transport.sendMail({ from: this.options.from, to: { name: to.name, address: to.email }, ...mail, textEncoding: 'quoted-printable', disableFileAccess: true, disableUrlAccess: true });
+        await this.transport.sendMail({ from: this.options.from, to: { name: oneLine(to.name), address: to.email }, ...mail, textEncoding: 'quoted-printable', disableFileAccess: true, disableUrlAccess: true });
         return await this.note(id, attempt, null);
       } catch (error) {
         await this.note(id, attempt, failureOf(error));

@@ -63,7 +63,9 @@ export class ProjectOverviewService {
     const current = designs ? (open ?? issued) : issued;
     const { id, number, name, place, currency, note, version } = project;
     return {
-      id, number, name, place, currency, note, version, roles: scope.roles,
+      id, number, name, place, currency, version, roles: scope.roles,
+      // what the team writes for itself
+      note: designs ? note : '',
       settings: designs ? project.settings : null,
       revision: current && { id: current.id, code: current.code, state: current.state },
       issuedRevision: issued && { id: issued.id, code: issued.code },

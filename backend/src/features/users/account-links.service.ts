@@ -1,4 +1,5 @@
-import { createHash, randomBytes } from 'node:crypto';
+import { createHash, randomBytes, randomInt } from 'node:crypto';
+import { setTimeout as wait } from 'node:timers/promises';
 import { HttpStatus, Injectable } from '@nestjs/common';
 import { message } from '@mantlet/common';
 import type { AccountLink, AccountLinkDto, AccountLinkUse, LinkPurpose } from '@mantlet/common';
@@ -78,6 +79,8 @@ export class AccountLinksService {
   }
 
   private async sendReset(email: string): Promise<void> {
+    // what there is to do for an account would else slow down the answer, or the next one, by a little that can be measured
+    await wait(randomInt(20, 200));
     const send = await this.dataSource.transaction(async (manager) => {
       const user = await manager.createQueryBuilder(User, 'u').setLock('pessimistic_write').where('u.email = :email AND NOT u.disabled AND u.passwordHash IS NOT NULL', { email }).getOne();
       if (!user) return null;
