@@ -1,10 +1,12 @@
 import { spawn, spawnSync } from 'node:child_process';
+import { randomUUID } from 'node:crypto';
 import { join } from 'node:path';
 import { message, sentence } from '@mantlet/common';
 import type { BuildingDto, JobDto, MemberRowDto, MemberSheetDto, Page, ProjectListItemDto, QuantitiesDto, ReadinessDto, ZoneDto } from '@mantlet/common';
 import { MemberResult } from '../src/features/assessment/member-result.entity.js';
 import { RecalculationService } from '../src/features/assessment/recalculation.service.js';
 import { Job } from '../src/features/jobs/job.entity.js';
+import { addToQueue } from '../src/features/jobs/jobs.service.js';
 import { startWorker } from '../src/worker/worker.js';
 import type { RunningWorker } from '../src/worker/worker.js';
 import { TestApp } from './support/app.js';
@@ -202,6 +204,56 @@ describe('large changes', () => {
     expect(await results(p)).toEqual(expected);
     expect(await app.dataSource.manager.countBy(Job, { projectId: p.project.id, state: 'done' })).toBe(1);
     expect(await app.dataSource.manager.count(MemberResult, { where: { member: { projectId: p.project.id } } })).toBe(8);
+  });
+
+  it('of a project that is gone end without harm, and the next job is done', async () => {
+    const p = await makeScheduleProject(app);
+    inPlace(1);
+    // nothing of ours deletes a project, whose trail cannot be deleted either; somebody at the database may find a way
+    const gone = randomUUID();
+    await addToQueue(app.dataSource.manager, gone, 'recalculation');
+    await recalculate(p);
+    worker = await startWorker(app.app, url);
+    await allDone(p);
+    await until('both have left the queue', async () => (await app.dataSource.query<unknown[]>('SELECT 1 FROM graphile_worker.jobs')).length === 0);
+    expect(Object.keys(await results(p))).toHaveLength(8);
+    expect(await app.dataSource.manager.countBy(Job, { projectId: gone })).toBe(0);
+    await p.team.specifier.get(`/api/projects/${gone}/jobs`).expect(404);
+  });
+
+  it('are neither seen nor tried again from another project', async () => {
+    const [mine, theirs] = [await makeScheduleProject(app), await makeScheduleProject(app)];
+    inPlace(1);
+    await recalculate(theirs);
+    await app.dataSource.query(`UPDATE jobs SET state = 'failed' WHERE project_id = $1`, [theirs.project.id]);
+    const [failed] = await jobs(theirs);
+    expect(await jobs(mine)).toEqual([]);
+    await mine.team.specifier.post(mine.url(`jobs/${failed?.id ?? ''}/retry`)).expect(404);
+    await mine.team.specifier.post(theirs.url(`jobs/${failed?.id ?? ''}/retry`)).expect(404);
+    expect(await jobs(theirs)).toMatchObject([{ state: 'failed' }]);
+  });
+
+  it('and the changes of people beside them never wait for each other in a circle', async () => {
+    const p = await makeScheduleProject(app);
+    inPlace(1);
+    worker = await startWorker(app.app, url);
+    const before = await app.dataSource.query<{ n: string }[]>('SELECT deadlocks AS n FROM pg_stat_database WHERE datname = current_database()');
+    const statuses: number[] = [];
+    const note = (status: number): void => void statuses.push(status);
+    for (let round = 0; round < 6; round += 1) {
+      await Promise.all([
+        setPeriod(p, 'Z01', round % 2 ? 30 : 60).then((answer) => note(answer.status)),
+        setPeriod(p, 'Z02', round % 2 ? 90 : 60).then((answer) => note(answer.status)),
+        p.team.specifier.post(p.url('recalculate')).then((answer) => note(answer.status)),
+        p.team['structural-engineer'].post(p.url('recalculate')).then((answer) => note(answer.status)),
+        jobs(p).then(async ([job]) => { if (job) note((await p.team.specifier.post(p.url(`jobs/${job.id}/retry`))).status); }),
+      ]);
+    }
+    // 409: another edit of the zone came first, or a job that has not failed
+    expect(statuses.filter((status) => status !== 200 && status !== 409)).toEqual([]);
+    await allDone(p);
+    expect(await read<ReadinessDto>(p, 'readiness')).toMatchObject({ current: true });
+    expect(await app.dataSource.query('SELECT deadlocks AS n FROM pg_stat_database WHERE datname = current_database()')).toEqual(before);
   });
 
   it('are the design team’s to see', async () => {
