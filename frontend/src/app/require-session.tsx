@@ -4,6 +4,7 @@ import { Navigate, Outlet, useLocation } from 'react-router-dom';
 import type { MeDto } from '@mantlet/common';
 import { useSession } from '../features/session/api/session.js';
 import { SessionEndedDialog } from '../features/session/components/session-ended-dialog.js';
+import { leaveToSomebodyElse, onSignedInElsewhere } from '../features/session/other-windows.js';
 import { onSignedOut } from '../lib/api-client.js';
 import { pruneDrafts } from '../lib/drafts.js';
 import { sessionKey } from '../lib/query-client.js';
@@ -27,11 +28,17 @@ export function RequireSession() {
     onSignedOut(() => setEnded(true));
     return () => onSignedOut(() => undefined);
   }, []);
+  const now = session.data?.user?.id;
+  const somebodyElse = known !== null && now !== undefined && now !== known.id;
+  useEffect(() => { if (somebodyElse) leaveToSomebodyElse(); }, [somebodyElse]);
+  const knownId = known?.id;
+  useEffect(() => (knownId === undefined ? undefined : onSignedInElsewhere((id) => { if (id !== knownId) leaveToSomebodyElse(); })), [knownId]);
   if (session.data === undefined) {
     return session.error ? <ErrorState error={session.error} retry={() => { void session.refetch(); }} /> : <LoadingState what="Mantlet" />;
   }
   if (session.data.needsSetUp) return <Navigate to="/set-up" replace />;
-  if (session.data.user && session.data.user.id !== known?.id) setKnown(session.data.user);
+  if (somebodyElse) return <LoadingState what="Mantlet" />;
+  if (session.data.user && known === null) setKnown(session.data.user);
   const user = session.data.user ?? known;
   if (!user) return <Navigate to={`/sign-in?to=${encodeURIComponent(location.pathname + location.search)}`} replace />;
   return (

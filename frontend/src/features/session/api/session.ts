@@ -2,6 +2,7 @@ import { queryOptions, useMutation, useQuery, useQueryClient } from '@tanstack/r
 import type { PasswordChange, SessionDto, SetUp, SignIn } from '@mantlet/common';
 import { api } from '../../../lib/api-client.js';
 import { sessionKey } from '../../../lib/query-client.js';
+import { tellOtherWindows } from '../other-windows.js';
 
 export const sessionQuery = () =>
   queryOptions({ queryKey: sessionKey, queryFn: ({ signal }) => api.get<SessionDto>('/session', undefined, signal), staleTime: 60_000 });
@@ -15,6 +16,7 @@ export function useOpenSession<T>(path: string, samePerson = false) {
     onSuccess: (session) => {
       if (!samePerson) client.removeQueries({ predicate: (q) => q.queryKey[0] !== sessionKey[0] });
       client.setQueryData(sessionKey, session);
+      if (session.user) tellOtherWindows(session.user.id);
     },
   });
 }

@@ -9,7 +9,7 @@ const user = { id: 'u', name: 'Ada', email: 'ada@example.org', administrator: fa
 describe('signing in', () => {
   it('returns to the address asked for, and to none outside the application', () => {
     expect(returnAddress('/projects/1/members?open=true')).toBe('/projects/1/members?open=true');
-    for (const to of ['https://elsewhere.example', '//elsewhere.example', '/\\elsewhere.example', '/sign-in?to=/x', null]) expect(returnAddress(to)).toBe('/projects');
+    for (const to of ['https://elsewhere.example', '//elsewhere.example', '/\\elsewhere.example', '/\t/elsewhere.example', '/\n\\elsewhere.example', '/.//elsewhere.example', '/a/..//elsewhere.example', 'javascript:alert(1)', '/a/../sign-in', '/sign-in?to=/x', '', null]) expect(returnAddress(to)).toBe('/projects');
   });
   it('says that address and password do not belong together, and keeps the address', async () => {
     serve({ 'GET /session': { body: { user: null, needsSetUp: false } }, 'POST /session': { status: 401, body: { message: 'The e-mail address and password do not belong together.' } } });

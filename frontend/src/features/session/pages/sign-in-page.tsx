@@ -5,8 +5,16 @@ import { CaughtMailNote } from '../components/caught-mail-note.js';
 import { Gate } from '../components/gate.js';
 import { SignInForm } from '../components/sign-in-form.js';
 
-/** Only an address of this application may be returned to. */
-export const returnAddress = (to: string | null): string => (to && /^\/(?![/\\])/.test(to) && !to.startsWith('/sign-in') ? to : '/projects');
+const here = 'http://here.invalid';
+/**
+ * Only an address of this application may be returned to. Read as a browser reads it, which drops tabs and line breaks, takes a
+ * backslash for a slash and resolves dots before it sees two slashes and goes to another server.
+ */
+export function returnAddress(to: string | null): string {
+  if (!to?.startsWith('/') || !URL.canParse(to, here)) return '/projects';
+  const { origin, pathname, search, hash } = new URL(to, here);
+  return origin === here && !pathname.startsWith('//') && !pathname.startsWith('/sign-in') ? pathname + search + hash : '/projects';
+}
 
 export default function SignInPage() {
   const [params] = useSearchParams();
