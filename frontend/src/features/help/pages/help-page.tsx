@@ -21,7 +21,7 @@ function Steps({ who, mine, projectId }: { who: Role | 'administrator'; mine: bo
       <ol>
         {who === 'administrator'
           ? administratorSteps.map((text) => <li key={text}>{text}</li>)
-          : roleSteps[who].map((s) => <li key={s.text}>{s.text} {projectId ? <Link to={`/projects/${projectId}${s.page && `/${s.page}`}`}>{s.pageName}</Link> : <span className="mt-sub">{s.pageName}</span>}</li>)}
+          : roleSteps[who].map((s) => <li key={s.text}>{s.text} {projectId ? <Link to={`/projects/${projectId}${s.page && `/${s.page}`}`}>{s.pageName}</Link> : <span className="mt-sub">({s.pageName})</span>}</li>)}
       </ol>
     </section>
   );

@@ -17,7 +17,7 @@ export default function CaughtMailPage() {
     <main className="mt-caught">
       <div className="mt-gate-brand"><Mark size={24} /><span>Mantlet</span></div>
       <Page
-        title="Caught mail" width="narrow" heading={mails.data ? `${count(mails.data.length, 'mail')} caught, none sent` : 'Caught mail'}
+        title="Caught mail" width="narrow" heading={mails.data?.length ? `${count(mails.data.length, 'message')} caught, none sent` : 'Caught mail'}
         sub="This page exists on demonstration and development servers only, where mail does not leave the server: anybody who opens it reads everybody's mail."
         actions={<Link to="/sign-in">Go to sign in</Link>}
       >

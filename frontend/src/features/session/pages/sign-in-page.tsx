@@ -27,7 +27,8 @@ export default function SignInPage() {
   return (
     <Gate title="Sign in" heading="Sign in" sub="From a steel frame and a fire strategy to a checked protection schedule.">
       <SignInForm onSignedIn={() => { void navigate(to, { replace: true }); }} />
-      <p className="mt-sub"><Link to="/forgotten-password">Forgotten password?</Link> No account? The administrator of this installation invites people by e-mail.</p>
+      <p className="mt-sub"><Link to="/forgotten-password">Forgotten password?</Link></p>
+      <p className="mt-sub">No account yet? The administrator of this installation invites people by e-mail.</p>
       {session.data?.caughtMail && <CaughtMailNote />}
     </Gate>
   );

@@ -75,7 +75,7 @@ function FoldedZone({ zone }: { zone: ZoneDto }) {
   const systems = systemLines(zone).map((l) => l.product);
   return (
     <div className="mt-fold-only mt-sub">
-      <div><span className="mt-strong mt-ink">R {zone.periodMin}</span> {fireCurveNames[zone.curve.kind]}, {zone.environment}, {count(zone.members, 'member')}{zone.open > 0 && <>, <span className="mt-attention">{zone.open} open</span></>}</div>
+      <div><span className="mt-strong mt-ink">R {zone.periodMin}</span> {fireCurveNames[zone.curve.kind]}, {zone.environment}, {count(zone.members, 'member')}{zone.open > 0 && <>, <span className="mt-attention mt-nowrap">{zone.open} open</span></>}</div>
       <div>{systems.length ? joinWords(systems) : <span className="mt-attention">No system yet</span>}</div>
     </div>
   );
@@ -100,10 +100,10 @@ function useColumns(actions: ZoneTreeActions, projectId: string, /** said once a
     { title: 'Period', term: 'period', key: 'period', width: sameCurve ? 68 : 112, className: 'mt-fold-hide', render: zoneOnly((z) => <><span className="mt-strong">R {z.periodMin}</span>{!sameCurve && <div className="mt-sub">{fireCurveNames[z.curve.kind]}</div>}</>) },
     { title: 'Environment', term: 'environment', key: 'environment', width: 96, className: 'mt-fold-hide', render: zoneOnly((z) => z.environment) },
     { title: 'Systems', term: 'system', key: 'systems', className: 'mt-fold-hide', render: zoneOnly((z) => <Systems zone={z} />) },
-    { title: 'Target', term: 'target-policy', key: 'target', width: 98, className: 'mt-fold-hide', render: zoneOnly((z) => targetPolicyName(z.targetPolicy)) },
-    { title: 'Each its own', key: 'own', numeric: true, width: 90, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="own" />) },
-    { title: 'Bands', term: 'band', key: 'bands', numeric: true, width: 78, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="bands" />) },
-    { title: 'One for all', key: 'one', numeric: true, width: 78, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="one" />) },
+    { title: 'Target', term: 'target-policy', key: 'target', width: 112, className: 'mt-fold-hide', render: zoneOnly((z) => targetPolicyName(z.targetPolicy)) },
+    { title: 'Each its own', key: 'own', numeric: true, width: 92, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="own" />) },
+    { title: 'Bands', term: 'band', key: 'bands', numeric: true, width: 92, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="bands" />) },
+    { title: 'One for all', key: 'one', numeric: true, width: 92, className: 'mt-fold-hide', render: zoneOnly((z) => <Materials zone={z} policy="one" />) },
     {
       title: 'Members', key: 'members', numeric: true, width: 76, className: 'mt-fold-hide',
       render: zoneOnly((z) => <><Quantity value={z.members} what="Members" />{z.open > 0 && <div className="mt-attention">{z.open} open</div>}</>),
@@ -125,7 +125,7 @@ function useColumns(actions: ZoneTreeActions, projectId: string, /** said once a
 }
 
 /** What the columns take and room for the name of a system; narrower, the table scrolls sideways. */
-const treeWidth = 1130;
+const treeWidth = 1160;
 
 interface ZoneTreeProps { rows: ZoneRow[]; projectId: string; openZones: string[]; onOpenZones: (ids: string[]) => void; actions: ZoneTreeActions; marked: string | null }
 const keyOf = (row: ZoneRow) => (row.kind === 'zone' ? row.zone.id : row.level.id);
