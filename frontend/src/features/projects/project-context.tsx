@@ -3,8 +3,8 @@ import type { ReactNode } from 'react';
 import type { ProjectDto } from '@mantlet/common';
 import { may, whyNot } from '../../lib/may.js';
 import type { Right } from '../../lib/may.js';
+import { LinkButton } from '../../ui/link-button.js';
 import { Page } from '../../ui/page.js';
-import { Panel } from '../../ui/panel.js';
 
 const ProjectContext = createContext<ProjectDto | null>(null);
 export function ProjectProvider({ project, children }: { project: ProjectDto; children: ReactNode }) {
@@ -28,6 +28,11 @@ export function useMay(): (right: Right) => boolean {
 
 /** Shows the page only to those who hold the right; the others read who does. */
 export function RequireRight({ right, children }: { right: Right; children: ReactNode }) {
+  const project = useCurrentProject();
   if (useMay()(right)) return <>{children}</>;
-  return <Page title="Closed to you" heading="Not yours to see"><Panel label="Why"><p>{whyNot(right)}</p></Panel></Page>;
+  return (
+    <Page title="Closed to you" projectName={project.name} heading="Not yours to see" sub={whyNot(right)}>
+      <p><LinkButton to={`/projects/${project.id}`} type="primary">Go to the building</LinkButton></p>
+    </Page>
+  );
 }

@@ -54,7 +54,7 @@ function inspectionHeading(code: string, levels: readonly SiteLevelDto[]): strin
   const zones = levels.flatMap((l) => l.zones);
   const pieces = zones.flatMap((z) => z.items).reduce((sum, i) => sum + i.quantity, 0);
   const bare = zones.flatMap((z) => z.bare).reduce((sum, b) => sum + b.quantity, 0);
-  return `${code}: ${count(pieces, 'piece')} protected in ${count(zones.filter((z) => z.items.length > 0).length, 'zone')}${bare ? `, ${formatNumber(bare)} left bare` : ''}`;
+  return `${code}: ${count(pieces, 'piece')} to be protected in ${count(zones.filter((z) => z.items.length > 0).length, 'zone')}${bare ? `, ${formatNumber(bare)} to stay bare` : ''}`;
 }
 
 /** The heading: what there is to apply in all, or to inspect. */

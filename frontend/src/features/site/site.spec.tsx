@@ -63,7 +63,7 @@ describe('the site page', () => {
   it('shows an inspector what to hold the work against, and nothing to buy', async () => {
     serve({ [`GET /projects/${projectId}/site`]: { body: site } });
     renderPage(<SitePage />, { project: testProject(['inspector']) });
-    expect(await screen.findByRole('heading', { level: 1, name: 'P02: 4 pieces protected in 1 zone, 3 left bare' })).toBeInTheDocument();
+    expect(await screen.findByRole('heading', { level: 1, name: 'P02: 4 pieces to be protected in 1 zone, 3 to stay bare' })).toBeInTheDocument();
     expect(screen.queryByText('To buy for the whole job')).toBeNull();
     expect(screen.getByText(/coating found on them is a deviation to report/)).toBeInTheDocument();
   });

@@ -76,7 +76,7 @@ function Issued({ site, project }: { site: SiteDto; project: ProjectDto }) {
       {shown.map((level) => <Level key={level.id} level={level} site={site} inspects={inspects} />)}
       <p className="mt-sub">
         <Term name="dft">Dry thickness</Term> is of the protection alone, primer deducted; the <Term name="wft">wet thickness</Term> is what a gauge reads while applying.
-        {' '}{inspects ? 'Members left bare are listed with each zone: coating found on them is a deviation to report. What is acceptable on site is for the specification, the product’s instructions and local practice to say.' : 'The product’s own instructions govern surface, primer, conditions and curing; ask the specifier before applying anything that differs from this revision.'}
+        {' '}{inspects ? 'Members that stay bare are listed with each zone: coating found on them is a deviation to report. What is acceptable on site is for the specification, the product’s instructions and local practice to say.' : 'The product’s own instructions govern surface, primer, conditions and curing; ask the specifier before applying anything that differs from this revision.'}
         {' '}Thicknesses rest on {site.revision?.code}; a later revision replaces it.
       </p>
     </>
