@@ -11,7 +11,7 @@ import type { MemberSpec, ScheduleProject } from './support/schedule-project.js'
 
 const effect = (momentYKnm: number): MemberSpec['basis'] => ({
   way: 'calculated', reference: 'invented',
-  design: memberDesignSchema.parse({ actions: { given: 'fire-effect', effect: { axialKn: 0, momentYKnm, shearZKn: 0 } } }),
+  design: memberDesignSchema.parse({ actions: { given: 'fire-effect', effect: { axialKn: 0, momentYKnm, shearZKn: 0 } }, lateralRestraint: 'continuous' }),
 });
 
 /** Blockers that wait on each role: as the list of projects counts them, and as the project lists them. */
