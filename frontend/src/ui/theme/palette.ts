@@ -6,13 +6,15 @@ export interface Palette {
   ink3: string;
   line: string; line2: string;
   settled: string; settledTint: string;
-  attention: string; attentionTint: string;
+  attention: string;
+  /** as light as text in the colour of attention needs it: 4.5 to 1 */
+  attentionTint: string;
   /** behind what the pointer is over */
   hover: string;
 }
 export const light: Palette = {
   paper: '#F5F1E6', sheet: '#FFFDF8', ink: '#1C2325', ink2: '#566063', ink3: '#8B9292', line: '#D8D1BF', line2: '#ECE6D6',
-  settled: '#1D6A5A', settledTint: '#DCEAE3', attention: '#B5451B', attentionTint: '#F7E4D8', hover: '#F1ECDE',
+  settled: '#1D6A5A', settledTint: '#DCEAE3', attention: '#B5451B', attentionTint: '#F8E6DA', hover: '#F1ECDE',
 };
 export const dark: Palette = {
   paper: '#121718', sheet: '#1A2021', ink: '#EDE8DB', ink2: '#A9B0AD', ink3: '#737C7B', line: '#39423F', line2: '#262E2D',
