@@ -23,7 +23,7 @@ async function onGround(page: Page, ground: 'light' | 'dark'): Promise<void> {
 /** What is wrong with the page as it stands, on both grounds and at every width. */
 async function look(page: Page): Promise<Record<string, string[]>> {
   const found: Record<string, string[]> = {};
-  const keep = (where: string, what: string[]) => { if (what.length) found[where] = what; if (what.length) console.log(where, what); };
+  const keep = (where: string, what: string[]) => { if (what.length) found[where] = what; };
   await page.evaluate(() => document.fonts.ready.then(() => undefined));
   keep('light', await violations(page));
   await onGround(page, 'dark');

@@ -1,5 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { People, account, faults, heading } from './support/browser.js';
+import { violations } from './support/axe.js';
+import { People, account, faults, heading, settled, signOut } from './support/browser.js';
 
 let people: People;
 beforeAll(async () => { people = await People.start(); });
@@ -31,6 +32,19 @@ describe('who comes in, and what they find', () => {
     await page.getByLabel('Password', { exact: true }).fill('four unrelated words here');
     await page.getByRole('button', { name: 'Make the account' }).click();
     await page.getByRole('link', { name: 'Accounts', exact: true }).waitFor();
+    // an empty project leads on, step by step
+    await page.getByRole('link', { name: 'Mantlet, all projects' }).click();
+    await page.getByRole('button', { name: 'Start a project' }).first().click();
+    const drawer = page.getByRole('dialog');
+    await drawer.getByLabel('Number').fill('00-001');
+    await drawer.getByLabel('Name').fill('First shed (invented)');
+    await drawer.getByLabel(/^Fire engineer/).check();
+    await drawer.getByRole('button', { name: 'Start the project' }).click();
+    await drawer.waitFor({ state: 'hidden' });
+    await settled(page);
+    await page.locator('.mt-first').getByRole('link').first().waitFor();
+    expect(await violations(page)).toEqual([]);
+    await signOut(page);
     const second = await people.visitor({ empty: true });
     await second.goto('/set-up');
     await second.getByRole('button', { name: 'Sign in' }).waitFor();

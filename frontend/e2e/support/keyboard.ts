@@ -5,14 +5,14 @@ const focusNow = (page: Page): Promise<{ name: string; visible: boolean; inSight
   page.evaluate(() => {
     const at = document.activeElement;
     if (!at || at === document.body) return { name: 'nothing', visible: true, inSight: true };
-    const name = `${at.tagName.toLowerCase()} “${(at.getAttribute('aria-label') ?? at.textContent ?? '').trim().slice(0, 50)}”`;
+    const name = `${at.tagName.toLowerCase()} “${[at.getAttribute('aria-label') ?? (at as HTMLInputElement).labels?.[0]?.textContent ?? at.textContent, at.getAttribute('role')].join(' ').trim().slice(0, 60)}”`;
     const ring = (element: Element | null | undefined): boolean => {
       if (!element) return false;
       const { outlineStyle, outlineWidth, outlineColor } = getComputedStyle(element);
       return outlineStyle !== 'none' && Number.parseFloat(outlineWidth) >= 2 && !/rgba\(.*, 0\)/.test(outlineColor);
     };
     // components draw it on their frame, a drawing's link on its shape; a heading takes the focus only to be read out
-    const shape = at.closest('svg') && at.closest('g')?.querySelector('rect, path, circle');
+    const shape = at.closest('svg') && (at.closest('g')?.querySelector('.d-zone') ?? at.closest('g')?.querySelector('rect, path, circle'));
     const drawn = shape ? Number.parseFloat(getComputedStyle(shape).strokeWidth) >= 3 : false;
     const frames = [at, at.parentElement, at.parentElement?.parentElement, at.parentElement?.parentElement?.parentElement, at.nextElementSibling];
     const box = at.getBoundingClientRect();
