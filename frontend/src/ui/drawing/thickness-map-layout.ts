@@ -14,7 +14,7 @@ export interface ThicknessMapData {
 export interface MapCell { row: number; column: number; x: number; y: number; width: number; height: number; value: number | null; /** 0…1 of the greatest thickness */ share: number }
 export interface MapLayout { width: number; height: number; plot: { x: number; y: number; width: number; height: number }; x: Scale; y: Scale; cells: MapCell[] }
 
-const margin = { top: 12, right: 14, bottom: 42, left: 52 };
+const margin = { top: 26, right: 14, bottom: 42, left: 52 };
 /** The axis begins this many steps before the first row: that row serves every smaller A/V as well. */
 function startOf(values: readonly number[]): number {
   const [first = 0, second] = values;

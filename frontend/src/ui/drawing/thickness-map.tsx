@@ -43,8 +43,8 @@ function Axes({ layout, data }: { layout: MapLayout; data: ThicknessMapData }) {
         </g>
       ))}
       <path className="d-axis" d={`M${plot.x} ${plot.y}V${base}H${plot.x + plot.width}`} />
-      <text className="d-sub" x={plot.x + plot.width} y={base + 34} fontSize="11.5" textAnchor="end">section factor A/V, 1/m</text>
-      <text className="d-sub" x={plot.x - 8} y={plot.y + 4} fontSize="11.5" textAnchor="end">°C</text>
+      <text className="d-sub" x={plot.x + plot.width} y={base + 34} fontSize="11.5" textAnchor="end">section factor A/V, m⁻¹</text>
+      <text className="d-sub" x={4} y={plot.y - 8} fontSize="11.5">critical temperature, °C</text>
     </g>
   );
 }
@@ -121,7 +121,7 @@ function MapTable({ data, unit, label }: ThicknessMapProps) {
       {/* scrolls sideways, so the keyboard must be able to reach it */}
       <div role="region" aria-label={`${label}, as a table`} tabIndex={0}>
         <table>
-          <thead><tr><th scope="col">A/V, 1/m</th>{data.temperaturesC.map((t) => <th key={t} scope="col">{t} °C</th>)}</tr></thead>
+          <thead><tr><th scope="col">A/V, m⁻¹</th>{data.temperaturesC.map((t) => <th key={t} scope="col">{t} °C</th>)}</tr></thead>
           <tbody>
             {data.sectionFactorsPerM.map((factor, row) => (
               <tr key={factor}>

@@ -5,22 +5,24 @@ import type { ImportDto, ImportField, ImportMapping, ImportSheetDto } from '@man
 import { exposureArrangements, exposureNames, importFieldNames, importLengthUnits, memberTypeNames, memberTypes, steelGrades } from '@mantlet/common';
 import { FailedSave } from '../../../ui/form/failed-save.js';
 import { useUnsavedChanges } from '../../../ui/form/use-unsaved-changes.js';
+import type { TermName } from '../../../lib/terms.js';
 import { Panel } from '../../../ui/panel.js';
+import { Term } from '../../../ui/term.js';
 import { useCurrentProject } from '../../projects/project-context.js';
 import { useZones } from '../../zones/api/zones.js';
 import { useSetMapping } from '../api/imports.js';
 import { columnName } from '../import-words.js';
 import { fieldOfColumn, mappingProblem, readableFields, readColumnAs, rowsFromHeader } from '../mapping.js';
 
-function Labelled({ label, children }: { label: string; children: (id: string) => ReactNode }) {
+function Labelled({ label, term, children }: { label: string; term?: TermName | undefined; children: (id: string) => ReactNode }) {
   const id = useId();
-  return <div className="mt-field"><label className="mt-label" htmlFor={id}>{label}</label>{children(id)}</div>;
+  return <div className="mt-field"><label className="mt-label" htmlFor={id}>{term ? <Term name={term}>{label}</Term> : label}</label>{children(id)}</div>;
 }
 
-interface PickProps<T extends string> { label: string; value: T | null; options: { value: T; label: string }[]; onChange: (value: T | null) => void }
-function Pick<T extends string>({ label, value, options, onChange }: PickProps<T>) {
+interface PickProps<T extends string> { label: string; term?: TermName; value: T | null; options: { value: T; label: string }[]; onChange: (value: T | null) => void }
+function Pick<T extends string>({ label, term, value, options, onChange }: PickProps<T>) {
   return (
-    <Labelled label={label}>
+    <Labelled label={label} term={term}>
       {(id) => <Select<T> id={id} value={value as T} onChange={(next) => onChange(next ?? null)} options={options} allowClear placeholder="None" style={{ width: '100%' }} showSearch={{ optionFilterProp: 'label' }} />}
     </Labelled>
   );
@@ -66,11 +68,11 @@ function Defaults({ projectId, mapping, set }: { projectId: string; mapping: Imp
   return (
     <Panel title="For new members without a value" sub="Used where the file has no column or an empty cell. A member already there keeps what it has.">
       <div className="mt-form-row">
-        <Pick label="Zone" value={defaults.zoneId} options={zones} onChange={(zoneId) => set({ zoneId })} />
+        <Pick label="Zone" term="zone" value={defaults.zoneId} options={zones} onChange={(zoneId) => set({ zoneId })} />
         <Pick label="Type" value={defaults.memberType} options={memberTypes.map((value) => ({ value, label: memberTypeNames[value] }))} onChange={(memberType) => set({ memberType })} />
         <Pick label="Steel grade" value={defaults.grade} options={steelGrades.map((value) => ({ value, label: value }))} onChange={(grade) => set({ grade })} />
-        <Pick label="Exposure" value={defaults.exposure} options={exposureArrangements.map((value) => ({ value, label: exposureNames[value] }))} onChange={(exposure) => set({ exposure })} />
-        <Pick label="Protection form" value={defaults.protectionForm} options={[{ value: 'profile', label: 'Following the profile' }, { value: 'boxed', label: 'Boxed' }]} onChange={(protectionForm) => set({ protectionForm })} />
+        <Pick label="Exposure" term="exposure" value={defaults.exposure} options={exposureArrangements.map((value) => ({ value, label: exposureNames[value] }))} onChange={(exposure) => set({ exposure })} />
+        <Pick label="Protection form" term="protection-form" value={defaults.protectionForm} options={[{ value: 'profile', label: 'Following the profile' }, { value: 'boxed', label: 'Boxed' }]} onChange={(protectionForm) => set({ protectionForm })} />
       </div>
     </Panel>
   );

@@ -50,10 +50,10 @@ function Actions({ sheet, setOpen }: { sheet: MemberSheetDto; setOpen: (open: Op
   });
   return (
     <>
+      {may('edit-members') && <Button danger onClick={askDelete}>Delete</Button>}
       {may('edit-members') && <Button onClick={() => setOpen('member')}>Change member</Button>}
       {may('edit-structural') && <Button onClick={() => setOpen('structural')}>Critical temperature</Button>}
       {may('accept-temperatures') && <Button onClick={() => setOpen('accept')}>Accept</Button>}
-      {may('edit-members') && <Button danger onClick={askDelete}>Delete</Button>}
     </>
   );
 }

@@ -44,7 +44,7 @@ function TablesView({ tables, kind }: { tables: readonly ThicknessTable[]; kind:
   const ofBoth = ofShape.filter((t) => t.orientation === table.orientation);
   const choose = (part: Partial<Choice>) => setWish({ shape: table.shape, orientation: table.orientation, periodMin: table.periodMin, ...part });
   return (
-    <Panel title="Thickness over section factor and temperature" sub={`${tableName(table)}, in ${thicknessUnitOf(kind)}. A cell holds what the next row up asks for.`}>
+    <Panel title="Thickness over section factor and temperature" sub={`${tableName(table)}, in ${thicknessUnitOf(kind)}. Read by the next row up and the column below, a figure serves section factors up to its right edge and critical temperatures from its foot.`}>
       <div className="mt-map-choice">
         <Choose label="Section" value={table.shape} options={unique(tables.map((t) => t.shape)).map((value) => ({ value, label: shapeNames[value] }))} onChange={(shape) => choose({ shape })} />
         <Choose label="Member" value={table.orientation} options={unique(ofShape.map((t) => t.orientation)).map((value) => ({ value, label: orientationNames[value] }))} onChange={(orientation) => choose({ orientation })} />

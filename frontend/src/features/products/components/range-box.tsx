@@ -1,7 +1,7 @@
 import '../../../ui/drawing/charts.css';
 import { linearScale, niceTicks } from '../../../ui/drawing/chart-scale.js';
 
-const frame = { width: 420, height: 250, left: 46, right: 16, top: 20, bottom: 40 };
+const frame = { width: 420, height: 250, left: 46, right: 16, top: 26, bottom: 40 };
 
 /** The assessed range as a box in A/V and temperature, to scale from zero; an open lower limit reaches 20 °C. */
 export function RangeBox({ sectionFactor: [fromFactor, toFactor], temperature: [fromC, toC], label }: { sectionFactor: readonly [number, number]; temperature: readonly [number | null, number]; label: string }) {
@@ -19,8 +19,8 @@ export function RangeBox({ sectionFactor: [fromFactor, toFactor], temperature: [
       <rect x={x(fromFactor)} y={y(toC)} width={x(toFactor) - x(fromFactor)} height={y(lowC) - y(toC)} className="mt-range-area" {...(fromC === null ? { strokeDasharray: '6 3' } : {})} />
       <text x={(x(fromFactor) + x(toFactor)) / 2} y={(y(toC) + y(lowC)) / 2} fontSize="13" fontWeight="600" textAnchor="middle">A/V {fromFactor} to {toFactor}</text>
       <text x={(x(fromFactor) + x(toFactor)) / 2} y={(y(toC) + y(lowC)) / 2 + 18} fontSize="13" textAnchor="middle">{fromC === null ? 'up to' : `${fromC} to`} {toC} °C</text>
-      <text className="d-sub" x={frame.width - frame.right} y={frame.height - 6} fontSize="11.5" textAnchor="end">section factor A/V, 1/m</text>
-      <text className="d-sub" x={frame.left - 6} y={frame.top - 8} fontSize="11.5" textAnchor="end">°C</text>
+      <text className="d-sub" x={frame.width - frame.right} y={frame.height - 6} fontSize="11.5" textAnchor="end">section factor A/V, m⁻¹</text>
+      <text className="d-sub" x={4} y={frame.top - 9} fontSize="11.5">critical temperature, °C</text>
     </svg>
   );
 }

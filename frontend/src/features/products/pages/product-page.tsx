@@ -54,7 +54,7 @@ function Product({ library, productId, at, projectName, currency, editsOwn }: Pr
   return (
     <Page
       title={product?.name ?? 'Product'} trail={[product?.name ?? 'Product', library === null ? 'Product library' : 'Products']} projectName={projectName} heading={product ? productHeading(product.evidence) : 'Product'}
-      sub={product && <>{product.name}, {productKindNames[product.kind].toLowerCase()} by {product.maker}. {product.evidenceReference}, edition {product.evidenceEdition}. {product.invented && <Invented />}</>}
+      sub={product && <>{product.name} by {product.maker}. {productKindNames[product.kind]}; {product.evidenceReference}, edition {product.evidenceEdition}. {product.invented && <Invented />}</>}
       state={expiry ? { word: expiry.word, kind: expiry.kind } : undefined}
       actions={product && canEdit ? <Actions product={product} library={library} at={at} onEdit={() => setEditing(true)} /> : null}
     >

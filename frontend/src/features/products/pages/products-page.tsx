@@ -48,10 +48,10 @@ function ProductTable({ library, products, at }: { library: Library; products: r
             ),
           },
           { title: 'Kind', key: 'kind', width: 122, render: (_, p) => productKindNames[p.kind] },
-          { title: 'Evidence', key: 'evidence', width: 196, render: (_, p) => <div>{p.evidenceReference}, edition {p.evidenceEdition}<div className="mt-sub">{formNames[p.form]}</div></div> },
+          { title: 'Evidence', term: 'evidence', key: 'evidence', width: 196, render: (_, p) => <div>{p.evidenceReference}, edition {p.evidenceEdition}<div className="mt-sub">{formNames[p.form]}</div></div> },
           { title: 'Valid until', key: 'valid', width: 124, render: (_, p) => <Validity product={p} /> },
           { title: 'Range', key: 'range', width: 304, render: (_, p) => <Range product={p} span={span} /> },
-          { title: 'Zones', foldLabel: 'Used by zones', key: 'zones', width: 66, numeric: true, render: (_, p) => <Quantity value={p.usedByZones} what="Zones that use it" /> },
+          { title: 'Zones', foldLabel: 'Used by zones', term: 'zone', key: 'zones', width: 66, numeric: true, render: (_, p) => <Quantity value={p.usedByZones} what="Zones that use it" /> },
           ...(library ? [{ title: 'Kept by', key: 'owner', width: 116, render: (_: unknown, p: ProductSummaryDto) => (p.projectId ? 'This project' : 'Shared library') }] : []),
         ]}
       />
