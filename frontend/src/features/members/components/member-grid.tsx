@@ -125,7 +125,8 @@ export function MemberGrid(props: MemberGridProps) {
           const context = { to: row ? sheetOf(row.id) : '', open: () => leave(index), aboveC };
           return (
             <div key={index} role="row" aria-rowindex={index + 2} aria-selected={choice ? chosen : undefined} tabIndex={index === focusable ? 0 : -1} onFocus={(e) => { if (e.target === e.currentTarget) setActive(index); }}
-              onClick={(e) => onClick(e, index)} onDoubleClick={() => open(index)}
+              // a reach of rows is chosen, not the text between two clicks
+              onMouseDown={(e) => { if (e.shiftKey && choice) e.preventDefault(); }} onClick={(e) => onClick(e, index)} onDoubleClick={() => open(index)}
               className={`mt-grid-row ${chosen ? 'mt-grid-chosen' : ''}`} style={{ top: start - margin, height: size, ...(narrow ? {} : { gridTemplateColumns: template }) }}>
               {row === undefined ? <span role="gridcell" className="mt-grid-wait">Row {index + 1} {failed ? 'did not arrive' : 'is being fetched'}</span>
                 : narrow ? <NarrowCells row={row} box={box} columns={columns} context={context} />
