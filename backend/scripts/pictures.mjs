@@ -33,6 +33,8 @@ const pictures = [
   { name: 'site', role: 'Contractor', to: '/projects/:p/site' },
   { name: 'site-phone', role: 'Contractor', to: '/projects/:p/site', size: phone, act: (page) => page.locator('.mt-site-zone').first().evaluate((zone) => { window.scrollTo(0, zone.getBoundingClientRect().top + window.scrollY - 190); }) },
   { name: 'accounts', role: 'Administrator', to: '/accounts' },
+  { name: 'first-visit', role: 'Administrator', to: '/projects', size: { width: 1200, height: 420 } },
+  { name: 'account', role: 'Administrator', to: '/account' },
 ];
 
 async function openMember(page) {

@@ -82,6 +82,6 @@ describe('the zones page', () => {
     expect(await within(drawer).findByText(said)).toBeInTheDocument();
     expect(name).toHaveValue('Kitchen');
     expect(calls.find((c) => c.method === 'PATCH')?.body).toMatchObject({ name: 'Kitchen', periodMin: 90, version: 5 });
-    await vi.waitFor(() => expect(within(drawer).getByRole('button', { name: /Load the saved version/ })).toBeEnabled(), { timeout: 5000 });
+    expect(within(drawer).getByRole('button', { name: 'Save' })).toBeEnabled();
   });
 });
