@@ -28,7 +28,7 @@ function ByLevel({ levels, at }: { levels: readonly Level[]; at: string }) {
   const sum = (level: Level, of: (zone: IssuedZoneDto) => number) => level.zones.reduce((total, zone) => total + of(zone), 0);
   const rows = [...levels].sort((a, b) => b.elevationM - a.elevationM);
   return (
-    <Panel flush title="By level" actions={<LinkButton to={`${at}/site`} type="primary">What to apply where</LinkButton>}>
+    <Panel flush title="By level" actions={<LinkButton to={`${at}/site`} type="primary">Floor by floor on the Site page</LinkButton>}>
       <ScheduleTable
         caption="Issued by level" rows={rows} rowKey={(l) => l.id} sticky={false} fold={false} className="mt-tight"
         columns={[

@@ -48,11 +48,11 @@ function SortButton({ column, on, down, sort }: { column: MemberColumn & { sort:
   return <BehindTerm name={term}>{(describedBy) => <button type="button" aria-describedby={describedBy} onClick={() => sort(key)}>{inside}</button>}</BehindTerm>;
 }
 
-function Head({ columns, filter, sort, choice, template }: Pick<MemberGridProps, 'columns' | 'filter' | 'sort' | 'choice'> & { template: string }) {
+function Head({ columns, filter, sort, choice, template, width }: Pick<MemberGridProps, 'columns' | 'filter' | 'sort' | 'choice'> & { template: string; width: string }) {
   const by = filter.sort ?? 'mark';
   return (
-    <div role="rowgroup" className="mt-grid-head">
-      <div role="row" aria-rowindex={1} className="mt-grid-row" style={{ gridTemplateColumns: template }}>
+    <div role="rowgroup" className="mt-grid-head" style={{ width }}>
+      <div role="row" aria-rowindex={1} className="mt-grid-row" style={{ gridTemplateColumns: template, width: '100%' }}>
         {choice && <span role="columnheader" className="mt-grid-check"><Checkbox aria-label="Choose all that are found" checked={choice.all} indeterminate={choice.some && !choice.all} onChange={choice.toggleAll} /></span>}
         {columns.map((column) => {
           const key = column.sort;
@@ -83,6 +83,8 @@ export function MemberGrid(props: MemberGridProps) {
     wantsFocus.current = false;
     row.focus({ preventScroll: true });
   });
+  // the row's own width: its longest text would otherwise widen the column that grows
+  const width = `max(100%, ${columns.reduce((sum, c) => sum + c.width, choice ? 40 : 0)}px)`;
   const template = [choice ? '40px' : '', ...columns.map((c) => (c.grows ? `minmax(${c.width}px, 1fr)` : `minmax(${c.width}px, ${columns.some((x) => x.grows) ? `${c.width}px` : '1fr'})`))].join(' ');
   const goTo = (index: number) => {
     const next = Math.max(0, Math.min(total - 1, index));
@@ -116,7 +118,7 @@ export function MemberGrid(props: MemberGridProps) {
   const focusable = items.some((item) => item.index === active) ? active : items[0]?.index ?? 0;
   return (
     <div ref={scroller} className={narrow ? 'mt-grid mt-grid-narrow' : 'mt-grid'} role="grid" aria-label="Members" aria-rowcount={total + 1} aria-multiselectable={choice ? true : undefined} aria-busy={stale} onKeyDown={onKeyDown}>
-      {!narrow && <Head {...props} template={template} />}
+      {!narrow && <Head {...props} template={template} width={width} />}
       <div role="rowgroup" ref={body} className="mt-grid-body" style={{ height: virtualizer.getTotalSize() }}>
         {items.map(({ index, start, size }) => {
           const row = rowAt(index);
@@ -127,7 +129,7 @@ export function MemberGrid(props: MemberGridProps) {
             <div key={index} role="row" aria-rowindex={index + 2} aria-selected={choice ? chosen : undefined} tabIndex={index === focusable ? 0 : -1} onFocus={(e) => { if (e.target === e.currentTarget) setActive(index); }}
               // a reach of rows is chosen, not the text between two clicks
               onMouseDown={(e) => { if (e.shiftKey && choice) e.preventDefault(); }} onClick={(e) => onClick(e, index)} onDoubleClick={() => open(index)}
-              className={`mt-grid-row ${chosen ? 'mt-grid-chosen' : ''}`} style={{ top: start - margin, height: size, ...(narrow ? {} : { gridTemplateColumns: template }) }}>
+              className={`mt-grid-row ${chosen ? 'mt-grid-chosen' : ''}`} style={{ top: start - margin, height: size, ...(narrow ? {} : { gridTemplateColumns: template, width }) }}>
               {row === undefined ? <span role="gridcell" className="mt-grid-wait">Row {index + 1} {failed ? 'did not arrive' : 'is being fetched'}</span>
                 : narrow ? <NarrowCells row={row} box={box} columns={columns} context={context} />
                   : <>{choice && <span role="gridcell" className="mt-grid-check">{box}</span>}{columns.map((column) => <span key={column.key} role="gridcell" className={column.numeric ? 'mt-num' : 'mt-one-line'}>{column.cell(row, context)}</span>)}</>}

@@ -19,6 +19,7 @@ import { ChoiceBar } from './choice-bar.js';
 import { columnsOf } from './member-columns.js';
 import type { MemberColumn } from './member-columns.js';
 import { MemberGrid } from './member-grid.js';
+import { NarrowOrder } from './narrow-order.js';
 
 const mostOnPaper = 1000;
 
@@ -110,6 +111,7 @@ export function MemberList({ projectId, windows, filter, setFilter, columnKeys, 
   return (
     <>
       <ChoiceBar projectId={projectId} chosen={chosen} found={total} />
+      {rows.narrow && <NarrowOrder filter={filter} setFilter={setFilter} />}
       {failed && <p className="mt-choice mt-noprint" role="alert"><strong>▲ Some rows did not arrive. {failed.error instanceof ApiError ? failed.error.message : ''}</strong><Button onClick={failed.again}>Fetch them again</Button></p>}
       <div className={paper ? 'mt-members mt-noprint' : 'mt-members'}>
         <MemberGrid
