@@ -26,7 +26,7 @@ describe('the building page', () => {
     expect(document.title).toBe('Building · Test house · Mantlet');
   });
   it('says what to do first in an empty project', async () => {
-    serve({ [path]: { body: { members: 0, settled: 0, open: 0, levels: [], openItems: [], protection: [] } satisfies BuildingDto }, [`GET /projects/${projectId}/zones`]: { body: [] } });
+    serve({ [path]: { body: { members: 0, settled: 0, open: 0, levels: [], openItems: [], protection: [] } satisfies BuildingDto }, [`GET /projects/${projectId}/zones`]: { body: [] }, [`GET /projects/${projectId}/memberships`]: { body: [] } });
     renderPage(<BuildingPage />, { project: testProject(['fire-engineer']) });
     expect(await screen.findByRole('heading', { name: 'Draw up the levels' })).toBeInTheDocument();
     expect(screen.getByRole('heading', { level: 1, name: 'No levels yet' })).toBeInTheDocument();
