@@ -248,7 +248,7 @@ describe('imports', () => {
       const made = await upload(csv([['Mark', 'Section', 'Length (mm)'], ['B7', 'IPE 300', 6000], ['B1', 'IPE 300', 6000]]));
       await unchanged(async () => {
         const answer = await team.specifier.put(at(`/${made.id}/mapping`)).send(made.mapping).expect(422);
-        expect(answer.body.message).toBe('Zone, Type, Steel grade, Exposure: no columns are chosen, and 1 row is a new member that needs them.');
+        expect(answer.body.message).toBe('Zone, Type, Steel grade, Exposure: no columns are chosen, and 1 row is a new member that needs them. Choose the column, or a value for new members below the rows.');
         expect(answer.body.issues[0]).toEqual({ path: 'columns.zone', message: 'is needed for new members' });
       });
       const defaults: ImportMapping['defaults'] = { zoneId: zone.id, memberType: 'beam', grade: 'S355', exposure: 'three-sides', protectionForm: 'boxed' };

@@ -1,8 +1,8 @@
 import { z } from 'zod';
-import { codeSchema, idSchema, nameSchema, nonNegativeSchema, positiveSchema } from './primitives.js';
+import { codeSchema, idSchema, nameSchema, nonNegativeSchema, numberSchema } from './primitives.js';
 
 // thinner than any sheet, the properties lose their digits
-const dim = positiveSchema.min(0.1, 'is less than 0.1 mm').max(5000, 'is more than 5000 mm');
+const dim = numberSchema.min(0.1, 'is less than 0.1 mm').max(5000, 'is more than 5000 mm');
 const radius = nonNegativeSchema.max(500, 'is more than 500 mm');
 
 /** A cross-section by its dimensions in mm. Everything else (area, inertia, perimeter) is computed from these. */
