@@ -15,6 +15,7 @@ const unseen = new Set(['password', 'current', 'next', 'token', 'email', 'versio
 
 let routes: EveryRoute;
 let readAgain = 0;
+let turn = 0;
 beforeAll(async () => {
   routes = await EveryRoute.start();
 });
@@ -58,7 +59,10 @@ async function faultsIn(key: string, schema: JsonSchema): Promise<string[]> {
   for (const { path, schema: place, body } of fieldsOf(schema, routes.bodies[key]!(routes.things), routes.components)) {
     if (elsewhere(path)) continue;
     const standing = path.reduce<unknown>((value, part) => (value as Record<string | number, unknown> | null | undefined)?.[part], body);
-    for (const [said, value] of hostileFor(place, routes.components, standing)) {
+    // deep inside, one in three, a different third from field to field, so that every kind is tried in every contract
+    const tried = hostileFor(place, routes.components, standing).filter((_, i) => path.length <= 2 || i % 3 === turn % 3);
+    turn += 1;
+    for (const [said, value] of tried) {
       const answer = await routes.sendJson(key, withValue(routes.fresh(key, body as object), path, value));
       const done = answer.status < 300;
       const fault = faultOf(answer, value) ?? (done ? await faultOfKeeping(key, answer, path, value) : null);
