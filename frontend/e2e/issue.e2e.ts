@@ -32,6 +32,7 @@ async function giveActions(page: Page, mark: string): Promise<void> {
   await choose(page, leading, 'Category', 'E storage');
   await leading.getByLabel('Moment My').fill('25');
   await leading.getByLabel('Shear Vz').fill('25');
+  await drawer.getByRole('radio', { name: 'Held along its length' }).check();
   await drawer.getByLabel('Reference').fill('Calculation L4/openings, sheet 3 (invented)');
   await drawer.getByRole('button', { name: 'Save' }).click();
   await heading(page).filter({ hasText: /Needs [\d.\s]+[µm]m/ }).waitFor();
