@@ -15,9 +15,21 @@ function useHeadingFocus(main: RefObject<HTMLElement | null>): void {
   useEffect(() => {
     if (last.current === pathname) return;
     last.current = pathname;
-    const at = document.activeElement;
-    const heading = main.current?.querySelector<HTMLElement>('h1');
-    if (heading && !(at && main.current?.contains(at) && at !== main.current)) heading.focus({ preventScroll: true });
+    const page = main.current;
+    if (!page) return;
+    /** @returns whether there is nothing left to do: the heading has the focus, or something else of the page does */
+    const settle = (): boolean => {
+      const at = document.activeElement;
+      if (at && at !== page && page.contains(at)) return true;
+      const heading = page.querySelector<HTMLElement>('h1');
+      heading?.focus({ preventScroll: true });
+      return heading !== null;
+    };
+    if (settle()) return;
+    // a page that is still fetched has no heading yet; whoever has gone elsewhere meanwhile is left there
+    const watch = new MutationObserver(() => { if (document.activeElement !== document.body || settle()) watch.disconnect(); });
+    watch.observe(page, { childList: true, subtree: true });
+    return () => watch.disconnect();
   }, [pathname, main]);
 }
 
