@@ -40,7 +40,7 @@ export function AccountMenu({ user, roles }: { user: MeDto | null; roles: string
   if (!user) return null;
   return (
     <Dropdown
-      trigger={['click']} placement="bottomRight"
+      trigger={['click']} placement="bottomRight" autoFocus
       menu={{
         selectable: true, selectedKeys: [choice],
         items: [
