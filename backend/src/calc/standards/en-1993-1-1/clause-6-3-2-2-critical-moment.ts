@@ -3,6 +3,15 @@ import { defineFormula } from '../../formula.js';
 /** EN 1993-1-1 3.2.6 */
 export const SHEAR_MODULUS_MPA = 81_000;
 
+/** what resists bending sideways and twisting */
+const stiffness = {
+  modulusMPa: { symbol: 'E', meaning: 'modulus of elasticity', unit: 'MPa' },
+  shearModulusMPa: { symbol: 'G', meaning: 'shear modulus', unit: 'MPa' },
+  izMm4: { symbol: 'I_z', meaning: 'second moment of area about the weak axis', unit: 'mm⁴' },
+  itMm4: { symbol: 'I_t', meaning: 'torsion constant', unit: 'mm⁴' },
+  iwMm6: { symbol: 'I_w', meaning: 'warping constant', unit: 'mm⁶' },
+};
+
 export interface CriticalMomentInput {
   c1: number;
   c2: number;
@@ -27,11 +36,7 @@ export const criticalMomentFormula = defineFormula<CriticalMomentInput>({
   symbols: {
     c1: { symbol: 'C_1', meaning: 'factor for the shape of the moment diagram', unit: '' },
     c2: { symbol: 'C_2', meaning: 'factor for the height of the loads', unit: '' },
-    modulusMPa: { symbol: 'E', meaning: 'modulus of elasticity', unit: 'MPa' },
-    shearModulusMPa: { symbol: 'G', meaning: 'shear modulus', unit: 'MPa' },
-    izMm4: { symbol: 'I_z', meaning: 'second moment of area about the weak axis', unit: 'mm⁴' },
-    itMm4: { symbol: 'I_t', meaning: 'torsion constant', unit: 'mm⁴' },
-    iwMm6: { symbol: 'I_w', meaning: 'warping constant', unit: 'mm⁶' },
+    ...stiffness,
     lengthMm: { symbol: 'L', meaning: 'length between the restraints', unit: 'mm' },
     loadHeightMm: { symbol: 'z_g', meaning: 'height of the loads above the shear centre', unit: 'mm' },
   },
@@ -63,11 +68,7 @@ export const heldAxisCriticalMomentFormula = defineFormula<HeldAxisInput>({
   symbols: {
     factor: { symbol: 'α_cr', meaning: 'factor by which moments and loads must be raised for the length to buckle', unit: '' },
     momentNmm: { symbol: 'M_Ed', meaning: 'greatest hogging moment in fire on the length', unit: 'N·mm' },
-    modulusMPa: { symbol: 'E', meaning: 'modulus of elasticity', unit: 'MPa' },
-    shearModulusMPa: { symbol: 'G', meaning: 'shear modulus', unit: 'MPa' },
-    izMm4: { symbol: 'I_z', meaning: 'second moment of area about the weak axis', unit: 'mm⁴' },
-    itMm4: { symbol: 'I_t', meaning: 'torsion constant', unit: 'mm⁴' },
-    iwMm6: { symbol: 'I_w', meaning: 'warping constant', unit: 'mm⁶' },
+    ...stiffness,
     lengthMm: { symbol: 'L', meaning: 'length between places held against twist', unit: 'mm' },
     heldHeightMm: { symbol: 'd', meaning: 'height of the held flange above the shear centre', unit: 'mm' },
   },
