@@ -5,10 +5,11 @@ import type { Keynote } from './keynotes.js';
 export interface Words { heading: string; sub: string }
 
 /** How many lines of the list are the reader's: "One line waits on you." */
-function waitingWords(keynotes: readonly Keynote[]): string {
+function waitingWords(keynotes: readonly Keynote[], settled: number): string {
   const mine = keynotes.filter((k) => k.mine).length;
   if (keynotes.length === 0) return '';
-  if (mine === 0) return ' Nothing waits on you.';
+  // before the first member is settled the first steps say whose turn it is, which is not in the list
+  if (mine === 0) return settled === 0 ? '' : ' Nothing waits on you.';
   return mine === 1 ? ' One line waits on you.' : ` ${countWord(mine)} lines wait on you.`;
 }
 
@@ -19,18 +20,18 @@ export function buildingWords({ members, settled, open, unassessed, levels, open
   if (old) {
     return {
       heading: old.count === 0 ? 'The zones’ targets are out of date' : `${formatNumber(old.count)} of ${formatNumber(members)} results ${old.count === 1 ? 'is' : 'are'} out of date`,
-      sub: `They rest on other inputs than there are now, or on an earlier edition of the calculation; the drawing shows them as they were.${waitingWords(keynotes)}`,
+      sub: `They rest on other inputs than there are now, or on an earlier edition of the calculation; the drawing shows them as they were.${waitingWords(keynotes, settled)}`,
     };
   }
   if (open === 0 && settled === members) return { heading: `All ${formatNumber(members)} members settled`, sub: 'Nothing is open; the schedule can be prepared.' };
   if (unassessed > 0) {
     return {
       heading: `${formatNumber(settled)} of ${formatNumber(members)} members settled, ${formatNumber(unassessed)} being recalculated`,
-      sub: `The new results come zone by zone; what is open is known when all are there.${waitingWords(keynotes)}`,
+      sub: `The new results come zone by zone; what is open is known when all are there.${waitingWords(keynotes, settled)}`,
     };
   }
   const rest = open === 0 ? 'No member is open.' : `${countWord(open)} ${open === 1 ? 'is' : 'are'} open; the schedule can be prepared when ${open === 1 ? 'it is' : 'they are'} closed.`;
-  return { heading: `${formatNumber(settled)} of ${formatNumber(members)} members settled`, sub: rest + waitingWords(keynotes) };
+  return { heading: `${formatNumber(settled)} of ${formatNumber(members)} members settled`, sub: rest + waitingWords(keynotes, settled) };
 }
 
 export function issuedWords({ revision, protectedMembers, bareMembers, protectedAreaM2 }: IssuedBuildingDto): Words {
